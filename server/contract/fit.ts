@@ -25,7 +25,9 @@ export const fitReadingSchema = z
   .meta({ id: 'FitReading' });
 
 const boundPair = (item: z.ZodNumber) =>
-  z.tuple([item, item]).refine(([low, high]) => low < high, { message: 'must be [low, high] with low < high' });
+  z
+    .tuple([item, item])
+    .refine(([low, high]) => low < high, { message: 'must be [low, high] with low < high' });
 
 export const fitBoundsSchema = z.strictObject({
   resistivity: boundPair(z.number().gt(0).max(1e9)).describe('Ω·m'),
@@ -131,7 +133,10 @@ export const fitResultSchema = z
           chi2PerReading: z.number(),
           bic: z.number(),
           aicc: z.number().nullable().describe('null where N − p − 1 < 1'),
-          withinNoise: z.boolean().nullable().describe('χ² below the 95 % point for N − p; null = not testable'),
+          withinNoise: z
+            .boolean()
+            .nullable()
+            .describe('χ² below the 95 % point for N − p; null = not testable'),
           chosen: z.boolean(),
           earth: layeredEarthSchema,
         }),
