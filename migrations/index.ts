@@ -1,0 +1,20 @@
+import type { Knex } from 'knex';
+import * as createAccounts from './20261201000100_create_accounts';
+import * as createSurveys from './20261201000200_create_surveys';
+import * as createReadings from './20261201000300_create_readings';
+import * as createRuns from './20261201000400_create_runs';
+import * as createInterpretations from './20261201000500_create_interpretations';
+
+export interface NamedMigration {
+  name: string;
+  migration: Knex.Migration;
+}
+
+/** In the order they run; a new migration is added at the end. */
+export const migrations: readonly NamedMigration[] = [
+  { name: '20261201000100_create_accounts', migration: createAccounts },
+  { name: '20261201000200_create_surveys', migration: createSurveys },
+  { name: '20261201000300_create_readings', migration: createReadings },
+  { name: '20261201000400_create_runs', migration: createRuns },
+  { name: '20261201000500_create_interpretations', migration: createInterpretations },
+];

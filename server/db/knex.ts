@@ -1,0 +1,28 @@
+import knex, { type Knex } from 'knex';
+import type { Config } from '../config';
+
+export type DatabaseConfig = Pick<Config, 'databaseUrl' | 'databasePool'>;
+
+interface Connection {
+  on(event: 'error', listener: (error: Error) => void): void;
+}
+
+/** `onError` hears of connections lost while idle, which would otherwise end the process. */
+export function createDatabase(
+  config: DatabaseConfig,
+  onError: (error: Error) => void = () => undefined,
+): Knex {
+  return knex({
+    client: 'pg',
+    connection: { connectionString: config.databaseUrl, application_name: 'layerwell' },
+    pool: {
+      min: 0,
+      max: config.databasePool,
+      afterCreate(connection: Connection, done: (error: Error | null, connection: Connection) => void) {
+        connection.on('error', onError);
+        done(null, connection);
+      },
+    },
+    acquireConnectionTimeout: 15_000,
+  });
+}
