@@ -80,7 +80,11 @@ const describeFound = (name: string, value: string | undefined) => {
   return secretNames.has(name) ? 'found a value of another form' : `found "${value}"`;
 };
 
-const urlHost = (host: string) => (host.includes(':') ? `[${host}]` : host);
+/** As it stands in an address: every interface is reached as localhost. */
+const urlHost = (host: string) => {
+  if (host === '0.0.0.0' || host === '::') return 'localhost';
+  return host.includes(':') ? `[${host}]` : host;
+};
 
 /** All faults are reported together; an empty variable counts as not set. */
 export function loadConfig(env: NodeJS.ProcessEnv): Config {

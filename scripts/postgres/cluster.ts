@@ -126,8 +126,9 @@ export class Cluster {
     this.#guard = guard(running.pid, throwAway ? folder : null);
   }
 
-  /** The same port as last time, unless something else has taken it. */
+  /** The same port as last time, unless something else has taken it. Once it has run, its clients know the port. */
   async #choosePort(file: string): Promise<number> {
+    if (this.#port !== 0) return this.#port;
     const kept = Number(readText(file));
     const port =
       Number.isInteger(kept) && kept > 0 && (await isPortFree('127.0.0.1', kept))

@@ -1,0 +1,16 @@
+const seconds = (from: number) => `${((Date.now() - from) / 1000).toFixed(1)} s`;
+
+export const say = (line: string) => console.log(`  ${line}`);
+
+/** One line of progress: what is done, then how it ended and how long it took. */
+export async function step<T>(
+  name: string,
+  work: (say: (line: string) => void) => Promise<T>,
+  result?: (value: T) => string,
+): Promise<T> {
+  const from = Date.now();
+  const value = await work((line) => console.log(`· ${name}: ${line}`));
+  const detail = result?.(value) ?? '';
+  console.log(`✓ ${name}${detail === '' ? '' : `: ${detail}`} (${seconds(from)})`);
+  return value;
+}
