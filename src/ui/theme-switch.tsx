@@ -3,7 +3,7 @@ import { IconButton } from './icon-button';
 import { Menu, MenuChoice } from './menu';
 import { chooseTheme, useThemeChoice, type ThemeChoice } from './theme';
 
-const OPTIONS: readonly { value: ThemeChoice; label: string }[] = [
+export const THEME_OPTIONS: readonly { value: ThemeChoice; label: string }[] = [
   { value: 'system', label: 'As on this device' },
   { value: 'light', label: 'Light' },
   { value: 'dark', label: 'Dark' },
@@ -16,7 +16,7 @@ export function ThemeSwitch() {
   const Icon = ICON[choice];
   return (
     <Menu trigger={<IconButton label="Theme" icon={<Icon aria-hidden size={18} />} />}>
-      <MenuChoice label="Theme" value={choice} options={OPTIONS} onChange={chooseTheme} />
+      <MenuChoice label="Theme" value={choice} options={THEME_OPTIONS} onChange={chooseTheme} />
     </Menu>
   );
 }

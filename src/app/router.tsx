@@ -1,0 +1,43 @@
+import type { ComponentType } from 'react';
+import { createBrowserRouter, type RouteObject } from 'react-router-dom';
+import { ROUTE_PATHS, type RouteName } from './addresses';
+import { LoadingPage } from './loading-page';
+import { NotFoundPage } from './not-found-page';
+import { RequireSession } from './require-session';
+import { RootLayout } from './root-layout';
+import { RouteError } from './route-error';
+
+type PageLoader = () => Promise<ComponentType>;
+
+/**
+ * The page of each address, fetched when it is first opened:
+ * `bench: async () => (await import('../features/bench/bench-page')).BenchPage`.
+ */
+const PAGES: Partial<Record<RouteName, PageLoader>> = {};
+
+/** Pages that are open to a reader who is not signed in. */
+const PUBLIC_PAGES: Partial<Record<RouteName, PageLoader>> = {};
+
+const routesOf = (pages: Partial<Record<RouteName, PageLoader>>) =>
+  Object.entries(pages).map(([name, load]): RouteObject => {
+    const path = ROUTE_PATHS[name as RouteName];
+    return { path, lazy: async () => ({ Component: await load() }) };
+  });
+
+export const router = createBrowserRouter([
+  {
+    element: <RootLayout />,
+    errorElement: <RouteError />,
+    HydrateFallback: LoadingPage,
+    children: [
+      {
+        errorElement: <RouteError />,
+        children: [
+          ...routesOf(PUBLIC_PAGES),
+          { element: <RequireSession />, children: routesOf(PAGES) },
+          { path: '*', element: <NotFoundPage /> },
+        ],
+      },
+    ],
+  },
+]);
