@@ -59,7 +59,7 @@ export const INTERPRETATIONS: readonly DemoInterpretation[] = [
     layers: 3,
     title: 'Brackish water below the lower meadow',
     narrative:
-      'Sand and gravel over a very conductive half-space. BH-4, eleven metres away, met brackish water near the depth of ' +
+      'Sand and gravel over a very conductive half-space. BH-4, a few metres away, met brackish water near the depth of ' +
       'the contact. The resistivity of the lowest bed is too low for marl.',
     beds: [
       { ground: 'sandy soil', role: 'cover', confidence: 'well-supported', otherCandidates: '' },
