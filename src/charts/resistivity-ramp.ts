@@ -6,7 +6,7 @@ export const RAMP_RANGE_OHM_M = { low: 1, high: 10_000 } as const;
 /** Deep blue, teal, green, ochre, cream: hue and lightness turn together, so the order holds for every kind of sight. */
 const ANCHORS: readonly Oklab[] = [
   oklabFromPolar(0.26, 0.095, 268),
-  oklabFromPolar(0.44, 0.078, 214),
+  oklabFromPolar(0.44, 0.072, 214),
   oklabFromPolar(0.615, 0.088, 156),
   oklabFromPolar(0.785, 0.115, 92),
   oklabFromPolar(0.945, 0.04, 80),
