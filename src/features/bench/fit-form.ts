@@ -1,0 +1,95 @@
+import { z } from 'zod';
+import {
+  DEFAULT_BOUNDS,
+  fitSettingsSchema,
+  type FitSettingsInput,
+  type LayeredEarthModel,
+} from '../../../server/contract/fit';
+import { MAX_BEDS, type ModelValue } from './hand-model';
+import { heldKey } from './hand-model-store';
+
+export const LAYER_CHOICES = ['auto', '1', '2', '3', '4', '5', '6', '7', '8'] as const;
+
+const bound = (max: number) =>
+  z.number({ error: 'write a number' }).gt(0, 'must be above 0').max(max, `must be at most ${max}`);
+
+/** The controls of a fit as filled in; the contract's settings are made from it by `settingsOf`. */
+export const fitFormSchema = z
+  .strictObject({
+    layers: z.enum(LAYER_CHOICES),
+    start: z.enum(['curve', 'model']),
+    resistivityLow: bound(1e9),
+    resistivityHigh: bound(1e9),
+    thicknessLow: bound(1e6),
+    thicknessHigh: bound(1e6),
+    seed: fitSettingsSchema.shape.seed.unwrap(),
+  })
+  .refine((form) => form.resistivityLow < form.resistivityHigh, {
+    path: ['resistivityHigh'],
+    message: 'must be above the lowest resistivity',
+  })
+  .refine((form) => form.thicknessLow < form.thicknessHigh, {
+    path: ['thicknessHigh'],
+    message: 'must be above the least thickness',
+  });
+export type FitForm = z.infer<typeof fitFormSchema>;
+
+export const DEFAULT_FIT_FORM: FitForm = {
+  layers: 'auto',
+  start: 'curve',
+  resistivityLow: DEFAULT_BOUNDS.resistivity[0],
+  resistivityHigh: DEFAULT_BOUNDS.resistivity[1],
+  thicknessLow: DEFAULT_BOUNDS.thickness[0],
+  thicknessHigh: DEFAULT_BOUNDS.thickness[1],
+  seed: 1,
+};
+
+/** Every value of a model, resistivities first. */
+export function valuesOfModel(earth: LayeredEarthModel): ModelValue[] {
+  return [
+    ...earth.resistivity.map((_, index): ModelValue => ({ on: 'resistivity', index })),
+    ...earth.thickness.map((_, index): ModelValue => ({ on: 'thickness', index })),
+  ];
+}
+
+/**
+ * The request for a run. A model that holds values, or that is started from, states the count of beds;
+ * what is asked for otherwise then has no say.
+ */
+export function settingsOf(
+  form: FitForm,
+  model: LayeredEarthModel | null,
+  held: readonly string[],
+): FitSettingsInput {
+  const count = model?.resistivity.length;
+  const hasModel = model !== null && count !== undefined && count <= MAX_BEDS;
+  const usesModel = hasModel && (held.length > 0 || form.start === 'model');
+  return {
+    kind: 'layered',
+    layers: usesModel ? count : form.layers === 'auto' ? 'auto' : Number(form.layers),
+    seed: form.seed,
+    bounds: {
+      resistivity: [form.resistivityLow, form.resistivityHigh],
+      thickness: [form.thicknessLow, form.thicknessHigh],
+    },
+    fixed: hasModel
+      ? valuesOfModel(model)
+          .filter((value) => held.includes(heldKey(value)))
+          .map(({ on, index }) => ({ on, index, value: model[on][index] ?? Number.NaN }))
+      : [],
+    ...(hasModel && form.start === 'model' ? { start: model } : {}),
+  };
+}
+
+/** Faults the contract finds in the settings, in words of the Bench. */
+export function faultsOfSettings(settings: FitSettingsInput): string[] {
+  const parsed = fitSettingsSchema.safeParse(settings);
+  if (parsed.success) return [];
+  return parsed.error.issues.map((issue) => {
+    const [field, position] = issue.path;
+    const fixed = field === 'fixed' && typeof position === 'number' ? settings.fixed?.[position] : undefined;
+    if (!fixed) return `${issue.path.join(' ')}: ${issue.message}`;
+    const quantity = fixed.on === 'resistivity' ? 'resistivity' : 'thickness';
+    return `Held ${quantity} of bed ${fixed.index + 1}, found ${fixed.value}: ${issue.message}`;
+  });
+}

@@ -1,0 +1,101 @@
+import type { LayeredEarthModel } from '../../../server/contract/fit';
+
+/** A value of the model; `index` counts beds from 0 at the surface. */
+export interface ModelValue {
+  on: 'resistivity' | 'thickness';
+  index: number;
+}
+
+export const MAX_BEDS = 8;
+const RESISTIVITY_LIMITS = [1e-3, 1e7] as const;
+const THICKNESS_LIMITS = [1e-3, 1e5] as const;
+
+/** One press of an arrow key, and with shift. */
+export const SMALL_STEP = 1.02;
+export const LARGE_STEP = 1.2;
+
+const within = (value: number, [low, high]: readonly [number, number]) =>
+  Math.min(high, Math.max(low, value));
+
+export function valueOf(earth: LayeredEarthModel, { on, index }: ModelValue): number | undefined {
+  return earth[on][index];
+}
+
+export function withValue(
+  earth: LayeredEarthModel,
+  { on, index }: ModelValue,
+  value: number,
+): LayeredEarthModel {
+  if (earth[on][index] === undefined || !(value > 0)) return earth;
+  const limits = on === 'resistivity' ? RESISTIVITY_LIMITS : THICKNESS_LIMITS;
+  return { ...earth, [on]: earth[on].with(index, within(value, limits)) };
+}
+
+/** Depth of the base of each bounded bed, m. */
+export function basesOf(earth: LayeredEarthModel): number[] {
+  let depth = 0;
+  return earth.thickness.map((thickness) => (depth += thickness));
+}
+
+/** Moves the base of bed `index` to a depth; the boundary below stays where it is unless it would be passed. */
+export function withBoundary(earth: LayeredEarthModel, index: number, depthM: number): LayeredEarthModel {
+  const bases = basesOf(earth);
+  const base = bases[index];
+  if (base === undefined) return earth;
+  const top = index === 0 ? 0 : (bases[index - 1] ?? 0);
+  const below = bases[index + 1];
+  const thinnest = Math.max(THICKNESS_LIMITS[0], base * 1e-3);
+  const lowest = below === undefined ? top + THICKNESS_LIMITS[1] : below - thinnest;
+  const depth = within(depthM, [Math.min(top + thinnest, lowest), lowest]);
+  const thickness = earth.thickness.with(index, depth - top);
+  return { ...earth, thickness: below === undefined ? thickness : thickness.with(index + 1, below - depth) };
+}
+
+/** Cuts bed `index` in two of the same resistivity; the half-space is cut below its top by the depth above it. */
+export function withBedSplit(earth: LayeredEarthModel, index: number): LayeredEarthModel {
+  const resistivity = earth.resistivity[index];
+  if (resistivity === undefined || earth.resistivity.length >= MAX_BEDS) return earth;
+  const thickness = earth.thickness[index];
+  const pieces = thickness === undefined ? [basesOf(earth).at(-1) ?? 10] : [thickness / 2, thickness / 2];
+  return {
+    resistivity: earth.resistivity.toSpliced(index, 0, resistivity),
+    thickness: earth.thickness.toSpliced(index, thickness === undefined ? 0 : 1, ...pieces),
+  };
+}
+
+/** Takes bed `index` away; the bed below it (above it, for the lowest) grows into its place. */
+export function withoutBed(earth: LayeredEarthModel, index: number): LayeredEarthModel {
+  const count = earth.resistivity.length;
+  if (count < 2 || index < 0 || index >= count) return earth;
+  const resistivity = earth.resistivity.toSpliced(index, 1);
+  const thickness = earth.thickness[index];
+  if (thickness === undefined) return { resistivity, thickness: earth.thickness.slice(0, -1) };
+  const joined = earth.thickness.toSpliced(index, 1);
+  const next = joined[index];
+  return { resistivity, thickness: next === undefined ? joined : joined.with(index, next + thickness) };
+}
+
+/** A plain model to begin by hand: the curve's own values at shallow, middle and wide spacing. */
+export function modelFromCurve(
+  readings: readonly { spacing: number; apparentResistivity: number }[],
+): LayeredEarthModel | null {
+  const sorted = readings.toSorted((a, b) => a.spacing - b.spacing);
+  const [first, last] = [sorted[0], sorted.at(-1)];
+  const middle = sorted[Math.floor(sorted.length / 2)];
+  if (!first || !middle || !last) return null;
+  if (sorted.length < 3) return { resistivity: [middle.apparentResistivity], thickness: [] };
+  const upper = first.spacing;
+  const lower = Math.max(middle.spacing * 0.7, upper * 1.5);
+  return {
+    resistivity: [first, middle, last].map((reading) => Number(reading.apparentResistivity.toPrecision(3))),
+    thickness: [upper, lower - upper].map((length) => Number(length.toPrecision(2))),
+  };
+}
+
+export function sameEarth(a: LayeredEarthModel, b: LayeredEarthModel): boolean {
+  return (
+    a.resistivity.length === b.resistivity.length &&
+    a.resistivity.every((value, i) => value === b.resistivity[i]) &&
+    a.thickness.every((value, i) => value === b.thickness[i])
+  );
+}

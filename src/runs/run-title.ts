@@ -1,0 +1,24 @@
+import type { RunSummary } from '../../server/contract/runs';
+import { formatCount, runLetter } from '../ui/format';
+
+/** Runs are numbered from 1 within their sounding and shown by letter. */
+export const letterOfRun = (run: Pick<RunSummary, 'number'>): string => runLetter(run.number - 1);
+
+export function bedCount(count: number): string {
+  return formatCount(count, 'bed');
+}
+
+/** The beds a run ended with, or was asked for: "4 beds", "4 beds, count found". */
+export function describeBeds(run: Pick<RunSummary, 'settings' | 'outcome'>): string {
+  const asked = run.settings.layers;
+  const found = run.outcome?.earth.resistivity.length;
+  if (asked === 'auto') return found === undefined ? 'finding the count' : `${bedCount(found)}, count found`;
+  return bedCount(found ?? asked);
+}
+
+/** What a run is, in a few words: its own label, or its beds and what was held. */
+export function titleOfRun(run: Pick<RunSummary, 'settings' | 'outcome' | 'note'>): string {
+  if (run.note.label !== '') return run.note.label;
+  const held = run.settings.fixed.length;
+  return held === 0 ? describeBeds(run) : `${describeBeds(run)}, ${formatCount(held, 'value')} held`;
+}
