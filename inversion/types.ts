@@ -28,6 +28,12 @@ export interface LayeredEarth {
   readonly thickness: readonly number[];
 }
 
+/** The same earth as a fresh result that its receiver owns. */
+export interface EarthModel {
+  resistivity: number[];
+  thickness: number[];
+}
+
 /** One reading as the fit sees it. `relativeError` is used as given. */
 export interface Reading {
   readonly spread: Spread;
@@ -38,4 +44,87 @@ export interface Reading {
 }
 
 /** Closed interval [low, high]; null = unbounded on that side. */
-export type Interval = readonly [number | null, number | null];
+export type Interval = [number | null, number | null];
+
+/** Bounds of the search, in Ω·m and m; they hold for every layer. */
+export interface FitBounds {
+  readonly resistivity: readonly [number, number];
+  readonly thickness: readonly [number, number];
+}
+
+/** A value held during a fit; `index` counts layers from 0 at the surface. */
+export interface FixedParameter {
+  readonly on: 'resistivity' | 'thickness';
+  readonly index: number;
+  readonly value: number;
+}
+
+export interface FitSettings {
+  readonly kind: 'layered';
+  readonly layers: number | 'auto';
+  readonly seed: number;
+  readonly bounds: FitBounds;
+  readonly fixed: readonly FixedParameter[];
+  /** a model to start from, beside the seeded starts */
+  readonly start?: LayeredEarth | undefined;
+}
+
+/** Why a fit stopped; the sentences stand in `fit/fit-status.ts`. */
+export type FitStatus =
+  'converged-gradient' | 'converged-step' | 'converged-decrease' | 'iteration-limit' | 'no-descent';
+
+/** One layer count of an automatic choice. */
+export interface LayerCountFit {
+  layers: number;
+  status: FitStatus;
+  chi2PerReading: number;
+  /** χ² + p ln N */
+  bic: number;
+  /** χ² + 2p + 2p(p + 1)/(N − p − 1); null where N − p − 1 < 1 */
+  aicc: number | null;
+  /** χ² below its 95 % point for N − p degrees of freedom; null where N − p < 2 */
+  withinNoise: boolean | null;
+  chosen: boolean;
+  earth: EarthModel;
+}
+
+/** Maillet's quantities of the bounded layers: S in siemens, T in Ω·m². */
+export interface DarZarroukSummary {
+  conductanceS: number[];
+  resistanceOhmM2: number[];
+  totalConductanceS: number;
+  totalResistanceOhmM2: number;
+  anisotropy: number | null;
+}
+
+/** What a fit returns: plain data, one entry a reading or a layer, in order. */
+export interface FitResult {
+  status: FitStatus;
+  earth: EarthModel;
+  chi2PerReading: number;
+  rmsPercent: number;
+  predicted: number[];
+  residuals: number[];
+  geometricFactor: (number | null)[];
+  /** 95 %; null = unbounded */
+  intervals: { resistivity: Interval[]; thickness: Interval[]; depth: Interval[] };
+  /** 68 % factors; null = not determined */
+  factors: { resistivity: (number | null)[]; thickness: (number | null)[]; depth: (number | null)[] };
+  correlation: (number | null)[][];
+  misfitProbability: number | null;
+  darZarrouk: DarZarroukSummary;
+  warnings: string[];
+  layerCounts: LayerCountFit[] | null;
+  starts: number;
+  iterations: number;
+  engine: string;
+}
+
+/** Where a running fit stands. */
+export interface FitProgress {
+  readonly layers: number;
+  readonly start: number;
+  readonly starts: number;
+  readonly iteration: number;
+  readonly chi2PerReading: number;
+}

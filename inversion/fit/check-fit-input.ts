@@ -1,0 +1,75 @@
+import { InversionError } from '../inversion-error';
+import { requireSpread } from '../spread/require-spread';
+import type { FitSettings, Reading } from '../types';
+
+export const MOST_LAYERS = 8;
+
+function requireReadings(readings: readonly Reading[]): void {
+  if (readings.length === 0)
+    throw new InversionError('no-readings', 'there are no readings; a fit needs at least one', ['readings']);
+  readings.forEach((reading, i) => {
+    requireSpread(reading.spread, ['readings', i, 'spread']);
+    for (const field of ['apparentResistivity', 'relativeError'] as const) {
+      const value = reading[field];
+      if (!(value > 0 && Number.isFinite(value)))
+        throw new InversionError(
+          'reading-value',
+          `${field} of reading ${i + 1} is ${value}; it must be a number above 0`,
+          ['readings', i, field],
+        );
+    }
+  });
+}
+
+function requireBounds({ bounds }: FitSettings): void {
+  for (const key of ['resistivity', 'thickness'] as const) {
+    const [low, high] = bounds[key];
+    if (!(low > 0 && high > low && Number.isFinite(high)))
+      throw new InversionError(
+        'bounds',
+        `the ${key} bounds are ${low} to ${high}; they must be two numbers above 0, the lower one first`,
+        ['settings', 'bounds', key],
+      );
+  }
+}
+
+function requireFixed({ fixed, layers, bounds }: FitSettings): void {
+  fixed.forEach(({ on, index, value }, i) => {
+    const path = ['settings', 'fixed', i];
+    if (layers === 'auto')
+      throw new InversionError('fixed-parameter', 'a fixed value needs a stated layer count', path);
+    const count = on === 'resistivity' ? layers : layers - 1;
+    if (!(Number.isInteger(index) && index >= 0 && index < count))
+      throw new InversionError(
+        'fixed-parameter',
+        `fixed ${on} index is ${index}; it must be below ${count}`,
+        [...path, 'index'],
+      );
+    const [low, high] = bounds[on];
+    if (!(value >= low && value <= high))
+      throw new InversionError(
+        'fixed-parameter',
+        `fixed ${on} is ${value}; it must lie within the bounds ${low} to ${high}`,
+        [...path, 'value'],
+      );
+  });
+}
+
+/** Throws `InversionError` with the path of the first input that a layered fit cannot use. */
+export function requireFitInput(readings: readonly Reading[], settings: FitSettings): void {
+  requireReadings(readings);
+  requireBounds(settings);
+  const { layers, start } = settings;
+  if (layers !== 'auto' && !(Number.isInteger(layers) && layers >= 1 && layers <= MOST_LAYERS))
+    throw new InversionError('layer-count', `layers is ${layers}; it must be 1 to ${MOST_LAYERS} or "auto"`, [
+      'settings',
+      'layers',
+    ]);
+  requireFixed(settings);
+  if (start && layers !== 'auto' && start.resistivity.length !== layers)
+    throw new InversionError(
+      'earth-shape',
+      `the start has ${start.resistivity.length} layers; it must have ${layers}`,
+      ['settings', 'start', 'resistivity'],
+    );
+}

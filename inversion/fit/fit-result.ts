@@ -1,0 +1,81 @@
+import { ENGINE_VERSION } from '../engine-version';
+import { darZarrouk } from '../hydro/dar-zarrouk';
+import { geometricFactor } from '../spread/geometric-factor';
+import { logCovariance, parameterDoubt } from '../uncertainty/covariance';
+import type { EarthModel, FitResult, FitSettings, FitStatus, LayerCountFit, Reading } from '../types';
+import { fitWarnings } from './fit-warnings';
+import { misfitProbability } from './layer-count';
+import type { ResidualSystem } from './residual-system';
+
+export interface FitResultParts {
+  readonly readings: readonly Reading[];
+  readonly settings: FitSettings;
+  readonly system: ResidualSystem;
+  readonly layers: number;
+  readonly logParameters: Float64Array;
+  readonly held: readonly boolean[];
+  readonly status: FitStatus;
+  readonly layerCounts: LayerCountFit[] | null;
+  readonly starts: number;
+  readonly iterations: number;
+}
+
+/** rms of predicted/observed − 1 in %. */
+function rmsPercent(predicted: readonly number[], readings: readonly Reading[]): number {
+  const sum = readings.reduce(
+    (total, reading, i) => total + (predicted[i]! / reading.apparentResistivity - 1) ** 2,
+    0,
+  );
+  return 100 * Math.sqrt(sum / readings.length);
+}
+
+function summariseDarZarrouk(earth: EarthModel): FitResult['darZarrouk'] {
+  const { conductanceS, resistanceOhmM2, totalConductanceS, totalResistanceOhmM2, anisotropy } =
+    darZarrouk(earth);
+  return { conductanceS, resistanceOhmM2, totalConductanceS, totalResistanceOhmM2, anisotropy };
+}
+
+/** Everything a fit says about its best model: predictions, residuals, doubt, Maillet's quantities, warnings. */
+export function buildFitResult(parts: FitResultParts): FitResult {
+  const { readings, settings, system, layers, logParameters, held } = parts;
+  const m = readings.length;
+  // a held value is given back as it was stated, not through exp(ln v)
+  const values = Array.from(logParameters, Math.exp);
+  for (const { on, index, value } of settings.fixed)
+    values[on === 'resistivity' ? index : layers + index] = value;
+  const earth: EarthModel = { resistivity: values.slice(0, layers), thickness: values.slice(layers) };
+  const residual = new Float64Array(m);
+  const jacobian = new Float64Array(m * (2 * layers - 1));
+  const chi2 = system.linearise(logParameters, layers, residual, jacobian);
+  const predicted = Array.from(system.operator.predict(earth));
+  const doubt = parameterDoubt(earth, logCovariance(jacobian, m, held), settings.bounds);
+  const free = held.filter((isHeld) => !isHeld).length;
+  const probability = misfitProbability(chi2, free, m);
+  return {
+    status: parts.status,
+    earth,
+    chi2PerReading: chi2 / m,
+    rmsPercent: rmsPercent(predicted, readings),
+    predicted,
+    residuals: Array.from(residual),
+    geometricFactor: readings.map((reading) => geometricFactor(reading.spread)),
+    ...doubt,
+    correlation: doubt.correlation,
+    misfitProbability: probability,
+    darZarrouk: summariseDarZarrouk(earth),
+    warnings: fitWarnings({
+      readings,
+      settings,
+      earth,
+      held,
+      predicted,
+      chi2,
+      freeParameters: free,
+      probability,
+    }),
+    layerCounts: parts.layerCounts,
+    starts: parts.starts,
+    iterations: parts.iterations,
+    engine: ENGINE_VERSION,
+  };
+}

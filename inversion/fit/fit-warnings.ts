@@ -1,0 +1,66 @@
+import { TOLERANCES } from '../tolerances';
+import type { EarthModel, FitSettings, Reading } from '../types';
+
+export interface FitWarningInput {
+  readonly readings: readonly Reading[];
+  readonly settings: FitSettings;
+  readonly earth: EarthModel;
+  readonly held: readonly boolean[];
+  readonly predicted: readonly number[];
+  readonly chi2: number;
+  readonly freeParameters: number;
+  readonly probability: number | null;
+}
+
+function list(numbers: readonly number[]): string {
+  return numbers.length === 1 ? `reading ${numbers[0]}` : `readings ${numbers.join(', ')}`;
+}
+
+function improbableMisfit({ chi2, readings, freeParameters, probability }: FitWarningInput): string[] {
+  if (probability === null || probability >= TOLERANCES.misfitProbability) return [];
+  const scale = Math.sqrt(chi2 / (readings.length - freeParameters));
+  const chance = probability < 1e-4 ? 'less than 0.01 %' : `${(100 * probability).toPrecision(2)} %`;
+  return [
+    `The misfit is larger than the stated errors explain (chance ${chance}). The intervals are not rescaled; were the errors alone at fault, each standard deviation would be ${scale.toFixed(2)} times as large.`,
+  ];
+}
+
+function valuesAtBounds({ earth, settings, held }: FitWarningInput): string[] {
+  const layers = earth.resistivity.length;
+  return (['resistivity', 'thickness'] as const).flatMap((key) =>
+    earth[key].flatMap((value, i) => {
+      if (held[key === 'resistivity' ? i : layers + i]) return [];
+      const unit = key === 'resistivity' ? 'Ω·m' : 'm';
+      return settings.bounds[key].flatMap((bound, side) =>
+        Math.abs(Math.log(value / bound)) <= TOLERANCES.atBound
+          ? [
+              `The ${key} of bed ${i + 1} ended on its ${side === 0 ? 'lower' : 'upper'} bound (${bound} ${unit}): the readings do not limit it on that side.`,
+            ]
+          : [],
+      );
+    }),
+  );
+}
+
+/** Plain sentences that stand beside a result. */
+export function fitWarnings(input: FitWarningInput): string[] {
+  const { readings, predicted, freeParameters } = input;
+  const numbered = (test: (reading: Reading, i: number) => boolean) =>
+    readings.flatMap((reading, i) => (test(reading, i) ? [i + 1] : []));
+  const gradient = numbered((reading) => 'halfMN' in reading.spread && reading.spread.halfMN === null);
+  const negative = numbered((_, i) => predicted[i]! <= 0);
+  const warnings = improbableMisfit(input);
+  if (gradient.length > 0)
+    warnings.push(
+      `MN was not recorded for ${list(gradient)}: the ideal gradient (MN → 0) was used, which is off by 1 % at MN/AB = 1/10 and 4 % at 1/5.`,
+    );
+  if (negative.length > 0)
+    warnings.push(
+      `The model predicts an apparent resistivity of zero or less for ${list(negative)}: the misfit there is linear, not logarithmic.`,
+    );
+  if (freeParameters > readings.length)
+    warnings.push(
+      `${readings.length} ${readings.length === 1 ? 'reading does' : 'readings do'} not determine ${freeParameters} unknowns: this is one of endlessly many models that fit.`,
+    );
+  return [...warnings, ...valuesAtBounds(input)];
+}

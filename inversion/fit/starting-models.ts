@@ -1,0 +1,81 @@
+import { plottingSpacing } from '../spread/plotting-spacing';
+import type { RandomStream } from '../random';
+import type { Reading } from '../types';
+
+/** A sounding as a curve: ln spacing and ln ρa, ascending in spacing. */
+export interface SoundingCurve {
+  readonly logSpacing: Float64Array;
+  readonly logResistivity: Float64Array;
+}
+
+/** Depth that a spacing speaks of, as a share of the spacing on the AB/2 axis. */
+const DEPTH_SHARE = 0.4;
+
+export function soundingCurve(readings: readonly Reading[]): SoundingCurve {
+  const points = readings
+    .map((reading) => ({
+      x: Math.log(plottingSpacing(reading.spread)),
+      y: Math.log(reading.apparentResistivity),
+    }))
+    .sort((a, b) => a.x - b.x);
+  return {
+    logSpacing: Float64Array.from(points, (point) => point.x),
+    logResistivity: Float64Array.from(points, (point) => point.y),
+  };
+}
+
+/** ln ρa of the curve at a ln spacing, straight lines between readings, level beyond the ends. */
+export function curveAt({ logSpacing, logResistivity }: SoundingCurve, x: number): number {
+  const last = logSpacing.length - 1;
+  if (x <= logSpacing[0]!) return logResistivity[0]!;
+  if (x >= logSpacing[last]!) return logResistivity[last]!;
+  let i = 1;
+  while (logSpacing[i]! < x) i++;
+  const x0 = logSpacing[i - 1]!;
+  const x1 = logSpacing[i]!;
+  if (x1 === x0) return logResistivity[i]!;
+  const share = (x - x0) / (x1 - x0);
+  return logResistivity[i - 1]! + share * (logResistivity[i]! - logResistivity[i - 1]!);
+}
+
+function modelFromDepths(
+  curve: SoundingCurve,
+  logDepths: readonly number[],
+  shift: (layer: number) => number,
+): Float64Array {
+  const layers = logDepths.length + 1;
+  const parameters = new Float64Array(2 * layers - 1);
+  for (let i = 0; i < layers; i++) {
+    const top = i === 0 ? (logDepths[0] ?? curve.logSpacing[0]!) - 1.4 : logDepths[i - 1]!;
+    const bottom = i === layers - 1 ? top + 1.4 : logDepths[i]!;
+    const spacing = (top + bottom) / 2 - Math.log(DEPTH_SHARE);
+    parameters[i] = curveAt(curve, spacing) + shift(i);
+  }
+  for (let i = 0; i < layers - 1; i++) {
+    const depth = Math.exp(logDepths[i]!);
+    const above = i === 0 ? 0 : Math.exp(logDepths[i - 1]!);
+    parameters[layers + i] = Math.log(Math.max(depth - above, 0.05 * depth));
+  }
+  return parameters;
+}
+
+/** ln parameters of a model with boundaries evenly spread in ln depth and resistivities read off the curve. */
+export function evenStart(curve: SoundingCurve, layers: number): Float64Array {
+  const { low, high } = depthRange(curve);
+  const logDepths = Array.from({ length: layers - 1 }, (_, i) => low + ((high - low) * (i + 1)) / layers);
+  return modelFromDepths(curve, logDepths, () => 0);
+}
+
+function depthRange({ logSpacing }: SoundingCurve): { low: number; high: number } {
+  const share = Math.log(DEPTH_SHARE);
+  return { low: logSpacing[0]! + share - 0.4, high: logSpacing[logSpacing.length - 1]! + share + 0.4 };
+}
+
+/** The same with boundaries uniform in ln depth and resistivities scattered about the curve. */
+export function randomStart(curve: SoundingCurve, layers: number, random: RandomStream): Float64Array {
+  const { low, high } = depthRange(curve);
+  const logDepths = Array.from({ length: layers - 1 }, () => low + (high - low) * random.uniform()).sort(
+    (a, b) => a - b,
+  );
+  return modelFromDepths(curve, logDepths, () => 0.6 * random.normal());
+}

@@ -1,0 +1,37 @@
+export type {
+  DarZarroukSummary,
+  EarthModel,
+  FitBounds,
+  FitProgress,
+  FitResult,
+  FitSettings,
+  FitStatus,
+  FixedParameter,
+  Interval,
+  LayerCountFit,
+  LayeredEarth,
+  Reading,
+  Spread,
+} from './types';
+export { ENGINE_VERSION } from './engine-version';
+export { InversionError, type InversionErrorCode } from './inversion-error';
+export { apparentResistivity } from './spread/apparent-resistivity';
+export { checkSpread, type SpreadFault } from './spread/check-spread';
+export { effectiveDepth } from './spread/effective-depth';
+export { electrodeDistances, type ElectrodeDistances } from './spread/electrode-distances';
+export { geometricFactor } from './spread/geometric-factor';
+export { IDEAL_SCHLUMBERGER_DEPTH, plottingSpacing } from './spread/plotting-spacing';
+export { createForwardOperator, type ForwardOperator } from './operator/forward-operator';
+export { fitLayered, type FitOptions } from './fit/fit-layered';
+export { FIT_STATUS_MESSAGES, fitStatusMessage } from './fit/fit-status';
+export { createRandomStream, type RandomStream } from './random';
+export { compareResults, type ResultComparison, type ResultDifference } from './compare/compare-results';
+export {
+  compareFits,
+  type BedDifference,
+  type FitComparison,
+  type FitPairComparison,
+} from './compare/compare-fits';
+export { describeDoubt, type DoubtItem } from './uncertainty/equivalence';
+export { chiSquaredPoint, chiSquaredSurvival } from './uncertainty/chi-squared';
+export { darZarrouk, type DarZarrouk, type DarZarroukPart } from './hydro/dar-zarrouk';

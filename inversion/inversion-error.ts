@@ -1,0 +1,24 @@
+export type InversionErrorCode =
+  | 'spread-length'
+  | 'spread-halfmn'
+  | 'spread-cancels'
+  | 'earth-shape'
+  | 'earth-value'
+  | 'reading-value'
+  | 'no-readings'
+  | 'layer-count'
+  | 'fixed-parameter'
+  | 'bounds';
+
+/** A refused input. `path` points into the argument that was refused, outermost key first. */
+export class InversionError extends Error {
+  readonly code: InversionErrorCode;
+  readonly path: readonly (string | number)[];
+
+  constructor(code: InversionErrorCode, message: string, path: readonly (string | number)[] = []) {
+    super(message);
+    this.name = 'InversionError';
+    this.code = code;
+    this.path = path;
+  }
+}

@@ -1,0 +1,91 @@
+import { requireEarth } from '../earth/check-earth';
+import {
+  NODES_PER_OCTAVE,
+  createKernelScratch,
+  transformAndDerivatives,
+  transformAtNodes,
+} from '../earth/transform-kernel';
+import { imageResponse } from '../spread/image-response';
+import type { LayeredEarth, Spread } from '../types';
+import { designWeights } from './weight-design';
+
+/** The linear map from an earth to the apparent resistivities of one list of spreads. */
+export interface ForwardOperator {
+  readonly readings: number;
+  readonly nodes: number;
+  /** ρa in Ω·m, one a spread. */
+  predict: (earth: LayeredEarth) => Float64Array;
+  /** ρa and ∂ρa/∂(lnρ₁…lnρ_N, lnh₁…lnh_{N−1}) in Ω·m, row-major readings × (2N − 1). */
+  predictWithJacobian: (earth: LayeredEarth) => { predicted: Float64Array; jacobian: Float64Array };
+  /** The two above on exponentiated parameters ρ₁…ρ_N, h₁…h_{N−1}, writing into the caller's arrays, unchecked. */
+  predictInto: (parameters: ArrayLike<number>, layers: number, predicted: Float64Array) => void;
+  predictWithJacobianInto: (
+    parameters: ArrayLike<number>,
+    layers: number,
+    predicted: Float64Array,
+    jacobian: Float64Array,
+  ) => void;
+}
+
+/**
+ * ρa = W·T₁(λ) for a list of spreads. W depends on the spreads alone; make it once a sounding.
+ * Against direct integration over random earths of 1–8 layers to contrasts of 10⁴, every kind of spread: worst relative
+ * error 3e-9, median 1e-13 (`tests/inversion/operator`). Throws `InversionError` with the path of a refused spread.
+ */
+export function createForwardOperator(spreads: readonly Spread[]): ForwardOperator {
+  const rows = spreads.map((spread) => designWeights(imageResponse(spread)));
+  const first = rows.reduce((low, row) => Math.min(low, row.first), Infinity);
+  const end = rows.reduce((high, row) => Math.max(high, row.first + row.values.length), -Infinity);
+  const readings = rows.length;
+  const nodes = readings === 0 ? 0 : end - first;
+  const lambda = Float64Array.from({ length: nodes }, (_, j) => 2 ** ((first + j) / NODES_PER_OCTAVE));
+  const weights = new Float64Array(readings * nodes);
+  rows.forEach((row, i) => weights.set(row.values, i * nodes + row.first - first));
+  const from = Int32Array.from(rows, (row) => row.first - first);
+  const to = Int32Array.from(rows, (row) => row.first - first + row.values.length);
+  const scratch = createKernelScratch(nodes);
+
+  const apply = (values: Float64Array, at: number, i: number): number => {
+    const row = i * nodes;
+    let sum = 0;
+    for (let g = from[i]!; g < to[i]!; g++) sum += weights[row + g]! * values[at + g]!;
+    return sum;
+  };
+  const predictInto: ForwardOperator['predictInto'] = (parameters, layers, predicted) => {
+    transformAtNodes(parameters, layers, lambda, scratch);
+    for (let i = 0; i < readings; i++) predicted[i] = apply(scratch.transform, 0, i);
+  };
+  const predictWithJacobianInto: ForwardOperator['predictWithJacobianInto'] = (
+    parameters,
+    layers,
+    predicted,
+    jacobian,
+  ) => {
+    transformAndDerivatives(parameters, layers, lambda, scratch);
+    const count = 2 * layers - 1;
+    for (let i = 0; i < readings; i++) {
+      predicted[i] = apply(scratch.transform, 0, i);
+      for (let j = 0; j < count; j++) jacobian[i * count + j] = apply(scratch.derivative, j * nodes, i);
+    }
+  };
+  return {
+    readings,
+    nodes,
+    predictInto,
+    predictWithJacobianInto,
+    predict: (earth) => {
+      requireEarth(earth);
+      const predicted = new Float64Array(readings);
+      predictInto([...earth.resistivity, ...earth.thickness], earth.resistivity.length, predicted);
+      return predicted;
+    },
+    predictWithJacobian: (earth) => {
+      requireEarth(earth);
+      const layers = earth.resistivity.length;
+      const predicted = new Float64Array(readings);
+      const jacobian = new Float64Array(readings * (2 * layers - 1));
+      predictWithJacobianInto([...earth.resistivity, ...earth.thickness], layers, predicted, jacobian);
+      return { predicted, jacobian };
+    },
+  };
+}

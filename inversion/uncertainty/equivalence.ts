@@ -1,0 +1,118 @@
+import { TOLERANCES } from '../tolerances';
+import type { FitResult } from '../types';
+
+/** One thing the data cannot tell, or can tell only in combination. */
+export interface DoubtItem {
+  /** bed counted from 0 at the surface; null = the whole model */
+  bed: number | null;
+  kind: 'conductance' | 'resistance' | 'suppression' | 'resistivity' | 'thickness';
+  text: string;
+  /** the quantity that is known, or the value that is not */
+  value: number | null;
+  unit: 'S' | 'Ω·m²' | 'Ω·m' | 'm';
+  /** 68 % factor of the value; null = not determined */
+  factor: number | null;
+}
+
+/** ln of a 68 % factor, or null when it is not determined. */
+function logFactor(factor: number | null | undefined): number | null {
+  return factor === null || factor === undefined ? null : Math.log(factor);
+}
+
+function number(value: number): string {
+  return value >= 1000 ? String(Math.round(value)) : value.toPrecision(3);
+}
+
+function percent(logDeviation: number): string {
+  const value = 100 * (Math.exp(logDeviation) - 1);
+  return value < 10 ? value.toPrecision(2) : String(Math.round(value));
+}
+
+/** ln deviation of h/ρ (sign −1) or hρ (sign +1) from the deviations and the correlation. */
+function combined(logRho: number, logH: number, correlation: number, sign: 1 | -1): number {
+  return Math.sqrt(Math.max(0, logRho ** 2 + logH ** 2 + sign * 2 * correlation * logRho * logH));
+}
+
+function equivalenceOf(result: FitResult, bed: number): DoubtItem | null {
+  const layers = result.earth.resistivity.length;
+  const correlation = result.correlation[bed]?.[layers + bed] ?? null;
+  const logRho = logFactor(result.factors.resistivity[bed]);
+  const logH = logFactor(result.factors.thickness[bed]);
+  if (correlation === null || Math.abs(correlation) < TOLERANCES.equivalence) return null;
+  const conductive = correlation > 0;
+  const rho = result.earth.resistivity[bed]!;
+  const h = result.earth.thickness[bed]!;
+  const value = conductive ? h / rho : h * rho;
+  const unit = conductive ? 'S' : 'Ω·m²';
+  const symbol = conductive ? 'S = h/ρ' : 'T = hρ';
+  const spread =
+    logRho === null || logH === null ? null : combined(logRho, logH, correlation, conductive ? -1 : 1);
+  const known = spread === null ? '' : ` ± ${percent(spread)} %`;
+  return {
+    bed,
+    kind: conductive ? 'conductance' : 'resistance',
+    text: `Bed ${bed + 1} is known by ${symbol} = ${number(value)} ${unit}${known}, not by its thickness and resistivity apart: ${
+      conductive ? 'twice as thick at twice the resistivity' : 'twice as thick at half the resistivity'
+    } gives nearly the same curve.`,
+    value,
+    unit,
+    factor: spread === null ? null : Math.exp(spread),
+  };
+}
+
+function suppressionOf(result: FitResult, bed: number): DoubtItem | null {
+  const { resistivity, thickness } = result.earth;
+  if (bed === 0 || bed >= thickness.length) return null;
+  const above = resistivity[bed - 1]!;
+  const below = resistivity[bed + 1]!;
+  const between = (resistivity[bed]! - above) * (below - resistivity[bed]!) > 0;
+  if (!between) return null;
+  const fewer = result.layerCounts?.find((count) => count.layers === resistivity.length - 1);
+  const loose = result.factors.thickness[bed] === null || result.factors.resistivity[bed] === null;
+  const dispensable = fewer?.withinNoise === true;
+  if (!loose && !dispensable) return null;
+  const reason = dispensable
+    ? `${fewer.layers} beds already explain the readings within their errors (χ²/N ${fewer.chi2PerReading.toPrecision(3)})`
+    : 'the readings do not limit it';
+  return {
+    bed,
+    kind: 'suppression',
+    text: `Bed ${bed + 1} lies between its neighbours in resistivity and may be hidden or absent: ${reason}.`,
+    value: thickness[bed]!,
+    unit: 'm',
+    factor: result.factors.thickness[bed] ?? null,
+  };
+}
+
+function undetermined(result: FitResult, bed: number): DoubtItem[] {
+  return (['resistivity', 'thickness'] as const).flatMap((kind) => {
+    const value = result.earth[kind][bed];
+    if (value === undefined || result.factors[kind][bed] !== null) return [];
+    const unit = kind === 'resistivity' ? 'Ω·m' : 'm';
+    return [
+      {
+        bed,
+        kind,
+        text: `The ${kind} of bed ${bed + 1} is not determined: ${number(value)} ${unit} is one of many values that fit.`,
+        value,
+        unit,
+        factor: null,
+      } satisfies DoubtItem,
+    ];
+  });
+}
+
+/**
+ * What the data cannot tell, bed by bed, in plain sentences: equivalence where |correlation of ln h and ln ρ| passes 0.95
+ * (S = h/ρ when it is positive, T = hρ when negative), suppression where a middle bed can go, values not determined.
+ */
+export function describeDoubt(result: FitResult): DoubtItem[] {
+  return result.earth.resistivity.flatMap((_, bed) => {
+    const equivalence = equivalenceOf(result, bed);
+    const suppression = suppressionOf(result, bed);
+    return [
+      ...(equivalence ? [equivalence] : undetermined(result, bed)),
+      ...(suppression ? [suppression] : []),
+    ];
+  });
+}
