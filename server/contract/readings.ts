@@ -12,10 +12,12 @@ export const readingSchema = z
     sheetApparentResistivityOhmM: z.number().gt(0).max(1e9).nullable().describe('ρa as written on the sheet'),
     standardError: z
       .number()
-      .gt(0)
+      .min(0)
       .max(1)
       .nullable()
-      .describe('the reading’s own relative error; the survey’s floor is added later'),
+      .describe(
+        'the reading’s own relative error, 0 as some instruments print it; the survey’s floor is added later',
+      ),
     remark: z.string().max(500),
     excluded: z
       .string()
@@ -106,6 +108,7 @@ export const readingCheckSchema = z
       'wide-mn',
       'far-from-trend',
       'repeat-disagrees',
+      'mixed-signs',
     ]),
     message: z.string(),
     rule: z.string(),
