@@ -20,7 +20,13 @@ export function createApp(services: Services): Express {
   app.set('trust proxy', config.trustProxy);
   app.set('query parser', 'simple');
   app.use(
-    pinoHttp({ logger: log, genReqId: () => randomUUID(), quietReqLogger: true }),
+    pinoHttp({
+      logger: log,
+      genReqId: () => randomUUID(),
+      quietReqLogger: true,
+      autoLogging: config.logRequests,
+      redact: ['req.headers.cookie', 'req.headers.authorization', 'res.headers["set-cookie"]'],
+    }),
     helmet({
       contentSecurityPolicy: {
         directives: {
@@ -44,6 +50,6 @@ export function createApp(services: Services): Express {
     throw new AppError('not-found', 'Nothing is at this address.');
   });
   app.use(clientPages());
-  app.use(problemHandler(log, config.uploadLimitBytes));
+  app.use(problemHandler(log, config.uploadLimitMb));
   return app;
 }

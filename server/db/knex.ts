@@ -1,5 +1,8 @@
 import knex, { type Knex } from 'knex';
 import type { Config } from '../config';
+import { keepDatesAsText } from './types';
+
+keepDatesAsText();
 
 export type DatabaseConfig = Pick<Config, 'databaseUrl' | 'databasePool'>;
 

@@ -2,6 +2,8 @@ import type { Knex } from 'knex';
 import type { Pool } from 'pg';
 import type { Logger } from 'pino';
 import type { Actor } from '../access/actor';
+import type { Sessions } from '../access/sessions';
+import type { BackgroundTasks } from '../background-tasks';
 import type { Config } from '../config';
 import type { JobQueue } from '../jobs/job-queue';
 import type { RunEvents } from '../jobs/run-events';
@@ -13,9 +15,13 @@ export interface Services {
   readonly db: Knex;
   readonly pool: Pool;
   readonly log: Logger;
+  readonly sessions: Sessions;
   readonly mailer: Mailer;
+  readonly background: BackgroundTasks;
   readonly jobs: JobQueue;
   readonly runEvents: RunEvents;
+  /** aborted when the process stops; streams end then */
+  readonly stopping: AbortSignal;
 }
 
 /** One request as a service sees it. */

@@ -4,15 +4,16 @@ import type { Logger } from 'pino';
 import { z } from 'zod';
 import type { Problem } from '../contract/common';
 import { AppError, ERROR_STATUS, ERROR_TITLE, errorOfPostgres, faultsOfZod } from '../errors';
+import { requestIdOf } from './request-id';
 
 /** Any thrown thing as an AppError; unknown ones become a plain "internal" that gives nothing away. */
-function toAppError(error: unknown, uploadLimitBytes: number): AppError {
+function toAppError(error: unknown, uploadLimitMb: number): AppError {
   if (error instanceof AppError) return error;
   if (error instanceof z.ZodError)
     return new AppError('invalid', 'Some values are not allowed.', { faults: faultsOfZod(error, 'body') });
   if (error instanceof MulterError)
     return error.code === 'LIMIT_FILE_SIZE'
-      ? new AppError('too-large', `The file is larger than ${Math.floor(uploadLimitBytes / 1048576)} MB.`)
+      ? new AppError('too-large', `The file is larger than ${uploadLimitMb} MB.`)
       : new AppError('bad-request', `The upload could not be read: ${error.message}.`);
   if (error instanceof Error && 'type' in error) {
     if (error.type === 'entity.too.large')
@@ -36,7 +37,7 @@ export function sendProblem(request: Request, response: Response, error: AppErro
     code: error.code,
     detail: error.message,
     instance: request.originalUrl.split('?')[0] ?? '',
-    requestId: String(request.id),
+    requestId: requestIdOf(request),
     ...(error.details.faults && { faults: error.details.faults }),
     ...(error.details.current !== undefined && { current: error.details.current }),
   };
@@ -45,11 +46,11 @@ export function sendProblem(request: Request, response: Response, error: AppErro
 }
 
 export const problemHandler =
-  (log: Logger, uploadLimitBytes: number): ErrorRequestHandler =>
+  (log: Logger, uploadLimitMb: number): ErrorRequestHandler =>
   (error: unknown, request, response, next) => {
-    const told = toAppError(error, uploadLimitBytes);
+    const told = toAppError(error, uploadLimitMb);
     if (told.code === 'internal' || told.code === 'unavailable')
-      log.error({ err: error, requestId: request.id, path: request.path }, 'request failed');
+      log.error({ err: error, requestId: requestIdOf(request), path: request.path }, 'request failed');
     if (response.headersSent) return next(error);
     sendProblem(request, response, told);
   };

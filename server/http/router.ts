@@ -6,13 +6,14 @@ import type { Fault } from '../contract/common';
 import { AppError, faultsOfZod } from '../errors';
 import type { Context, Services } from './context';
 import { Reply, type Endpoint, type EndpointInput } from './endpoint';
+import { requestIdOf } from './request-id';
 
 /** Mounts every endpoint: authenticate → parse → handle → answer. */
 export function createRouter(endpoints: readonly Endpoint[], services: Services): Router {
   const router = Router();
   const upload = multer({
     storage: multer.memoryStorage(),
-    limits: { fileSize: services.config.uploadLimitBytes, files: 1, fields: 20 },
+    limits: { fileSize: services.config.uploadLimitMb * 1_048_576, files: 1, fields: 20 },
     defParamCharset: 'utf8',
   }).single('file');
   for (const definition of endpoints) {
@@ -38,7 +39,7 @@ async function contextOf(definition: Endpoint, services: Services, request: Requ
     throw new AppError('forbidden', 'Only an administrator may do this.');
   return {
     ...services,
-    requestId: String(request.id),
+    requestId: requestIdOf(request),
     clientAddress: request.ip ?? '',
     actor: actor as Context['actor'],
   };
