@@ -13,10 +13,17 @@ type PageLoader = () => Promise<ComponentType>;
  * The page of each address, fetched when it is first opened:
  * `bench: async () => (await import('../features/bench/bench-page')).BenchPage`.
  */
-const PAGES: Partial<Record<RouteName, PageLoader>> = {};
+const PAGES: Partial<Record<RouteName, PageLoader>> = {
+  settings: async () => (await import('../features/account/settings-page')).SettingsPage,
+};
 
 /** Pages that are open to a reader who is not signed in. */
-const PUBLIC_PAGES: Partial<Record<RouteName, PageLoader>> = {};
+const PUBLIC_PAGES: Partial<Record<RouteName, PageLoader>> = {
+  signIn: async () => (await import('../features/sign-in/sign-in-page')).SignInPage,
+  forgotPassword: async () => (await import('../features/sign-in/forgot-password-page')).ForgotPasswordPage,
+  resetPassword: async () => (await import('../features/sign-in/reset-password-page')).ResetPasswordPage,
+  invitation: async () => (await import('../features/sign-in/invitation-page')).InvitationPage,
+};
 
 const routesOf = (pages: Partial<Record<RouteName, PageLoader>>) =>
   Object.entries(pages).map(([name, load]): RouteObject => {
