@@ -1,7 +1,6 @@
 // Runs before anything is installed: plain JavaScript, Node alone.
-import { spawnSync } from 'node:child_process';
-import { createHash } from 'node:crypto';
-import { existsSync, readFileSync, writeFileSync } from 'node:fs';
+import { spawn } from 'node:child_process';
+import { existsSync, readFileSync } from 'node:fs';
 import { join } from 'node:path';
 import { fileURLToPath } from 'node:url';
 
@@ -19,24 +18,36 @@ const checkNode = () => {
   stop(`Layerwell needs Node 20.12 or a later 20. Found ${process.versions.node} at ${process.execPath}.`);
 };
 
-/** `npm ci` only when the lock file is not the one that was installed. */
-const installPackages = () => {
-  const hash = createHash('sha256');
-  for (const name of ['package.json', 'package-lock.json']) hash.update(readFileSync(join(root, name)));
-  hash.update(process.versions.modules);
-  const wanted = hash.digest('hex');
-  const stamp = join(root, 'node_modules', '.layerwell-lock');
-  const isInstalled = existsSync(join(root, 'node_modules', 'tsx'));
-  if (isInstalled && existsSync(stamp) && readFileSync(stamp, 'utf8') === wanted) return;
+const packagesOf = (...path) => JSON.parse(readFileSync(join(root, ...path), 'utf8')).packages ?? {};
+
+/** npm notes in node_modules what it installed; packages for other machines are optional and stay out of it. */
+const isInstalled = () => {
+  if (!existsSync(join(root, 'node_modules', '.package-lock.json'))) return false;
+  const wanted = packagesOf('package-lock.json');
+  const found = packagesOf('node_modules', '.package-lock.json');
+  const isSame = (name) =>
+    wanted[name]?.version === found[name]?.version && wanted[name]?.integrity === found[name]?.integrity;
+  const isOptional = (name) => wanted[name].optional === true || wanted[name].devOptional === true;
+  return (
+    Object.keys(found).every(isSame) &&
+    Object.keys(wanted).every((name) => name === '' || isSame(name) || (!(name in found) && isOptional(name)))
+  );
+};
+
+const installPackages = async () => {
+  if (isInstalled()) return;
   console.log('· npm packages: installing, about a minute');
-  const arguments_ = ['ci', '--include=dev', '--no-audit', '--no-fund', '--loglevel=error'];
-  const { status, error } = spawnSync('npm', arguments_, { cwd: root, stdio: 'inherit' });
-  if (status !== 0) {
-    stop(
-      `The npm packages could not be installed${error ? ` (${error.message})` : ''}. Run "npm ci" to see why, then start again.`,
-    );
-  }
-  writeFileSync(stamp, wanted);
+  const options = ['ci', '--include=dev', '--no-audit', '--no-fund', '--loglevel=error'];
+  const npm = spawn('npm', options, { cwd: root, stdio: 'inherit' });
+  const passOn = () => npm.kill('SIGTERM');
+  process.on('SIGTERM', passOn).on('SIGINT', passOn);
+  const fault = await new Promise((resolve) => {
+    npm.once('error', (error) => resolve(error.message));
+    npm.once('exit', (code, signal) => resolve(code === 0 ? null : `npm ci ended with ${signal ?? code}`));
+  });
+  process.off('SIGTERM', passOn).off('SIGINT', passOn);
+  if (fault !== null)
+    stop(`The npm packages could not be installed: ${fault}. Run "npm ci" to see why, then start again.`);
 };
 
 const command = process.argv[2];
@@ -44,7 +55,7 @@ if (!commands.includes(command)) stop(`Say which: ${commands.join(', ')}. Found 
 checkNode();
 process.chdir(root);
 try {
-  installPackages();
+  await installPackages();
 } catch (error) {
   stop(`The npm packages could not be checked in ${root}: ${error.message}`);
 }

@@ -42,6 +42,7 @@ const environment = z.object({
   WORKER_THREADS: wholeNumber(1, cores).default(1),
   UPLOAD_LIMIT_MB: wholeNumber(1, 200).default(20),
   SESSION_DAYS: wholeNumber(1, 365).default(30),
+  LOAD_DEMO: z.enum(['true', 'false'], 'true or false').default('false'),
 });
 
 export interface Config {
@@ -64,6 +65,8 @@ export interface Config {
   workerThreads: number;
   uploadLimitMb: number;
   sessionDays: number;
+  /** The demo survey and its accounts, whose passwords are public, are put into an empty database. */
+  loadDemo: boolean;
 }
 
 export class ConfigError extends Error {
@@ -122,6 +125,7 @@ export function loadConfig(env: NodeJS.ProcessEnv): Config {
     workerThreads: value.WORKER_THREADS,
     uploadLimitMb: value.UPLOAD_LIMIT_MB,
     sessionDays: value.SESSION_DAYS,
+    loadDemo: value.LOAD_DEMO === 'true',
   };
 }
 

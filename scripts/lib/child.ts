@@ -40,6 +40,7 @@ export class Child {
   #process: ChildProcess | null = null;
   #stopping = false;
   #pause = 250;
+  #failures = 0;
 
   constructor(options: ChildOptions) {
     this.#options = options;
@@ -47,6 +48,11 @@ export class Child {
 
   get pid(): number | undefined {
     return this.#process?.pid;
+  }
+
+  /** Ends in a row without a healthy time between them. */
+  get failures(): number {
+    return this.#failures;
   }
 
   start(): void {
@@ -90,7 +96,8 @@ export class Child {
 
   async #again(code: number | null, signal: NodeJS.Signals | null, lived: number): Promise<void> {
     const { name, log, say } = this.#options;
-    if (lived > healthyAfter) this.#pause = 250;
+    if (lived > healthyAfter) [this.#pause, this.#failures] = [250, 0];
+    this.#failures += 1;
     const how = signal === null ? `ended with code ${code}` : `was ended by ${signal}`;
     const tail = log === undefined || signal !== null ? '' : tailOf(log, 8);
     say(

@@ -67,7 +67,7 @@ export class Shutdown {
     const parent = process.ppid;
     setInterval(() => {
       if (process.ppid !== parent && this.#startedAt === null) this.#onSignal();
-    }, 1_000).unref();
+    }, 500).unref();
   }
 }
 

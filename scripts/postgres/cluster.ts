@@ -8,7 +8,7 @@ import type { Account } from './account';
 import { appRole, databaseUrl, ensureDatabase } from './database';
 import { makeFolder, socketFolder } from './folder';
 import { guard, type Guard } from './guard';
-import { clearStalePostmaster, clusterProcesses, livePostmaster } from './postmaster';
+import { clearStaleLocks, clusterProcesses, livePostmaster } from './postmaster';
 import { keepSecret } from './secret';
 
 export interface ClusterOptions {
@@ -89,7 +89,7 @@ export class Cluster {
 
   async #launch(socket: string | null): Promise<void> {
     const { folder, throwAway = false } = this.#options;
-    clearStalePostmaster(this.#data);
+    clearStaleLocks(this.#data, socket);
     this.#port = await this.#choosePort(join(folder, 'port'));
     const settings = {
       listen_addresses: '127.0.0.1',

@@ -47,10 +47,12 @@ export function clusterProcesses(data: string): number[] {
 }
 
 /**
- * After a kill, the number in postmaster.pid may belong to another program by now, which PostgreSQL takes for a running
- * server. Only with no process left in the folder is the file removed.
+ * After a kill, the number in a lock file may belong to another program by now, or to a process that nobody has reaped,
+ * which PostgreSQL takes for a running server. Only with no process left in the folder are the files removed.
  */
-export function clearStalePostmaster(data: string): void {
-  if (readPostmaster(data) !== null && clusterProcesses(data).length === 0)
-    rmSync(join(data, 'postmaster.pid'), { force: true });
+export function clearStaleLocks(data: string, socket: string | null): void {
+  if (clusterProcesses(data).length > 0) return;
+  rmSync(join(data, 'postmaster.pid'), { force: true });
+  if (socket === null) return;
+  for (const name of readdirSync(socket)) rmSync(join(socket, name), { force: true });
 }
