@@ -19,7 +19,7 @@ export const SPACING_LABELS: Record<SpreadType, string> = {
   schlumberger: 'AB/2',
   'half-schlumberger': 'AO',
   wenner: 'AB/2 (1.5 a)',
-  'pole-pole': 'a',
+  'pole-pole': 'effective AB/2',
   'dipole-dipole': 'effective AB/2',
   electrodes: 'effective AB/2',
 };
