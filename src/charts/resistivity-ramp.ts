@@ -1,4 +1,11 @@
-import { contrastRatio, linearRgbToHex, oklabDistance, oklabFromPolar, oklabToLinearRgb, type Oklab } from './oklab';
+import {
+  contrastRatio,
+  linearRgbToHex,
+  oklabDistance,
+  oklabFromPolar,
+  oklabToLinearRgb,
+  type Oklab,
+} from './oklab';
 
 /** The whole product colours resistivity over this range, Ω·m; values outside take the colour of the end. */
 export const RAMP_RANGE_OHM_M = { low: 1, high: 10_000 } as const;
@@ -46,7 +53,8 @@ export function rampStops(count = 33): { offset: number; color: string }[] {
 function evenTable(): string[] {
   const fine = Array.from({ length: FINE_STEPS + 1 }, (_, index) => pointOnCurve(index / FINE_STEPS));
   const travelled = [0];
-  for (let i = 1; i < fine.length; i++) travelled.push((travelled[i - 1] ?? 0) + oklabDistance(at(fine, i - 1), at(fine, i)));
+  for (let i = 1; i < fine.length; i++)
+    travelled.push((travelled[i - 1] ?? 0) + oklabDistance(at(fine, i - 1), at(fine, i)));
   const total = travelled[FINE_STEPS] ?? 1;
   let segment = 0;
   return Array.from({ length: TABLE_STEPS + 1 }, (_, index) => {
@@ -54,7 +62,9 @@ function evenTable(): string[] {
     while (segment < FINE_STEPS - 1 && (travelled[segment + 1] ?? total) < goal) segment++;
     const start = travelled[segment] ?? 0;
     const length = (travelled[segment + 1] ?? total) - start;
-    return linearRgbToHex(oklabToLinearRgb(mix(at(fine, segment), at(fine, segment + 1), (goal - start) / length)));
+    return linearRgbToHex(
+      oklabToLinearRgb(mix(at(fine, segment), at(fine, segment + 1), (goal - start) / length)),
+    );
   });
 }
 
@@ -63,7 +73,12 @@ function pointOnCurve(t: number): Oklab {
   const scaled = t * (ANCHORS.length - 1);
   const index = Math.min(Math.floor(scaled), ANCHORS.length - 2);
   const u = scaled - index;
-  const [p0, p1, p2, p3] = [at(ANCHORS, index - 1), at(ANCHORS, index), at(ANCHORS, index + 1), at(ANCHORS, index + 2)];
+  const [p0, p1, p2, p3] = [
+    at(ANCHORS, index - 1),
+    at(ANCHORS, index),
+    at(ANCHORS, index + 1),
+    at(ANCHORS, index + 2),
+  ];
   const blend = (key: keyof Oklab) =>
     0.5 *
     (2 * p1[key] +
@@ -74,7 +89,11 @@ function pointOnCurve(t: number): Oklab {
 }
 
 function mix(from: Oklab, to: Oklab, t: number): Oklab {
-  return { l: from.l + (to.l - from.l) * t, a: from.a + (to.a - from.a) * t, b: from.b + (to.b - from.b) * t };
+  return {
+    l: from.l + (to.l - from.l) * t,
+    a: from.a + (to.a - from.a) * t,
+    b: from.b + (to.b - from.b) * t,
+  };
 }
 
 /** Item at an index, the ends repeated beyond the list. */

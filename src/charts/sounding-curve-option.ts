@@ -1,0 +1,169 @@
+import type { EChartsOption, XAXisComponentOption, YAXisComponentOption } from 'echarts';
+import type { CurveLine, CurveReading } from './chart-data';
+import { MONO, SANS, type ChartPalette } from './chart-palette';
+import { curveSeries } from './curve-lines';
+import { curveTooltip } from './curve-tooltip';
+import { gridSeries, readingSeries } from './curve-marks';
+import { labelledTicks, squareLogAxes, tickLabel, type LogAxes, type LogRange } from './log-axes';
+import { residualPoints, residualSeries, STRIP_SIGMA, stripGridSeries } from './residual-strip';
+
+export interface SoundingCurveInput {
+  readings: readonly CurveReading[];
+  lines: readonly CurveLine[];
+  /** The line whose residuals are shown and that is drawn strongest. */
+  chosenLine: string | null;
+  focusedReading: number | null;
+  /** Name of the x axis with its unit, as "AB/2, m". */
+  spacingName: string;
+  /** Whole drawing, px. */
+  width: number;
+  height: number;
+  palette: ChartPalette;
+}
+
+const LEFT = 58;
+const RIGHT = 30;
+const TOP = 12;
+const AXIS_ROOM = 26;
+const STRIP_HEIGHT = 76;
+const FOOT = 42;
+
+export interface CurveLayout {
+  plot: { left: number; top: number; width: number; height: number };
+  strip: { left: number; top: number; width: number; height: number } | null;
+}
+
+/** Boxes of the curve and of the residual strip under it; both share left edge and width. */
+export function curveLayout(width: number, height: number, hasStrip: boolean): CurveLayout {
+  const plotWidth = Math.max(60, width - LEFT - RIGHT);
+  const below = hasStrip ? AXIS_ROOM + STRIP_HEIGHT + FOOT - 18 : FOOT;
+  const plotHeight = Math.max(60, height - TOP - below);
+  const plot = { left: LEFT, top: TOP, width: plotWidth, height: plotHeight };
+  const strip = { left: LEFT, top: TOP + plotHeight + AXIS_ROOM, width: plotWidth, height: STRIP_HEIGHT };
+  return { plot, strip: hasStrip ? strip : null };
+}
+
+/** The line whose residuals the strip shows: the chosen one, or else the first that has any. */
+export function residualLine(lines: readonly CurveLine[], chosenLine: string | null): CurveLine | null {
+  const withResiduals = lines.filter((line) => line.residuals !== undefined);
+  return withResiduals.find((line) => line.id === chosenLine) ?? withResiduals[0] ?? null;
+}
+
+/** Apparent resistivity against spacing on log–log axes with square decades, the residuals under it. */
+export function soundingCurveOption(input: SoundingCurveInput): EChartsOption {
+  const { readings, lines, palette, focusedReading, width, height } = input;
+  const shown = residualLine(lines, input.chosenLine);
+  const layout = curveLayout(width, height, shown !== null);
+  const axes = soundingAxes(readings, lines, layout);
+  const strip =
+    shown?.residuals && layout.strip
+      ? [
+          stripGridSeries(palette),
+          residualSeries(residualPoints(readings, shown.residuals), palette, focusedReading),
+        ]
+      : [];
+  return {
+    animation: false,
+    textStyle: { fontFamily: SANS, color: palette.muted },
+    grid: [layout.plot, ...(layout.strip ? [layout.strip] : [])],
+    xAxis: xAxes(input, axes, layout),
+    yAxis: yAxes(axes, layout, palette),
+    tooltip: curveTooltip(readings, shown, palette),
+    series: [
+      gridSeries(axes, palette),
+      ...curveSeries(lines, axes, palette, input.chosenLine),
+      readingSeries(readings, palette, focusedReading),
+      ...strip,
+    ],
+  };
+}
+
+export function soundingAxes(
+  readings: readonly CurveReading[],
+  lines: readonly CurveLine[],
+  { plot }: CurveLayout,
+): LogAxes {
+  const points = lines.filter((line) => line.kind !== 'ghost').flatMap((line) => line.points);
+  const spread = readings.flatMap(({ apparentResistivity, relativeError }) => [
+    apparentResistivity * Math.exp(relativeError),
+    apparentResistivity * Math.exp(-relativeError),
+  ]);
+  return squareLogAxes(
+    [...readings, ...points].map((point) => point.spacing),
+    [...spread, ...points.map((point) => point.apparentResistivity)],
+    plot.width,
+    plot.height,
+  );
+}
+
+const labelStyle = (palette: ChartPalette) => ({ fontFamily: MONO, fontSize: 12, color: palette.muted });
+
+function logAxis(range: LogRange, pixelsPerDecade: number, labelWidth: number, palette: ChartPalette) {
+  const positions = labelledTicks(range, pixelsPerDecade, labelWidth).map((tick) => tick.position);
+  return {
+    type: 'value' as const,
+    min: range.min,
+    max: range.max,
+    splitLine: { show: false },
+    axisTick: { show: true, customValues: positions, length: 4, lineStyle: { color: palette.muted } },
+    axisLabel: { ...labelStyle(palette), customValues: positions, formatter: tickLabel, margin: 8 },
+    axisPointer: { show: false },
+  };
+}
+
+function xAxes(input: SoundingCurveInput, axes: LogAxes, layout: CurveLayout): XAXisComponentOption[] {
+  const { palette, spacingName } = input;
+  const name = {
+    name: spacingName,
+    nameLocation: 'end' as const,
+    nameGap: 0,
+    nameTextStyle: {
+      color: palette.muted,
+      fontSize: 13,
+      align: 'right' as const,
+      verticalAlign: 'top' as const,
+      padding: [layout.strip ? 8 : 24, 0, 0, 0],
+    },
+  };
+  const line = { show: true, onZero: false, lineStyle: { color: palette.muted } };
+  const main = { ...logAxis(axes.x, axes.pixelsPerDecade, 30, palette), gridIndex: 0, axisLine: line };
+  if (!layout.strip) return [{ ...main, ...name }];
+  return [
+    main,
+    {
+      ...logAxis(axes.x, axes.pixelsPerDecade, 30, palette),
+      ...name,
+      gridIndex: 1,
+      axisLine: { show: false },
+      axisTick: { show: false },
+      axisLabel: { show: false },
+    },
+  ];
+}
+
+function yAxes(axes: LogAxes, layout: CurveLayout, palette: ChartPalette): YAXisComponentOption[] {
+  const line = { show: true, onZero: false, lineStyle: { color: palette.muted } };
+  const main = { ...logAxis(axes.y, axes.pixelsPerDecade, 14, palette), gridIndex: 0, axisLine: line };
+  if (!layout.strip) return [main];
+  const sigmas = [-2, 0, 2];
+  return [
+    main,
+    {
+      type: 'value',
+      gridIndex: 1,
+      min: -STRIP_SIGMA - 0.4,
+      max: STRIP_SIGMA + 0.4,
+      splitLine: { show: false },
+      axisLine: { show: false },
+      axisTick: { show: false },
+      axisLabel: {
+        ...labelStyle(palette),
+        margin: 12,
+        customValues: sigmas,
+        formatter: (sigma: number) =>
+          sigma === 0 ? '0' : `${sigma > 0 ? '+' : '\u2212'}${Math.abs(sigma)}σ`,
+      },
+      axisPointer: { show: false },
+    },
+  ];
+}

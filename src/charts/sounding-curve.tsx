@@ -1,0 +1,119 @@
+import { useMemo, useState } from 'react';
+import { ChartFrame } from './chart-frame';
+import type { CurveLine, CurveReading } from './chart-data';
+import { useChartPalette } from './chart-palette';
+import { curveTable } from './curve-table';
+import { echarts, ReactECharts } from './echarts-svg';
+import { readingFacts, readingSentence } from './reading-facts';
+import { residualLine, soundingCurveOption } from './sounding-curve-option';
+import { useBoxSize } from './use-box-size';
+
+export interface SoundingCurveProps {
+  readings: readonly CurveReading[];
+  lines: readonly CurveLine[];
+  /** The line drawn strongest, whose residuals stand below. */
+  chosenLine?: string | null;
+  /** Name of the x axis with its unit, as "AB/2, m". */
+  spacingName: string;
+  title?: string;
+  note?: string;
+  /** Name of the sounding, for file names. */
+  subject?: string;
+  /** Tailwind height of the drawing. */
+  heightClassName?: string;
+  className?: string;
+  /** The reading that is walked to or pressed, by its index. */
+  onFocusReading?: (index: number | null) => void;
+}
+
+export function SoundingCurve(props: SoundingCurveProps) {
+  const {
+    readings,
+    lines,
+    chosenLine = null,
+    spacingName,
+    title = 'Apparent resistivity',
+    className,
+  } = props;
+  const { heightClassName = 'h-[28rem]', onFocusReading } = props;
+  const palette = useChartPalette();
+  const { ref, size } = useBoxSize<HTMLDivElement>();
+  const [focused, setFocused] = useState<number | null>(null);
+  const focusedReading = focused !== null && focused < readings.length ? focused : null;
+  const focusOn = (index: number | null) => {
+    setFocused(index);
+    onFocusReading?.(index);
+  };
+  const option = useMemo(
+    () => soundingCurveOption({ readings, lines, chosenLine, focusedReading, spacingName, ...size, palette }),
+    [readings, lines, chosenLine, focusedReading, spacingName, size, palette],
+  );
+  const table = useMemo(() => curveTable(readings, lines, spacingName), [readings, lines, spacingName]);
+  const shown = residualLine(lines, chosenLine);
+  return (
+    <ChartFrame
+      title={title}
+      note={props.note ?? 'Ω·m'}
+      table={table}
+      {...(props.subject ? { subject: props.subject } : {})}
+      {...(className ? { className } : {})}
+    >
+      <ReadingWalker readings={readings} shown={shown} focused={focusedReading} onFocus={focusOn} />
+      <div
+        ref={ref}
+        aria-hidden
+        className={`relative min-w-0 rounded peer-focus-visible:outline-2 peer-focus-visible:outline-water ${heightClassName}`}
+      >
+        {size.width > 0 && size.height > 0 ? (
+          <ReactECharts
+            echarts={echarts}
+            option={option}
+            notMerge
+            opts={{ renderer: 'svg' }}
+            onEvents={{
+              click: (event: { seriesId?: string; dataIndex?: number }) => {
+                if (event.seriesId === 'readings') focusOn(event.dataIndex ?? null);
+              },
+            }}
+            style={{ position: 'absolute', inset: 0, height: size.height, width: size.width }}
+          />
+        ) : null}
+      </div>
+      {shown ? (
+        <p className="pl-[58px] text-sm text-muted">
+          {shown.letter ? `Run ${shown.letter}: ` : ''}misfit of each reading in its own standard error; above
+          0 the model reads higher.
+        </p>
+      ) : null}
+    </ChartFrame>
+  );
+}
+
+interface ReadingWalkerProps {
+  readings: readonly CurveReading[];
+  shown: CurveLine | null;
+  focused: number | null;
+  onFocus: (index: number | null) => void;
+}
+
+/** A slider out of sight: arrow keys walk through the readings and each is said in words. */
+function ReadingWalker({ readings, shown, focused, onFocus }: ReadingWalkerProps) {
+  const index = focused ?? 0;
+  const reading = readings[index];
+  if (!reading) return null;
+  return (
+    <input
+      type="range"
+      min={0}
+      max={readings.length - 1}
+      step={1}
+      value={index}
+      aria-label="Readings of the curve"
+      aria-valuetext={readingSentence(readingFacts(reading, index, shown))}
+      onChange={(event) => onFocus(Number(event.target.value))}
+      onFocus={() => onFocus(index)}
+      onBlur={() => onFocus(null)}
+      className="peer sr-only"
+    />
+  );
+}
