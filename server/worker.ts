@@ -1,0 +1,48 @@
+import { join } from 'node:path';
+import { pino } from 'pino';
+import { loadConfig, readEnvFile } from './config';
+import { createDatabase } from './db/knex';
+import { createPool } from './db/pool';
+import { startRunWorker } from './jobs/run-worker';
+
+/** How long a stop may take, for a database that does not answer any more. */
+const STOP_PATIENCE_MS = 6000;
+
+readEnvFile();
+const config = loadConfig(process.env);
+const log = pino({ level: config.logLevel, base: { process: 'worker' } });
+
+function fail(error: unknown): void {
+  log.fatal({ err: error }, 'unexpected fault; the worker ends');
+  process.exit(1);
+}
+process.on('uncaughtException', fail);
+process.on('unhandledRejection', fail);
+
+const lost = (error: Error) => log.warn({ err: error }, 'a connection to the database was lost');
+const db = createDatabase(config, lost);
+const pool = createPool(config, lost);
+const isSource = import.meta.url.endsWith('.ts');
+const worker = startRunWorker({
+  db,
+  pool,
+  log,
+  threads: config.workerThreads,
+  threadFile: join(import.meta.dirname, isSource ? 'jobs/fit-thread.ts' : 'fit-thread.js'),
+});
+log.info({ threads: config.workerThreads }, 'worker started');
+
+let stopping = false;
+function stop(reason: string): void {
+  if (stopping) return;
+  stopping = true;
+  log.info({ reason }, 'worker stops');
+  setTimeout(() => process.exit(1), STOP_PATIENCE_MS).unref();
+  void worker
+    .stop()
+    .then(() => Promise.all([db.destroy(), pool.end()]))
+    .then(() => process.exit(0), fail);
+}
+process.on('SIGTERM', () => stop('SIGTERM'));
+process.on('SIGINT', () => stop('SIGINT'));
+process.once('disconnect', () => stop('the process that started it is gone'));
