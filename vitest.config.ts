@@ -15,10 +15,20 @@ export default defineConfig({
         extends: true,
         test: {
           name: 'server',
-          include: ['tests/{server,examples}/**/*.test.ts'],
+          include: ['tests/server/**/*.test.ts'],
           globalSetup: ['tests/setup/database-cluster.ts'],
           hookTimeout: 30_000,
           testTimeout: 20_000,
+        },
+      },
+      {
+        extends: true,
+        test: {
+          name: 'examples',
+          include: ['tests/examples/**/*.test.ts'],
+          globalSetup: ['tests/setup/database-cluster.ts'],
+          hookTimeout: 60_000,
+          testTimeout: 120_000,
         },
       },
       {
