@@ -4,9 +4,7 @@ import { loadConfig, readEnvFile } from './config';
 import { createDatabase } from './db/knex';
 import { createPool } from './db/pool';
 import { startRunWorker } from './jobs/run-worker';
-
-/** How long a stop may take, for a database that does not answer any more. */
-const STOP_PATIENCE_MS = 6000;
+import { stopOnSignal } from './stop-on-signal';
 
 readEnvFile();
 const config = loadConfig(process.env);
@@ -32,17 +30,8 @@ const worker = startRunWorker({
 });
 log.info({ threads: config.workerThreads }, 'worker started');
 
-let stopping = false;
-function stop(reason: string): void {
-  if (stopping) return;
-  stopping = true;
-  log.info({ reason }, 'worker stops');
-  setTimeout(() => process.exit(1), STOP_PATIENCE_MS).unref();
-  void worker
-    .stop()
-    .then(() => Promise.all([db.destroy(), pool.end()]))
-    .then(() => process.exit(0), fail);
-}
-process.on('SIGTERM', () => stop('SIGTERM'));
-process.on('SIGINT', () => stop('SIGINT'));
-process.once('disconnect', () => stop('the process that started it is gone'));
+stopOnSignal(log, async () => {
+  await worker.stop();
+  await db.destroy();
+  await pool.end();
+});

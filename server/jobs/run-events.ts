@@ -19,8 +19,6 @@ export interface RunListener {
   changed(change: RunChange): void;
   /** Changes may have been missed while the line to the database was down, or before it was up: look again. */
   missed(): void;
-  /** The server stops; nothing more will come. */
-  closed?(): void;
 }
 
 /** Changes of runs from every server and worker of one database. */
@@ -105,7 +103,6 @@ export function createRunEvents(pool: Pool, log: Logger): RunEvents {
     async close() {
       closed = true;
       if (retry) clearTimeout(retry);
-      for (const { listener } of subscriptions) listener.closed?.();
       subscriptions.clear();
       await opening;
       const last = client as PoolClient | null;

@@ -1,0 +1,235 @@
+import type { Knex } from 'knex';
+import type { z } from 'zod';
+import type { Actor } from '../access/actor';
+import type { FitResult, FitSettings } from '../contract/fit';
+import type { Reading } from '../contract/readings';
+import type { RunInput, RunSummary, runComparisonSchema } from '../contract/runs';
+import type { SpreadType } from '../contract/spread';
+import { notFound } from '../errors';
+
+export interface RunRow {
+  id: string;
+  sounding_id: string;
+  number: number;
+  revision_id: string;
+  revision_number: number;
+  current_revision_id: string | null;
+  settings: FitSettings;
+  engine_version: string;
+  computation_key: string;
+  requested_by: string;
+  requester_name: string;
+  requested_at: Date;
+  recomputes_run_id: string | null;
+  state: RunSummary['state'];
+  progress: number;
+  progress_text: string;
+  started_at: Date | null;
+  ended_at: Date | null;
+  from_cache: boolean;
+  duration_ms: number | null;
+  error_message: string | null;
+  comparison: z.infer<typeof runComparisonSchema> | null;
+  earth: FitResult['earth'] | null;
+  fit_status: FitResult['status'] | null;
+  chi2_per_reading: number | null;
+  rms_percent: number | null;
+  label: string;
+  note: string;
+  pinned: boolean;
+  note_version: number;
+}
+
+export interface FullRunRow extends RunRow {
+  sounding_name: string;
+  survey_id: string;
+  spread_type: SpreadType;
+  input: RunInput;
+  revision_readings: Reading[];
+  result: FitResult | null;
+}
+
+const SUMMARY_COLUMNS = [
+  'run.id',
+  'run.sounding_id',
+  'run.number',
+  'run.revision_id',
+  'data_revision.number as revision_number',
+  'sounding.current_revision_id',
+  'run.engine_version',
+  'run.computation_key',
+  'run.requested_by',
+  'app_user.name as requester_name',
+  'run.requested_at',
+  'run.recomputes_run_id',
+  'run_state.state',
+  'run_state.progress',
+  'run_state.progress_text',
+  'run_state.started_at',
+  'run_state.ended_at',
+  'run_state.from_cache',
+  'computation.duration_ms',
+  'run_state.error_message',
+  'run_state.comparison',
+  'run_note.label',
+  'run_note.note',
+  'run_note.pinned',
+  'run_note.version as note_version',
+];
+
+/** Runs of surveys that the actor is a member of. */
+const visibleRuns = (knex: Knex, actor: Actor) =>
+  knex('run')
+    .join('run_state', 'run_state.run_id', 'run.id')
+    .join('run_note', 'run_note.run_id', 'run.id')
+    .join('data_revision', 'data_revision.id', 'run.revision_id')
+    .join('sounding', 'sounding.id', 'run.sounding_id')
+    .join('survey_member', 'survey_member.survey_id', 'sounding.survey_id')
+    .join('app_user', 'app_user.id', 'run.requested_by')
+    .leftJoin('computation', 'computation.id', 'run_state.computation_id')
+    .where('survey_member.user_id', actor.userId)
+    .select(
+      ...SUMMARY_COLUMNS,
+      // only what a list shows of a result: whole ones are large
+      knex.raw("run.input -> 'settings' AS settings"),
+      knex.raw("computation.result -> 'earth' AS earth"),
+      knex.raw("computation.result ->> 'status' AS fit_status"),
+      knex.raw("(computation.result ->> 'chi2PerReading')::float8 AS chi2_per_reading"),
+      knex.raw("(computation.result ->> 'rmsPercent')::float8 AS rms_percent"),
+    );
+
+/** Newest first; only some of them where ids or a limit are given. */
+export async function listRuns(
+  knex: Knex,
+  actor: Actor,
+  soundingId: string,
+  only: { runIds?: readonly string[]; limit?: number } = {},
+): Promise<RunRow[]> {
+  const query = visibleRuns(knex, actor).where('run.sounding_id', soundingId).orderBy('run.number', 'desc');
+  if (only.runIds) query.whereIn('run.id', only.runIds);
+  if (only.limit) query.limit(only.limit);
+  return (await query) as RunRow[];
+}
+
+export async function getRun(knex: Knex, actor: Actor, runId: string): Promise<FullRunRow> {
+  const row = (await visibleRuns(knex, actor)
+    .where('run.id', runId)
+    .first(
+      'sounding.name as sounding_name',
+      'sounding.survey_id',
+      'sounding.spread_type',
+      'run.input',
+      'data_revision.readings as revision_readings',
+      'computation.result',
+    )) as FullRunRow | undefined;
+  if (!row) throw notFound('The run');
+  return row;
+}
+
+export interface RunSource {
+  error_floor: number;
+  revision_id: string;
+  revision_number: number;
+  readings: Reading[];
+}
+
+/**
+ * The readings that a run would take, from a revision of this sounding or from its current one; null when there is none.
+ * Holds the sounding's row, so that two requests at the same moment get two numbers.
+ */
+export async function findRunSource(
+  trx: Knex.Transaction,
+  soundingId: string,
+  revisionId: string | undefined,
+): Promise<RunSource | null> {
+  const sounding = await trx('sounding')
+    .where({ id: soundingId })
+    .forNoKeyUpdate()
+    .first<{ survey_id: string; current_revision_id: string | null }>('survey_id', 'current_revision_id');
+  const row = await trx('data_revision')
+    .join('survey', 'survey.id', trx.raw('?', [sounding.survey_id]))
+    .where({ sounding_id: soundingId, 'data_revision.id': revisionId ?? sounding.current_revision_id })
+    .first<RunSource | undefined>(
+      'survey.error_floor',
+      'data_revision.id as revision_id',
+      'data_revision.number as revision_number',
+      'data_revision.readings',
+    );
+  return row ?? null;
+}
+
+export async function holdSounding(trx: Knex.Transaction, soundingId: string): Promise<void> {
+  await trx('sounding').where({ id: soundingId }).forNoKeyUpdate().first('id');
+}
+
+export interface NewRun {
+  soundingId: string;
+  revisionId: string;
+  input: RunInput;
+  computationKey: string;
+  engineVersion: string;
+  requestedBy: string;
+  recomputesRunId: string | null;
+  /** answers the run at once */
+  computationId: string | null;
+}
+
+/** The caller holds the sounding's row. */
+export async function insertRun(trx: Knex.Transaction, run: NewRun): Promise<{ id: string; number: number }> {
+  const [made] = await trx('run')
+    .insert({
+      sounding_id: run.soundingId,
+      number: trx.raw('(SELECT coalesce(max(number), 0) + 1 FROM run WHERE sounding_id = ?)', [
+        run.soundingId,
+      ]),
+      revision_id: run.revisionId,
+      input: JSON.stringify(run.input),
+      computation_key: run.computationKey,
+      engine_version: run.engineVersion,
+      recomputes_run_id: run.recomputesRunId,
+      requested_by: run.requestedBy,
+    })
+    .returning<{ id: string; number: number }[]>(['id', 'number']);
+  if (!made) throw new Error('a run was not inserted');
+  const answered = run.computationId !== null;
+  await trx('run_state').insert({
+    run_id: made.id,
+    state: answered ? 'finished' : 'queued',
+    progress: answered ? 1 : 0,
+    from_cache: answered,
+    computation_id: run.computationId,
+    ended_at: answered ? trx.fn.now() : null,
+  });
+  await trx('run_note').insert({ run_id: made.id });
+  return made;
+}
+
+export async function findComputation(knex: Knex, key: string): Promise<string | null> {
+  const row = await knex('computation')
+    .where({ key })
+    .orderBy('created_at')
+    .first<{ id: string } | undefined>('id');
+  return row?.id ?? null;
+}
+
+/** False when the run had ended already. */
+export async function cancelRun(trx: Knex, runId: string): Promise<boolean> {
+  const rows = await trx('run_state')
+    .where({ run_id: runId })
+    .whereIn('state', ['queued', 'running'])
+    .update({ state: 'cancelled', progress_text: '', ended_at: trx.fn.now() });
+  return rows > 0;
+}
+
+/** False when the note has another version by now. */
+export async function updateNote(
+  trx: Knex,
+  runId: string,
+  version: number,
+  change: { label?: string | undefined; note?: string | undefined; pinned?: boolean | undefined },
+): Promise<boolean> {
+  const rows = await trx('run_note')
+    .where({ run_id: runId, version })
+    .update({ ...change, version: version + 1 });
+  return rows > 0;
+}
