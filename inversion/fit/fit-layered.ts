@@ -5,9 +5,9 @@ import { MOST_LAYERS, requireFitInput } from './check-fit-input';
 import { buildFitResult } from './fit-result';
 import { aicc, bic, chooseLayerCount, withinNoise } from './layer-count';
 import { createLayeredProblem } from './layered-problem';
-import { multiStart, type MultiStartOutcome } from './multi-start';
-import { createResidualSystem } from './residual-system';
-import { soundingCurve } from './starting-models';
+import { multiStart, scoutFit, type MultiStartOutcome } from './multi-start';
+import { createResidualSystem, type ResidualSystem } from './residual-system';
+import { soundingCurve, type SoundingCurve } from './starting-models';
 
 export interface FitOptions {
   /** called after each kept step */
@@ -37,39 +37,49 @@ export function fitLayered(
   const operator = createForwardOperator(readings.map((reading) => reading.spread));
   const system = createResidualSystem(operator, readings);
   const curve = soundingCurve(readings);
-  const fit = (layers: number): CountFit => {
+  const most =
+    settings.layers === 'auto'
+      ? Math.min(MOST_LAYERS, Math.max(1, Math.floor((readings.length + 1) / 2)))
+      : settings.layers;
+  const scouts = scoutModels(system, curve, settings, most - 1);
+  const fits: CountFit[] = [];
+  for (let layers = settings.layers === 'auto' ? 1 : most; layers <= most; layers++) {
     const layered = createLayeredProblem(system, layers, settings.bounds, settings.fixed);
-    const start = settings.start?.resistivity.length === layers ? settings.start : undefined;
     const outcome = multiStart(layered, curve, createRandomStream(settings.seed), {
-      userStart: start,
+      userStart: settings.start?.resistivity.length === layers ? settings.start : undefined,
+      fewer: scouts[layers - 2],
       onProgress: options.onProgress,
     });
-    return { layers, outcome, logParameters: layered.expand(outcome.parameters), held: layered.held };
-  };
-  const finish = (chosen: CountFit, layerCounts: LayerCountFit[] | null, all: readonly CountFit[]) =>
-    buildFitResult({
-      readings,
-      settings,
-      system,
-      ...chosen,
-      status: chosen.outcome.status,
-      layerCounts,
-      starts: all.reduce((sum, f) => sum + f.outcome.starts, 0),
-      iterations: all.reduce((sum, f) => sum + f.outcome.iterations, 0),
-    });
-  if (settings.layers !== 'auto') {
-    const only = fit(settings.layers);
-    return finish(only, null, [only]);
+    fits.push({ layers, outcome, logParameters: layered.expand(outcome.parameters), held: layered.held });
   }
-  const most = Math.min(MOST_LAYERS, Math.max(1, Math.floor((readings.length + 1) / 2)));
-  const fits = Array.from({ length: most }, (_, i) => fit(i + 1));
-  const rows = fits.map((one) => describeCount(one, readings.length));
-  const index = chooseLayerCount(rows);
-  return finish(
-    fits[index]!,
-    rows.map((row, i) => ({ ...row, chosen: i === index })),
-    fits,
-  );
+  const rows = fits.map((fit) => describeCount(fit, readings.length));
+  const index = settings.layers === 'auto' ? chooseLayerCount(rows) : 0;
+  const chosen = fits[index]!;
+  return buildFitResult({
+    readings,
+    settings,
+    system,
+    ...chosen,
+    status: chosen.outcome.status,
+    layerCounts: settings.layers === 'auto' ? rows.map((row, i) => ({ ...row, chosen: i === index })) : null,
+    starts: fits.reduce((sum, fit) => sum + fit.outcome.starts, 0),
+    iterations: fits.reduce((sum, fit) => sum + fit.outcome.iterations, 0),
+  });
+}
+
+/** ln parameters of quick fits with 1 … `most` layers, each grown from the one before; they start the shown fits. */
+function scoutModels(
+  system: ResidualSystem,
+  curve: SoundingCurve,
+  settings: FitSettings,
+  most: number,
+): Float64Array[] {
+  const models: Float64Array[] = [];
+  for (let layers = 1; layers <= most; layers++) {
+    const layered = createLayeredProblem(system, layers, settings.bounds, []);
+    models.push(layered.expand(scoutFit(layered, curve, models.at(-1)).parameters));
+  }
+  return models;
 }
 
 function describeCount({ layers, outcome, logParameters }: CountFit, readings: number): LayerCountFit {

@@ -22,6 +22,8 @@ export interface LeastSquaresOutcome {
   readonly parameters: Float64Array;
   readonly chi2: number;
   readonly iterations: number;
+  /** damping at the end; hand it back as `initialDamping` to go on */
+  readonly damping: number;
 }
 
 export interface LeastSquaresOptions {
@@ -32,7 +34,7 @@ export interface LeastSquaresOptions {
 
 const FASTER = 4;
 const SLOWER = 5;
-const INITIAL_DAMPING = 1e-2;
+const INITIAL_DAMPING = 0.3;
 const LOWEST_DAMPING = 1e-9;
 
 interface Trial {
@@ -136,6 +138,7 @@ export function minimise(
     parameters: current.parameters,
     chi2: current.chi2,
     iterations,
+    damping,
   });
   let { gradient, norms } = slopes(jacobian, current.residual, n);
   for (let iteration = 0; iteration < limit; iteration++) {
@@ -175,4 +178,4 @@ export function minimise(
   return done('iteration-limit', limit);
 }
 
-const SCALE_FLOOR = 1e-2;
+const SCALE_FLOOR = 0.1;

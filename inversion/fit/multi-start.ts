@@ -2,14 +2,33 @@ import type { RandomStream } from '../random';
 import { TOLERANCES } from '../tolerances';
 import type { FitProgress, LayeredEarth } from '../types';
 import type { LayeredProblem } from './layered-problem';
-import { minimise, type LeastSquaresOutcome } from './levenberg-marquardt';
-import { evenStart, randomStart, type SoundingCurve } from './starting-models';
+import { minimise, type LeastSquaresOptions, type LeastSquaresOutcome } from './levenberg-marquardt';
+import { evenStart, randomStart, splitStarts, type SoundingCurve } from './starting-models';
 
-/** Random models that are screened by forward runs alone, per start that may be used. */
-const SCREENED = 160;
-const MOST_STARTS = 16;
-/** Starts in a row without a gain of `TOLERANCES.startImprovement` that end the search. */
-const PATIENCE = 5;
+/** How hard a search looks. */
+export interface SearchEffort {
+  /** random models screened by forward runs alone */
+  readonly screened: number;
+  /** how many of the best of those are run */
+  readonly random: number;
+  /** steps of the short run that sorts the starts */
+  readonly shortRun: number;
+  /** carried starts in a row without a gain of `TOLERANCES.startImprovement` that end the search */
+  readonly patience: number;
+  /** most steps of a carried start */
+  readonly iterations: number;
+}
+
+/** For a result that is shown. */
+const FULL: SearchEffort = {
+  screened: 120,
+  random: 4,
+  shortRun: 10,
+  patience: 2,
+  iterations: TOLERANCES.iterations,
+};
+/** For a model that only serves to start the next layer count. */
+const SCOUT: SearchEffort = { screened: 0, random: 0, shortRun: 8, patience: 0, iterations: 20 };
 
 export interface MultiStartOutcome extends LeastSquaresOutcome {
   readonly starts: number;
@@ -17,8 +36,8 @@ export interface MultiStartOutcome extends LeastSquaresOutcome {
 
 export interface MultiStartOptions {
   readonly userStart?: LayeredEarth | undefined;
-  /** further ln-parameter models to start from, tried first */
-  readonly extraStarts?: readonly Float64Array[];
+  /** ln parameters of a model with one layer fewer, whose layers are split in turn */
+  readonly fewer?: Float64Array | undefined;
   readonly onProgress?: ((progress: FitProgress) => void) | undefined;
 }
 
@@ -26,22 +45,70 @@ function logParameters(earth: LayeredEarth): Float64Array {
   return Float64Array.from([...earth.resistivity, ...earth.thickness], Math.log);
 }
 
-/** Random models in ascending order of misfit; only forward runs are spent on them. */
+/** The best of `effort.screened` random models by misfit; only forward runs are spent on them. */
 function screenedStarts(
   layered: LayeredProblem,
   curve: SoundingCurve,
   random: RandomStream,
-): { start: Float64Array; chi2: number }[] {
+  effort: SearchEffort,
+): Float64Array[] {
+  if (layered.layers === 1) return [];
   const residual = new Float64Array(layered.problem.residuals);
-  return Array.from({ length: SCREENED }, () => {
+  return Array.from({ length: effort.screened }, () => {
     const start = layered.restrict(randomStart(curve, layered.layers, random));
     return { start, chi2: layered.problem.evaluate(start, residual) };
-  }).sort((a, b) => a.chi2 - b.chi2);
+  })
+    .sort((a, b) => a.chi2 - b.chi2)
+    .slice(0, effort.random)
+    .map(({ start }) => start);
+}
+
+function search(
+  layered: LayeredProblem,
+  queue: readonly Float64Array[],
+  effort: SearchEffort,
+  onProgress: MultiStartOptions['onProgress'],
+): MultiStartOutcome {
+  const { problem, layers } = layered;
+  let iterations = 0;
+  const run = (from: ArrayLike<number>, start: number, more: LeastSquaresOptions): LeastSquaresOutcome => {
+    const outcome = minimise(problem, from, {
+      ...more,
+      onIteration: (iteration, chi2) =>
+        onProgress?.({
+          layers,
+          start: start + 1,
+          starts: queue.length,
+          iteration,
+          chi2PerReading: chi2 / problem.residuals,
+        }),
+    });
+    iterations += outcome.iterations;
+    return outcome;
+  };
+  const [leader, ...others] = queue
+    .map((from, start) => ({ start, outcome: run(from, start, { iterations: effort.shortRun }) }))
+    .sort((a, b) => a.outcome.chi2 - b.outcome.chi2);
+  const carry = ({ start, outcome }: { start: number; outcome: LeastSquaresOutcome }) =>
+    outcome.status === 'iteration-limit'
+      ? run(outcome.parameters, start, { initialDamping: outcome.damping, iterations: effort.iterations })
+      : outcome;
+  let best = carry(leader!);
+  let idle = 0;
+  for (const candidate of others) {
+    if (idle >= effort.patience) break;
+    const end = carry(candidate);
+    idle = end.chi2 < best.chi2 * (1 - TOLERANCES.startImprovement) ? 0 : idle + 1;
+    if (end.chi2 < best.chi2) best = end;
+  }
+  return { ...best, iterations, starts: queue.length };
 }
 
 /**
- * The best of several local fits: the user's start, the even start, then screened random starts, until `PATIENCE` of
- * them in a row bring no better χ² by 5 % (never because the noise level is reached: that says nothing about a lower one).
+ * The best of several local fits. Starts: the user's, an even one, the model with one layer fewer with each of its layers
+ * split, and the best of many random models. A short run from each sorts them; they are then carried to convergence in
+ * that order, until `patience` of them in a row bring no better χ² by 5 % (never because the noise level is reached:
+ * that says nothing about a lower one).
  */
 export function multiStart(
   layered: LayeredProblem,
@@ -49,36 +116,25 @@ export function multiStart(
   random: RandomStream,
   options: MultiStartOptions = {},
 ): MultiStartOutcome {
-  const { problem, layers } = layered;
-  const first = [
+  const queue = [
     ...(options.userStart ? [logParameters(options.userStart)] : []),
-    ...(options.extraStarts ?? []),
-    evenStart(curve, layers),
+    evenStart(curve, layered.layers),
+    ...(options.fewer ? splitStarts(options.fewer, curve) : []),
   ].map(layered.restrict);
-  const queue =
-    layers === 1 ? first : [...first, ...screenedStarts(layered, curve, random).map((s) => s.start)];
-  const most = Math.min(queue.length, Math.max(first.length, MOST_STARTS));
-  let best: LeastSquaresOutcome | null = null;
-  let iterations = 0;
-  let starts = 0;
-  let idle = 0;
-  while (starts < most && (starts < first.length || idle < PATIENCE)) {
-    const start = starts;
-    const outcome = minimise(problem, queue[start]!, {
-      onIteration: (iteration, chi2) =>
-        options.onProgress?.({
-          layers,
-          start: start + 1,
-          starts: most,
-          iteration,
-          chi2PerReading: chi2 / problem.residuals,
-        }),
-    });
-    starts++;
-    iterations += outcome.iterations;
-    const gained: boolean = best === null || outcome.chi2 < best.chi2 * (1 - TOLERANCES.startImprovement);
-    idle = gained ? 0 : idle + 1;
-    if (best === null || outcome.chi2 < best.chi2) best = outcome;
-  }
-  return { ...best!, iterations, starts };
+  return search(
+    layered,
+    [...queue, ...screenedStarts(layered, curve, random, FULL)],
+    FULL,
+    options.onProgress,
+  );
+}
+
+/** A quick fit that serves to start the next layer count. */
+export function scoutFit(
+  layered: LayeredProblem,
+  curve: SoundingCurve,
+  fewer: Float64Array | undefined,
+): MultiStartOutcome {
+  const queue = [evenStart(curve, layered.layers), ...(fewer ? splitStarts(fewer, curve) : [])];
+  return search(layered, queue.map(layered.restrict), SCOUT, undefined);
 }

@@ -79,3 +79,27 @@ export function randomStart(curve: SoundingCurve, layers: number, random: Random
   );
   return modelFromDepths(curve, logDepths, () => 0.6 * random.normal());
 }
+
+/** Factors by which the two halves of a split layer are told apart, in ln ρ. */
+const SPLIT_CONTRASTS = [0.5, -0.5] as const;
+
+/**
+ * Models with one layer more than `parameters` (2N − 1 ln values): each layer in turn halved, its halves told apart both
+ * ways. The half-space is split at twice the deepest boundary.
+ */
+export function splitStarts(parameters: Float64Array, curve: SoundingCurve): Float64Array[] {
+  const layers = (parameters.length + 1) / 2;
+  const rho = Array.from(parameters.subarray(0, layers));
+  const thickness = Array.from(parameters.subarray(layers));
+  const depth = thickness.reduce((sum, h) => sum + Math.exp(h), 0);
+  const below = depth > 0 ? Math.log(depth) : (depthRange(curve).low + depthRange(curve).high) / 2;
+  return rho.flatMap((value, i) =>
+    SPLIT_CONTRASTS.map((contrast) => {
+      const halves = i < layers - 1 ? [thickness[i]! - Math.LN2, thickness[i]! - Math.LN2] : [below];
+      return Float64Array.from([
+        ...rho.toSpliced(i, 1, value + contrast, value - contrast),
+        ...thickness.toSpliced(i, 1, ...halves),
+      ]);
+    }),
+  );
+}
