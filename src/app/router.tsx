@@ -14,6 +14,8 @@ type PageLoader = () => Promise<ComponentType>;
  * `bench: async () => (await import('../features/bench/bench-page')).BenchPage`.
  */
 const PAGES: Partial<Record<RouteName, PageLoader>> = {
+  surveys: async () => (await import('../features/surveys/surveys-page')).SurveysPage,
+  survey: async () => (await import('../features/surveys/survey-overview-page')).SurveyOverviewPage,
   settings: async () => (await import('../features/account/settings-page')).SettingsPage,
 };
 

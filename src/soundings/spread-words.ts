@@ -13,13 +13,3 @@ export const SPREAD_OPTIONS = (Object.keys(SPREAD_LABELS) as SpreadType[]).map((
   value,
   label: SPREAD_LABELS[value],
 }));
-
-/** What the spacing axis of a curve is called. */
-export const SPACING_LABELS: Record<SpreadType, string> = {
-  schlumberger: 'AB/2',
-  'half-schlumberger': 'AO',
-  wenner: 'AB/2 (1.5 a)',
-  'pole-pole': 'effective AB/2',
-  'dipole-dipole': 'effective AB/2',
-  electrodes: 'effective AB/2',
-};

@@ -1,9 +1,6 @@
-import type { ReactNode } from 'react';
-import { classNames } from './class-names';
 import type { Tone } from './badge';
-
-/** How far a thing has come, told by shape as well as by colour. */
-export type MarkShape = 'empty' | 'part' | 'half' | 'full' | 'cross';
+import { classNames } from './class-names';
+import { MarkGlyph, type MarkShape } from './mark-glyph';
 
 export interface StateMarkProps {
   shape: MarkShape;
@@ -13,7 +10,7 @@ export interface StateMarkProps {
   compact?: boolean;
 }
 
-const TONE: Record<Tone, string> = {
+export const TONE_TEXT: Record<Tone, string> = {
   neutral: 'text-muted',
   water: 'text-water',
   copper: 'text-copper',
@@ -28,20 +25,11 @@ export function StateMark({ shape, tone = 'neutral', label, compact = false }: S
         viewBox="0 0 12 12"
         width="12"
         height="12"
-        className={classNames('shrink-0', TONE[tone])}
+        className={classNames('shrink-0', TONE_TEXT[tone])}
       >
-        <circle cx="6" cy="6" r="5" fill="none" stroke="currentColor" strokeWidth="1.5" />
-        {FILL[shape]}
+        <MarkGlyph shape={shape} />
       </svg>
       <span className={compact ? 'sr-only' : undefined}>{label}</span>
     </span>
   );
 }
-
-const FILL: Record<MarkShape, ReactNode> = {
-  empty: null,
-  part: <path d="M6 6V1a5 5 0 0 1 5 5z" fill="currentColor" />,
-  half: <path d="M6 1a5 5 0 0 1 0 10z" fill="currentColor" />,
-  full: <circle cx="6" cy="6" r="5" fill="currentColor" />,
-  cross: <path d="M3.6 3.6l4.8 4.8M8.4 3.6L3.6 8.4" stroke="currentColor" strokeWidth="1.5" />,
-};

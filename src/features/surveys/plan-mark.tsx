@@ -1,0 +1,62 @@
+import type { KeyboardEvent } from 'react';
+import { Link } from 'react-router-dom';
+import { SOUNDING_STATE_LOOK } from '../../soundings/sounding-state-look';
+import { MarkGlyph } from '../../ui/mark-glyph';
+import { TONE_TEXT } from '../../ui/state-mark';
+import type { PlanItem } from './plan-items';
+
+interface PlanMarkProps {
+  item: PlanItem;
+  x: number;
+  y: number;
+  isTabStop: boolean;
+  onFocus: () => void;
+  onKeyDown: (event: KeyboardEvent) => void;
+  labelShown: boolean;
+}
+
+export function PlanMark({ item, x, y, isTabStop, onFocus, onKeyDown, labelShown }: PlanMarkProps) {
+  const what =
+    item.kind === 'borehole'
+      ? `Borehole ${item.name}`
+      : `Sounding ${item.name}, ${SOUNDING_STATE_LOOK[item.state].label.toLowerCase()}`;
+  return (
+    <Link
+      to={item.to}
+      tabIndex={isTabStop ? 0 : -1}
+      aria-label={what}
+      onFocus={onFocus}
+      onKeyDown={onKeyDown}
+      className="group outline-none"
+    >
+      <title>{what}</title>
+      <circle
+        cx={x}
+        cy={y}
+        r="12"
+        className="fill-transparent group-hover:fill-sunken group-focus-visible:stroke-water group-focus-visible:stroke-2"
+      />
+      <g transform={`translate(${(x - 6).toFixed(1)} ${(y - 6).toFixed(1)})`}>
+        {item.kind === 'borehole' ? (
+          <path d="M1 1h10v10H1zM6 1v10" className="fill-sheet stroke-ink" strokeWidth="1.5" />
+        ) : (
+          <g className={TONE_TEXT[SOUNDING_STATE_LOOK[item.state].tone]}>
+            <circle cx="6" cy="6" r="5" className="fill-sheet" />
+            <MarkGlyph shape={SOUNDING_STATE_LOOK[item.state].shape} />
+          </g>
+        )}
+      </g>
+      <text
+        x={x + 9}
+        y={y + 4}
+        className={
+          labelShown
+            ? 'fill-ink text-xs'
+            : 'invisible fill-ink text-xs group-hover:visible group-focus-visible:visible'
+        }
+      >
+        {item.name}
+      </text>
+    </Link>
+  );
+}
