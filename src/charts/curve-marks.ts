@@ -67,7 +67,7 @@ export function readingSeries(
       type: 'group',
       children: [
         ...(index === focused ? [ring] : []),
-        whisker(x, top, base, color),
+        ...(reading.relativeError > 0 ? [whisker(x, top, base, color)] : []),
         {
           type: 'polygon' as const,
           shape: { points: diamond(x, y) },

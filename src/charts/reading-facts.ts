@@ -11,8 +11,9 @@ export function readingFacts(reading: CurveReading, index: number, line: CurveLi
   const facts: Fact[] = [
     { label: 'Spacing', value: reading.label },
     { label: 'Measured', value: withUnit(formatResistivity(reading.apparentResistivity), 'Ω·m') },
-    { label: 'Standard error', value: formatRelativeError(reading.relativeError) },
   ];
+  if (reading.relativeError > 0)
+    facts.push({ label: 'Standard error', value: formatRelativeError(reading.relativeError) });
   const predicted = line?.predicted?.[index] ?? null;
   const residual = line?.residuals?.[index] ?? null;
   const of = line && line.letter !== '' ? `, run ${line.letter}` : '';

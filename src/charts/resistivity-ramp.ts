@@ -25,7 +25,7 @@ const TABLE_STEPS = 400;
 const TABLE: readonly string[] = evenTable();
 
 /** Hex colour of a resistivity in Ω·m on the log ramp. */
-export function resistivityColor(resistivity: number): string {
+export function rampColor(resistivity: number): string {
   const position = Math.min(1, Math.max(0, rampPosition(resistivity)));
   return TABLE[Math.round(position * TABLE_STEPS)] ?? '#000000';
 }

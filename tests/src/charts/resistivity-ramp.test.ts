@@ -8,10 +8,10 @@ import {
   type LinearRgb,
   type Oklab,
 } from '../../../src/charts/oklab';
-import { rampStops, resistivityColor, textColorOn } from '../../../src/charts/resistivity-ramp';
+import { rampStops, rampColor, textColorOn } from '../../../src/charts/resistivity-ramp';
 
 const samples = Array.from({ length: 81 }, (_, i) => 10 ** (i / 20));
-const labs = samples.map((resistivity) => hexToOklab(resistivityColor(resistivity)));
+const labs = samples.map((resistivity) => hexToOklab(rampColor(resistivity)));
 const steps = (points: Oklab[]) => points.slice(1).map((point, i) => oklabDistance(points[i]!, point));
 
 /** Viénot, Brettel and Mollon (1999), linear RGB. */
@@ -49,26 +49,26 @@ describe('resistivity ramp', () => {
   });
 
   test.each(['protan', 'deutan'])('keeps its order and its distance for %s sight', (kind) => {
-    const seen = samples.filter((_, i) => i % 5 === 0).map((value) => seenBy(kind, resistivityColor(value)));
+    const seen = samples.filter((_, i) => i % 5 === 0).map((value) => seenBy(kind, rampColor(value)));
     seen.slice(1).forEach((lab, i) => expect(lab.l).toBeGreaterThan(seen[i]!.l));
     for (const step of steps(seen)) expect(step).toBeGreaterThan(0.03);
   });
 
   test('text stands out by at least 4.5 to 1 on every colour', () => {
     for (const resistivity of samples) {
-      const color = resistivityColor(resistivity);
+      const color = rampColor(resistivity);
       expect(contrastRatio(color, textColorOn(color))).toBeGreaterThanOrEqual(4.5);
     }
   });
 
   test('ends hold outside the range', () => {
-    expect(resistivityColor(0.01)).toBe(resistivityColor(1));
-    expect(resistivityColor(1e6)).toBe(resistivityColor(10_000));
+    expect(rampColor(0.01)).toBe(rampColor(1));
+    expect(rampColor(1e6)).toBe(rampColor(10_000));
   });
 
   test('legend stops are the colours of the same values', () => {
     const stops = rampStops(5);
-    expect(stops.map((stop) => stop.color)).toEqual([1, 10, 100, 1000, 10_000].map(resistivityColor));
+    expect(stops.map((stop) => stop.color)).toEqual([1, 10, 100, 1000, 10_000].map(rampColor));
     expect(stops.map((stop) => stop.offset)).toEqual([0, 0.25, 0.5, 0.75, 1]);
   });
 });

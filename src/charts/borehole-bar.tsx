@@ -1,0 +1,77 @@
+import type { ReactNode } from 'react';
+import type { BoreholeLog } from './chart-data';
+import { SANS, type ChartPalette } from './chart-palette';
+import type { DepthScale } from './depth-scale';
+import { svgRole } from './svg-roles';
+
+export interface BoreholeBarProps {
+  log: BoreholeLog;
+  scale: DepthScale;
+  x: number;
+  width: number;
+  palette: ChartPalette;
+}
+
+/** A log beside the columns, on the same depths. */
+export function BoreholeBar({ log, scale, x, width, palette }: BoreholeBarProps): ReactNode {
+  const shaft = 14;
+  return (
+    <g {...svgRole('img', boreholeSentence(log))}>
+      {log.beds.map((bed, index) => {
+        const top = scale.yOf(bed.top);
+        const height = scale.yOf(bed.base) - top;
+        return (
+          <g key={`${bed.top} ${bed.base}`}>
+            <rect
+              x={x}
+              y={top}
+              width={shaft}
+              height={Math.max(0, height)}
+              fill={index % 2 === 0 ? palette.sheet : palette.rule}
+              stroke={palette.muted}
+            />
+            {height >= 13 ? (
+              <text
+                x={x + shaft + 6}
+                y={top + height / 2}
+                dy="0.35em"
+                fontSize={12}
+                fontFamily={SANS}
+                fill={palette.ink}
+              >
+                {fitText(bed.label, width - shaft - 8)}
+                <title>{bed.label}</title>
+              </text>
+            ) : null}
+          </g>
+        );
+      })}
+      {log.waterLevel === undefined || log.waterLevel === null ? null : (
+        <WaterMark x={x - 2} y={scale.yOf(log.waterLevel)} palette={palette} />
+      )}
+    </g>
+  );
+}
+
+/** The downward triangle of a water level. */
+export function WaterMark({ x, y, palette }: { x: number; y: number; palette: ChartPalette }): ReactNode {
+  return (
+    <g aria-hidden fill={palette.water} stroke={palette.water}>
+      <polygon points={`${x - 9},${y - 8} ${x + 1},${y - 8} ${x - 4},${y}`} />
+      <line x1={x - 9} x2={x + 1} y1={y + 2.5} y2={y + 2.5} />
+    </g>
+  );
+}
+
+function boreholeSentence(log: BoreholeLog): string {
+  const beds = log.beds.map((bed) => `${bed.top} to ${bed.base} m ${bed.label}`).join(', ');
+  const water =
+    log.waterLevel === undefined || log.waterLevel === null ? '' : `; water at ${log.waterLevel} m`;
+  return `Borehole ${log.name}: ${beds}${water}`;
+}
+
+/** Shortens words to a width, px; Plex Sans at 12 px runs about 6.4 px a letter. */
+function fitText(text: string, width: number): string {
+  const letters = Math.max(3, Math.floor(width / 6.4));
+  return text.length <= letters ? text : `${text.slice(0, letters - 1)}…`;
+}

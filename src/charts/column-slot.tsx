@@ -1,0 +1,79 @@
+import type { ReactNode } from 'react';
+import { BoundaryMarks, type MoveBoundary } from './boundary-marks';
+import type { GroundColumn } from './chart-data';
+import { MONO, SANS, type ChartPalette } from './chart-palette';
+import type { DepthScale } from './depth-scale';
+import { GroundBar } from './ground-bar';
+import { GroundLabels } from './ground-labels';
+import { groundBoundaries } from './ground-profile';
+import { runStyle } from './run-style';
+import { svgRole } from './svg-roles';
+
+export interface ColumnSlotProps {
+  column: GroundColumn;
+  scale: DepthScale;
+  x: number;
+  width: number;
+  palette: ChartPalette;
+  selectedBed: number | null;
+  onSelectBed: (bed: number) => void;
+  onMoveBoundary?: MoveBoundary | undefined;
+  onScaleResistivity?: ((bed: number, factor: number) => void) | undefined;
+}
+
+const WIDEST_BAR = 92;
+
+/** One ground with its letter, its bar, its intervals and the depth its data reach. */
+export function ColumnSlot(props: ColumnSlotProps): ReactNode {
+  const { column, scale, x, width, palette, onMoveBoundary } = props;
+  const barWidth = Math.min(WIDEST_BAR, Math.max(44, width * 0.36));
+  const barEnd = x + barWidth;
+  const reach = column.depthOfInvestigation ?? null;
+  return (
+    <g {...svgRole('group', columnSentence(column))}>
+      {column.letter === '' ? null : (
+        <text x={x} y={-14} fontSize={13}>
+          <tspan fontFamily={MONO} fontWeight={600} fill={runStyle(column.letter, palette).color}>
+            {column.letter}
+          </tspan>
+          <tspan dx={8} fontFamily={SANS} fill={palette.ink}>
+            {column.name}
+          </tspan>
+        </text>
+      )}
+      <GroundBar {...props} width={barWidth} onScaleResistivity={props.onScaleResistivity} />
+      <BoundaryMarks
+        boundaries={groundBoundaries(column)}
+        scale={scale}
+        x={barEnd}
+        barX={x}
+        palette={palette}
+        onMove={onMoveBoundary}
+      />
+      <GroundLabels column={column} scale={scale} x={barEnd + 22} barEnd={barEnd} palette={palette} />
+      {reach !== null && reach < scale.maxDepth ? (
+        <g aria-hidden>
+          <line
+            x1={x}
+            x2={barEnd}
+            y1={scale.yOf(reach)}
+            y2={scale.yOf(reach)}
+            stroke={palette.muted}
+            strokeDasharray="4 3"
+          />
+          <text x={x} y={scale.height + 15} fontSize={12} fontFamily={SANS} fill={palette.muted}>
+            fades below {Number(reach.toPrecision(2))} m: little seen
+          </text>
+        </g>
+      ) : null}
+    </g>
+  );
+}
+
+function columnSentence(column: GroundColumn): string {
+  const name = column.letter === '' ? column.name : `Run ${column.letter}, ${column.name}`;
+  const reach = column.depthOfInvestigation
+    ? `; the data reach about ${column.depthOfInvestigation.toPrecision(2)} m`
+    : '';
+  return `${name}: ${column.earth.resistivity.length} beds${reach}`;
+}

@@ -1,0 +1,96 @@
+import type { ReactNode } from 'react';
+import { formatResistivity } from '../ui/format';
+import type { GroundColumn } from './chart-data';
+import { MONO, SANS, type ChartPalette } from './chart-palette';
+import type { DepthScale } from './depth-scale';
+import { LEAST_NUMBER_HEIGHT } from './ground-bar';
+import { groundBeds, groundBoundaries } from './ground-profile';
+import { placeLabels } from './place-labels';
+
+interface GroundLabel {
+  key: string;
+  y: number;
+  strong: string;
+  note: string | null;
+  kind: 'bed' | 'boundary';
+}
+
+const LINE = 15;
+const GAP = 4;
+
+export interface GroundLabelsProps {
+  column: GroundColumn;
+  scale: DepthScale;
+  /** Left edge of the words; the bar ends at `barEnd`. */
+  x: number;
+  barEnd: number;
+  palette: ChartPalette;
+}
+
+/** Intervals of beds and boundaries beside the bar, kept apart, each tied to its place by a thin line. */
+export function GroundLabels({ column, scale, x, barEnd, palette }: GroundLabelsProps): ReactNode {
+  const labels = groundLabels(column, scale);
+  const heights = labels.map((label) => (label.note ? 2 : 1) * LINE + GAP);
+  const middles = placeLabels(
+    labels.map((label, index) => ({ y: label.y, height: heights[index] ?? LINE })),
+    -8,
+    scale.height + 12,
+  );
+  return (
+    <g aria-hidden>
+      {labels.map((label, index) => {
+        const middle = middles[index] ?? label.y;
+        const first = middle - (label.note ? LINE / 2 : 0);
+        const color = label.kind === 'boundary' ? palette.copper : palette.ink;
+        return (
+          <g key={label.key}>
+            {Math.abs(middle - label.y) > 6 ? (
+              <polyline
+                points={`${barEnd + 9},${label.y} ${x - 9},${first} ${x - 4},${first}`}
+                fill="none"
+                stroke={palette.ruleStrong}
+              />
+            ) : null}
+            <text x={x} y={first} dy="0.35em" fontSize={12} fontWeight={600} fontFamily={MONO} fill={color}>
+              {label.strong}
+            </text>
+            {label.note ? (
+              <text x={x} y={first + LINE} dy="0.35em" fontSize={12} fontFamily={SANS} fill={palette.muted}>
+                {label.note}
+              </text>
+            ) : null}
+          </g>
+        );
+      })}
+    </g>
+  );
+}
+
+/** What stands beside the bar: for each bed its interval (and its number where the bed is too thin), then its base. */
+export function groundLabels(column: GroundColumn, scale: DepthScale): GroundLabel[] {
+  const beds = groundBeds(column).flatMap((bed): GroundLabel[] => {
+    const top = scale.yOf(bed.top);
+    const base = bed.base === null ? scale.height : scale.yOf(bed.base);
+    const number = base - top < LEAST_NUMBER_HEIGHT ? formatResistivity(bed.resistivity) : '';
+    const words = [number, bed.rangeText].filter((text) => text !== '').join(' · ');
+    const note = [bed.note, bed.locked ? 'held' : null].filter((word) => word !== null).join(', ');
+    if (words === '' && note === '') return [];
+    return [
+      {
+        key: `bed ${bed.index}`,
+        y: (top + base) / 2,
+        strong: words,
+        note: note === '' ? null : note,
+        kind: 'bed',
+      },
+    ];
+  });
+  const bases = groundBoundaries(column).map((boundary): GroundLabel => ({
+    key: `base ${boundary.index}`,
+    y: scale.yOf(boundary.depth),
+    strong: boundary.rangeText === '' ? `${Number(boundary.depth.toPrecision(3))} m` : boundary.rangeText,
+    note: boundary.unresolved ? 'depth unresolved' : null,
+    kind: 'boundary',
+  }));
+  return [...beds, ...bases].toSorted((first, second) => first.y - second.y);
+}

@@ -1,0 +1,152 @@
+import { formatLength, formatRange, formatResistivity, NOT_BOUNDED, withUnit } from '../ui/format';
+import { boundaryDepths, type BoreholeLog, type Bounds, type GroundColumn } from './chart-data';
+import type { DepthScale } from './depth-scale';
+import { rampColor } from './resistivity-ramp';
+
+/** A boundary whose 95 % interval spans more than this factor is called unresolved. */
+const UNRESOLVED_FACTOR = 10;
+
+export interface GroundBoundary {
+  /** Between bed `index` and the one below it. */
+  index: number;
+  depth: number;
+  low: number | null;
+  high: number | null;
+  /** "3.2–8.9 m", "at least 3.2 m", "not bounded". Empty without intervals. */
+  rangeText: string;
+  unresolved: boolean;
+}
+
+export interface GroundBed {
+  index: number;
+  top: number;
+  /** null = the half-space. */
+  base: number | null;
+  resistivity: number;
+  color: string;
+  rangeText: string;
+  note: string | null;
+  locked: boolean;
+}
+
+export function groundBoundaries(column: GroundColumn): GroundBoundary[] {
+  return boundaryDepths(column.earth).map((depth, index) => {
+    const bounds: Bounds | undefined = column.intervals?.depth[index];
+    const [low, high] = bounds ?? [null, null];
+    const range = bounds ? formatRange(bounds, formatLength) : '';
+    const isWide = low !== null && high !== null && high / Math.max(low, 1e-9) > UNRESOLVED_FACTOR;
+    return {
+      index,
+      depth,
+      low: bounds ? low : depth,
+      high: bounds ? high : depth,
+      rangeText: range === '' || range === NOT_BOUNDED ? range : withUnit(range, 'm'),
+      unresolved: bounds !== undefined && ((low === null && high === null) || isWide),
+    };
+  });
+}
+
+export function groundBeds(column: GroundColumn): GroundBed[] {
+  const depths = boundaryDepths(column.earth);
+  return column.earth.resistivity.map((resistivity, index) => {
+    const bounds = column.intervals?.resistivity[index];
+    return {
+      index,
+      top: index === 0 ? 0 : (depths[index - 1] ?? 0),
+      base: depths[index] ?? null,
+      resistivity,
+      color: rampColor(resistivity),
+      rangeText: bounds ? formatRange(bounds) : '',
+      note: column.bedNotes?.[index] ?? null,
+      locked: column.lockedBeds?.includes(index) ?? false,
+    };
+  });
+}
+
+/** "Bed 2, 12.4 ohm metres, 3.1 to 9.0 m", with its interval and what holds it. */
+export function bedSentence(bed: GroundBed): string {
+  const place =
+    bed.base === null
+      ? `below ${formatLength(bed.top)} m`
+      : `${formatLength(bed.top)} to ${formatLength(bed.base)} m`;
+  const interval = bed.rangeText === '' ? '' : `, 95 % ${bed.rangeText.replace('–', ' to ')} ohm metres`;
+  const note = bed.note ? `, ${bed.note}` : '';
+  return `Bed ${bed.index + 1}, ${formatResistivity(bed.resistivity)} ohm metres, ${place}${interval}${note}${bed.locked ? ', held' : ''}`;
+}
+
+export interface ProfileStop {
+  /** 0 at the top of the drawing, 1 at its foot. */
+  offset: number;
+  color: string;
+  opacity: number;
+}
+
+/** Opacity left where the data say nothing any more. */
+const FAINTEST = 0.16;
+
+/**
+ * Colours down a column. At a boundary the resistivity turns from one bed to the next over the whole of its 95 %
+ * interval, half way at the best value; below the depth of investigation the colour fades to the paper.
+ */
+export function profileStops(column: GroundColumn, scale: DepthScale, count = 240): ProfileStop[] {
+  const boundaries = groundBoundaries(column).map((boundary) => ({
+    ...boundary,
+    low: boundary.low ?? 0,
+    high: boundary.high ?? Math.max(scale.maxDepth, boundary.depth),
+  }));
+  const logs = column.earth.resistivity.map(Math.log);
+  const logResistivityAt = (depth: number) =>
+    boundaries.reduce((log, { index, ...boundary }) => {
+      const step = (logs[index + 1] ?? 0) - (logs[index] ?? 0);
+      return log + step * shareBelow(depth, boundary);
+    }, logs[0] ?? 0);
+  return Array.from({ length: count + 1 }, (_, index) => {
+    const depth = scale.depthAt((index / count) * scale.height);
+    return {
+      offset: index / count,
+      color: rampColor(Math.exp(logResistivityAt(depth))),
+      opacity: opacityAt(depth, column.depthOfInvestigation ?? null, scale.maxDepth),
+    };
+  });
+}
+
+/** How far the ground has turned into the lower bed at a depth: 0 above the interval, ½ at the boundary, 1 below. */
+export function shareBelow(depth: number, boundary: { depth: number; low: number; high: number }): number {
+  if (depth <= boundary.depth) {
+    const length = boundary.depth - boundary.low;
+    const t = length <= 0 ? (depth < boundary.depth ? 0 : 1) : Math.max(0, (depth - boundary.low) / length);
+    return length <= 0 ? t : t / 2;
+  }
+  const length = boundary.high - boundary.depth;
+  return length <= 0 ? 1 : 0.5 + Math.min(1, (depth - boundary.depth) / length) / 2;
+}
+
+function opacityAt(depth: number, depthOfInvestigation: number | null, maxDepth: number): number {
+  if (depthOfInvestigation === null || depth <= depthOfInvestigation) return 1;
+  const fadeLength = Math.max(maxDepth - depthOfInvestigation, depthOfInvestigation * 0.1);
+  return 1 - (1 - FAINTEST) * Math.min(1, (depth - depthOfInvestigation) / fadeLength);
+}
+
+/** Depths that show every boundary with its interval, the depth of investigation and the boreholes. */
+export function depthExtent(
+  columns: readonly GroundColumn[],
+  borehole: BoreholeLog | null,
+): { minDepth: number; maxDepth: number } {
+  const boundaries = columns.flatMap(groundBoundaries);
+  const deepest = Math.max(
+    1,
+    ...boundaries.map(({ depth, high }) => Math.max(depth, Math.min(high ?? depth, depth * 2.5))),
+  );
+  const others = [
+    ...columns.map((column) => column.depthOfInvestigation ?? 0),
+    ...(borehole?.beds.map((bed) => bed.base) ?? []),
+  ];
+  const shallowest = Math.min(
+    deepest,
+    ...boundaries.map(({ depth, low }) => Math.max(low ?? depth, depth / 3)),
+  );
+  return {
+    minDepth: Math.max(0.05, shallowest / 2),
+    maxDepth: Math.max(deepest * 1.25, ...others.map((m) => m * 1.08)),
+  };
+}
