@@ -54,11 +54,10 @@ function oneStep(
   free: readonly number[],
   scale: Float64Array,
   damping: number,
+  data: { x: Float64Array; y: Float64Array },
 ): Trial {
   const m = problem.residuals;
   const n = problem.low.length;
-  // the packaged solver refuses a single point: a second, always zero residual changes nothing
-  const points = Math.max(2, m);
   const row = free.map(() => 0);
   const origin = free.map((j) => current.parameters[j]! * scale[j]!);
   let last: Trial = current;
@@ -74,7 +73,7 @@ function oneStep(
     return last;
   };
   levenbergMarquardt(
-    { x: Array.from({ length: points }, (_, i) => i), y: new Float64Array(points) },
+    data,
     (scaled) => {
       const { residual } = at(scaled);
       return (i) => (i < m ? residual[i]! : 0);
@@ -125,6 +124,10 @@ export function minimise(
   const n = problem.low.length;
   const m = problem.residuals;
   const limit = options.iterations ?? TOLERANCES.iterations;
+  // x is the index of a residual, y the zero that it aims at; the packaged solver refuses a single point, and a second,
+  // always zero residual changes nothing
+  const points = Math.max(2, m);
+  const data = { x: Float64Array.from({ length: points }, (_, i) => i), y: new Float64Array(points) };
   const jacobian = new Float64Array(m * n);
   const parameters = Float64Array.from({ length: n }, (_, j) =>
     Math.min(problem.high[j]!, Math.max(problem.low[j]!, start[j]!)),
@@ -156,7 +159,7 @@ export function minimise(
       return done('converged-gradient', iteration);
     const strongest = Math.max(...norms);
     const scale = norms.map((norm) => Math.max(norm, SCALE_FLOOR * strongest, 1e-300));
-    const trial = oneStep(problem, current, jacobian, free, scale, damping);
+    const trial = oneStep(problem, current, jacobian, free, scale, damping, data);
     if (!(trial.chi2 < current.chi2)) {
       damping *= SLOWER;
       if (damping > TOLERANCES.damping) return done('no-descent', iteration + 1);

@@ -15,20 +15,22 @@ export interface SearchEffort {
   readonly shortRun: number;
   /** carried starts in a row without a gain of `TOLERANCES.startImprovement` that end the search */
   readonly patience: number;
-  /** most steps of a carried start */
-  readonly iterations: number;
+  /** most steps of a carried start, and of the best one at the end */
+  readonly carried: number;
+  readonly polish: number;
 }
 
 /** For a result that is shown. */
 const FULL: SearchEffort = {
-  screened: 120,
-  random: 4,
+  screened: 200,
+  random: 8,
   shortRun: 10,
-  patience: 2,
-  iterations: TOLERANCES.iterations,
+  patience: 3,
+  carried: 40,
+  polish: TOLERANCES.iterations,
 };
 /** For a model that only serves to start the next layer count. */
-const SCOUT: SearchEffort = { screened: 0, random: 0, shortRun: 8, patience: 0, iterations: 20 };
+const SCOUT: SearchEffort = { screened: 0, random: 0, shortRun: 8, patience: 0, carried: 20, polish: 0 };
 
 export interface MultiStartOutcome extends LeastSquaresOutcome {
   readonly starts: number;
@@ -63,6 +65,11 @@ function screenedStarts(
     .map(({ start }) => start);
 }
 
+interface Candidate {
+  readonly start: number;
+  readonly outcome: LeastSquaresOutcome;
+}
+
 function search(
   layered: LayeredProblem,
   queue: readonly Float64Array[],
@@ -89,19 +96,24 @@ function search(
   const [leader, ...others] = queue
     .map((from, start) => ({ start, outcome: run(from, start, { iterations: effort.shortRun }) }))
     .sort((a, b) => a.outcome.chi2 - b.outcome.chi2);
-  const carry = ({ start, outcome }: { start: number; outcome: LeastSquaresOutcome }) =>
-    outcome.status === 'iteration-limit'
-      ? run(outcome.parameters, start, { initialDamping: outcome.damping, iterations: effort.iterations })
-      : outcome;
-  let best = carry(leader!);
+  const goOn = ({ start, outcome }: Candidate, steps: number): Candidate =>
+    outcome.status === 'iteration-limit' && steps > 0
+      ? {
+          start,
+          outcome: run(outcome.parameters, start, { initialDamping: outcome.damping, iterations: steps }),
+        }
+      : { start, outcome };
+  let best = goOn(leader!, effort.carried);
   let idle = 0;
   for (const candidate of others) {
     if (idle >= effort.patience) break;
-    const end = carry(candidate);
-    idle = end.chi2 < best.chi2 * (1 - TOLERANCES.startImprovement) ? 0 : idle + 1;
-    if (end.chi2 < best.chi2) best = end;
+    const end = goOn(candidate, effort.carried);
+    const gain = 1 - end.outcome.chi2 / best.outcome.chi2;
+    idle = gain > TOLERANCES.startImprovement ? 0 : idle + 1;
+    if (gain > 0) best = end;
   }
-  return { ...best, iterations, starts: queue.length };
+  const { outcome } = goOn(best, effort.polish);
+  return { ...outcome, iterations, starts: queue.length };
 }
 
 /**
