@@ -1,5 +1,23 @@
+import { adminEndpoints } from './admin/admin-routes';
+import { boreholeEndpoints } from './boreholes/borehole-routes';
 import type { Endpoint } from './http/endpoint';
+import { invitationEndpoints } from './invitations/invitation-routes';
+import { lineEndpoints } from './lines/line-routes';
+import { memberEndpoints } from './members/member-routes';
+import { passwordResetEndpoints } from './password-resets/password-reset-routes';
 import { runsEndpoints } from './runs/runs-routes';
+import { sessionEndpoints } from './session/session-routes';
+import { surveyEndpoints } from './surveys/survey-routes';
 
 /** Every endpoint of the product, feature by feature; the router, the API page and the access matrix read this list. */
-export const endpoints: readonly Endpoint[] = [...runsEndpoints];
+export const endpoints: readonly Endpoint[] = [
+  ...sessionEndpoints,
+  ...passwordResetEndpoints,
+  ...invitationEndpoints,
+  ...surveyEndpoints,
+  ...memberEndpoints,
+  ...lineEndpoints,
+  ...boreholeEndpoints,
+  ...adminEndpoints,
+  ...runsEndpoints,
+];

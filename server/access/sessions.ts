@@ -1,4 +1,5 @@
 import { NodePostgresAdapter } from '@lucia-auth/adapter-postgresql';
+import type { Knex } from 'knex';
 import { Lucia, TimeSpan } from 'lucia';
 import type { Pool } from 'pg';
 import type { Config } from '../config';
@@ -40,7 +41,6 @@ export interface Sessions {
   /** The same question for a session known by its stored id, as long streams ask it. */
   isLive(sessionId: string): Promise<boolean>;
   invalidate(sessionId: string): Promise<void>;
-  invalidateAllOf(userId: string): Promise<void>;
   deleteExpired(): Promise<void>;
   readonly blankCookie: string;
 }
@@ -77,8 +77,26 @@ export function createSessions(pool: Pool, config: Pick<Config, 'sessionDays' | 
     },
     isLive: async (sessionId) => (await find(sessionId)) !== null,
     invalidate: (sessionId) => lucia.invalidateSession(sessionId),
-    invalidateAllOf: (userId) => lucia.invalidateUserSessions(userId),
     deleteExpired: () => lucia.deleteExpiredSessions(),
     blankCookie: lucia.createBlankSessionCookie().serialize(),
   };
 }
+
+export interface SessionRow {
+  id: string;
+  created_at: Date;
+  expires_at: Date;
+  user_agent: string;
+}
+
+/** Ends a person's sessions together with the change that calls for it. */
+export async function invalidateSessionsOf(trx: Knex, userId: string, exceptId = ''): Promise<void> {
+  await trx('session').where({ user_id: userId }).whereNot({ id: exceptId }).delete();
+}
+
+export const listSessionsOf = (db: Knex, userId: string): Promise<SessionRow[]> =>
+  db('session')
+    .where({ user_id: userId })
+    .where('expires_at', '>', db.fn.now())
+    .orderBy('created_at', 'desc')
+    .select<SessionRow[]>('id', 'created_at', 'expires_at', 'user_agent');

@@ -124,9 +124,21 @@ export type Borehole = z.infer<typeof boreholeSchema>;
 export const boreholeListSchema = listOf(boreholeSchema);
 
 const logFaults = (
-  log: { depthM: number; intervals: { topM: number; baseM: number }[] },
+  log: {
+    depthM: number;
+    intervals: { topM: number; baseM: number }[];
+    waterLevels: { measuredOn: string }[];
+  },
   context: z.RefinementCtx,
 ): void => {
+  log.waterLevels.forEach((level, i) => {
+    if (log.waterLevels.findIndex((other) => other.measuredOn === level.measuredOn) < i)
+      context.addIssue({
+        code: 'custom',
+        path: ['waterLevels', i, 'measuredOn'],
+        message: 'must not be a day that another level has',
+      });
+  });
   log.intervals.forEach((interval, i) => {
     const above = log.intervals[i - 1];
     if (above && interval.topM < above.baseM)

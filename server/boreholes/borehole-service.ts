@@ -1,0 +1,70 @@
+import type { z } from 'zod';
+import { recordAudit } from '../access/audit';
+import { getSurveyAccess, requireCan } from '../access/survey-access';
+import type { Borehole, writeBoreholeSchema } from '../contract/surveys';
+import { AppError } from '../errors';
+import type { Context } from '../http/context';
+import { presentBorehole } from './borehole-presenter';
+import {
+  getBoreholeRow,
+  insertBorehole,
+  listBoreholeRows,
+  replaceParts,
+  updateBoreholeRow,
+} from './borehole-store';
+
+type BoreholeFields = z.output<typeof writeBoreholeSchema>;
+
+export async function listBoreholes(
+  { db, actor }: Context,
+  surveyId: string,
+): Promise<{ items: Borehole[] }> {
+  await getSurveyAccess(db, actor, surveyId);
+  return { items: (await listBoreholeRows(db, actor, surveyId)).map(presentBorehole) };
+}
+
+export const getBorehole = async ({ db, actor }: Context, id: string): Promise<Borehole> =>
+  presentBorehole(await getBoreholeRow(db, actor, id));
+
+export async function createBorehole(
+  { db, actor }: Context,
+  surveyId: string,
+  fields: BoreholeFields,
+): Promise<Borehole> {
+  requireCan(await getSurveyAccess(db, actor, surveyId), 'editBoreholes');
+  return db.transaction(async (trx) => {
+    const id = await insertBorehole(trx, surveyId, fields);
+    await replaceParts(trx, id, fields);
+    await recordAudit(trx, {
+      actorId: actor.userId,
+      surveyId,
+      action: 'borehole.created',
+      subject: fields.name,
+    });
+    return presentBorehole(await getBoreholeRow(trx, actor, id));
+  });
+}
+
+export async function replaceBorehole(
+  { db, actor }: Context,
+  id: string,
+  version: number,
+  fields: BoreholeFields,
+): Promise<Borehole> {
+  const { survey_id: surveyId } = await getBoreholeRow(db, actor, id);
+  requireCan(await getSurveyAccess(db, actor, surveyId), 'editBoreholes');
+  return db.transaction(async (trx) => {
+    if (!(await updateBoreholeRow(trx, id, version, fields)))
+      throw new AppError('conflict', 'Someone else changed this borehole meanwhile.', {
+        current: presentBorehole(await getBoreholeRow(trx, actor, id)),
+      });
+    await replaceParts(trx, id, fields);
+    await recordAudit(trx, {
+      actorId: actor.userId,
+      surveyId,
+      action: 'borehole.changed',
+      subject: fields.name,
+    });
+    return presentBorehole(await getBoreholeRow(trx, actor, id));
+  });
+}
