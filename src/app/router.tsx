@@ -16,6 +16,7 @@ type PageLoader = () => Promise<ComponentType>;
 const PAGES: Partial<Record<RouteName, PageLoader>> = {
   surveys: async () => (await import('../features/surveys/surveys-page')).SurveysPage,
   survey: async () => (await import('../features/surveys/survey-overview-page')).SurveyOverviewPage,
+  surveySoundings: async () => (await import('../features/soundings/soundings-page')).SoundingsPage,
   settings: async () => (await import('../features/account/settings-page')).SettingsPage,
 };
 

@@ -1,0 +1,42 @@
+import { Button } from './button';
+import { formatSignificant } from './format';
+
+interface PagerProps {
+  page: number;
+  pageSize: number;
+  total: number;
+  onPage: (page: number) => void;
+  /** What is paged, as "soundings". */
+  what: string;
+}
+
+const count = (value: number) => formatSignificant(value, 9);
+
+/** "101–200 of 2000 soundings" with the way back and on. */
+export function Pager({ page, pageSize, total, onPage, what }: PagerProps) {
+  const last = Math.max(1, Math.ceil(total / pageSize));
+  const from = total === 0 ? 0 : (page - 1) * pageSize + 1;
+  return (
+    <nav aria-label={`Pages of ${what}`} className="flex flex-wrap items-center justify-between gap-3 py-3">
+      <p className="text-muted">
+        <span className="figure text-ink">
+          {count(from)}–{count(Math.min(total, page * pageSize))}
+        </span>{' '}
+        of <span className="figure text-ink">{count(total)}</span> {what}
+      </p>
+      {last > 1 ? (
+        <div className="flex items-center gap-2">
+          <Button size="small" disabled={page <= 1} onClick={() => onPage(page - 1)}>
+            Previous
+          </Button>
+          <span className="figure text-muted">
+            {page} / {last}
+          </span>
+          <Button size="small" disabled={page >= last} onClick={() => onPage(page + 1)}>
+            Next
+          </Button>
+        </div>
+      ) : null}
+    </nav>
+  );
+}
