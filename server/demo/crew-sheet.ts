@@ -3,7 +3,7 @@ import { createForwardOperator, geometricFactor, type Spread } from '../../inver
 import { spreadsOf, type DemoSounding } from './scenario';
 
 /** Relative scatter of the invented readings, one standard deviation. */
-const SCATTER = 0.02;
+const SCATTER = 0.03;
 
 interface CrewReading {
   readonly spread: Spread;
