@@ -2,6 +2,7 @@ import { createHash, randomUUID } from 'node:crypto';
 import canonicalize from 'canonicalize';
 import type { Knex } from 'knex';
 import { hashPassword } from '../../server/access/password';
+import { createToken } from '../../server/access/secret-token';
 import type { Reading } from '../../server/contract/readings';
 import type { Role } from '../../server/contract/roles';
 import type { SpreadType } from '../../server/contract/spread';
@@ -21,6 +22,12 @@ export interface Factories {
   createSurvey(name?: string): Promise<{ id: string }>;
   createLine(surveyId: string, name?: string): Promise<{ id: string }>;
   createBorehole(surveyId: string, name?: string): Promise<{ id: string }>;
+  /** an open invitation of a new address as guest */
+  createInvitation(
+    surveyId: string,
+    inviterId: string,
+    given?: { email?: string; role?: Role },
+  ): Promise<{ id: string; token: string; email: string }>;
   createSounding(
     surveyId: string,
     given?: Partial<{ name: string; spreadType: SpreadType; lineId: string }>,
@@ -54,6 +61,19 @@ export function createFactories(db: Knex): Factories {
     createLine: (surveyId, name = unique('Line')) => insert('line', { survey_id: surveyId, name }),
     createBorehole: (surveyId, name = unique('Borehole')) =>
       insert('borehole', { survey_id: surveyId, name, depth_m: 80 }),
+    async createInvitation(surveyId, inviterId, given = {}) {
+      const { token, hash } = createToken();
+      const email = given.email ?? `${randomUUID()}@example.test`;
+      const { id } = await insert('invitation', {
+        email,
+        survey_id: surveyId,
+        role: given.role ?? 'guest',
+        token_hash: hash,
+        invited_by: inviterId,
+        expires_at: db.raw("now() + interval '14 days'"),
+      });
+      return { id, token, email };
+    },
     createSounding: (surveyId, given = {}) =>
       insert('sounding', {
         survey_id: surveyId,

@@ -7,6 +7,7 @@ import { createApp } from '../../server/app';
 import type { Role } from '../../server/contract/roles';
 import { loadConfig } from '../../server/config';
 import { createServices } from '../../server/create-services';
+import type { Method } from '../../server/http/endpoint';
 import type { Services } from '../../server/http/context';
 import { createFactories, type Factories, type TestUser } from './factories';
 import { createTestDatabase } from './test-database';
@@ -14,6 +15,7 @@ import { createTestDatabase } from './test-database';
 /** Sends requests below /api/v1 as one person, or as nobody. */
 export interface Client {
   readonly user: TestUser | null;
+  send(method: Method, path: string): Test;
   get(path: string): Test;
   post(path: string, body?: object): Test;
   put(path: string, body?: object, version?: number): Test;
@@ -71,7 +73,7 @@ export async function createTestServer(env: NodeJS.ProcessEnv = {}): Promise<Tes
 }
 
 function clientOf(app: Express, user: TestUser | null, cookie?: string): Client {
-  const send = (method: 'get' | 'post' | 'put' | 'patch' | 'delete', path: string): Test => {
+  const send = (method: Method, path: string): Test => {
     const test = request(app)[method](`/api/v1${path}`);
     return cookie ? test.set('Cookie', cookie) : test;
   };
@@ -81,6 +83,7 @@ function clientOf(app: Express, user: TestUser | null, cookie?: string): Client 
   };
   return {
     user,
+    send,
     get: (path) => send('get', path),
     post: (path, body) => write(send('post', path), body),
     put: (path, body, version) => write(send('put', path), body, version),
