@@ -19,7 +19,9 @@ export const interpretationStateSchema = z.enum([
 export type InterpretationState = z.infer<typeof interpretationStateSchema>;
 
 export const bedRoleSchema = z.enum(['cover', 'aquifer', 'aquitard', 'saline', 'basement', 'unknown']);
+export type BedRole = z.infer<typeof bedRoleSchema>;
 export const bedConfidenceSchema = z.enum(['well-supported', 'likely', 'possible', 'unstated']);
+export type BedConfidence = z.infer<typeof bedConfidenceSchema>;
 
 export const interpretationBedSchema = z
   .strictObject({
@@ -45,6 +47,7 @@ export const reviewEventSchema = z
     comment: z.string(),
   })
   .meta({ id: 'ReviewEvent' });
+export type ReviewEvent = z.infer<typeof reviewEventSchema>;
 
 export const interpretationSchema = z
   .strictObject({
@@ -94,6 +97,9 @@ export const createReviewEventSchema = z
   .strictObject({
     kind: z.enum(['submitted', 'withdrawn', 'changes-asked', 'accepted', 'commented']),
     comment: z.string().trim().max(5000).default(''),
+    version: versionSchema
+      .optional()
+      .describe('the version that was read; when another one is there by now, the event is refused'),
   })
   .refine((event) => !['changes-asked', 'commented'].includes(event.kind) || event.comment !== '', {
     path: ['comment'],
