@@ -22,6 +22,7 @@ export { electrodeDistances, type ElectrodeDistances } from './spread/electrode-
 export { geometricFactor } from './spread/geometric-factor';
 export { IDEAL_SCHLUMBERGER_DEPTH, plottingSpacing } from './spread/plotting-spacing';
 export { createForwardOperator, type ForwardOperator } from './operator/forward-operator';
+export { createOperatorCache, type OperatorCache } from './operator/operator-cache';
 export { fitLayered, type FitOptions } from './fit/fit-layered';
 export { FIT_STATUS_MESSAGES, fitStatusMessage } from './fit/fit-status';
 export { createRandomStream, type RandomStream } from './random';

@@ -1,4 +1,5 @@
 import { createForwardOperator } from '../operator/forward-operator';
+import type { OperatorCache } from '../operator/operator-cache';
 import { createRandomStream } from '../random';
 import type { FitProgress, FitResult, FitSettings, LayerCountFit, Reading } from '../types';
 import { MOST_LAYERS, requireFitInput } from './check-fit-input';
@@ -12,6 +13,8 @@ import { soundingCurve, type SoundingCurve } from './starting-models';
 export interface FitOptions {
   /** called after each kept step */
   readonly onProgress?: (progress: FitProgress) => void;
+  /** operators kept from one fit to the next; it changes the time, never the result */
+  readonly operators?: OperatorCache;
 }
 
 interface CountFit {
@@ -34,7 +37,8 @@ export function fitLayered(
   options: FitOptions = {},
 ): FitResult {
   requireFitInput(readings, settings);
-  const operator = createForwardOperator(readings.map((reading) => reading.spread));
+  const spreads = readings.map((reading) => reading.spread);
+  const operator = options.operators?.operatorFor(spreads) ?? createForwardOperator(spreads);
   const system = createResidualSystem(operator, readings);
   const curve = soundingCurve(readings);
   const most =

@@ -7,6 +7,8 @@ import {
 } from '../earth/transform-kernel';
 import { imageResponse } from '../spread/image-response';
 import type { LayeredEarth, Spread } from '../types';
+import { requireSpread } from '../spread/require-spread';
+import { dot } from './dot-product';
 import { designWeights } from './weight-design';
 
 /** The linear map from an earth to the apparent resistivities of one list of spreads. */
@@ -33,6 +35,7 @@ export interface ForwardOperator {
  * error 3e-9, median 1e-13 (`tests/inversion/operator`). Throws `InversionError` with the path of a refused spread.
  */
 export function createForwardOperator(spreads: readonly Spread[]): ForwardOperator {
+  spreads.forEach((spread, i) => requireSpread(spread, ['spreads', i]));
   const rows = spreads.map((spread) => designWeights(imageResponse(spread)));
   const first = rows.reduce((low, row) => Math.min(low, row.first), Infinity);
   const end = rows.reduce((high, row) => Math.max(high, row.first + row.values.length), -Infinity);
@@ -84,21 +87,4 @@ export function createForwardOperator(spreads: readonly Spread[]): ForwardOperat
       return { predicted, jacobian };
     },
   };
-}
-
-/** Σ a[a0 + k] b[b0 + k], k < length, in four sums side by side: one alone waits on its own additions. */
-function dot(a: Float64Array, a0: number, b: Float64Array, b0: number, length: number): number {
-  let s0 = 0;
-  let s1 = 0;
-  let s2 = 0;
-  let s3 = 0;
-  let k = 0;
-  for (; k + 3 < length; k += 4) {
-    s0 += a[a0 + k]! * b[b0 + k]!;
-    s1 += a[a0 + k + 1]! * b[b0 + k + 1]!;
-    s2 += a[a0 + k + 2]! * b[b0 + k + 2]!;
-    s3 += a[a0 + k + 3]! * b[b0 + k + 3]!;
-  }
-  for (; k < length; k++) s0 += a[a0 + k]! * b[b0 + k]!;
-  return s0 + s1 + (s2 + s3);
 }

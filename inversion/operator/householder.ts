@@ -1,3 +1,5 @@
+import { dot } from './dot-product';
+
 /** Thin QR of a tall matrix, kept column-major: `q[j * rows + i]`, `r[j * columns + i]` (upper triangle). */
 export interface ThinQr {
   readonly rows: number;
@@ -47,21 +49,14 @@ function reflect(
   beta: number,
   source: Float64Array = target,
 ): void {
-  let dot = 0;
-  for (let i = k; i < rows; i++) dot += source[v0 + i]! * target[x0 + i]!;
-  dot *= beta;
-  for (let i = k; i < rows; i++) target[x0 + i]! -= dot * source[v0 + i]!;
+  const share = beta * dot(source, v0 + k, target, x0 + k, rows - k);
+  for (let i = k; i < rows; i++) target[x0 + i]! -= share * source[v0 + i]!;
 }
 
 /** Least-squares solution R⁻¹Qᵀf of a factorised system; `f` has the kept rows. */
 export function solveQr({ rows, columns, q, r }: ThinQr, f: Float64Array): Float64Array {
   const x = new Float64Array(columns);
-  for (let j = 0; j < columns; j++) {
-    const at = j * rows;
-    let dot = 0;
-    for (let i = 0; i < rows; i++) dot += q[at + i]! * f[i]!;
-    x[j] = dot;
-  }
+  for (let j = 0; j < columns; j++) x[j] = dot(q, j * rows, f, 0, rows);
   for (let j = columns - 1; j >= 0; j--) {
     const value = x[j]! / r[j * columns + j]!;
     x[j] = value;

@@ -1,0 +1,13 @@
+import { createOperatorCache, fitLayered } from '../../inversion';
+import { fitRequestSchema } from '../contract/command-line';
+import type { FitResult } from '../contract/fit';
+import { parseLine } from './parse-line';
+
+/** Answers `fit` lines; soundings with the same spreads share one operator. */
+export function answerFit(): (line: unknown) => { id: string | number } & FitResult {
+  const operators = createOperatorCache();
+  return (line) => {
+    const { id, readings, settings } = parseLine(fitRequestSchema, line);
+    return { id, ...fitLayered(readings, settings, { operators }) };
+  };
+}

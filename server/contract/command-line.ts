@@ -1,0 +1,71 @@
+import { z } from 'zod';
+import {
+  fitReadingSchema,
+  fitResultSchema,
+  fitSettingsSchema,
+  fitStatusSchema,
+  layeredEarthSchema,
+} from './fit';
+import { spreadSchema } from './spread';
+
+const lineId = z
+  .union([z.string().max(200), z.number()])
+  .describe('name of the line, given back with its answer');
+
+export const forwardRequestSchema = z.strictObject({
+  id: lineId,
+  earth: layeredEarthSchema,
+  spreads: z.array(spreadSchema).min(1).max(2000),
+});
+
+export const forwardAnswerSchema = z.strictObject({
+  id: lineId,
+  apparentResistivity: z.array(z.number()).describe('Ω·m, one a spread, in order'),
+  geometricFactor: z.array(z.number().nullable()).describe('K, m, signed; null where halfMN is null'),
+});
+
+const labelledReadingSchema = fitReadingSchema.extend({
+  branch: z
+    .string()
+    .max(40)
+    .optional()
+    .describe('label of the MN branch; a layered fit does not shift branches'),
+});
+
+export const fitRequestSchema = z.strictObject({
+  id: lineId,
+  readings: z.array(labelledReadingSchema).min(1).max(2000),
+  settings: fitSettingsSchema,
+});
+
+export const fitAnswerSchema = z.strictObject({ id: lineId, ...fitResultSchema.shape });
+
+export const lineErrorSchema = z.strictObject({
+  id: lineId.nullable().describe('null when the line could not be read that far'),
+  error: z.strictObject({
+    code: z.string(),
+    message: z.string().describe('what was found and what is allowed'),
+    path: z.array(z.union([z.string(), z.number()])).describe('where in the line, outermost key first'),
+  }),
+});
+
+/** What `schema NAME` prints. */
+export const COMMAND_LINE_SCHEMAS = {
+  spread: spreadSchema,
+  earth: layeredEarthSchema,
+  reading: labelledReadingSchema,
+  'fit-settings': fitSettingsSchema,
+  'fit-status': fitStatusSchema,
+  forward: z.strictObject({ request: forwardRequestSchema, answer: forwardAnswerSchema }),
+  'forward-request': forwardRequestSchema,
+  'forward-answer': forwardAnswerSchema,
+  fit: z.strictObject({ request: fitRequestSchema, answer: fitAnswerSchema }),
+  'fit-request': fitRequestSchema,
+  'fit-answer': fitAnswerSchema,
+  error: lineErrorSchema,
+} as const;
+
+export type ForwardRequest = z.infer<typeof forwardRequestSchema>;
+export type ForwardAnswer = z.infer<typeof forwardAnswerSchema>;
+export type FitRequest = z.infer<typeof fitRequestSchema>;
+export type LineError = z.infer<typeof lineErrorSchema>;
