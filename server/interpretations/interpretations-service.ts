@@ -1,0 +1,111 @@
+import type { z } from 'zod';
+import { recordAudit } from '../access/audit';
+import { getSoundingAccess, requireCan } from '../access/survey-access';
+import { surveyCan } from '../access/policy';
+import type {
+  createInterpretationSchema,
+  Interpretation,
+  InterpretationBed,
+  updateInterpretationSchema,
+} from '../contract/interpretations';
+import { AppError } from '../errors';
+import type { Context } from '../http/context';
+import { EDITABLE, STATE_WORDS } from './interpretation-rules';
+import { presentInterpretation } from './interpretations-presenter';
+import {
+  addContributor,
+  findRunOfSounding,
+  getInterpretation,
+  insertInterpretation,
+  listInterpretations,
+  updateStatement,
+  type WholeInterpretation,
+} from './interpretations-store';
+
+export async function listSoundingInterpretations(
+  { db, actor }: Context,
+  soundingId: string,
+): Promise<{ items: Interpretation[] }> {
+  await getSoundingAccess(db, actor, soundingId);
+  const all = await listInterpretations(db, actor, soundingId);
+  return { items: all.map((whole) => presentInterpretation(actor, whole)) };
+}
+
+export const showInterpretation = async (
+  { db, actor }: Context,
+  interpretationId: string,
+): Promise<Interpretation> =>
+  presentInterpretation(actor, await getInterpretation(db, actor, interpretationId));
+
+export async function createInterpretation(
+  { db, actor }: Context,
+  soundingId: string,
+  { runId, title }: z.output<typeof createInterpretationSchema>,
+): Promise<Interpretation> {
+  const access = await getSoundingAccess(db, actor, soundingId);
+  requireCan(access, 'interpret');
+  const run = await findRunOfSounding(db, soundingId, runId);
+  if (!run)
+    throw new AppError('invalid', 'This run does not belong to the sounding.', {
+      faults: [{ path: ['body', 'runId'], message: 'is not a run of this sounding' }],
+    });
+  const { result } = run;
+  if (!result)
+    throw new AppError('wrong-state', `Only a finished run can be interpreted; this one is ${run.state}.`);
+  return db.transaction(async (trx) => {
+    const layers = result.earth.resistivity.length;
+    const id = await insertInterpretation(trx, { soundingId, runId, authorId: actor.userId, title, layers });
+    await addContributor(trx, id, actor.userId);
+    await recordAudit(trx, {
+      actorId: actor.userId,
+      surveyId: access.surveyId,
+      action: 'interpretation.created',
+      subject: title,
+      details: { soundingId, interpretationId: id },
+    });
+    return presentInterpretation(actor, await getInterpretation(trx, actor, id));
+  });
+}
+
+export async function changeInterpretation(
+  { db, actor }: Context,
+  interpretationId: string,
+  version: number,
+  change: z.output<typeof updateInterpretationSchema>,
+): Promise<Interpretation> {
+  return db.transaction(async (trx) => {
+    const before = await getInterpretation(trx, actor, interpretationId);
+    const { role, state } = before.row;
+    requireCan({ role, can: surveyCan(role) }, 'interpret');
+    if (!EDITABLE.includes(state))
+      throw new AppError(
+        'wrong-state',
+        `It cannot be edited while ${STATE_WORDS[state]}. ${state === 'in-review' ? 'Withdraw it first, or wait for the review.' : 'Write a new one instead.'}`,
+      );
+    requireBedsOf(before, change.beds ?? []);
+    // the version guards against a submission meanwhile too, which counts it up
+    if (!(await updateStatement(trx, interpretationId, version, change)))
+      throw new AppError('conflict', 'Someone else changed this interpretation meanwhile.', {
+        current: presentInterpretation(actor, await getInterpretation(trx, actor, interpretationId)),
+      });
+    await addContributor(trx, interpretationId, actor.userId);
+    return presentInterpretation(actor, await getInterpretation(trx, actor, interpretationId));
+  });
+}
+
+/** Each bed names a layer of the run, once. */
+function requireBedsOf({ beds }: WholeInterpretation, given: readonly InterpretationBed[]): void {
+  const seen = new Set<number>();
+  const faults = given.flatMap(({ layerIndex }, position) => {
+    const twice = seen.has(layerIndex);
+    seen.add(layerIndex);
+    if (!twice && layerIndex < beds.length) return [];
+    return {
+      path: ['body', 'beds', position, 'layerIndex'],
+      message: twice ? 'is given twice' : 'is no layer of the run',
+      found: String(layerIndex),
+      allowed: `0 to ${beds.length - 1}, each once`,
+    };
+  });
+  if (faults.length > 0) throw new AppError('invalid', 'Some beds do not fit the run.', { faults });
+}
