@@ -17,6 +17,7 @@ const PAGES: Partial<Record<RouteName, PageLoader>> = {
   surveys: async () => (await import('../features/surveys/surveys-page')).SurveysPage,
   survey: async () => (await import('../features/surveys/survey-overview-page')).SurveyOverviewPage,
   surveySoundings: async () => (await import('../features/soundings/soundings-page')).SoundingsPage,
+  bench: async () => (await import('../features/bench/bench-page')).BenchPage,
   settings: async () => (await import('../features/account/settings-page')).SettingsPage,
 };
 

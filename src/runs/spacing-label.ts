@@ -1,4 +1,5 @@
 import type { FitReading } from '../../server/contract/fit';
+import type { SpreadType } from '../../server/contract/spread';
 import { formatLength, formatSignificant, withUnit } from '../ui/format';
 
 const metres = (length: number): string => withUnit(formatLength(length), 'm');
@@ -20,3 +21,13 @@ export function spacingLabel(spread: FitReading['spread']): string {
       return `AM ${spread.am === null ? 'at infinity' : metres(spread.am)}`;
   }
 }
+
+/** Name of a curve's x axis: AB/2 itself where the spread has one, else the AB/2 that reaches as deep. */
+export const SPACING_AXES: Record<SpreadType, string> = {
+  schlumberger: 'AB/2, m',
+  'half-schlumberger': 'AO, m',
+  wenner: 'AB/2 (1.5 a), m',
+  'pole-pole': 'AB/2 of equal depth, m',
+  'dipole-dipole': 'AB/2 of equal depth, m',
+  electrodes: 'AB/2 of equal depth, m',
+};

@@ -2,11 +2,11 @@ import { create } from 'zustand';
 import type { LayeredEarthModel } from '../../../server/contract/fit';
 import { sameEarth, type ModelValue } from './hand-model';
 
-/** One sounding's model by hand. `earth` null = the run's own model is shown untouched. */
+/** One sounding's model by hand. Null stands for what the shown run has: its model, its held values. */
 export interface HandState {
   earth: LayeredEarthModel | null;
   /** Values held in the next fit, as "resistivity 0". */
-  held: readonly string[];
+  held: readonly string[] | null;
 }
 
 interface HandHistory {
@@ -18,26 +18,27 @@ interface HandHistory {
 
 interface HandModelStore {
   soundings: Record<string, HandHistory>;
+  /** A first model, where no run is there to take one from. */
+  begin: (soundingId: string, earth: LayeredEarthModel) => void;
   /** From the model that was shown to the one wanted; edits of one gesture (one drag) are undone as one. */
   edit: (soundingId: string, from: LayeredEarthModel, to: LayeredEarthModel, gesture?: string) => void;
-  hold: (soundingId: string, value: ModelValue, held: boolean) => void;
+  hold: (soundingId: string, held: readonly string[]) => void;
+  /** Back to the run's own model, or on to another run: undone like any other edit. */
+  takeUpRun: (soundingId: string) => void;
   undo: (soundingId: string) => void;
   redo: (soundingId: string) => void;
-  /** Back to the run: undone like any other edit. */
-  discard: (soundingId: string) => void;
-  /** Lets every held value go, as when another run is taken up. */
-  releaseAll: (soundingId: string) => void;
 }
 
 const MAX_HISTORY = 200;
-const EMPTY: HandHistory = { now: { earth: null, held: [] }, past: [], future: [], gesture: null };
+const UNTOUCHED: HandState = { earth: null, held: null };
+const EMPTY: HandHistory = { now: UNTOUCHED, past: [], future: [], gesture: null };
 
 export const heldKey = ({ on, index }: ModelValue): string => `${on} ${index}`;
 
 export const historyOf = (store: Pick<HandModelStore, 'soundings'>, soundingId: string): HandHistory =>
   store.soundings[soundingId] ?? EMPTY;
 
-function advance(history: HandHistory, now: HandState, gesture: string | null): HandHistory {
+function advance(history: HandHistory, now: HandState, gesture: string | null = null): HandHistory {
   const goesOn = gesture !== null && gesture === history.gesture;
   const past = goesOn ? history.past : [...history.past, history.now].slice(-MAX_HISTORY);
   return { now, past, future: [], gesture };
@@ -46,12 +47,8 @@ function advance(history: HandHistory, now: HandState, gesture: string | null): 
 function stepBack(history: HandHistory): HandHistory {
   const before = history.past.at(-1);
   if (!before) return history;
-  return {
-    now: before,
-    past: history.past.slice(0, -1),
-    future: [history.now, ...history.future],
-    gesture: null,
-  };
+  const future = [history.now, ...history.future];
+  return { now: before, past: history.past.slice(0, -1), future, gesture: null };
 }
 
 function stepForward(history: HandHistory): HandHistory {
@@ -60,7 +57,7 @@ function stepForward(history: HandHistory): HandHistory {
 }
 
 /** What was held keeps its meaning only while the count of beds stays. */
-const heldAfter = (before: HandState, from: LayeredEarthModel, to: LayeredEarthModel): readonly string[] =>
+const heldAfter = (before: HandState, from: LayeredEarthModel, to: LayeredEarthModel) =>
   from.resistivity.length === to.resistivity.length ? before.held : [];
 
 export const useHandModelStore = create<HandModelStore>()((set) => {
@@ -70,29 +67,19 @@ export const useHandModelStore = create<HandModelStore>()((set) => {
     }));
   return {
     soundings: {},
+    begin: (soundingId, earth) => change(soundingId, (history) => advance(history, { earth, held: null })),
     edit: (soundingId, from, to, gesture) =>
       change(soundingId, (history) =>
         sameEarth(from, to)
           ? history
-          : advance(history, { earth: to, held: heldAfter(history.now, from, to) }, gesture ?? null),
+          : advance(history, { earth: to, held: heldAfter(history.now, from, to) }, gesture),
       ),
-    hold: (soundingId, value, held) =>
-      change(soundingId, (history) => {
-        const others = history.now.held.filter((key) => key !== heldKey(value));
-        const next = held ? [...others, heldKey(value)] : others;
-        return advance(history, { ...history.now, held: next }, null);
-      }),
+    hold: (soundingId, held) => change(soundingId, (history) => advance(history, { ...history.now, held })),
+    takeUpRun: (soundingId) =>
+      change(soundingId, (history) =>
+        history.now.earth === null && history.now.held === null ? history : advance(history, UNTOUCHED),
+      ),
     undo: (soundingId) => change(soundingId, stepBack),
     redo: (soundingId) => change(soundingId, stepForward),
-    discard: (soundingId) =>
-      change(soundingId, (history) =>
-        history.now.earth === null
-          ? history
-          : advance(history, { earth: null, held: history.now.held }, null),
-      ),
-    releaseAll: (soundingId) =>
-      change(soundingId, (history) =>
-        history.now.held.length === 0 ? history : advance(history, { ...history.now, held: [] }, null),
-      ),
   };
 });

@@ -1,4 +1,5 @@
 import type { LayeredEarthModel } from '../../../server/contract/fit';
+import { boundaryDepths } from '../../charts/chart-data';
 
 /** A value of the model; `index` counts beds from 0 at the surface. */
 export interface ModelValue {
@@ -10,16 +11,8 @@ export const MAX_BEDS = 8;
 const RESISTIVITY_LIMITS = [1e-3, 1e7] as const;
 const THICKNESS_LIMITS = [1e-3, 1e5] as const;
 
-/** One press of an arrow key, and with shift. */
-export const SMALL_STEP = 1.02;
-export const LARGE_STEP = 1.2;
-
 const within = (value: number, [low, high]: readonly [number, number]) =>
   Math.min(high, Math.max(low, value));
-
-export function valueOf(earth: LayeredEarthModel, { on, index }: ModelValue): number | undefined {
-  return earth[on][index];
-}
 
 export function withValue(
   earth: LayeredEarthModel,
@@ -31,15 +24,9 @@ export function withValue(
   return { ...earth, [on]: earth[on].with(index, within(value, limits)) };
 }
 
-/** Depth of the base of each bounded bed, m. */
-export function basesOf(earth: LayeredEarthModel): number[] {
-  let depth = 0;
-  return earth.thickness.map((thickness) => (depth += thickness));
-}
-
 /** Moves the base of bed `index` to a depth; the boundary below stays where it is unless it would be passed. */
 export function withBoundary(earth: LayeredEarthModel, index: number, depthM: number): LayeredEarthModel {
-  const bases = basesOf(earth);
+  const bases = boundaryDepths(earth);
   const base = bases[index];
   if (base === undefined) return earth;
   const top = index === 0 ? 0 : (bases[index - 1] ?? 0);
@@ -51,12 +38,21 @@ export function withBoundary(earth: LayeredEarthModel, index: number, depthM: nu
   return { ...earth, thickness: below === undefined ? thickness : thickness.with(index + 1, below - depth) };
 }
 
+/** The resistivity of bed `index` times a factor. */
+export const withResistivityScaled = (
+  earth: LayeredEarthModel,
+  index: number,
+  factor: number,
+): LayeredEarthModel =>
+  withValue(earth, { on: 'resistivity', index }, (earth.resistivity[index] ?? Number.NaN) * factor);
+
 /** Cuts bed `index` in two of the same resistivity; the half-space is cut below its top by the depth above it. */
 export function withBedSplit(earth: LayeredEarthModel, index: number): LayeredEarthModel {
   const resistivity = earth.resistivity[index];
   if (resistivity === undefined || earth.resistivity.length >= MAX_BEDS) return earth;
   const thickness = earth.thickness[index];
-  const pieces = thickness === undefined ? [basesOf(earth).at(-1) ?? 10] : [thickness / 2, thickness / 2];
+  const pieces =
+    thickness === undefined ? [boundaryDepths(earth).at(-1) ?? 10] : [thickness / 2, thickness / 2];
   return {
     resistivity: earth.resistivity.toSpliced(index, 0, resistivity),
     thickness: earth.thickness.toSpliced(index, thickness === undefined ? 0 : 1, ...pieces),

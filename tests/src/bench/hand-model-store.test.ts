@@ -44,7 +44,7 @@ it('takes no step for an edit that changes nothing', () => {
 });
 
 it('lets held values go when the count of beds changes, and brings them back by undo', () => {
-  store().hold('a', { on: 'thickness', index: 0 }, true);
+  store().hold('a', ['thickness 0']);
   store().edit('a', run, first);
   expect(now().held).toEqual(['thickness 0']);
   store().edit('a', first, { resistivity: [110, 10, 10], thickness: [5, 5] });
@@ -55,10 +55,12 @@ it('lets held values go when the count of beds changes, and brings them back by 
 
 it('goes back to the run as an edit that can be undone', () => {
   store().edit('a', run, first);
-  store().discard('a');
-  expect(now().earth).toBeNull();
+  store().hold('a', ['resistivity 1']);
+  store().takeUpRun('a');
+  expect(now()).toEqual({ earth: null, held: null });
+  store().takeUpRun('a');
   store().undo('a');
-  expect(now().earth).toEqual(first);
+  expect(now()).toEqual({ earth: first, held: ['resistivity 1'] });
 });
 
 it('keeps soundings apart', () => {

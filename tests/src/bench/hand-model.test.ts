@@ -1,7 +1,7 @@
+import { boundaryDepths } from '../../../src/charts/chart-data';
 import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
 import {
-  basesOf,
   modelFromCurve,
   withBedSplit,
   withBoundary,
@@ -29,7 +29,7 @@ describe('withBoundary', () => {
   it('leaves the boundary below where it is', () => {
     const moved = withBoundary(earth, 0, 4);
     expect(moved.thickness).toEqual([4, 2, 36]);
-    expect(basesOf(moved)).toEqual([4, 6, 42]);
+    expect(boundaryDepths(moved)).toEqual([4, 6, 42]);
   });
   it('moves the lowest boundary freely', () => {
     expect(withBoundary(earth, 2, 50).thickness).toEqual([3, 3, 44]);
@@ -42,7 +42,7 @@ describe('withBoundary', () => {
         (index, depth) => {
           const moved = withBoundary(earth, index, depth);
           expect(moved.thickness.every((thickness) => thickness > 0)).toBe(true);
-          const others = (model: typeof earth) => basesOf(model).filter((_, i) => i !== index);
+          const others = (model: typeof earth) => boundaryDepths(model).filter((_, i) => i !== index);
           others(moved).forEach((base, i) => expect(base).toBeCloseTo(others(earth)[i] ?? 0, 9));
         },
       ),

@@ -1,0 +1,92 @@
+import type { GroundColumn } from '../../charts/chart-data';
+import { DepthColumn } from '../../charts/depth-column';
+import type { Run } from '../../../server/contract/runs';
+import type { Sounding } from '../../../server/contract/soundings';
+import { columnOfHand, columnOfRun } from '../../runs/curve-of-run';
+import { letterOfRun } from '../../runs/run-title';
+import { Button } from '../../ui/button';
+import { BedTable } from './bed-table';
+import { HandBar } from './hand-bar';
+import { withBoundary, withResistivityScaled } from './hand-model';
+import { heldKey } from './hand-model-store';
+import { ModelSaveMenu } from './model-save-menu';
+import type { ModelHandle } from './use-model';
+
+export interface BenchGroundProps {
+  /** The same ground twice: drawn, and in numbers. */
+  part: 'column' | 'table';
+  sounding: Sounding;
+  run: Run | null;
+  model: ModelHandle;
+  selectedBed: number | null;
+  onSelectBed: (bed: number | null) => void;
+}
+
+const bedsHeld = (held: readonly string[]): number[] => [
+  ...new Set(held.map((key) => Number(key.split(' ')[1]))),
+];
+
+export function BenchGround({ part, ...props }: BenchGroundProps) {
+  const { model } = props;
+  if (!model.earth) return part === 'column' ? <NoGround model={model} /> : null;
+  return part === 'column' ? <Column {...props} /> : <Numbers {...props} />;
+}
+
+function NoGround({ model }: { model: ModelHandle }) {
+  return (
+    <div>
+      <h2 className="font-semibold">Ground</h2>
+      <p className="mt-1 text-muted">
+        No model yet. Fit the readings, or begin with a model by hand and see its curve at once.
+      </p>
+      {model.begin ? (
+        <Button size="small" className="mt-3" onClick={model.begin}>
+          Begin by hand
+        </Button>
+      ) : null}
+    </div>
+  );
+}
+
+function Column({ sounding, run, model, selectedBed, onSelectBed }: Omit<BenchGroundProps, 'part'>) {
+  const { earth } = model;
+  const column: GroundColumn | null = model.hand
+    ? columnOfHand(model.hand, bedsHeld(model.held))
+    : run && columnOfRun(run);
+  if (!column || !earth) return null;
+  return (
+    <DepthColumn
+      column={{ ...column, letter: '', lockedBeds: bedsHeld(model.held) }}
+      title="Ground"
+      subject={sounding.name}
+      height={520}
+      selectedBed={selectedBed}
+      onSelectBed={onSelectBed}
+      onMoveBoundary={(boundary, depth, gesture) => model.edit(withBoundary(earth, boundary, depth), gesture)}
+      onScaleResistivity={(bed, factor) => model.edit(withResistivityScaled(earth, bed, factor))}
+    />
+  );
+}
+
+function Numbers({ sounding, run, model, selectedBed, onSelectBed }: Omit<BenchGroundProps, 'part'>) {
+  const { earth } = model;
+  if (!earth) return null;
+  const shownRun = model.hand ? null : run;
+  return (
+    <section className="flex flex-col gap-1">
+      <HandBar model={model} runLetter={run ? letterOfRun(run) : null}>
+        <ModelSaveMenu soundingName={sounding.name} earth={earth} run={shownRun} />
+      </HandBar>
+      <BedTable
+        earth={earth}
+        result={shownRun?.result ?? null}
+        heldInRun={shownRun ? shownRun.settings.fixed.map(heldKey) : []}
+        held={model.held}
+        onEdit={(next) => model.edit(next)}
+        onHold={sounding.can.run ? model.setHeld : null}
+        selectedBed={selectedBed}
+        onSelectBed={onSelectBed}
+      />
+    </section>
+  );
+}

@@ -1,0 +1,139 @@
+import { useCallback, useMemo, useRef, useState } from 'react';
+import { useSearchParams } from 'react-router-dom';
+import type { FitSettingsInput } from '../../../server/contract/fit';
+import type { Sounding } from '../../../server/contract/soundings';
+import type { Revision } from '../../../server/contract/readings';
+import type { Run, RunSummary } from '../../../server/contract/runs';
+import { formFaults } from '../../api/form-faults';
+import { curveDataOfRevision, curveDataOfRun } from '../../runs/curve-of-run';
+import { DoubtList } from '../../runs/doubt-list';
+import { BenchDrawing } from './bench-drawing';
+import { BenchGround } from './bench-ground';
+import { useRequestRun } from './bench-mutations';
+import { DrawingRegion } from './drawing-region';
+import { FiguresOfModel } from './figures-of-model';
+import { FitControls } from './fit-controls';
+import { modelFromCurve } from './hand-model';
+import { LayerLadder } from './layer-ladder';
+import { Ledger } from './ledger';
+import { NoRunsNote } from './no-runs-note';
+import { RunFacts } from './run-facts';
+import { useAwaitedRuns } from './use-awaited-runs';
+import { useBenchCurve } from './use-bench-curve';
+import { useModel } from './use-model';
+
+export interface BenchWorkspaceProps {
+  sounding: Sounding;
+  revision: Revision;
+  runs: readonly RunSummary[];
+  /** The run that is shown; null while there is none. */
+  run: Run | null;
+}
+
+/** Ground, curve and Ledger at one table. */
+export function BenchWorkspace({ sounding, revision, runs, run }: BenchWorkspaceProps) {
+  const { can } = sounding;
+  const [, setSearch] = useSearchParams();
+  const [selectedBed, setSelectedBed] = useState<number | null>(null);
+  const askForFit = useRef<() => void>(() => undefined);
+  const request = useRequestRun(sounding.id);
+  const data = useMemo(() => (run ? curveDataOfRun(run) : curveDataOfRevision(revision)), [run, revision]);
+  const fallback = useMemo(
+    () => modelFromCurve(data.kept.map((reading) => ({ ...reading, spacing: reading.plottingSpacingM }))),
+    [data],
+  );
+  const model = useModel(sounding.id, run, fallback);
+  const curve = useBenchCurve(data, run, model.hand);
+  const { takeUpRun } = model;
+  const open = useCallback(
+    (opened: Pick<RunSummary, 'id'>) => {
+      takeUpRun();
+      setSearch((search) => new URLSearchParams({ ...Object.fromEntries(search), run: opened.id }), {
+        replace: true,
+      });
+    },
+    [setSearch, takeUpRun],
+  );
+  const awaitRun = useAwaitedRuns(runs, open);
+  const fit = (settings: FitSettingsInput) =>
+    request.mutate(settings, { onSuccess: (asked) => awaitRun(asked.id) });
+  const result = model.hand ? null : (run?.result ?? null);
+  return (
+    <div className="grid flex-1 grid-cols-1 lg:grid-cols-[minmax(17rem,19rem)_minmax(0,1fr)] xl:grid-cols-[minmax(17rem,21rem)_minmax(0,1fr)_minmax(20rem,24rem)]">
+      <DrawingRegion
+        onFit={can.run ? () => askForFit.current() : null}
+        onUndo={model.undo}
+        onRedo={model.redo}
+        className="contents"
+      >
+        <div className="flex min-w-0 flex-col gap-6 px-4 py-5 sm:px-7 lg:order-2 lg:border-l lg:border-rule">
+          <BenchDrawing sounding={sounding} data={data} run={run} curve={curve} />
+          {can.run ? (
+            <FitControls
+              model={model.earth}
+              held={model.held}
+              onRelease={model.releaseAll}
+              onFit={fit}
+              isAsking={request.isPending}
+              faults={formFaults(request.error)}
+              onReady={(ask) => {
+                askForFit.current = ask;
+              }}
+            />
+          ) : null}
+          <BenchGround
+            part="table"
+            sounding={sounding}
+            run={run}
+            model={model}
+            selectedBed={selectedBed}
+            onSelectBed={setSelectedBed}
+          />
+        </div>
+        <div className="min-w-0 border-t border-rule px-4 py-5 sm:px-7 lg:order-1 lg:border-t-0">
+          <BenchGround
+            part="column"
+            sounding={sounding}
+            run={run}
+            model={model}
+            selectedBed={selectedBed}
+            onSelectBed={setSelectedBed}
+          />
+        </div>
+      </DrawingRegion>
+      <div className="flex min-w-0 flex-col gap-6 border-t border-rule px-4 py-5 sm:px-7 lg:order-3 lg:col-span-2 xl:col-span-1 xl:border-t-0 xl:border-l">
+        {model.earth ? <FiguresOfModel earth={model.earth} misfit={curve.misfit} /> : null}
+        {result && run ? (
+          <section aria-labelledby="doubt-title">
+            <h2 id="doubt-title" className="mb-2 font-semibold">
+              What the data cannot tell
+            </h2>
+            <DoubtList result={result} excluded={run.excluded} />
+          </section>
+        ) : null}
+        {result?.layerCounts ? (
+          <section aria-labelledby="ladder-title">
+            <h2 id="ladder-title" className="mb-1 font-semibold">
+              How many beds
+            </h2>
+            <LayerLadder
+              counts={result.layerCounts}
+              onTakeUp={(earth) => model.edit(earth)}
+              onAdopt={
+                can.run && run
+                  ? (earth) => fit({ ...run.settings, layers: earth.resistivity.length, start: earth })
+                  : undefined
+              }
+            />
+          </section>
+        ) : null}
+        {run && !model.hand ? <RunFacts run={run} runs={runs} can={can} /> : null}
+        {runs.length === 0 ? (
+          <NoRunsNote can={can} />
+        ) : (
+          <Ledger soundingId={sounding.id} runs={runs} shownRunId={run?.id ?? null} can={can} onOpen={open} />
+        )}
+      </div>
+    </div>
+  );
+}

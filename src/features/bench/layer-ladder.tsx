@@ -1,0 +1,64 @@
+import type { FitResult, LayeredEarthModel } from '../../../server/contract/fit';
+import { Button } from '../../ui/button';
+import { formatFixed } from '../../ui/format';
+import { Cell, HeaderCell, Table, TableBody, TableHead, TableRow } from '../../ui/table';
+
+export interface LayerLadderProps {
+  counts: NonNullable<FitResult['layerCounts']>;
+  /** Takes one count's model up by hand, to look at and to fit from. */
+  onTakeUp: (earth: LayeredEarthModel) => void;
+  /** Asks for a run of this count; absent where the reader may not run. */
+  onAdopt?: ((earth: LayeredEarthModel) => void) | undefined;
+}
+
+const NOISE_WORDS = { true: 'yes', false: 'no', null: 'not testable' } as const;
+
+/** Every count that was tried, with what decided between them. */
+export function LayerLadder({ counts, onTakeUp, onAdopt }: LayerLadderProps) {
+  return (
+    <>
+      <Table caption="Counts of beds that were tried">
+        <TableHead>
+          <HeaderCell numeric>Beds</HeaderCell>
+          <HeaderCell numeric>χ²/N</HeaderCell>
+          <HeaderCell numeric>BIC</HeaderCell>
+          <HeaderCell>Within noise</HeaderCell>
+          <HeaderCell>
+            <span className="sr-only">Take up</span>
+          </HeaderCell>
+        </TableHead>
+        <TableBody>
+          {counts.map((count) => (
+            <TableRow key={count.layers} selected={count.chosen}>
+              <Cell numeric>{count.layers}</Cell>
+              <Cell numeric>{formatFixed(count.chi2PerReading, 2)}</Cell>
+              <Cell numeric>{formatFixed(count.bic, 1)}</Cell>
+              <Cell>{NOISE_WORDS[`${count.withinNoise}`]}</Cell>
+              <Cell className="text-right">
+                {count.chosen ? (
+                  <span className="text-sm font-semibold">chosen</span>
+                ) : (
+                  <>
+                    <Button kind="quiet" size="small" onClick={() => onTakeUp(count.earth)}>
+                      Look
+                      <span className="sr-only"> at the model of {count.layers} beds</span>
+                    </Button>
+                    {onAdopt ? (
+                      <Button kind="quiet" size="small" onClick={() => onAdopt(count.earth)}>
+                        Adopt
+                        <span className="sr-only"> {count.layers} beds</span>
+                      </Button>
+                    ) : null}
+                  </>
+                )}
+              </Cell>
+            </TableRow>
+          ))}
+        </TableBody>
+      </Table>
+      <p className="mt-2 text-sm text-muted">
+        Chosen is the fewest beds whose χ² lies below its 95 % point; where none does, the least BIC.
+      </p>
+    </>
+  );
+}

@@ -1,0 +1,31 @@
+import { DEFAULT_BOUNDS, type FitSettings } from '../../server/contract/fit';
+import { formatSignificant, withUnit } from '../ui/format';
+import { bedCount } from './run-title';
+
+const UNIT = { resistivity: 'Ω·m', thickness: 'm' } as const;
+
+/** What a fit was asked for, one fact an entry; what is as usual is left out but for the count and the seed. */
+export function settingsWords(settings: FitSettings): { label: string; value: string }[] {
+  const bounds = (['resistivity', 'thickness'] as const).flatMap((key) => {
+    const [low, high] = settings.bounds[key];
+    const isUsual = low === DEFAULT_BOUNDS[key][0] && high === DEFAULT_BOUNDS[key][1];
+    const value = `${formatSignificant(low)} to ${withUnit(formatSignificant(high), UNIT[key])}`;
+    return isUsual
+      ? []
+      : [{ label: key === 'resistivity' ? 'Resistivity within' : 'Thickness within', value }];
+  });
+  const held = settings.fixed.map(
+    ({ on, index, value }) =>
+      `${on} of bed ${index + 1} at ${withUnit(formatSignificant(value, 4), UNIT[on])}`,
+  );
+  return [
+    {
+      label: 'Beds',
+      value: settings.layers === 'auto' ? 'count to be found, 1 to 8' : bedCount(settings.layers),
+    },
+    { label: 'Start', value: settings.start ? 'a given model, beside the curve' : 'the curve' },
+    ...(held.length > 0 ? [{ label: 'Held', value: held.join('; ') }] : []),
+    ...bounds,
+    { label: 'Seed', value: String(settings.seed) },
+  ];
+}
