@@ -1,7 +1,5 @@
-import { randomUUID } from 'node:crypto';
 import express, { type Express } from 'express';
 import helmet from 'helmet';
-import { pinoHttp } from 'pino-http';
 import { checkOrigin } from './access/check-origin';
 import { endpoints } from './endpoints';
 import { AppError } from './errors';
@@ -10,6 +8,7 @@ import { clientPages } from './http/client-pages';
 import type { Services } from './http/context';
 import { healthRouter } from './http/health';
 import { problemHandler } from './http/problem';
+import { requestLog } from './http/request-log';
 import { createRouter } from './http/router';
 
 /** The whole server as an Express application; it owns no process, socket or timer. */
@@ -20,13 +19,7 @@ export function createApp(services: Services): Express {
   app.set('trust proxy', config.trustProxy);
   app.set('query parser', 'simple');
   app.use(
-    pinoHttp({
-      logger: log,
-      genReqId: () => randomUUID(),
-      quietReqLogger: true,
-      autoLogging: config.logRequests,
-      redact: ['req.headers.cookie', 'req.headers.authorization', 'res.headers["set-cookie"]'],
-    }),
+    requestLog(log, config),
     helmet({
       contentSecurityPolicy: {
         directives: {

@@ -1,15 +1,14 @@
 import { createServer } from 'node:http';
 import { pino } from 'pino';
 import { createApp } from './app';
-import { loadConfig, readEnvFile } from './config';
 import { createServices } from './create-services';
 import { createDatabase } from './db/knex';
 import { createPool } from './db/pool';
 import { startHousekeeping } from './housekeeping';
+import { readConfig } from './read-config';
 import { stopOnSignal } from './stop-on-signal';
 
-readEnvFile();
-const config = loadConfig(process.env);
+const config = readConfig();
 const log = pino({ level: config.logLevel, base: { process: 'web' } });
 const die = (error: unknown): void => {
   log.fatal({ err: error }, 'unexpected failure; the process ends');

@@ -1,13 +1,12 @@
 import { join } from 'node:path';
 import { pino } from 'pino';
-import { loadConfig, readEnvFile } from './config';
 import { createDatabase } from './db/knex';
 import { createPool } from './db/pool';
 import { startRunWorker } from './jobs/run-worker';
+import { readConfig } from './read-config';
 import { stopOnSignal } from './stop-on-signal';
 
-readEnvFile();
-const config = loadConfig(process.env);
+const config = readConfig();
 const log = pino({ level: config.logLevel, base: { process: 'worker' } });
 
 function fail(error: unknown): void {

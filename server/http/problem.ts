@@ -4,6 +4,7 @@ import type { Logger } from 'pino';
 import { z } from 'zod';
 import type { Problem } from '../contract/common';
 import { AppError, ERROR_STATUS, ERROR_TITLE, errorOfPostgres, faultsOfZod } from '../errors';
+import { maskTokens } from './mask-tokens';
 import { requestIdOf } from './request-id';
 
 /** Any thrown thing as an AppError; unknown ones become a plain "internal" that gives nothing away. */
@@ -50,7 +51,10 @@ export const problemHandler =
   (error: unknown, request, response, next) => {
     const told = toAppError(error, uploadLimitMb);
     if (told.code === 'internal' || told.code === 'unavailable')
-      log.error({ err: error, requestId: requestIdOf(request), path: request.path }, 'request failed');
+      log.error(
+        { err: error, requestId: requestIdOf(request), path: maskTokens(request.originalUrl) },
+        'request failed',
+      );
     if (response.headersSent) return next(error);
     sendProblem(request, response, told);
   };

@@ -6,10 +6,11 @@ import { createTestServer, type Client } from '../setup/server';
 import { ROLES, WHO, type AccessRow, type Asked, type Who } from './access-matrix/access-row';
 import { accountRows } from './access-matrix/account';
 import { adminRows } from './access-matrix/admin';
+import { readingRows } from './access-matrix/readings';
 import { surveyRows } from './access-matrix/surveys';
 
 /** Each feature's table; an endpoint without a row here fails below. */
-const rows: AccessRow[] = [...accountRows, ...adminRows, ...surveyRows];
+const rows: AccessRow[] = [...accountRows, ...adminRows, ...surveyRows, ...readingRows];
 
 const server = await createTestServer();
 const clients = new Map<Who, Client>();
@@ -45,7 +46,8 @@ describe.each(endpoints.map((definition) => [nameOf(definition), definition] as 
         status: row.expected[who],
       });
       const schema = definition.answers[answer.status];
-      if (schema && !definition.stream) expect(schema.safeParse(answer.body).error).toBeUndefined();
+      const faults = schema && !definition.stream ? schema.safeParse(answer.body).error : undefined;
+      expect(faults).toBeUndefined();
     });
   },
 );
