@@ -4,6 +4,9 @@ import * as createSurveys from './20261201000200_create_surveys';
 import * as createReadings from './20261201000300_create_readings';
 import * as createRuns from './20261201000400_create_runs';
 import * as createInterpretations from './20261201000500_create_interpretations';
+import * as createNaturalCollation from './20261201000600_create_natural_collation';
+import * as addUnitsToReadingDraft from './20261201000700_add_units_to_reading_draft';
+import * as createInterpretationContributors from './20261201000800_create_interpretation_contributors';
 
 export interface NamedMigration {
   name: string;
@@ -17,4 +20,10 @@ export const migrations: readonly NamedMigration[] = [
   { name: '20261201000300_create_readings', migration: createReadings },
   { name: '20261201000400_create_runs', migration: createRuns },
   { name: '20261201000500_create_interpretations', migration: createInterpretations },
+  { name: '20261201000600_create_natural_collation', migration: createNaturalCollation },
+  { name: '20261201000700_add_units_to_reading_draft', migration: addUnitsToReadingDraft },
+  {
+    name: '20261201000800_create_interpretation_contributors',
+    migration: createInterpretationContributors,
+  },
 ];
