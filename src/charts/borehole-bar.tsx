@@ -1,6 +1,6 @@
 import type { ReactNode } from 'react';
 import type { BoreholeLog } from './chart-data';
-import { SANS, type ChartPalette } from './chart-palette';
+import { haloOf, SANS, type ChartPalette } from './chart-palette';
 import type { DepthScale } from './depth-scale';
 import { svgRole } from './svg-roles';
 
@@ -38,6 +38,7 @@ export function BoreholeBar({ log, scale, x, width, palette }: BoreholeBarProps)
                 fontSize={12}
                 fontFamily={SANS}
                 fill={palette.ink}
+                {...haloOf(palette)}
               >
                 {fitText(bed.label, width - shaft - 8)}
                 <title>{bed.label}</title>

@@ -54,3 +54,8 @@ export function useChartPalette(): ChartPalette {
 
 export const SANS = "'IBM Plex Sans', system-ui, sans-serif";
 export const MONO = "'IBM Plex Mono', 'IBM Plex Sans', ui-monospace, monospace";
+
+/** Keeps words readable where a rule passes behind them. */
+export function haloOf(palette: ChartPalette) {
+  return { stroke: palette.paper, strokeWidth: 4, strokeLinejoin: 'round', paintOrder: 'stroke' } as const;
+}

@@ -62,7 +62,7 @@ export function ColumnSlot(props: ColumnSlotProps): ReactNode {
             strokeDasharray="4 3"
           />
           <text x={x} y={scale.height + 15} fontSize={12} fontFamily={SANS} fill={palette.muted}>
-            fades below {Number(reach.toPrecision(2))} m: little seen
+            below {Number(reach.toPrecision(2))} m: little seen
           </text>
         </g>
       ) : null}

@@ -2,6 +2,7 @@ import type { LineSeriesOption } from 'echarts';
 import type { CurveLine } from './chart-data';
 import { MONO, type ChartPalette } from './chart-palette';
 import type { LogAxes } from './log-axes';
+import { placeLabels } from './place-labels';
 import { runStyle } from './run-style';
 
 /** Letters at the ends of curves stand at least this far apart, px. */
@@ -11,11 +12,12 @@ const LETTER_GAP = 15;
 export function curveSeries(
   lines: readonly CurveLine[],
   axes: LogAxes,
+  plotHeight: number,
   palette: ChartPalette,
   chosen: string | null,
 ): LineSeriesOption[] {
   const lettered = lines.filter((line) => line.letter !== '' && line.points.length > 0);
-  const offsets = letterOffsets(lettered, axes.pixelsPerDecade);
+  const offsets = letterOffsets(lettered, axes, plotHeight);
   return lines.map((line) => ({
     id: `curve-${line.id}`,
     name: line.letter === '' ? line.name : `${line.letter}, ${line.name}`,
@@ -57,20 +59,12 @@ function lineStyle(line: CurveLine, palette: ChartPalette, isChosen: boolean): L
   return { color, width: isChosen ? 2.4 : 1.6, type: dash.length === 0 ? 'solid' : [...dash] };
 }
 
-/** How far to push each letter down (px) so that curves that end together keep readable names. */
-function letterOffsets(lines: readonly CurveLine[], pixelsPerDecade: number): Map<string, number> {
-  const ends = lines
-    .map((line) => ({
-      id: line.id,
-      y: -Math.log10(line.points.at(-1)?.apparentResistivity ?? 1) * pixelsPerDecade,
-    }))
-    .toSorted((first, second) => first.y - second.y);
-  const offsets = new Map<string, number>();
-  let free = Number.NEGATIVE_INFINITY;
-  for (const end of ends) {
-    const placed = Math.max(end.y, free);
-    offsets.set(end.id, placed - end.y);
-    free = placed + LETTER_GAP;
-  }
-  return offsets;
+/** How far to move each letter (px, down) so that curves that end together keep readable names inside the plot. */
+function letterOffsets(lines: readonly CurveLine[], axes: LogAxes, plotHeight: number): Map<string, number> {
+  const wishes = lines.map((line) => ({
+    y: (axes.y.max - Math.log10(line.points.at(-1)?.apparentResistivity ?? 1)) * axes.pixelsPerDecade,
+    height: LETTER_GAP,
+  }));
+  const middles = placeLabels(wishes, 0, plotHeight);
+  return new Map(lines.map((line, index) => [line.id, (middles[index] ?? 0) - (wishes[index]?.y ?? 0)]));
 }

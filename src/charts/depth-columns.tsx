@@ -41,7 +41,7 @@ const SCALES: readonly { value: DepthScaleKind; label: string }[] = [
 const AXIS = 42;
 const HEAD = 30;
 const FOOT = 20;
-const BOREHOLE = 116;
+const BOREHOLE = 156;
 const LEAST_SLOT = 128;
 
 /** Grounds side by side on one depth axis, as soft at each boundary as it is uncertain. */

@@ -17,7 +17,7 @@ export interface DepthScale {
   ticks: readonly DepthTick[];
 }
 
-const LEAST_TICK_GAP = 34;
+const LEAST_TICK_GAP = 46;
 
 /** The first `minDepth` metres of a log scale are one stretch of no length: depth 0 has no logarithm. */
 export function depthScale(
@@ -46,7 +46,7 @@ function logScale(minDepth: number, maxDepth: number, height: number): DepthScal
     for (const digit of [1, 2, 5]) {
       const depth = digit * 10 ** decade;
       const last = ticks.at(-1);
-      const hasRoom = last === undefined || yOf(depth) - last.y >= LEAST_TICK_GAP / 2;
+      const hasRoom = last === undefined || yOf(depth) - last.y >= LEAST_TICK_GAP / 2.5;
       if (depth >= minDepth && depth <= maxDepth && hasRoom) ticks.push(tickAt(depth, yOf));
     }
   }

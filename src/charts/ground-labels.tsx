@@ -1,7 +1,7 @@
 import type { ReactNode } from 'react';
 import { formatResistivity } from '../ui/format';
 import type { GroundColumn } from './chart-data';
-import { MONO, SANS, type ChartPalette } from './chart-palette';
+import { haloOf, MONO, SANS, type ChartPalette } from './chart-palette';
 import type { DepthScale } from './depth-scale';
 import { LEAST_NUMBER_HEIGHT } from './ground-bar';
 import { groundBeds, groundBoundaries } from './ground-profile';
@@ -51,11 +51,28 @@ export function GroundLabels({ column, scale, x, barEnd, palette }: GroundLabels
                 stroke={palette.ruleStrong}
               />
             ) : null}
-            <text x={x} y={first} dy="0.35em" fontSize={12} fontWeight={600} fontFamily={MONO} fill={color}>
+            <text
+              x={x}
+              y={first}
+              dy="0.35em"
+              fontSize={12}
+              fontWeight={600}
+              fontFamily={MONO}
+              fill={color}
+              {...haloOf(palette)}
+            >
               {label.strong}
             </text>
             {label.note ? (
-              <text x={x} y={first + LINE} dy="0.35em" fontSize={12} fontFamily={SANS} fill={palette.muted}>
+              <text
+                x={x}
+                y={first + LINE}
+                dy="0.35em"
+                fontSize={12}
+                fontFamily={SANS}
+                fill={palette.muted}
+                {...haloOf(palette)}
+              >
                 {label.note}
               </text>
             ) : null}

@@ -33,7 +33,7 @@ export function groundBoundaries(column: GroundColumn): GroundBoundary[] {
   return boundaryDepths(column.earth).map((depth, index) => {
     const bounds: Bounds | undefined = column.intervals?.depth[index];
     const [low, high] = bounds ?? [null, null];
-    const range = bounds ? formatRange(bounds, formatLength) : '';
+    const range = bounds ? formatRange(bounds) : '';
     const isWide = low !== null && high !== null && high / Math.max(low, 1e-9) > UNRESOLVED_FACTOR;
     return {
       index,

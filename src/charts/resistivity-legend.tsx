@@ -9,32 +9,36 @@ const PLACE: Record<number, string> = { 0: 'justify-start', 4: 'justify-end' };
 export function ResistivityLegend({ className }: { className?: string }) {
   const gradientId = useId();
   return (
-    <div className={classNames('w-full max-w-72', className)}>
-      <svg
-        role="img"
-        aria-label="Colours of resistivity, from dark blue at 1 through teal, green and ochre to cream at 10 000 ohm metres"
-        className="block h-2.5 w-full border border-rule"
-      >
-        <defs>
-          <linearGradient id={gradientId}>
-            {rampStops().map(({ offset, color }) => (
-              <stop key={offset} offset={offset} stopColor={color} />
-            ))}
-          </linearGradient>
-        </defs>
-        <rect width="100%" height="100%" fill={`url(#${gradientId})`} />
-      </svg>
-      <div aria-hidden className="figure flex justify-between pt-1 text-xs text-muted">
-        {MARKS.map((mark, index) => (
-          <span
-            key={mark}
-            className={classNames('flex w-0 whitespace-nowrap', PLACE[index] ?? 'justify-center')}
-          >
-            {mark}
-            {index === MARKS.length - 1 ? '\u00a0Ω·m' : ''}
-          </span>
-        ))}
+    <div className={classNames('flex w-full max-w-80 gap-2.5', className)}>
+      <div className="min-w-0 flex-1">
+        <svg
+          role="img"
+          aria-label="Colours of resistivity, from dark blue at 1 through teal, green and ochre to cream at 10 000 ohm metres"
+          className="block h-2.5 w-full border border-rule"
+        >
+          <defs>
+            <linearGradient id={gradientId}>
+              {rampStops().map(({ offset, color }) => (
+                <stop key={offset} offset={offset} stopColor={color} />
+              ))}
+            </linearGradient>
+          </defs>
+          <rect width="100%" height="100%" fill={`url(#${gradientId})`} />
+        </svg>
+        <div aria-hidden className="figure flex justify-between pt-1 text-xs text-muted">
+          {MARKS.map((mark, index) => (
+            <span
+              key={mark}
+              className={classNames('flex w-0 whitespace-nowrap', PLACE[index] ?? 'justify-center')}
+            >
+              {mark}
+            </span>
+          ))}
+        </div>
       </div>
+      <span aria-hidden className="figure -mt-0.5 text-xs text-muted">
+        Ω·m
+      </span>
     </div>
   );
 }

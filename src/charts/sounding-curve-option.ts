@@ -27,6 +27,9 @@ const TOP = 12;
 const AXIS_ROOM = 26;
 const STRIP_HEIGHT = 76;
 const FOOT = 42;
+const STRIP_FOOT = 24;
+/** The curve may have this much empty room above and below it, decades. */
+const SPARE_DECADES = 0.5;
 
 export interface CurveLayout {
   plot: { left: number; top: number; width: number; height: number };
@@ -36,11 +39,38 @@ export interface CurveLayout {
 /** Boxes of the curve and of the residual strip under it; both share left edge and width. */
 export function curveLayout(width: number, height: number, hasStrip: boolean): CurveLayout {
   const plotWidth = Math.max(60, width - LEFT - RIGHT);
-  const below = hasStrip ? AXIS_ROOM + STRIP_HEIGHT + FOOT - 18 : FOOT;
+  const below = hasStrip ? AXIS_ROOM + STRIP_HEIGHT + STRIP_FOOT : FOOT;
   const plotHeight = Math.max(60, height - TOP - below);
   const plot = { left: LEFT, top: TOP, width: plotWidth, height: plotHeight };
   const strip = { left: LEFT, top: TOP + plotHeight + AXIS_ROOM, width: plotWidth, height: STRIP_HEIGHT };
   return { plot, strip: hasStrip ? strip : null };
+}
+
+/**
+ * Height for a width, px: square decades tie the two, so a narrow drawing is made lower rather than left half empty.
+ * Between 260 and `maxHeight`.
+ */
+export function curveHeight(
+  readings: readonly CurveReading[],
+  lines: readonly CurveLine[],
+  width: number,
+  maxHeight: number,
+): number {
+  const hasStrip = residualLine(lines, null) !== null;
+  const layout = curveLayout(width, maxHeight, hasStrip);
+  const { y, pixelsPerDecade } = soundingAxes(readings, lines, layout);
+  const needed = dataDecades(readings, lines) + SPARE_DECADES;
+  const spare = Math.max(0, y.max - y.min - needed) * pixelsPerDecade;
+  return Math.round(Math.max(Math.min(260, maxHeight), maxHeight - spare));
+}
+
+function dataDecades(readings: readonly CurveReading[], lines: readonly CurveLine[]): number {
+  const points = [
+    ...readings,
+    ...lines.filter((line) => line.kind !== 'ghost').flatMap((line) => line.points),
+  ];
+  const logs = points.map((point) => Math.log10(point.apparentResistivity)).filter(Number.isFinite);
+  return logs.length === 0 ? 1 : Math.max(...logs) - Math.min(...logs);
 }
 
 /** The line whose residuals the strip shows: the chosen one, or else the first that has any. */
@@ -71,7 +101,7 @@ export function soundingCurveOption(input: SoundingCurveInput): EChartsOption {
     tooltip: curveTooltip(readings, shown, palette),
     series: [
       gridSeries(axes, palette),
-      ...curveSeries(lines, axes, palette, input.chosenLine),
+      ...curveSeries(lines, axes, layout.plot.height, palette, input.chosenLine),
       readingSeries(readings, palette, focusedReading),
       ...strip,
     ],
@@ -134,7 +164,7 @@ function xAxes(input: SoundingCurveInput, axes: LogAxes, layout: CurveLayout): X
       ...logAxis(axes.x, axes.pixelsPerDecade, 30, palette),
       ...name,
       gridIndex: 1,
-      axisLine: { show: false },
+      axisLine: { show: false, onZero: false },
       axisTick: { show: false },
       axisLabel: { show: false },
     },

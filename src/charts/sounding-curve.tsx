@@ -5,7 +5,7 @@ import { useChartPalette } from './chart-palette';
 import { curveTable } from './curve-table';
 import { echarts, ReactECharts } from './echarts-svg';
 import { readingFacts, readingSentence } from './reading-facts';
-import { residualLine, soundingCurveOption } from './sounding-curve-option';
+import { curveHeight, residualLine, soundingCurveOption } from './sounding-curve-option';
 import { useBoxSize } from './use-box-size';
 
 export interface SoundingCurveProps {
@@ -19,8 +19,8 @@ export interface SoundingCurveProps {
   note?: string;
   /** Name of the sounding, for file names. */
   subject?: string;
-  /** Tailwind height of the drawing. */
-  heightClassName?: string;
+  /** Greatest height of the drawing, px; a narrow one is lower. */
+  maxHeight?: number;
   className?: string;
   /** The reading that is walked to or pressed, by its index. */
   onFocusReading?: (index: number | null) => void;
@@ -35,7 +35,7 @@ export function SoundingCurve(props: SoundingCurveProps) {
     title = 'Apparent resistivity',
     className,
   } = props;
-  const { heightClassName = 'h-[28rem]', onFocusReading } = props;
+  const { maxHeight = 470, onFocusReading } = props;
   const palette = useChartPalette();
   const { ref, size } = useBoxSize<HTMLDivElement>();
   const [focused, setFocused] = useState<number | null>(null);
@@ -44,9 +44,24 @@ export function SoundingCurve(props: SoundingCurveProps) {
     setFocused(index);
     onFocusReading?.(index);
   };
+  const { width } = size;
+  const height = useMemo(
+    () => curveHeight(readings, lines, width, maxHeight),
+    [readings, lines, width, maxHeight],
+  );
   const option = useMemo(
-    () => soundingCurveOption({ readings, lines, chosenLine, focusedReading, spacingName, ...size, palette }),
-    [readings, lines, chosenLine, focusedReading, spacingName, size, palette],
+    () =>
+      soundingCurveOption({
+        readings,
+        lines,
+        chosenLine,
+        focusedReading,
+        spacingName,
+        width,
+        height,
+        palette,
+      }),
+    [readings, lines, chosenLine, focusedReading, spacingName, width, height, palette],
   );
   const table = useMemo(() => curveTable(readings, lines, spacingName), [readings, lines, spacingName]);
   const shown = residualLine(lines, chosenLine);
@@ -62,9 +77,10 @@ export function SoundingCurve(props: SoundingCurveProps) {
       <div
         ref={ref}
         aria-hidden
-        className={`relative min-w-0 rounded peer-focus-visible:outline-2 peer-focus-visible:outline-water ${heightClassName}`}
+        className="relative min-w-0 rounded peer-focus-visible:outline-2 peer-focus-visible:outline-water"
+        style={{ height }}
       >
-        {size.width > 0 && size.height > 0 ? (
+        {size.width > 0 ? (
           <ReactECharts
             echarts={echarts}
             option={option}
@@ -75,7 +91,7 @@ export function SoundingCurve(props: SoundingCurveProps) {
                 if (event.seriesId === 'readings') focusOn(event.dataIndex ?? null);
               },
             }}
-            style={{ position: 'absolute', inset: 0, height: size.height, width: size.width }}
+            style={{ position: 'absolute', inset: 0, height, width }}
           />
         ) : null}
       </div>

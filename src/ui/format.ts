@@ -52,14 +52,16 @@ export function formatPercent(value: number, decimals = 1): string {
 
 export type Bounds = readonly [number | null, number | null];
 
-/** "1.2–3.4", "at least 1.2", "at most 3.4" or "not bounded". */
-export function formatRange(
-  [low, high]: Bounds,
-  formatValue: (value: number) => string = formatResistivity,
-): string {
-  if (low === null) return high === null ? NOT_BOUNDED : `at most ${formatValue(high)}`;
-  if (high === null) return `at least ${formatValue(low)}`;
-  const [from, to] = [formatValue(low), formatValue(high)];
+/**
+ * "1.2–3.4", "at least 1.2", "at most 3.4" or "not bounded". Each end has two significant figures and as many more as
+ * it takes to tell the ends apart: 134–145, 3.9–36.
+ */
+export function formatRange([low, high]: Bounds, formatValue?: (value: number) => string): string {
+  const one = formatValue ?? ((value: number) => formatSignificant(value, 2));
+  if (low === null) return high === null ? NOT_BOUNDED : `at most ${one(high)}`;
+  if (high === null) return `at least ${one(low)}`;
+  const end = formatValue ?? ((value: number) => formatSignificant(value, rangeDigits(value, high - low)));
+  const [from, to] = [end(low), end(high)];
   return from === to ? from : `${from}${DASH}${to}`;
 }
 
@@ -108,6 +110,13 @@ export function formatDuration(milliseconds: number): string {
 /** "1 reading", "20 readings", "12 400 readings". */
 export function formatCount(count: number, one: string, many = `${one}s`): string {
   return `${groupDigits(String(count))} ${count === 1 ? one : many}`;
+}
+
+/** Significant figures of one end so that the last of them is at most half the width of the range: 2 to 5. */
+function rangeDigits(end: number, width: number): number {
+  if (end === 0 || width <= 0) return 3;
+  const needed = Math.floor(Math.log10(Math.abs(end))) - Math.floor(Math.log10(width / 2)) + 1;
+  return Math.min(5, Math.max(2, needed));
 }
 
 function groupDigits(text: string): string {

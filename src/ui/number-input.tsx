@@ -47,7 +47,8 @@ export function NumberInput(props: NumberInputProps) {
           {...wiring}
           value={text}
           onChange={(event) => change(event.target.value)}
-          className={classNames(CONTROL_CLASS, 'figure text-right', unit !== undefined && 'pr-12')}
+          className={classNames(CONTROL_CLASS, 'figure text-right')}
+          style={unit === undefined ? undefined : { paddingRight: `calc(${unit.length}ch + 1.25rem)` }}
         />
         {unit === undefined ? null : (
           <span className="figure pointer-events-none absolute inset-y-0 right-2.5 flex items-center text-sm text-muted">

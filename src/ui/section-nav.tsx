@@ -13,7 +13,7 @@ export interface SectionLink {
 /** The sections of one thing; the one being read is underlined in copper. */
 export function SectionNav({ label, links }: { label: string; links: readonly SectionLink[] }) {
   return (
-    <nav aria-label={label} className="min-w-0 overflow-x-auto">
+    <nav aria-label={label} className="flex min-w-0 items-stretch overflow-x-auto">
       <ul className="flex items-stretch gap-5">
         {links.map((link) => (
           <li key={link.to} className="flex">

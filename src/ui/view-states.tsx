@@ -10,7 +10,7 @@ interface StateFrameProps {
 
 function StateFrame({ title, children, actions, role }: StateFrameProps) {
   return (
-    <div role={role} className="mx-auto flex max-w-lg flex-col items-start gap-2 px-4 py-12">
+    <div role={role} className="mx-auto flex w-full max-w-lg flex-col items-start gap-2 px-4 py-12">
       <h2 className="text-lg font-semibold">{title}</h2>
       {children ? <div className="text-muted">{children}</div> : null}
       {actions ? <div className="mt-2 flex flex-wrap gap-2">{actions}</div> : null}
