@@ -32,14 +32,8 @@ export function BedTable(props: BedTableProps) {
       <Table caption="Beds">
         <TableHead>
           <HeaderCell>Bed</HeaderCell>
-          <HeaderCell numeric unit="Ω·m">
-            ρ
-          </HeaderCell>
-          <HeaderCell unit="95 %">Range</HeaderCell>
-          <HeaderCell numeric unit="m">
-            Thickness
-          </HeaderCell>
-          <HeaderCell unit="95 %">Range</HeaderCell>
+          <HeaderCell unit="Ω·m">ρ</HeaderCell>
+          <HeaderCell unit="m">Thickness</HeaderCell>
           <HeaderCell numeric unit="m">
             Base
           </HeaderCell>
@@ -55,7 +49,7 @@ export function BedTable(props: BedTableProps) {
       </Table>
       <p className="mt-1.5 text-sm text-muted">
         {props.result
-          ? `${DETERMINATION_SOURCE}.`
+          ? `Under each value its 95 % range. ${DETERMINATION_SOURCE}. A ticked value is held in the next fit.`
           : 'A model by hand has no ranges; fit it to see what the readings tell of it.'}
       </p>
     </div>
@@ -72,21 +66,23 @@ function BedRow(props: BedTableProps & { index: number }) {
       onFocus={() => onSelectBed(index)}
       onClick={() => onSelectBed(index)}
     >
-      <Cell className="whitespace-nowrap">
+      <Cell className="align-top leading-8 whitespace-nowrap">
         <BedSwatch resistivity={resistivity} /> <span className="figure">{index + 1}</span>
       </Cell>
       <ValueCells {...props} value={{ on: 'resistivity', index }} />
       {base === undefined ? (
-        <Cell colSpan={3} className="text-muted">
+        <Cell colSpan={2} className="align-top leading-8 text-muted">
           to any depth
         </Cell>
       ) : (
         <>
           <ValueCells {...props} value={{ on: 'thickness', index }} />
-          <Cell numeric>{formatLength(base)}</Cell>
+          <Cell numeric className="align-top leading-8">
+            {formatLength(base)}
+          </Cell>
         </>
       )}
-      <Cell className="text-right whitespace-nowrap">
+      <Cell className="text-right align-top whitespace-nowrap">
         <IconButton
           label={`Split bed ${index + 1} in two`}
           icon={<Plus aria-hidden size={15} />}
@@ -111,28 +107,26 @@ function ValueCells(props: BedTableProps & { value: ModelValue }) {
   const number = earth[on][index] ?? Number.NaN;
   const isHeld = held.includes(heldKey(value));
   return (
-    <>
-      <Cell numeric className="whitespace-nowrap">
-        <span className="inline-flex items-center gap-1.5">
-          {onHold ? (
-            <Checkbox
-              labelHidden
-              label={`Hold the ${words} in the next fit`}
-              title={isHeld ? 'Held in the next fit' : 'Hold in the next fit'}
-              checked={isHeld}
-              onChange={(event) => onHold(value, event.target.checked)}
-            />
-          ) : null}
-          <ValueCell
-            key={formatSignificant(number, 6)}
-            label={`${on === 'resistivity' ? 'Resistivity' : 'Thickness'} of bed ${index + 1}`}
-            value={number}
-            onCommit={(next) => onEdit(withValue(earth, value, next))}
+    <Cell className="align-top whitespace-nowrap">
+      <span className="flex min-h-8 items-center gap-1">
+        {onHold ? (
+          <Checkbox
+            labelHidden
+            label={`Hold the ${words} in the next fit`}
+            title={isHeld ? 'Held in the next fit' : 'Hold in the next fit'}
+            checked={isHeld}
+            onChange={(event) => onHold(value, event.target.checked)}
           />
-        </span>
-      </Cell>
-      <Cell>{result ? <RangeText result={result} value={value} heldInRun={heldInRun} /> : null}</Cell>
-    </>
+        ) : null}
+        <ValueCell
+          key={formatSignificant(number, 6)}
+          label={`${on === 'resistivity' ? 'Resistivity' : 'Thickness'} of bed ${index + 1}`}
+          value={number}
+          onCommit={(next) => onEdit(withValue(earth, value, next))}
+        />
+      </span>
+      {result ? <RangeText result={result} value={value} heldInRun={heldInRun} /> : null}
+    </Cell>
   );
 }
 
@@ -149,9 +143,9 @@ function RangeText({ result, value, heldInRun }: RangeTextProps) {
   const grade = determinationOf(factor, isHeld);
   const format = on === 'resistivity' ? formatResistivity : formatLength;
   return (
-    <span className="block leading-tight whitespace-nowrap">
+    <span className="block pb-1 pl-6 leading-tight">
       {isHeld ? null : (
-        <span className="figure block">
+        <span className="figure block text-sm">
           {formatRange(result.intervals[on][index] ?? [null, null], format)}
         </span>
       )}

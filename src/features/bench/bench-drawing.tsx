@@ -6,8 +6,7 @@ import { addressOf } from '../../app/addresses';
 import { SoundingCurve } from '../../charts/sounding-curve';
 import { chartReadings, type CurveData } from '../../runs/curve-of-run';
 import { letterOfRun } from '../../runs/run-title';
-import { SPACING_AXES } from '../../runs/spacing-label';
-import { SPREAD_LABELS } from '../../soundings/spread-words';
+import { SPACING_AXIS, SPREAD_NAMES } from '../../runs/spread-words';
 import { formatCount } from '../../ui/format';
 import { Notice } from '../../ui/notice';
 import { ExcludedList } from './excluded-list';
@@ -36,10 +35,10 @@ export function BenchDrawing({ sounding, data, run, curve }: BenchDrawingProps) 
         readings={readings}
         lines={curve.lines}
         chosenLine={curve.chosenLine}
-        spacingName={SPACING_AXES[sounding.spreadType]}
-        note={`Ω·m, ${SPREAD_LABELS[sounding.spreadType]}, ${formatCount(data.kept.length, 'reading')}`}
+        spacingName={SPACING_AXIS[sounding.spreadType]}
+        note={`Ω·m, ${SPREAD_NAMES[sounding.spreadType]}, ${formatCount(data.kept.length, 'reading')}`}
         subject={sounding.name}
-        heightClassName="h-[22rem] sm:h-[28rem] 2xl:h-[32rem]"
+        maxHeight={500}
       />
       <ExcludedList excluded={data.excluded} />
       {curve.fault === null ? null : (

@@ -89,6 +89,22 @@ export function BenchWorkspace({ sounding, revision, runs, run }: BenchWorkspace
             selectedBed={selectedBed}
             onSelectBed={setSelectedBed}
           />
+          {result?.layerCounts ? (
+            <section aria-labelledby="ladder-title">
+              <h2 id="ladder-title" className="mb-1 font-semibold">
+                How many beds
+              </h2>
+              <LayerLadder
+                counts={result.layerCounts}
+                onTakeUp={(earth) => model.edit(earth)}
+                onAdopt={
+                  can.run && run
+                    ? (earth) => fit({ ...run.settings, layers: earth.resistivity.length, start: earth })
+                    : undefined
+                }
+              />
+            </section>
+          ) : null}
         </div>
         <div className="min-w-0 border-t border-rule px-4 py-5 sm:px-7 lg:order-1 lg:border-t-0">
           <BenchGround
@@ -111,28 +127,12 @@ export function BenchWorkspace({ sounding, revision, runs, run }: BenchWorkspace
             <DoubtList result={result} excluded={run.excluded} />
           </section>
         ) : null}
-        {result?.layerCounts ? (
-          <section aria-labelledby="ladder-title">
-            <h2 id="ladder-title" className="mb-1 font-semibold">
-              How many beds
-            </h2>
-            <LayerLadder
-              counts={result.layerCounts}
-              onTakeUp={(earth) => model.edit(earth)}
-              onAdopt={
-                can.run && run
-                  ? (earth) => fit({ ...run.settings, layers: earth.resistivity.length, start: earth })
-                  : undefined
-              }
-            />
-          </section>
-        ) : null}
-        {run && !model.hand ? <RunFacts run={run} runs={runs} can={can} /> : null}
         {runs.length === 0 ? (
           <NoRunsNote can={can} />
         ) : (
           <Ledger soundingId={sounding.id} runs={runs} shownRunId={run?.id ?? null} can={can} onOpen={open} />
         )}
+        {run && !model.hand ? <RunFacts run={run} runs={runs} can={can} /> : null}
       </div>
     </div>
   );

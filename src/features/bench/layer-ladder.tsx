@@ -34,7 +34,7 @@ export function LayerLadder({ counts, onTakeUp, onAdopt }: LayerLadderProps) {
               <Cell numeric>{formatFixed(count.chi2PerReading, 2)}</Cell>
               <Cell numeric>{formatFixed(count.bic, 1)}</Cell>
               <Cell>{NOISE_WORDS[`${count.withinNoise}`]}</Cell>
-              <Cell className="text-right">
+              <Cell className="text-right whitespace-nowrap">
                 {count.chosen ? (
                   <span className="text-sm font-semibold">chosen</span>
                 ) : (

@@ -36,7 +36,7 @@ export function ValueCell({ label, value, onCommit }: ValueCellProps) {
         if (event.key === 'Enter') commit();
         if (event.key === 'Escape') setText(null);
       }}
-      className="figure min-h-7 w-20 rounded border border-transparent bg-transparent px-1.5 text-right hover:border-edge focus-visible:border-edge focus-visible:bg-sheet aria-invalid:border-rust aria-invalid:bg-rust-tint touch:min-h-11"
+      className="figure min-h-7 w-20 rounded border border-transparent bg-transparent px-1.5 hover:border-edge focus-visible:border-edge focus-visible:bg-sheet aria-invalid:border-rust aria-invalid:bg-rust-tint touch:min-h-11"
     />
   );
 }

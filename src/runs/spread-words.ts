@@ -4,6 +4,16 @@ import { formatLength, formatSignificant, withUnit } from '../ui/format';
 
 const metres = (length: number): string => withUnit(formatLength(length), 'm');
 
+/** Within a sentence. */
+export const SPREAD_NAMES: Record<SpreadType, string> = {
+  schlumberger: 'Schlumberger',
+  'half-schlumberger': 'half-Schlumberger',
+  wenner: 'Wenner',
+  'pole-pole': 'pole–pole',
+  'dipole-dipole': 'dipole–dipole',
+  electrodes: 'four electrodes',
+};
+
 /** A reading as the crew calls it: "AB/2 6.8 m". */
 export function spacingLabel(spread: FitReading['spread']): string {
   switch (spread.type) {
@@ -23,7 +33,7 @@ export function spacingLabel(spread: FitReading['spread']): string {
 }
 
 /** Name of a curve's x axis: AB/2 itself where the spread has one, else the AB/2 that reaches as deep. */
-export const SPACING_AXES: Record<SpreadType, string> = {
+export const SPACING_AXIS: Record<SpreadType, string> = {
   schlumberger: 'AB/2, m',
   'half-schlumberger': 'AO, m',
   wenner: 'AB/2 (1.5 a), m',
