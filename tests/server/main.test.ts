@@ -17,7 +17,7 @@ afterEach(() => {
 interface WebProcess {
   child: ChildProcess;
   url: string;
-  output(): string;
+  output: () => string;
 }
 
 function startOn(port: number): WebProcess {
