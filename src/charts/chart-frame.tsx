@@ -54,7 +54,7 @@ export function ChartFrame(props: ChartFrameProps) {
           {view === 'drawing' ? actions : null}
           <Segmented label={`${title}: show as`} value={view} options={VIEWS} onChange={setView} />
           <SaveMenu
-            name={fileNameOf(subject ? `${title} ${subject}` : title)}
+            title={subject ? `${title}, ${subject}` : title}
             table={table}
             findDrawing={() => body.current?.querySelector('svg') ?? null}
           />
@@ -78,17 +78,18 @@ export function ChartFrame(props: ChartFrameProps) {
 }
 
 interface SaveMenuProps {
-  name: string;
+  title: string;
   table: ChartTable;
   findDrawing: () => SVGSVGElement | null;
 }
 
-function SaveMenu({ name, table, findDrawing }: SaveMenuProps) {
-  const { paper } = useChartPalette();
+function SaveMenu({ title, table, findDrawing }: SaveMenuProps) {
+  const { paper, ink } = useChartPalette();
+  const name = fileNameOf(title);
   const save = async (kind: 'png' | 'svg') => {
     const svg = findDrawing();
     if (!svg) throw new Error('There is no drawing yet.');
-    const drawing = { svg, background: paper };
+    const drawing = { svg, title, background: paper, ink };
     const content =
       kind === 'png'
         ? await drawingToPng(drawing)

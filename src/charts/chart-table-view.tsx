@@ -20,7 +20,7 @@ export function ChartTableView({ caption, table }: { caption: string; table: Cha
         {table.rows.map((row, rowIndex) => (
           <TableRow key={rowIndex}>
             {table.columns.map((column, index) => (
-              <Cell key={column.label} numeric={isNumeric(index)}>
+              <Cell key={column.label} numeric={isNumeric(index)} className="whitespace-nowrap">
                 {cellText(row[index] ?? null, column)}
               </Cell>
             ))}

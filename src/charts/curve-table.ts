@@ -9,9 +9,9 @@ export function curveTable(
   spacingName: string,
 ): ChartTable {
   const [label = 'Spacing', unit = 'm'] = spacingName.split(', ');
-  const told = lines.filter(
-    (line) => line.kind !== 'ghost' && (line.predicted ?? line.residuals) !== undefined,
-  );
+  const told = lines
+    .filter((line) => line.kind !== 'ghost' && (line.predicted ?? line.residuals) !== undefined)
+    .toSorted((first, second) => first.letter.localeCompare(second.letter, 'en'));
   const nameOf = (line: CurveLine) => (line.letter === '' ? line.name : `run ${line.letter}`);
   const columns: ChartColumn[] = [
     { label, unit, format: (value) => formatSignificant(value) },

@@ -58,9 +58,11 @@ export function DepthColumns(props: DepthColumnsProps) {
   const [kind, setKind] = useState<DepthScaleKind>('linear');
   const [ownSelected, setOwnSelected] = useState<DepthColumnsProps['selected']>(null);
   const { ref, size } = useBoxSize<HTMLDivElement>();
+  // While a boundary is dragged the depths stay where they are; else the scale would run away from the hand.
+  const [heldExtent, setHeldExtent] = useState<ReturnType<typeof depthExtent> | null>(null);
   const scale = useMemo(
-    () => depthScale(kind, depthExtent(columns, borehole), height),
-    [kind, columns, borehole, height],
+    () => depthScale(kind, heldExtent ?? depthExtent(columns, borehole), height),
+    [kind, heldExtent, columns, borehole, height],
   );
   const table = useMemo(() => groundTable(columns), [columns]);
   const selected = props.selected === undefined ? ownSelected : props.selected;
@@ -83,7 +85,14 @@ export function DepthColumns(props: DepthColumnsProps) {
     >
       <div ref={ref} className="min-w-0 overflow-x-auto">
         {size.width > 0 ? (
-          <svg width={width} height={height + head + FOOT} className="block select-none">
+          <svg
+            width={width}
+            height={height + head + FOOT}
+            onPointerDown={() => setHeldExtent(depthExtent(columns, borehole))}
+            onPointerUp={() => setHeldExtent(null)}
+            onPointerCancel={() => setHeldExtent(null)}
+            className="block select-none"
+          >
             <g transform={`translate(0 ${head})`}>
               <DepthAxis scale={scale} x={AXIS} width={width - AXIS} palette={palette} />
               {columns.map((column, index) => (

@@ -33,7 +33,9 @@ export function formatResidual(residual: number): string {
 /** One sentence for a screen reader. */
 export function readingSentence(facts: readonly Fact[]): string {
   return facts
-    .map((fact, index) => (index === 0 ? fact.value : `${fact.label.toLowerCase()} ${fact.value}`))
+    .map((fact, index) =>
+      index === 0 ? fact.value : `${fact.label.charAt(0).toLowerCase()}${fact.label.slice(1)} ${fact.value}`,
+    )
     .join(', ')
     .replaceAll('Ω·m', 'ohm metres')
     .replaceAll('σ', 'standard errors');

@@ -19,7 +19,7 @@ export interface SoundingCurveProps {
   note?: string;
   /** Name of the sounding, for file names. */
   subject?: string;
-  /** Greatest height of the drawing, px; a narrow one is lower. */
+  /** Greatest height of the drawing, px; a narrow one is lower. Two thirds of the window unless given. */
   maxHeight?: number;
   className?: string;
   /** The reading that is walked to or pressed, by its index. */
@@ -35,7 +35,7 @@ export function SoundingCurve(props: SoundingCurveProps) {
     title = 'Apparent resistivity',
     className,
   } = props;
-  const { maxHeight = 470, onFocusReading } = props;
+  const { maxHeight = tallest(), onFocusReading } = props;
   const palette = useChartPalette();
   const { ref, size } = useBoxSize<HTMLDivElement>();
   const [focused, setFocused] = useState<number | null>(null);
@@ -77,7 +77,7 @@ export function SoundingCurve(props: SoundingCurveProps) {
       <div
         ref={ref}
         aria-hidden
-        className="relative min-w-0 rounded peer-focus-visible:outline-2 peer-focus-visible:outline-water"
+        className="relative min-w-0 max-w-[80rem] rounded peer-focus-visible:outline-2 peer-focus-visible:outline-water"
         style={{ height }}
       >
         {size.width > 0 ? (
@@ -95,13 +95,35 @@ export function SoundingCurve(props: SoundingCurveProps) {
           />
         ) : null}
       </div>
-      {shown ? (
-        <p className="pl-[58px] text-sm text-muted">
-          {shown.letter ? `Run ${shown.letter}: ` : ''}misfit of each reading in its own standard error; above
-          0 the model reads higher.
-        </p>
-      ) : null}
+      <CurveReadout reading={readings[focusedReading ?? -1]} index={focusedReading} shown={shown} />
     </ChartFrame>
+  );
+}
+
+const tallest = () => Math.max(420, Math.round(window.innerHeight * 0.66));
+
+interface CurveReadoutProps {
+  reading: CurveReading | undefined;
+  index: number | null;
+  shown: CurveLine | null;
+}
+
+/** One line under the drawing: the reading that is walked to, or what the strip shows. */
+function CurveReadout({ reading, index, shown }: CurveReadoutProps) {
+  if (reading !== undefined && index !== null)
+    return (
+      <p aria-hidden className="figure pt-1 text-sm">
+        {readingFacts(reading, index, shown)
+          .map(({ label, value }, place) => (place === 0 ? value : `${label} ${value}`))
+          .join(' \u00b7 ')}
+      </p>
+    );
+  if (!shown) return null;
+  return (
+    <p className="pt-1 text-sm text-muted">
+      {shown.letter ? `Run ${shown.letter}: m` : 'M'}isfit of each reading in its own standard error; above 0
+      the model reads higher.
+    </p>
   );
 }
 

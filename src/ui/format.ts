@@ -53,11 +53,11 @@ export function formatPercent(value: number, decimals = 1): string {
 export type Bounds = readonly [number | null, number | null];
 
 /**
- * "1.2–3.4", "at least 1.2", "at most 3.4" or "not bounded". Each end has two significant figures and as many more as
- * it takes to tell the ends apart: 134–145, 3.9–36.
+ * "1.2–3.4", "at least 1.2", "at most 3.4" or "not bounded". Each end has two significant figures (three from 100 on) and
+ * as many more as it takes to tell the ends apart: 134–145, 3.9–36, 138.2–138.9.
  */
 export function formatRange([low, high]: Bounds, formatValue?: (value: number) => string): string {
-  const one = formatValue ?? ((value: number) => formatSignificant(value, 2));
+  const one = formatValue ?? ((value: number) => formatSignificant(value, leastDigits(value)));
   if (low === null) return high === null ? NOT_BOUNDED : `at most ${one(high)}`;
   if (high === null) return `at least ${one(low)}`;
   const end = formatValue ?? ((value: number) => formatSignificant(value, rangeDigits(value, high - low)));
@@ -112,12 +112,14 @@ export function formatCount(count: number, one: string, many = `${one}s`): strin
   return `${groupDigits(String(count))} ${count === 1 ? one : many}`;
 }
 
-/** Significant figures of one end so that the last of them is at most half the width of the range: 2 to 5. */
+/** Significant figures of one end so that the last of them is at most half the width of the range, 5 at most. */
 function rangeDigits(end: number, width: number): number {
   if (end === 0 || width <= 0) return 3;
   const needed = Math.floor(Math.log10(Math.abs(end))) - Math.floor(Math.log10(width / 2)) + 1;
-  return Math.min(5, Math.max(2, needed));
+  return Math.min(5, Math.max(leastDigits(end), needed));
 }
+
+const leastDigits = (end: number) => (Math.abs(end) < 99.5 ? 2 : 3);
 
 function groupDigits(text: string): string {
   const [whole = '', decimals] = text.split('.');
