@@ -56,7 +56,8 @@ function Column({ sounding, run, model, selectedBed, onSelectBed }: Omit<BenchGr
   if (!column || !earth) return null;
   return (
     <DepthColumn
-      column={{ ...column, letter: '', lockedBeds: bedsHeld(model.held) }}
+      // One id for run and hand, so that the drawing keeps its focus and its drag when the first edit is made.
+      column={{ ...column, id: 'ground', letter: '', lockedBeds: bedsHeld(model.held) }}
       title="Ground"
       subject={sounding.name}
       height={520}
