@@ -119,7 +119,7 @@ describe('accepting', () => {
     const answers = await Promise.all(
       [1, 2].map(() => accept(token, { name: 'Racer', password: TEST_PASSWORD })),
     );
-    const statuses = answers.map((answer) => answer.status).toSorted();
+    const statuses = answers.map((answer) => answer.status).toSorted((a, b) => a - b);
     expect(statuses[0]).toBe(200);
     expect([401, 404, 409]).toContain(statuses[1]);
     expect(await server.db('app_user').where({ email: 'racer@example.test' })).toHaveLength(1);
@@ -164,5 +164,5 @@ test('sending, accepting and revoking stand in the audit trail', async () => {
     .where({ survey_id: survey.id })
     .distinct('action')
     .pluck('action');
-  expect(actions.toSorted()).toEqual(['invitation.accepted', 'invitation.revoked', 'invitation.sent']);
+  expect(new Set(actions)).toEqual(new Set(['invitation.accepted', 'invitation.revoked', 'invitation.sent']));
 });

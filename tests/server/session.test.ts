@@ -158,7 +158,8 @@ describe('sessions', () => {
     if (here.user) await server.signIn(here.user);
     const answer = await here.get('/sessions');
     const { items } = sessionListSchema.parse(answer.body);
-    expect(items.map((item) => item.current).toSorted()).toEqual([false, true]);
+    expect(items).toHaveLength(2);
+    expect(items.filter((item) => item.current)).toHaveLength(1);
     const ids = await server.db('session').where({ user_id: here.user?.id }).pluck<string[]>('id');
     for (const id of ids) expect(JSON.stringify(answer.body)).not.toContain(id);
   });
