@@ -55,7 +55,10 @@ export function transformAtNodes(
     for (let g = 0; g < nodes; g++) {
       const e = decay[g]!;
       const t = transform[g]!;
-      transform[g] = (t * (2 + e) - rho * e) / (2 + e - t * e * perRho);
+      const over = 2 + e;
+      // the same operations as below, so that both kernels give the same bits
+      const perD = 1 / (over - t * e * perRho);
+      transform[g] = (t * over - rho * e) * perD;
     }
   }
 }
