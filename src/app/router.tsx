@@ -18,6 +18,7 @@ const PAGES: Partial<Record<RouteName, PageLoader>> = {
   survey: async () => (await import('../features/surveys/survey-overview-page')).SurveyOverviewPage,
   surveySoundings: async () => (await import('../features/soundings/soundings-page')).SoundingsPage,
   bench: async () => (await import('../features/bench/bench-page')).BenchPage,
+  readings: async () => (await import('../features/readings/field-sheet-page')).FieldSheetPage,
   settings: async () => (await import('../features/account/settings-page')).SettingsPage,
 };
 

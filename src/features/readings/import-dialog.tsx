@@ -1,0 +1,106 @@
+import { useState } from 'react';
+import type { ImportMapping, ImportPreview, Revision } from '../../../server/contract/readings';
+import type { Sounding } from '../../../server/contract/soundings';
+import { formFaults } from '../../api/form-faults';
+import { Button } from '../../ui/button';
+import { Dialog } from '../../ui/dialog';
+import { formatCount } from '../../ui/format';
+import { FormErrors } from '../../ui/form-errors';
+import { Notice } from '../../ui/notice';
+import { showToast } from '../../ui/show-toast';
+import { Skeleton } from '../../ui/view-states';
+import { FilePicker } from './file-picker';
+import { ImportPreviewView } from './import-preview-view';
+import { importReadiness } from './import-readiness';
+import { useImport, usePreviewImport } from './reading-mutations';
+
+interface ImportDialogProps {
+  sounding: Sounding;
+  hasDraft: boolean;
+  onImported: (revision: Revision) => void;
+  onClose: () => void;
+}
+
+/** Reads in a file: shown first with every fault, stored only when a person says what to take. */
+export function ImportDialog({ sounding, hasDraft, onImported, onClose }: ImportDialogProps) {
+  const [file, setFile] = useState<File | null>(null);
+  const [shown, setShown] = useState<ImportPreview | null>(null);
+  const [unitsConfirmed, setUnitsConfirmed] = useState(false);
+  const preview = usePreviewImport(sounding.id);
+  const store = useImport(sounding.id);
+  const look = (chosen: File, mapping: ImportMapping | null) => {
+    setFile(chosen);
+    store.reset();
+    if (mapping === null) {
+      setShown(null);
+      setUnitsConfirmed(false);
+    }
+    preview.mutate({ file: chosen, mapping }, { onSuccess: setShown });
+  };
+  const take = (accept: 'all' | 'good-rows') => {
+    if (!file || !shown) return;
+    store.mutate(
+      { file, mapping: shown.mapping, accept },
+      {
+        onSuccess: (revision) => {
+          onImported(revision);
+          showToast({
+            title: `${formatCount(revision.readings.length, 'reading')} read in as revision ${revision.number}`,
+            kind: 'good',
+          });
+          onClose();
+        },
+      },
+    );
+  };
+  const ready = shown && !preview.isPending ? importReadiness(shown, unitsConfirmed) : null;
+  return (
+    <Dialog
+      open
+      onOpenChange={(open) => !open && onClose()}
+      width="wide"
+      title="Read in a file"
+      description="Text with one reading a line: CSV or any table saved as text. Nothing is stored before you choose below."
+      actions={
+        <>
+          <Button onClick={onClose}>Import nothing</Button>
+          {shown && shown.faults.length > 0 ? (
+            <Button loading={store.isPending} disabled={!ready?.goodRows} onClick={() => take('good-rows')}>
+              Import the {shown.readings.length} good rows
+            </Button>
+          ) : null}
+          {shown ? (
+            <Button kind="main" loading={store.isPending} disabled={!ready?.all} onClick={() => take('all')}>
+              Import all {formatCount(shown.rows.length, 'reading')}
+            </Button>
+          ) : null}
+        </>
+      }
+    >
+      <div className="flex flex-col gap-5">
+        <FilePicker fileName={file?.name ?? null} onPick={(picked) => look(picked, null)} />
+        {hasDraft ? (
+          <Notice tone="caution">
+            The sheet holds rows that are not saved. Reading in a file puts its readings in their place; undo
+            brings them back while the page is open.
+          </Notice>
+        ) : null}
+        <FormErrors title="Not read in" faults={[...formFaults(preview.error), ...formFaults(store.error)]} />
+        {file && preview.isPending && !shown ? <Skeleton className="w-2/3" /> : null}
+        {file && shown ? (
+          <ImportPreviewView
+            preview={shown}
+            spreadType={sounding.spreadType}
+            isStale={preview.isPending}
+            unitsConfirmed={unitsConfirmed}
+            onConfirmUnits={setUnitsConfirmed}
+            onMapping={(mapping) => {
+              setShown({ ...shown, mapping });
+              look(file, mapping);
+            }}
+          />
+        ) : null}
+      </div>
+    </Dialog>
+  );
+}

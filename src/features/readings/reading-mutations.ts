@@ -1,0 +1,87 @@
+import { useMutation, useQueryClient, type QueryClient } from '@tanstack/react-query';
+import { useCallback } from 'react';
+import {
+  draftSchema,
+  importPreviewSchema,
+  revisionSchema,
+  type FieldSheet,
+  type ImportMapping,
+} from '../../../server/contract/readings';
+import { sendForm, sendJson, sendJsonWithStatus } from '../../api/http';
+import { soundingKeys } from '../../api/sounding-queries';
+import { surveyKeys } from '../../api/survey-queries';
+import type { Draft } from './draft-keeper';
+
+async function afterNewReadings(client: QueryClient, soundingId: string): Promise<void> {
+  await Promise.all([
+    client.invalidateQueries({ queryKey: soundingKeys.detail(soundingId) }),
+    client.invalidateQueries({ queryKey: soundingKeys.lists() }),
+    client.invalidateQueries({ queryKey: surveyKeys.all }),
+  ]);
+}
+
+/** Keeps the draft on the server, and in what was fetched, so that coming back to the page shows it. */
+export function useSendDraft(soundingId: string) {
+  const client = useQueryClient();
+  return useCallback(
+    async (draft: Draft): Promise<void> => {
+      const kept = await sendJson('PUT', `/soundings/${soundingId}/reading-draft`, draft, draftSchema);
+      client.setQueryData<FieldSheet>(soundingKeys.fieldSheet(soundingId), (sheet) =>
+        sheet ? { ...sheet, draft: kept } : sheet,
+      );
+    },
+    [client, soundingId],
+  );
+}
+
+export function useDiscardDraft(soundingId: string) {
+  const client = useQueryClient();
+  return useMutation({
+    mutationFn: () => sendJson('DELETE', `/soundings/${soundingId}/reading-draft`, undefined, null),
+    onSuccess: () => client.invalidateQueries({ queryKey: soundingKeys.fieldSheet(soundingId) }),
+  });
+}
+
+/** Makes a revision; `isNew` is false when the same content was saved before and that revision serves again. */
+export function useSaveRevision(soundingId: string) {
+  const client = useQueryClient();
+  return useMutation({
+    mutationFn: async (body: Draft) => {
+      const path = `/soundings/${soundingId}/revisions`;
+      const { status, data } = await sendJsonWithStatus('POST', path, body, revisionSchema);
+      return { isNew: status === 201, revision: data };
+    },
+    onSuccess: () => afterNewReadings(client, soundingId),
+  });
+}
+
+export interface ImportRequest {
+  file: File;
+  mapping: ImportMapping | null;
+}
+
+function importForm({ file, mapping }: ImportRequest): FormData {
+  const form = new FormData();
+  form.set('file', file);
+  if (mapping) form.set('mapping', JSON.stringify(mapping));
+  return form;
+}
+
+/** What a file would give; nothing is stored. */
+export const usePreviewImport = (soundingId: string) =>
+  useMutation({
+    mutationFn: (request: ImportRequest) =>
+      sendForm(`/soundings/${soundingId}/import-previews`, importForm(request), importPreviewSchema),
+  });
+
+export function useImport(soundingId: string) {
+  const client = useQueryClient();
+  return useMutation({
+    mutationFn: ({ accept, ...request }: ImportRequest & { accept: 'all' | 'good-rows' }) => {
+      const form = importForm(request);
+      form.set('accept', accept);
+      return sendForm(`/soundings/${soundingId}/imports`, form, revisionSchema);
+    },
+    onSuccess: () => afterNewReadings(client, soundingId),
+  });
+}
