@@ -17,6 +17,8 @@ export interface BoundaryMarksProps {
   barX: number;
   palette: ChartPalette;
   onMove?: MoveBoundary | undefined;
+  /** A drag has begun or ended: meanwhile the depth scale must stand still. */
+  onHold: (isHeld: boolean) => void;
 }
 
 /** The 95 % interval of each boundary as a whisker along the bar's edge, and its handle where it can be moved. */
@@ -30,10 +32,8 @@ export function BoundaryMarks({
 }: BoundaryMarksProps): ReactNode {
   return boundaries.map((boundary) => (
     <g key={boundary.index}>
-      <Whisker boundary={boundary} scale={scale} x={x} palette={palette} />
-      {onMove ? (
-        <Handle boundary={boundary} scale={scale} x={x} barX={barX} palette={palette} onMove={onMove} />
-      ) : null}
+      <Whisker {...place} boundary={boundary} />
+      {onMove ? <Handle {...place} boundary={boundary} onMove={onMove} /> : null}
     </g>
   ));
 }
@@ -69,7 +69,7 @@ interface HandleProps extends Omit<BoundaryMarksProps, 'boundaries'> {
   onMove: MoveBoundary;
 }
 
-function Handle({ boundary, scale, x, barX, palette, onMove }: HandleProps) {
+function Handle({ boundary, scale, x, barX, palette, onMove, onHold }: HandleProps) {
   const drag = useRef<{ pointer: number; offset: number; gesture: string } | null>(null);
   const y = scale.yOf(boundary.depth);
   const localY = (event: PointerEvent<SVGGElement>) => {
@@ -80,6 +80,7 @@ function Handle({ boundary, scale, x, barX, palette, onMove }: HandleProps) {
   };
   const onPointerDown = (event: PointerEvent<SVGGElement>) => {
     event.currentTarget.setPointerCapture(event.pointerId);
+    onHold(true);
     drag.current = {
       pointer: event.pointerId,
       offset: localY(event) - y,
@@ -89,10 +90,12 @@ function Handle({ boundary, scale, x, barX, palette, onMove }: HandleProps) {
   const onPointerMove = (event: PointerEvent<SVGGElement>) => {
     const held = drag.current;
     if (held?.pointer !== event.pointerId) return;
-    onMove(boundary.index, scale.depthAt(Math.max(0, localY(event) - held.offset)), held.gesture);
+    const wanted = Math.min(scale.height, Math.max(0, localY(event) - held.offset));
+    onMove(boundary.index, scale.depthAt(wanted), held.gesture);
   };
   const release = () => {
     drag.current = null;
+    onHold(false);
   };
   const onKeyDown = (event: KeyboardEvent) => {
     const direction = { ArrowDown: 1, ArrowUp: -1, ArrowRight: 1, ArrowLeft: -1 }[event.key];

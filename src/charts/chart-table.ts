@@ -19,7 +19,7 @@ export function cellText(cell: ChartCell, column: ChartColumn): string {
   return typeof cell === 'number' ? (column.format?.(cell) ?? String(cell)) : cell;
 }
 
-/** RFC 4180: comma, double quotes, CRLF; numbers with a point and all their digits. */
+/** RFC 4180: comma, double quotes, CRLF; numbers with a point and twelve significant figures. */
 export function tableToCsv({ columns, rows }: ChartTable): string {
   const head = columns.map(({ label, unit }) => (unit ? `${label} (${unit})` : label));
   return [head, ...rows].map((row) => row.map(csvField).join(',')).join('\r\n') + '\r\n';
@@ -27,7 +27,7 @@ export function tableToCsv({ columns, rows }: ChartTable): string {
 
 function csvField(cell: ChartCell): string {
   if (cell === null) return '';
-  if (typeof cell === 'number') return String(cell);
+  if (typeof cell === 'number') return String(Number(cell.toPrecision(12)));
   // A text that a spreadsheet would run as a formula is kept a text.
   const safe = /^[=+\-@\t\r]/.test(cell) ? `'${cell}` : cell;
   return /[",\r\n]/.test(safe) ? `"${safe.replaceAll('"', '""')}"` : safe;

@@ -60,10 +60,10 @@ export function DepthColumns(props: DepthColumnsProps) {
   const { ref, size } = useBoxSize<HTMLDivElement>();
   // While a boundary is dragged the depths stay where they are; else the scale would run away from the hand.
   const [heldExtent, setHeldExtent] = useState<ReturnType<typeof depthExtent> | null>(null);
-  const scale = useMemo(
-    () => depthScale(kind, heldExtent ?? depthExtent(columns, borehole), height),
-    [kind, heldExtent, columns, borehole, height],
-  );
+  const ownExtent = useMemo(() => depthExtent(columns, borehole), [columns, borehole]);
+  const [heldExtent, setHeldExtent] = useState<typeof ownExtent | null>(null);
+  const extent = heldExtent ?? ownExtent;
+  const scale = useMemo(() => depthScale(kind, extent, height), [kind, extent, height]);
   const table = useMemo(() => groundTable(columns), [columns]);
   const selected = props.selected === undefined ? ownSelected : props.selected;
   const select = (columnId: string, bed: number) => {
@@ -106,6 +106,7 @@ export function DepthColumns(props: DepthColumnsProps) {
                   selectedBed={selected?.columnId === column.id ? selected.bed : null}
                   onSelectBed={(bed) => select(column.id, bed)}
                   onMoveBoundary={props.onMoveBoundary}
+                  onHold={(isHeld) => setHeldExtent(isHeld ? extent : null)}
                   onScaleResistivity={props.onScaleResistivity}
                 />
               ))}
