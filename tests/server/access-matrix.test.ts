@@ -6,11 +6,20 @@ import { createTestServer, type Client } from '../setup/server';
 import { ROLES, WHO, type AccessRow, type Asked, type Who } from './access-matrix/access-row';
 import { accountRows } from './access-matrix/account';
 import { adminRows } from './access-matrix/admin';
+import { interpretationRows } from './access-matrix/interpretations';
 import { readingRows } from './access-matrix/readings';
+import { runRows } from './access-matrix/runs';
 import { surveyRows } from './access-matrix/surveys';
 
 /** Each feature's table; an endpoint without a row here fails below. */
-const rows: AccessRow[] = [...accountRows, ...adminRows, ...surveyRows, ...readingRows];
+const rows: AccessRow[] = [
+  ...accountRows,
+  ...adminRows,
+  ...surveyRows,
+  ...readingRows,
+  ...runRows,
+  ...interpretationRows,
+];
 
 const server = await createTestServer();
 const clients = new Map<Who, Client>();
