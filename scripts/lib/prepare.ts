@@ -3,8 +3,8 @@ import { PlainError } from './plain-error';
 
 interface Prepared {
   migrated: string[];
-  /** Present when the demo survey is in the database. */
-  demo?: { loaded: boolean; accounts: { email: string; password: string; role: string }[] };
+  /** null when no demo is asked for */
+  demo: { loaded: boolean; accounts: { email: string; password: string; role: string }[] } | null;
 }
 
 const lineOf = (text: string) => text.slice(text.lastIndexOf('\n') + 1);
@@ -22,7 +22,7 @@ export function describePrepared({ migrated, demo }: Prepared): string {
 }
 
 export function printAccounts({ demo }: Prepared): void {
-  if (demo === undefined || demo.accounts.length === 0) return;
+  if (demo === null || demo.accounts.length === 0) return;
   const width = Math.max(...demo.accounts.map(({ email }) => email.length));
   console.log('\n  Demo accounts');
   for (const { email, password, role } of demo.accounts)

@@ -3,7 +3,7 @@ import { recordAudit } from '../access/audit';
 import { getSurveyAccess, requireCan } from '../access/survey-access';
 import type { Borehole, writeBoreholeSchema } from '../contract/surveys';
 import { AppError } from '../errors';
-import type { Context } from '../http/context';
+import type { Work } from '../http/context';
 import { presentBorehole } from './borehole-presenter';
 import {
   getBoreholeRow,
@@ -15,19 +15,16 @@ import {
 
 type BoreholeFields = z.output<typeof writeBoreholeSchema>;
 
-export async function listBoreholes(
-  { db, actor }: Context,
-  surveyId: string,
-): Promise<{ items: Borehole[] }> {
+export async function listBoreholes({ db, actor }: Work, surveyId: string): Promise<{ items: Borehole[] }> {
   await getSurveyAccess(db, actor, surveyId);
   return { items: (await listBoreholeRows(db, actor, surveyId)).map(presentBorehole) };
 }
 
-export const getBorehole = async ({ db, actor }: Context, id: string): Promise<Borehole> =>
+export const getBorehole = async ({ db, actor }: Work, id: string): Promise<Borehole> =>
   presentBorehole(await getBoreholeRow(db, actor, id));
 
 export async function createBorehole(
-  { db, actor }: Context,
+  { db, actor }: Work,
   surveyId: string,
   fields: BoreholeFields,
 ): Promise<Borehole> {
@@ -46,7 +43,7 @@ export async function createBorehole(
 }
 
 export async function replaceBorehole(
-  { db, actor }: Context,
+  { db, actor }: Work,
   id: string,
   version: number,
   fields: BoreholeFields,

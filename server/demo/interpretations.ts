@@ -13,7 +13,12 @@ export const INTERPRETATIONS: readonly DemoInterpretation[] = [
     beds: [
       { ground: 'dry silty gravel', role: 'cover', confidence: 'well-supported', otherCandidates: '' },
       { ground: 'clay with stones', role: 'aquitard', confidence: 'likely', otherCandidates: 'silt' },
-      { ground: 'sandy gravel, water-bearing', role: 'aquifer', confidence: 'well-supported', otherCandidates: '' },
+      {
+        ground: 'sandy gravel, water-bearing',
+        role: 'aquifer',
+        confidence: 'well-supported',
+        otherCandidates: '',
+      },
       { ground: 'crystalline rock', role: 'basement', confidence: 'well-supported', otherCandidates: '' },
     ],
     waterLevelDepthM: 6.4,
@@ -29,7 +34,12 @@ export const INTERPRETATIONS: readonly DemoInterpretation[] = [
     beds: [
       { ground: 'sandy silt, dry', role: 'cover', confidence: 'well-supported', otherCandidates: '' },
       { ground: 'grey clay', role: 'aquitard', confidence: 'likely', otherCandidates: 'silty sand' },
-      { ground: 'gravel and coarse sand, water-bearing', role: 'aquifer', confidence: 'well-supported', otherCandidates: '' },
+      {
+        ground: 'gravel and coarse sand, water-bearing',
+        role: 'aquifer',
+        confidence: 'well-supported',
+        otherCandidates: '',
+      },
       { ground: 'marl', role: 'aquitard', confidence: 'likely', otherCandidates: 'clay; brackish gravel' },
     ],
     waterLevelDepthM: 3.9,
@@ -48,8 +58,18 @@ export const INTERPRETATIONS: readonly DemoInterpretation[] = [
     beds: [
       { ground: 'dry gravelly soil', role: 'cover', confidence: 'well-supported', otherCandidates: '' },
       { ground: 'clay, thin', role: 'aquitard', confidence: 'possible', otherCandidates: 'silt, thicker' },
-      { ground: 'gravel and sand', role: 'aquifer', confidence: 'likely', otherCandidates: 'weathered rock; dry sand' },
-      { ground: 'marl', role: 'aquitard', confidence: 'possible', otherCandidates: 'clay; gravel with brackish water' },
+      {
+        ground: 'gravel and sand',
+        role: 'aquifer',
+        confidence: 'likely',
+        otherCandidates: 'weathered rock; dry sand',
+      },
+      {
+        ground: 'marl',
+        role: 'aquitard',
+        confidence: 'possible',
+        otherCandidates: 'clay; gravel with brackish water',
+      },
     ],
     waterLevelDepthM: null,
     end: 'in-review',
@@ -63,8 +83,18 @@ export const INTERPRETATIONS: readonly DemoInterpretation[] = [
       'the contact. The resistivity of the lowest bed is too low for marl.',
     beds: [
       { ground: 'sandy soil', role: 'cover', confidence: 'well-supported', otherCandidates: '' },
-      { ground: 'sand and gravel, fresh water', role: 'aquifer', confidence: 'well-supported', otherCandidates: '' },
-      { ground: 'sand and gravel, brackish water', role: 'saline', confidence: 'well-supported', otherCandidates: '' },
+      {
+        ground: 'sand and gravel, fresh water',
+        role: 'aquifer',
+        confidence: 'well-supported',
+        otherCandidates: '',
+      },
+      {
+        ground: 'sand and gravel, brackish water',
+        role: 'saline',
+        confidence: 'well-supported',
+        otherCandidates: '',
+      },
     ],
     waterLevelDepthM: 1.9,
     end: 'in-review',
@@ -78,7 +108,12 @@ export const INTERPRETATIONS: readonly DemoInterpretation[] = [
       'neither asks for such a bed nor forbids one.',
     beds: [
       { ground: 'silt and sand', role: 'cover', confidence: 'likely', otherCandidates: 'clayey gravel' },
-      { ground: 'gravel or weathered rock', role: 'unknown', confidence: 'possible', otherCandidates: 'both' },
+      {
+        ground: 'gravel or weathered rock',
+        role: 'unknown',
+        confidence: 'possible',
+        otherCandidates: 'both',
+      },
       { ground: 'crystalline rock', role: 'basement', confidence: 'likely', otherCandidates: '' },
     ],
     waterLevelDepthM: null,

@@ -33,3 +33,6 @@ export interface PublicContext extends Services {
 export interface Context extends PublicContext {
   readonly actor: Actor;
 }
+
+/** What a service of the domain needs of a request: who asks, and what it reads, writes and announces with. */
+export type Work = Pick<Context, 'actor' | 'db' | 'jobs' | 'runEvents'>;

@@ -9,7 +9,7 @@ import type {
   updateInterpretationSchema,
 } from '../contract/interpretations';
 import { AppError } from '../errors';
-import type { Context } from '../http/context';
+import type { Work } from '../http/context';
 import { EDITABLE, STATE_WORDS } from './interpretation-rules';
 import { presentInterpretation } from './interpretations-presenter';
 import {
@@ -23,7 +23,7 @@ import {
 } from './interpretations-store';
 
 export async function listSoundingInterpretations(
-  { db, actor }: Context,
+  { db, actor }: Work,
   soundingId: string,
 ): Promise<{ items: Interpretation[] }> {
   await getSoundingAccess(db, actor, soundingId);
@@ -32,13 +32,13 @@ export async function listSoundingInterpretations(
 }
 
 export const showInterpretation = async (
-  { db, actor }: Context,
+  { db, actor }: Work,
   interpretationId: string,
 ): Promise<Interpretation> =>
   presentInterpretation(actor, await getInterpretation(db, actor, interpretationId));
 
 export async function createInterpretation(
-  { db, actor }: Context,
+  { db, actor }: Work,
   soundingId: string,
   { runId, title }: z.output<typeof createInterpretationSchema>,
 ): Promise<Interpretation> {
@@ -68,7 +68,7 @@ export async function createInterpretation(
 }
 
 export async function changeInterpretation(
-  { db, actor }: Context,
+  { db, actor }: Work,
   interpretationId: string,
   version: number,
   change: z.output<typeof updateInterpretationSchema>,

@@ -5,7 +5,7 @@ import { surveyCan, type SurveyAction } from '../access/policy';
 import { requireCan } from '../access/survey-access';
 import type { createReviewEventSchema, Interpretation } from '../contract/interpretations';
 import { AppError } from '../errors';
-import type { Context } from '../http/context';
+import type { Work } from '../http/context';
 import { decideRefusal, MOVES, STATE_WORDS, type Move } from './interpretation-rules';
 import { presentBed, presentInterpretation } from './interpretations-presenter';
 import {
@@ -38,7 +38,7 @@ const MOVE_WORDS: Record<Move, string> = {
 
 /** A comment, or a move of the interpretation from one state to the next. */
 export async function addReviewEvent(
-  context: Context,
+  context: Work,
   interpretationId: string,
   input: EventInput,
 ): Promise<Interpretation> {
@@ -58,7 +58,7 @@ export async function addReviewEvent(
   });
 }
 
-const eventOf = ({ actor }: Context, interpretationId: string, { kind, comment }: EventInput) => ({
+const eventOf = ({ actor }: Work, interpretationId: string, { kind, comment }: EventInput) => ({
   interpretationId,
   kind,
   comment,
@@ -66,7 +66,7 @@ const eventOf = ({ actor }: Context, interpretationId: string, { kind, comment }
 });
 
 async function move(
-  context: Context,
+  context: Work,
   trx: Knex,
   whole: WholeInterpretation,
   kind: Move,
@@ -106,7 +106,7 @@ async function snapshotOf(trx: Knex, { row, beds }: WholeInterpretation): Promis
   };
 }
 
-async function supersedeAccepted({ actor }: Context, trx: Knex, soundingId: string): Promise<void> {
+async function supersedeAccepted({ actor }: Work, trx: Knex, soundingId: string): Promise<void> {
   const older = await findAccepted(trx, soundingId);
   if (!older) return;
   await setState(trx, older.id, 'superseded');

@@ -4,7 +4,7 @@ import { getSoundingAccess, requireCan } from '../access/survey-access';
 import { parseSheet } from '../contract/field-sheet';
 import type { draftSchema, FieldSheet, Revision, writeDraftSchema } from '../contract/readings';
 import { AppError } from '../errors';
-import type { Context } from '../http/context';
+import type { Work } from '../http/context';
 import { Reply } from '../http/endpoint';
 import { deleteDraft, findDraft, isRevisionOf, writeDraft } from './draft-store';
 import { refuseRowFaults } from './refuse-row-faults';
@@ -17,7 +17,7 @@ type WriteDraft = z.output<typeof writeDraftSchema>;
 
 const draftKey = (actor: Actor, soundingId: string) => ({ soundingId, userId: actor.userId });
 
-export async function getFieldSheet({ db, actor }: Context, soundingId: string): Promise<FieldSheet> {
+export async function getFieldSheet({ db, actor }: Work, soundingId: string): Promise<FieldSheet> {
   await getSoundingAccess(db, actor, soundingId);
   const sounding = await getSheetSounding(db, soundingId);
   const revision = await findCurrentRevisionRow(db, actor, soundingId);
@@ -31,7 +31,7 @@ export async function getFieldSheet({ db, actor }: Context, soundingId: string):
 }
 
 export async function putDraft(
-  { db, actor }: Context,
+  { db, actor }: Work,
   soundingId: string,
   draft: WriteDraft,
 ): Promise<z.infer<typeof draftSchema>> {
@@ -43,25 +43,25 @@ export async function putDraft(
   return presentDraft(await writeDraft(db, draftKey(actor, soundingId), draft));
 }
 
-export async function dropDraft({ db, actor }: Context, soundingId: string): Promise<void> {
+export async function dropDraft({ db, actor }: Work, soundingId: string): Promise<void> {
   requireCan(await getSoundingAccess(db, actor, soundingId), 'editReadings');
   await deleteDraft(db, draftKey(actor, soundingId));
 }
 
-export async function listRevisions({ db, actor }: Context, soundingId: string) {
+export async function listRevisions({ db, actor }: Work, soundingId: string) {
   await getSoundingAccess(db, actor, soundingId);
   return { items: (await listRevisionRows(db, actor, soundingId)).map(presentRevisionSummary) };
 }
 
-export const getRevision = async ({ db, actor }: Context, revisionId: string): Promise<Revision> =>
+export const getRevision = async ({ db, actor }: Work, revisionId: string): Promise<Revision> =>
   presentRevision(await getRevisionRow(db, actor, revisionId));
 
-export const getRevisionFile = ({ db, actor }: Context, revisionId: string) =>
+export const getRevisionFile = ({ db, actor }: Work, revisionId: string) =>
   getSourceFile(db, actor, revisionId);
 
 /** Save: the sheet is parsed here again, whatever the browser made of it. */
 export async function saveSheet(
-  { db, actor }: Context,
+  { db, actor }: Work,
   soundingId: string,
   sheet: WriteDraft,
 ): Promise<Reply<Revision>> {

@@ -5,7 +5,7 @@ import { recordAudit } from '../access/audit';
 import { getSoundingAccess, requireCan, type SoundingAccess } from '../access/survey-access';
 import type { createRunSchema, Run, RunInput, RunSummary, updateRunNoteSchema } from '../contract/runs';
 import { AppError } from '../errors';
-import type { Context } from '../http/context';
+import type { Work } from '../http/context';
 import { fitReadingsOf } from '../readings/fit-readings';
 import { computationKey } from './computation-key';
 import { requireEnoughReadings } from './require-enough-readings';
@@ -23,18 +23,18 @@ import {
 } from './runs-store';
 
 export async function listSoundingRuns(
-  { db, actor }: Context,
+  { db, actor }: Work,
   soundingId: string,
 ): Promise<{ items: RunSummary[] }> {
   await getSoundingAccess(db, actor, soundingId);
   return { items: (await listRuns(db, actor, soundingId)).map(presentRunSummary) };
 }
 
-export const showRun = async ({ db, actor }: Context, runId: string): Promise<Run> =>
+export const showRun = async ({ db, actor }: Work, runId: string): Promise<Run> =>
   presentRun(await getRun(db, actor, runId));
 
 export async function requestRun(
-  context: Context,
+  context: Work,
   soundingId: string,
   { revisionId, settings }: z.output<typeof createRunSchema>,
 ): Promise<Run> {
@@ -70,7 +70,7 @@ const noReadings = (revisionId: string | undefined): AppError =>
       });
 
 /** The same request once more, past the cache; the worker compares the two results. */
-export async function requestRecomputation(context: Context, runId: string): Promise<Run> {
+export async function requestRecomputation(context: Work, runId: string): Promise<Run> {
   const { db, actor } = context;
   const first = await getRun(db, actor, runId);
   const access = await getSoundingAccess(db, actor, first.sounding_id);
@@ -102,7 +102,7 @@ interface Request {
 }
 
 async function addRun(
-  { actor, jobs, runEvents }: Context,
+  { actor, jobs, runEvents }: Work,
   trx: Knex.Transaction,
   { surveyId, soundingId }: SoundingAccess,
   request: Request,
@@ -142,7 +142,7 @@ const STATE_WORDS: Record<RunSummary['state'], string> = {
 };
 const stateWords = (run: Pick<FullRunRow, 'state'>): string => STATE_WORDS[run.state];
 
-export async function requestCancellation(context: Context, runId: string): Promise<Run> {
+export async function requestCancellation(context: Work, runId: string): Promise<Run> {
   const { db, actor, jobs, runEvents } = context;
   const run = await getRun(db, actor, runId);
   const access = await getSoundingAccess(db, actor, run.sounding_id);
@@ -171,7 +171,7 @@ export async function requestCancellation(context: Context, runId: string): Prom
 }
 
 export async function changeRunNote(
-  { db, actor, runEvents }: Context,
+  { db, actor, runEvents }: Work,
   runId: string,
   version: number,
   change: z.output<typeof updateRunNoteSchema>,

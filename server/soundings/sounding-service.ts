@@ -2,7 +2,7 @@ import { recordAudit } from '../access/audit';
 import { getSoundingAccess, getSurveyAccess, requireCan } from '../access/survey-access';
 import type { Sounding } from '../contract/soundings';
 import { AppError } from '../errors';
-import type { Context } from '../http/context';
+import type { Work } from '../http/context';
 import type { Knex } from 'knex';
 import type { Actor } from '../access/actor';
 import { countSoundings, listSoundingRows, type SoundingQuery } from './sounding-page-store';
@@ -16,7 +16,7 @@ import {
   type SoundingChange,
 } from './sounding-store';
 
-export async function listSoundings({ db, actor }: Context, surveyId: string, query: SoundingQuery) {
+export async function listSoundings({ db, actor }: Work, surveyId: string, query: SoundingQuery) {
   await getSurveyAccess(db, actor, surveyId);
   const [total, rows] = await Promise.all([
     countSoundings(db, actor, surveyId, query),
@@ -25,11 +25,11 @@ export async function listSoundings({ db, actor }: Context, surveyId: string, qu
   return { items: rows.map(presentSoundingRow), total, page: query.page, pageSize: query.pageSize };
 }
 
-export const getSounding = async ({ db, actor }: Context, soundingId: string): Promise<Sounding> =>
+export const getSounding = async ({ db, actor }: Work, soundingId: string): Promise<Sounding> =>
   presentSounding(await getSoundingRow(db, actor, soundingId));
 
 export async function createSounding(
-  { db, actor }: Context,
+  { db, actor }: Work,
   surveyId: string,
   fields: NewSounding,
 ): Promise<Sounding> {
@@ -47,7 +47,7 @@ export async function createSounding(
 }
 
 export async function updateSounding(
-  { db, actor }: Context,
+  { db, actor }: Work,
   soundingId: string,
   version: number,
   change: SoundingChange,

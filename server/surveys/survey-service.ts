@@ -3,19 +3,19 @@ import { recordAudit } from '../access/audit';
 import { getSurveyAccess, requireCan } from '../access/survey-access';
 import type { createSurveySchema, Survey, updateSurveySchema } from '../contract/surveys';
 import { AppError } from '../errors';
-import type { Context } from '../http/context';
+import type { Work } from '../http/context';
 import { presentSurvey } from './survey-presenter';
 import { getSurveyRow, insertSurvey, listSurveyRows, updateSurveyRow } from './survey-store';
 
-export async function listSurveys({ db, actor }: Context): Promise<{ items: Survey[] }> {
+export async function listSurveys({ db, actor }: Work): Promise<{ items: Survey[] }> {
   return { items: (await listSurveyRows(db, actor)).map(presentSurvey) };
 }
 
-export const getSurvey = async ({ db, actor }: Context, surveyId: string): Promise<Survey> =>
+export const getSurvey = async ({ db, actor }: Work, surveyId: string): Promise<Survey> =>
   presentSurvey(await getSurveyRow(db, actor, surveyId));
 
 export const createSurvey = (
-  { db, actor }: Context,
+  { db, actor }: Work,
   fields: z.output<typeof createSurveySchema>,
 ): Promise<Survey> =>
   db.transaction(async (trx) => {
@@ -30,7 +30,7 @@ export const createSurvey = (
   });
 
 export async function updateSurvey(
-  { db, actor }: Context,
+  { db, actor }: Work,
   surveyId: string,
   version: number,
   fields: z.output<typeof updateSurveySchema>,
