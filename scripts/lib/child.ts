@@ -78,7 +78,7 @@ export class Child {
   }
 
   /** Asked by SIGTERM; made to after `patience` milliseconds. */
-  async stop(patience = 10_000): Promise<void> {
+  async stop(patience = 12_000): Promise<void> {
     this.#stopping = true;
     const child = this.#process;
     if (child === null) return;
