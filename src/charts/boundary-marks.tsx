@@ -17,19 +17,10 @@ export interface BoundaryMarksProps {
   barX: number;
   palette: ChartPalette;
   onMove?: MoveBoundary | undefined;
-  /** A drag has begun or ended: meanwhile the depth scale must stand still. */
-  onHold: (isHeld: boolean) => void;
 }
 
 /** The 95 % interval of each boundary as a whisker along the bar's edge, and its handle where it can be moved. */
-export function BoundaryMarks({
-  boundaries,
-  scale,
-  x,
-  barX,
-  palette,
-  onMove,
-}: BoundaryMarksProps): ReactNode {
+export function BoundaryMarks({ boundaries, onMove, ...place }: BoundaryMarksProps): ReactNode {
   return boundaries.map((boundary) => (
     <g key={boundary.index}>
       <Whisker {...place} boundary={boundary} />
@@ -69,7 +60,7 @@ interface HandleProps extends Omit<BoundaryMarksProps, 'boundaries'> {
   onMove: MoveBoundary;
 }
 
-function Handle({ boundary, scale, x, barX, palette, onMove, onHold }: HandleProps) {
+function Handle({ boundary, scale, x, barX, palette, onMove }: HandleProps) {
   const drag = useRef<{ pointer: number; offset: number; gesture: string } | null>(null);
   const y = scale.yOf(boundary.depth);
   const localY = (event: PointerEvent<SVGGElement>) => {
@@ -80,7 +71,6 @@ function Handle({ boundary, scale, x, barX, palette, onMove, onHold }: HandlePro
   };
   const onPointerDown = (event: PointerEvent<SVGGElement>) => {
     event.currentTarget.setPointerCapture(event.pointerId);
-    onHold(true);
     drag.current = {
       pointer: event.pointerId,
       offset: localY(event) - y,
@@ -95,7 +85,6 @@ function Handle({ boundary, scale, x, barX, palette, onMove, onHold }: HandlePro
   };
   const release = () => {
     drag.current = null;
-    onHold(false);
   };
   const onKeyDown = (event: KeyboardEvent) => {
     const direction = { ArrowDown: 1, ArrowUp: -1, ArrowRight: 1, ArrowLeft: -1 }[event.key];

@@ -18,7 +18,6 @@ export interface ColumnSlotProps {
   selectedBed: number | null;
   onSelectBed: (bed: number) => void;
   onMoveBoundary?: MoveBoundary | undefined;
-  onHold: (isHeld: boolean) => void;
   onScaleResistivity?: ((bed: number, factor: number) => void) | undefined;
 }
 
@@ -50,7 +49,6 @@ export function ColumnSlot(props: ColumnSlotProps): ReactNode {
         barX={x}
         palette={palette}
         onMove={onMoveBoundary}
-        onHold={props.onHold}
       />
       <GroundLabels column={column} scale={scale} x={barEnd + 22} barEnd={barEnd} palette={palette} />
       {reach !== null && reach < scale.maxDepth ? (

@@ -61,7 +61,6 @@ export function DepthColumns(props: DepthColumnsProps) {
   // While a boundary is dragged the depths stay where they are; else the scale would run away from the hand.
   const [heldExtent, setHeldExtent] = useState<ReturnType<typeof depthExtent> | null>(null);
   const ownExtent = useMemo(() => depthExtent(columns, borehole), [columns, borehole]);
-  const [heldExtent, setHeldExtent] = useState<typeof ownExtent | null>(null);
   const extent = heldExtent ?? ownExtent;
   const scale = useMemo(() => depthScale(kind, extent, height), [kind, extent, height]);
   const table = useMemo(() => groundTable(columns), [columns]);
@@ -88,7 +87,7 @@ export function DepthColumns(props: DepthColumnsProps) {
           <svg
             width={width}
             height={height + head + FOOT}
-            onPointerDown={() => setHeldExtent(depthExtent(columns, borehole))}
+            onPointerDown={() => setHeldExtent(ownExtent)}
             onPointerUp={() => setHeldExtent(null)}
             onPointerCancel={() => setHeldExtent(null)}
             className="block select-none"
@@ -106,7 +105,6 @@ export function DepthColumns(props: DepthColumnsProps) {
                   selectedBed={selected?.columnId === column.id ? selected.bed : null}
                   onSelectBed={(bed) => select(column.id, bed)}
                   onMoveBoundary={props.onMoveBoundary}
-                  onHold={(isHeld) => setHeldExtent(isHeld ? extent : null)}
                   onScaleResistivity={props.onScaleResistivity}
                 />
               ))}

@@ -114,7 +114,7 @@ export function formatCount(count: number, one: string, many = `${one}s`): strin
 
 /** Significant figures of one end so that the last of them is at most half the width of the range, 5 at most. */
 function rangeDigits(end: number, width: number): number {
-  if (end === 0 || width <= 0) return 3;
+  if (end === 0 || width <= 0) return leastDigits(end);
   const needed = Math.floor(Math.log10(Math.abs(end))) - Math.floor(Math.log10(width / 2)) + 1;
   return Math.min(5, Math.max(leastDigits(end), needed));
 }

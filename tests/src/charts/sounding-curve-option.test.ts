@@ -1,0 +1,202 @@
+import * as echarts from 'echarts/core';
+import { CustomChart, LineChart } from 'echarts/charts';
+import { GridComponent, TooltipComponent } from 'echarts/components';
+import { SVGRenderer } from 'echarts/renderers';
+import { describe, expect, test } from 'vitest';
+import type { CurveLine, CurveReading } from '../../../src/charts/chart-data';
+import { chartPalette } from '../../../src/charts/chart-palette';
+import { curveTable } from '../../../src/charts/curve-table';
+import { readingFacts, readingSentence } from '../../../src/charts/reading-facts';
+import { residualPoints } from '../../../src/charts/residual-strip';
+import {
+  curveHeight,
+  curveLayout,
+  residualLine,
+  soundingAxes,
+  soundingCurveOption,
+} from '../../../src/charts/sounding-curve-option';
+
+echarts.use([LineChart, CustomChart, GridComponent, TooltipComponent, SVGRenderer]);
+
+const palette = chartPalette(false);
+const readings: CurveReading[] = [1.5, 6.8, 40, 300].map((spacing, i) => ({
+  id: `r${i}`,
+  spacing,
+  label: `AB/2 ${spacing} m`,
+  apparentResistivity: [140, 78, 75, 13][i]!,
+  relativeError: 0.03,
+  excluded: i === 1,
+  reason: i === 1 ? 'wet cable' : undefined,
+}));
+const lineOf = (letter: string, residuals: (number | null)[], scale = 1): CurveLine => ({
+  id: letter,
+  kind: 'run',
+  letter,
+  name: '4 beds, fitted',
+  points: readings.map(({ spacing, apparentResistivity }) => ({
+    spacing,
+    apparentResistivity: apparentResistivity * scale,
+  })),
+  predicted: readings.map((reading) => reading.apparentResistivity * scale),
+  residuals,
+});
+const lines = [lineOf('A', [0.4, null, -2.4, 7]), lineOf('B', [1, null, 1, 1], 1.05)];
+const input = {
+  readings,
+  lines,
+  chosenLine: 'A',
+  focusedReading: null,
+  spacingName: 'AB/2, m',
+  width: 800,
+  height: 480,
+  palette,
+};
+const listOf = <Item>(value: Item | Item[] | undefined): Item[] =>
+  Array.isArray(value) ? value : value ? [value] : [];
+
+function drawn(changes: Partial<typeof input> = {}): string {
+  const chart = echarts.init(null, null, { renderer: 'svg', ssr: true, width: 800, height: 480 });
+  chart.setOption(soundingCurveOption({ ...input, ...changes }));
+  const svg = chart.renderToSVGString();
+  chart.dispose();
+  return svg;
+}
+const count = (svg: string, text: string) => svg.split(text).length - 1;
+
+describe('axes', () => {
+  test('decades are square in the drawing itself', () => {
+    const option = soundingCurveOption(input);
+    const { plot } = curveLayout(800, 480, true);
+    const [x] = listOf(option.xAxis) as { min: number; max: number }[];
+    const [y] = listOf(option.yAxis) as { min: number; max: number }[];
+    expect(plot.width / (x!.max - x!.min)).toBeCloseTo(plot.height / (y!.max - y!.min), 6);
+  });
+
+  test('curve and strip share the x axis', () => {
+    const [first, second] = listOf(soundingCurveOption(input).xAxis) as { min: number; max: number }[];
+    expect([second!.min, second!.max]).toEqual([first!.min, first!.max]);
+    const { plot, strip } = curveLayout(800, 480, true);
+    expect([strip!.left, strip!.width]).toEqual([plot.left, plot.width]);
+    expect(strip!.top + strip!.height).toBeLessThan(480);
+  });
+
+  test('whiskers and curves lie inside the range, a ghost does not stretch it', () => {
+    const layout = curveLayout(800, 480, true);
+    const plain = soundingAxes(readings, lines, layout);
+    const ghost: CurveLine = {
+      ...lines[0]!,
+      id: 'g',
+      kind: 'ghost',
+      points: [{ spacing: 5, apparentResistivity: 1e6 }],
+    };
+    expect(soundingAxes(readings, [...lines, ghost], layout)).toEqual(plain);
+    const far: CurveLine = { ...ghost, kind: 'hand' };
+    expect(soundingAxes(readings, [...lines, far], layout).y.max).toBeGreaterThan(6);
+  });
+
+  test('a narrow drawing is lower', () => {
+    expect(curveHeight(readings, lines, 360, 600)).toBeLessThan(450);
+    expect(curveHeight(readings, lines, 360, 600)).toBeGreaterThanOrEqual(260);
+    expect(curveHeight(readings, lines, 1600, 480)).toBe(480);
+  });
+});
+
+describe('drawing', () => {
+  test('letters, dashes and hues of both runs', () => {
+    const svg = drawn();
+    expect(svg).toMatch(/>A<\/text>/);
+    expect(svg).toMatch(/>B<\/text>/);
+    expect(svg).toContain('stroke-dasharray="7,4"');
+    expect(svg).toContain(palette.runs[0]!);
+    expect(svg).toContain(palette.runs[1]!);
+  });
+
+  test('the axis is numbered 1, 2, 5 with its unit', () => {
+    const svg = drawn();
+    for (const label of ['2', '5', '10', '100']) expect(svg).toContain(`>${label}</text>`);
+    expect(svg).toContain('>AB/2, m</text>');
+    expect(svg).toContain('>+2σ</text>');
+  });
+
+  test('a left out reading is hollow, and loses its residual', () => {
+    const whole = drawn({ readings: readings.map((reading) => ({ ...reading, excluded: false })) });
+    expect(count(drawn(), palette.muted)).toBeGreaterThan(count(whole, palette.muted));
+    expect(residualPoints(readings, lines[1]!.residuals!).map((point) => point.reading)).toEqual([0, 2, 3]);
+  });
+
+  test('residuals beyond two standard errors are rust', () => {
+    expect(drawn()).toContain(palette.rust);
+    expect(drawn({ chosenLine: 'B' })).not.toContain(palette.rust);
+  });
+
+  test('the reading walked to is ringed', () => {
+    expect(count(drawn({ focusedReading: 0 }), palette.copper)).toBeGreaterThan(
+      count(drawn(), palette.copper),
+    );
+  });
+
+  test('without residuals there is no strip', () => {
+    const bare = lines.map(({ residuals: _, ...line }) => line);
+    expect(listOf(soundingCurveOption({ ...input, lines: bare }).xAxis)).toHaveLength(1);
+    expect(drawn({ lines: bare })).not.toContain('+2σ');
+  });
+
+  test('no readings and no curves still draw', () =>
+    expect(drawn({ readings: [], lines: [] })).toContain('<svg'));
+});
+
+test('the strip follows the chosen line, else the first with residuals', () => {
+  expect(residualLine(lines, 'B')?.id).toBe('B');
+  expect(residualLine(lines, 'gone')?.id).toBe('A');
+  expect(residualLine([], 'A')).toBeNull();
+});
+
+describe('words', () => {
+  test('a reading with its prediction and residual', () => {
+    const facts = readingFacts(readings[2]!, 2, lines[0]!);
+    expect(facts.map((fact) => fact.value)).toEqual([
+      'AB/2 40 m',
+      '75.0\u00a0Ω·m',
+      '3.0\u00a0%',
+      '75.0\u00a0Ω·m',
+      '\u22122.40\u00a0σ',
+    ]);
+    expect(readingSentence(facts)).toContain('residual, run A \u22122.40\u00a0standard errors');
+  });
+
+  test('a left out reading says why and has no residual', () => {
+    const facts = readingFacts(readings[1]!, 1, lines[0]!);
+    expect(facts.at(-1)).toEqual({ label: 'Left out', value: 'wet cable' });
+  });
+
+  test('an unknown error is not shown as 0 %', () => {
+    const labels = readingFacts({ ...readings[0]!, relativeError: 0 }, 0, null).map((fact) => fact.label);
+    expect(labels).not.toContain('Standard error');
+  });
+
+  test('the tip escapes what people wrote', () => {
+    const evil = readings.map((reading) => ({ ...reading, excluded: true, reason: '<img src=x>' }));
+    const option = soundingCurveOption({ ...input, readings: evil });
+    const { formatter } = option.tooltip as { formatter: (item: object) => string };
+    const html = formatter({ seriesId: 'readings', dataIndex: 1 });
+    expect(html).toContain('&#60;img');
+    expect(html).not.toContain('<img');
+  });
+
+  test('a residual in the strip is told with its own reading', () => {
+    const { formatter } = soundingCurveOption(input).tooltip as { formatter: (item: object) => string };
+    expect(formatter({ seriesId: 'residuals', dataIndex: 1 })).toContain('AB/2 40 m');
+  });
+});
+
+test('the table has every reading and each run in order of letters', () => {
+  const { columns, rows } = curveTable(readings, lines.toReversed(), 'AB/2, m');
+  expect(columns.map((column) => column.label).slice(4)).toEqual([
+    'Predicted, run A',
+    'Residual, run A',
+    'Predicted, run B',
+    'Residual, run B',
+  ]);
+  expect(rows[1]!.slice(0, 4)).toEqual([6.8, 78, 0.03, 'left out: wet cable']);
+  expect(rows[3]!.slice(4, 6)).toEqual([13, 7]);
+});
