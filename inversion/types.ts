@@ -92,6 +92,9 @@ export interface LayerCountFit {
 export interface DarZarroukSummary {
   conductanceS: number[];
   resistanceOhmM2: number[];
+  /** 68 % factors of the two above; null = not determined */
+  conductanceFactor: (number | null)[];
+  resistanceFactor: (number | null)[];
   totalConductanceS: number;
   totalResistanceOhmM2: number;
   anisotropy: number | null;

@@ -1,7 +1,7 @@
 import { ENGINE_VERSION } from '../engine-version';
 import { darZarrouk } from '../hydro/dar-zarrouk';
 import { geometricFactor } from '../spread/geometric-factor';
-import { logCovariance, parameterDoubt } from '../uncertainty/covariance';
+import { logCovariance, parameterDoubt, type ParameterDoubt } from '../uncertainty/covariance';
 import type { EarthModel, FitResult, FitSettings, FitStatus, LayerCountFit, Reading } from '../types';
 import { fitWarnings } from './fit-warnings';
 import { misfitProbability } from './layer-count';
@@ -29,10 +29,19 @@ function rmsPercent(predicted: readonly number[], readings: readonly Reading[]):
   return 100 * Math.sqrt(sum / readings.length);
 }
 
-function summariseDarZarrouk(earth: EarthModel): FitResult['darZarrouk'] {
+function summariseDarZarrouk(earth: EarthModel, doubt: ParameterDoubt): FitResult['darZarrouk'] {
   const { conductanceS, resistanceOhmM2, totalConductanceS, totalResistanceOhmM2, anisotropy } =
     darZarrouk(earth);
-  return { conductanceS, resistanceOhmM2, totalConductanceS, totalResistanceOhmM2, anisotropy };
+  const { conductanceFactor, resistanceFactor } = doubt;
+  return {
+    conductanceS,
+    resistanceOhmM2,
+    conductanceFactor,
+    resistanceFactor,
+    totalConductanceS,
+    totalResistanceOhmM2,
+    anisotropy,
+  };
 }
 
 /** Everything a fit says about its best model: predictions, residuals, doubt, Maillet's quantities, warnings. */
@@ -59,10 +68,11 @@ export function buildFitResult(parts: FitResultParts): FitResult {
     predicted,
     residuals: Array.from(residual),
     geometricFactor: readings.map((reading) => geometricFactor(reading.spread)),
-    ...doubt,
+    intervals: doubt.intervals,
+    factors: doubt.factors,
     correlation: doubt.correlation,
     misfitProbability: probability,
-    darZarrouk: summariseDarZarrouk(earth),
+    darZarrouk: summariseDarZarrouk(earth, doubt),
     warnings: fitWarnings({
       readings,
       settings,

@@ -34,7 +34,7 @@ function valuesAtBounds({ earth, settings, held }: FitWarningInput): string[] {
       return settings.bounds[key].flatMap((bound, side) =>
         Math.abs(Math.log(value / bound)) <= TOLERANCES.atBound
           ? [
-              `The ${key} of bed ${i + 1} ended on its ${side === 0 ? 'lower' : 'upper'} bound (${bound} ${unit}): the readings do not limit it on that side.`,
+              `The ${key} of bed ${i + 1} ended on its ${side === 0 ? 'lower' : 'upper'} bound (${bound} ${unit}); a closer fit may lie beyond it.`,
             ]
           : [],
       );

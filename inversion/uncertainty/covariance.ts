@@ -15,6 +15,8 @@ export interface LogCovariance {
   readonly deviation: Float64Array;
   /** row-major covariance of the resolved directions, 0 for held parameters */
   readonly covariance: Float64Array;
+  /** principal directions: unit vectors over all parameters, each with its variance; Infinity = lost */
+  readonly directions: readonly { readonly vector: Float64Array; readonly variance: number }[];
 }
 
 /**
@@ -29,28 +31,41 @@ export function logCovariance(jacobian: Float64Array, m: number, held: readonly 
   const free = held.flatMap((isHeld, j) => (isHeld ? [] : [j]));
   const deviation = new Float64Array(n);
   const covariance = new Float64Array(n * n);
-  if (free.length === 0) return { deviation, covariance };
+  if (free.length === 0) return { deviation, covariance, directions: [] };
   const rows = Math.max(m, free.length);
   const matrix = Matrix.zeros(rows, free.length);
   for (let i = 0; i < m; i++) free.forEach((j, k) => matrix.set(i, k, jacobian[i * n + j]!));
   const svd = new SingularValueDecomposition(matrix, { computeLeftSingularVectors: false });
-  const v = svd.rightSingularVectors;
   const strongest = Math.max(...svd.diagonal);
-  svd.diagonal.forEach((s, k) => {
-    const lost = !(s > SINGULAR * strongest);
-    free.forEach((a, ia) => {
-      const va = v.get(ia, k);
-      if (lost) {
-        if (va * va > LOST_SHARE) deviation[a] = Infinity;
-        return;
-      }
-      free.forEach((b, ib) => {
-        covariance[a * n + b]! += (va * v.get(ib, k)) / (s * s);
-      });
-    });
+  const directions = svd.diagonal.map((s, k) => {
+    const vector = new Float64Array(n);
+    free.forEach((j, row) => (vector[j] = svd.rightSingularVectors.get(row, k)));
+    return { vector, variance: s > SINGULAR * strongest ? 1 / (s * s) : Infinity };
   });
-  for (const j of free) if (deviation[j] !== Infinity) deviation[j] = Math.sqrt(covariance[j * n + j]!);
-  return { deviation, covariance };
+  for (const { vector, variance } of directions) {
+    if (variance === Infinity) continue;
+    for (const a of free) for (const b of free) covariance[a * n + b]! += vector[a]! * vector[b]! * variance;
+  }
+  for (const j of free) deviation[j] = deviationAlong({ directions }, (index) => (index === j ? 1 : 0));
+  return { deviation, covariance, directions };
+}
+
+/**
+ * Standard deviation of a function of the ln parameters from its gradient there (the delta method, correlations counted).
+ * Summed over the principal directions, so that a combination which is known stays known when its parts are not:
+ * Infinity only where the gradient reaches into a lost direction.
+ */
+export function deviationAlong(
+  c: Pick<LogCovariance, 'directions'>,
+  gradient: (j: number) => number,
+): number {
+  let sum = 0;
+  for (const { vector, variance } of c.directions) {
+    const share = vector.reduce((total, value, j) => total + value * gradient(j), 0) ** 2;
+    if (variance !== Infinity) sum += share * variance;
+    else if (share > LOST_SHARE) return Infinity;
+  }
+  return Math.sqrt(sum);
 }
 
 function interval(value: number, deviation: number, low: number, high: number): Interval {
@@ -74,30 +89,29 @@ export interface ParameterDoubt {
     depth: (number | null)[];
   };
   readonly correlation: (number | null)[][];
+  /** 68 % factors of S = h/ρ and T = hρ of the bounded layers */
+  readonly conductanceFactor: (number | null)[];
+  readonly resistanceFactor: (number | null)[];
 }
 
-/** Standard deviation of the ln depth of base i by the delta method: gradient h_k/D_i on ln h_k, correlations counted. */
+/** Standard deviation of the ln depth of base i: gradient h_k/D_i on ln h_k. */
 function depthDeviation(
   thickness: readonly number[],
   layers: number,
   base: number,
   c: LogCovariance,
 ): number {
-  const n = 2 * layers - 1;
-  const above = thickness.slice(0, base + 1);
-  const depth = above.reduce((sum, h) => sum + h, 0);
-  let variance = 0;
-  for (let a = 0; a <= base; a++) {
-    if (c.deviation[layers + a] === Infinity) return Infinity;
-    for (let b = 0; b <= base; b++) {
-      variance += ((above[a]! * above[b]!) / depth ** 2) * c.covariance[(layers + a) * n + layers + b]!;
-    }
-  }
-  return Math.sqrt(Math.max(0, variance));
+  const depth = thickness.slice(0, base + 1).reduce((sum, h) => sum + h, 0);
+  return deviationAlong(c, (j) => (j >= layers && j <= layers + base ? thickness[j - layers]! / depth : 0));
+}
+
+/** Standard deviation of ln(hρ) (`sign` 1) or ln(h/ρ) (`sign` −1) of bounded layer i. */
+function productDeviation(layers: number, i: number, sign: 1 | -1, c: LogCovariance): number {
+  return deviationAlong(c, (j) => (j === layers + i ? 1 : j === i ? sign : 0));
 }
 
 /**
- * 95 % intervals, 68 % factors and correlations of ρ, h and the depth of each boundary, from the covariance in ln space.
+ * 95 % intervals, 68 % factors and correlations of ρ, h, the depth of each boundary, S and T, from the covariance in ln space.
  * A factor above `TOLERANCES.factorLimit` is null; an end of an interval that the bounds cut off is null (unbounded);
  * a held parameter gives [v, v], factor 1 and null correlations.
  */
@@ -121,6 +135,8 @@ export function parameterDoubt(earth: LayeredEarth, c: LogCovariance, bounds: Fi
       thickness: earth.thickness.map((_, i) => factor(c.deviation[layers + i]!)),
       depth: depthDeviations.map(factor),
     },
+    conductanceFactor: earth.thickness.map((_, i) => factor(productDeviation(layers, i, -1, c))),
+    resistanceFactor: earth.thickness.map((_, i) => factor(productDeviation(layers, i, 1, c))),
     correlation: Array.from({ length: n }, (_, a) =>
       Array.from({ length: n }, (_unused, b) => {
         if (!known(a) || !known(b)) return null;

@@ -14,49 +14,34 @@ export interface DoubtItem {
   factor: number | null;
 }
 
-/** ln of a 68 % factor, or null when it is not determined. */
-function logFactor(factor: number | null | undefined): number | null {
-  return factor === null || factor === undefined ? null : Math.log(factor);
-}
-
 function number(value: number): string {
   return value >= 1000 ? String(Math.round(value)) : value.toPrecision(3);
 }
 
-function percent(logDeviation: number): string {
-  const value = 100 * (Math.exp(logDeviation) - 1);
+function percent(factor: number): string {
+  const value = 100 * (factor - 1);
   return value < 10 ? value.toPrecision(2) : String(Math.round(value));
 }
 
-/** ln deviation of h/ρ (sign −1) or hρ (sign +1) from the deviations and the correlation. */
-function combined(logRho: number, logH: number, correlation: number, sign: 1 | -1): number {
-  return Math.sqrt(Math.max(0, logRho ** 2 + logH ** 2 + sign * 2 * correlation * logRho * logH));
-}
-
-function equivalenceOf(result: FitResult, bed: number): DoubtItem | null {
-  const layers = result.earth.resistivity.length;
-  const correlation = result.correlation[bed]?.[layers + bed] ?? null;
-  const logRho = logFactor(result.factors.resistivity[bed]);
-  const logH = logFactor(result.factors.thickness[bed]);
-  if (correlation === null || Math.abs(correlation) < TOLERANCES.equivalence) return null;
-  const conductive = correlation > 0;
-  const rho = result.earth.resistivity[bed]!;
-  const h = result.earth.thickness[bed]!;
-  const value = conductive ? h / rho : h * rho;
+function equivalenceOf({ earth, correlation, darZarrouk }: FitResult, bed: number): DoubtItem | null {
+  const layers = earth.resistivity.length;
+  const r = correlation[bed]?.[layers + bed] ?? null;
+  if (r === null || Math.abs(r) < TOLERANCES.equivalence) return null;
+  const conductive = r > 0;
+  const value = (conductive ? darZarrouk.conductanceS : darZarrouk.resistanceOhmM2)[bed]!;
+  const factor = (conductive ? darZarrouk.conductanceFactor : darZarrouk.resistanceFactor)[bed]!;
   const unit = conductive ? 'S' : 'Ω·m²';
   const symbol = conductive ? 'S = h/ρ' : 'T = hρ';
-  const spread =
-    logRho === null || logH === null ? null : combined(logRho, logH, correlation, conductive ? -1 : 1);
-  const known = spread === null ? '' : ` ± ${percent(spread)} %`;
+  const range = factor === null ? '' : ` ± ${percent(factor)} %`;
   return {
     bed,
     kind: conductive ? 'conductance' : 'resistance',
-    text: `Bed ${bed + 1} is known by ${symbol} = ${number(value)} ${unit}${known}, not by its thickness and resistivity apart: ${
-      conductive ? 'twice as thick at twice the resistivity' : 'twice as thick at half the resistivity'
-    } gives nearly the same curve.`,
+    text: `Bed ${bed + 1} is known by ${symbol} = ${number(value)} ${unit}${range}, not by its thickness and resistivity apart: twice as thick at ${
+      conductive ? 'twice' : 'half'
+    } the resistivity gives nearly the same curve.`,
     value,
     unit,
-    factor: spread === null ? null : Math.exp(spread),
+    factor,
   };
 }
 

@@ -119,6 +119,8 @@ export const fitResultSchema = z
       .strictObject({
         conductanceS: z.array(z.number()).describe('h/ρ of each bounded layer, S'),
         resistanceOhmM2: z.array(z.number()).describe('hρ of each bounded layer, Ω·m²'),
+        conductanceFactor: z.array(factorSchema).describe('68 % factor of each h/ρ; null = not determined'),
+        resistanceFactor: z.array(factorSchema).describe('68 % factor of each hρ; null = not determined'),
         totalConductanceS: z.number(),
         totalResistanceOhmM2: z.number(),
         anisotropy: z.number().nullable().describe('√(ρ_T/ρ_L) of the bounded layers; null for a half-space'),

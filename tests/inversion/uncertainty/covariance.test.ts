@@ -42,15 +42,25 @@ describe('logCovariance', () => {
 
 describe('parameterDoubt', () => {
   const earth = { resistivity: [100, 10], thickness: [4] };
-  const doubt = (deviation: number[], covariance: number[], e = earth) =>
+  /** the doubt of uncorrelated ln parameters with these standard deviations */
+  const doubt = (deviation: number[], e = earth) =>
     parameterDoubt(
       e,
-      { deviation: Float64Array.from(deviation), covariance: Float64Array.from(covariance) },
+      {
+        deviation: Float64Array.from(deviation),
+        covariance: Float64Array.from(
+          deviation.flatMap((a, i) => deviation.map((_, j) => (i === j ? a * a : 0))),
+        ),
+        directions: deviation.map((a, i) => ({
+          vector: Float64Array.from(deviation, (_, j) => (i === j ? 1 : 0)),
+          variance: a * a,
+        })),
+      },
       BOUNDS,
     );
 
   it('gives 95 % intervals and 68 % factors in ln space', () => {
-    const { intervals, factors } = doubt([0.1, 0.2, 0.3], [0.01, 0, 0, 0, 0.04, 0, 0, 0, 0.09]);
+    const { intervals, factors } = doubt([0.1, 0.2, 0.3]);
     expect(intervals.resistivity[0]![0]).toBeCloseTo(100 * Math.exp(-0.1959964), 4);
     expect(intervals.thickness[0]![1]).toBeCloseTo(4 * Math.exp(0.5879892), 5);
     expect(factors.resistivity[1]).toBeCloseTo(Math.exp(0.2), 10);
@@ -59,18 +69,29 @@ describe('parameterDoubt', () => {
 
   it('counts the correlation of thicknesses in the depth of a boundary', () => {
     const three = { resistivity: [1, 1, 1], thickness: [3, 1] };
-    const covariance = Array.from({ length: 25 }, () => 0);
-    covariance[18] = 0.04;
-    covariance[24] = 0.36;
-    covariance[19] = covariance[23] = -0.12;
-    const { factors } = doubt([0.1, 0.1, 0.1, 0.2, 0.6], covariance, three);
-    // 0.75²·0.04 + 0.25²·0.36 − 2·0.75·0.25·0.12 = 0: the depth is known though neither thickness is
-    expect(factors.depth[1]).toBeCloseTo(1, 6);
-    expect(factors.depth[0]).toBeCloseTo(Math.exp(0.2), 10);
+    // three readings that see the resistivities, and one that sees the depth h₁ + h₂ alone: 0.75 ln h₁ + 0.25 ln h₂
+    const jacobian = new Float64Array(20);
+    [0, 1, 2].forEach((i) => (jacobian[i * 5 + i] = 10));
+    jacobian[18] = 0.75 / 0.1;
+    jacobian[19] = 0.25 / 0.1;
+    const c = logCovariance(jacobian, 4, [false, false, false, false, false]);
+    const { factors } = parameterDoubt(three, c, BOUNDS);
+    expect(factors.thickness).toEqual([null, null]);
+    expect(factors.depth[0]).toBeNull();
+    expect(factors.depth[1]).toBeCloseTo(Math.exp(0.1), 8);
+  });
+
+  it('knows S though neither h nor ρ is known, and T not', () => {
+    // readings that see ln h − ln ρ of the first layer, and the half-space
+    const c = logCovariance(Float64Array.from([-5, 0, 5, 0, 10, 0]), 2, [false, false, false]);
+    const found = parameterDoubt(earth, c, BOUNDS);
+    expect(found.factors.thickness).toEqual([null]);
+    expect(found.conductanceFactor[0]).toBeCloseTo(Math.exp(0.2), 8);
+    expect(found.resistanceFactor).toEqual([null]);
   });
 
   it('is null where a factor passes 100 or a bound cuts an interval off', () => {
-    const { intervals, factors } = doubt([5, 2.4, Infinity], [25, 0, 0, 0, 5.76, 0, 0, 0, 0]);
+    const { intervals, factors } = doubt([5, 2.4, Infinity]);
     expect(factors.resistivity).toEqual([null, Math.exp(2.4)]);
     expect(intervals.resistivity[0]).toEqual([null, null]);
     expect(intervals.resistivity[1]![0]).toBeNull();
@@ -80,7 +101,10 @@ describe('parameterDoubt', () => {
   });
 
   it('gives [v, v], factor 1 and no correlation for a held value', () => {
-    const { intervals, factors, correlation } = doubt([0, 0.2, 0.3], [0, 0, 0, 0, 0.04, 0.03, 0, 0.03, 0.09]);
+    // JᵀJ = [[4, −2], [−2, 4]] over the two free parameters: correlation 1/2
+    const jacobian = Float64Array.from([9, 2, -1, 9, 0, Math.sqrt(3)]);
+    const c = logCovariance(jacobian, 2, [true, false, false]);
+    const { intervals, factors, correlation } = parameterDoubt(earth, c, BOUNDS);
     expect(intervals.resistivity[0]).toEqual([100, 100]);
     expect(factors.resistivity[0]).toBe(1);
     expect(correlation[0]).toEqual([null, null, null]);

@@ -1,0 +1,70 @@
+import { describe, expect, it } from 'vitest';
+import { compareFits, createForwardOperator, fitLayered, type LayeredEarth } from '../../../inversion';
+import { layered } from '../support/fit-settings';
+
+const SPREADS = Array.from({ length: 14 }, (_, i) => ({ type: 'wenner', spacing: 1.5 ** i }) as const);
+
+function fitOf(earth: LayeredEarth, layers = earth.resistivity.length) {
+  const predicted = createForwardOperator(SPREADS).predict(earth);
+  const readings = SPREADS.map((spread, i) => ({
+    spread,
+    apparentResistivity: predicted[i]!,
+    relativeError: 0.03,
+  }));
+  return fitLayered(readings, layered(layers));
+}
+
+const BASE = fitOf({ resistivity: [100, 20], thickness: [5] });
+
+describe('compareFits', () => {
+  it('finds the bed that differs beyond the intervals, and only that', () => {
+    const { pairs } = compareFits([BASE, fitOf({ resistivity: [100, 30], thickness: [5] })]);
+    const supported = pairs[0]!.beds.filter((bed) => bed.intervalsOverlap === false);
+    expect(supported.map((bed) => [bed.bed, bed.quantity])).toEqual([[1, 'resistivity']]);
+    expect(supported[0]!.ratio).toBeCloseTo(1.5, 3);
+    expect(pairs[0]!.text).toContain(
+      'The data support one difference beyond the 95 % intervals: resistivity of bed 2 (20.0 against 30.0 Ω·m).',
+    );
+  });
+
+  it('says that the data do not tell near models apart', () => {
+    const { pairs } = compareFits([BASE, fitOf({ resistivity: [101, 20.1], thickness: [5] })]);
+    expect(pairs[0]!.text).toContain('the data do not tell these models apart');
+  });
+
+  it('gives the ratios of S and T and the difference of the misfits', () => {
+    const worse = fitOf({ resistivity: [100, 20], thickness: [5] }, 1);
+    const [pair] = compareFits([BASE, worse]).pairs;
+    expect(pair).toMatchObject({ sameLayerCount: false, totalConductanceRatio: null });
+    expect(pair!.chi2PerReadingDifference).toBeCloseTo(worse.chi2PerReading - BASE.chi2PerReading, 12);
+    expect(pair!.text).toContain('The models have 2 and 1 beds');
+    expect(pair!.text).toContain('The first fits closer');
+    const thicker = compareFits([BASE, fitOf({ resistivity: [100, 20], thickness: [10] })]).pairs[0]!;
+    expect(thicker.totalConductanceRatio).toBeCloseTo(2, 3);
+    expect(thicker.totalResistanceRatio).toBeCloseTo(2, 3);
+  });
+
+  it('compares every pair of three and names the closest fit', () => {
+    const worse = fitOf({ resistivity: [100, 20], thickness: [5] }, 1);
+    const comparison = compareFits([worse, BASE, worse]);
+    expect(comparison.pairs.map((pair) => [pair.first, pair.second])).toEqual([
+      [0, 1],
+      [0, 2],
+      [1, 2],
+    ]);
+    expect(comparison.bestFitting).toBe(1);
+  });
+
+  it('takes an unbounded interval as reaching everywhere', () => {
+    const open = {
+      ...BASE,
+      intervals: {
+        ...BASE.intervals,
+        resistivity: BASE.intervals.resistivity.map((): [null, null] => [null, null]),
+      },
+    };
+    const { pairs } = compareFits([open, fitOf({ resistivity: [100, 500], thickness: [5] })]);
+    const bed = pairs[0]!.beds.find((one) => one.bed === 1 && one.quantity === 'resistivity')!;
+    expect(bed.intervalsOverlap).toBe(true);
+  });
+});

@@ -1,0 +1,87 @@
+import { describe, expect, it } from 'vitest';
+import {
+  createForwardOperator,
+  describeDoubt,
+  fitLayered,
+  type FitResult,
+  type LayeredEarth,
+} from '../../../inversion';
+import { layered } from '../support/fit-settings';
+
+const SPREADS = Array.from(
+  { length: 16 },
+  (_, i) => ({ type: 'schlumberger', halfAB: 1.5 ** i, halfMN: 0.2 }) as const,
+);
+
+function fitOf(earth: LayeredEarth, layers: number | 'auto' = earth.resistivity.length): FitResult {
+  const predicted = createForwardOperator(SPREADS).predict(earth);
+  const readings = SPREADS.map((spread, i) => ({
+    spread,
+    apparentResistivity: predicted[i]!,
+    relativeError: 0.03,
+  }));
+  return fitLayered(readings, layered(layers, typeof layers === 'number' ? { start: earth } : {}));
+}
+
+describe('describeDoubt', () => {
+  it('says that a thin conductive bed is known by its conductance', () => {
+    const fit = fitOf({ resistivity: [100, 5, 500], thickness: [10, 1.5] });
+    const item = describeDoubt(fit).find((doubt) => doubt.kind === 'conductance')!;
+    expect(item).toMatchObject({ bed: 1, unit: 'S' });
+    expect(item.value).toBeCloseTo(0.3, 2);
+    expect(item.text).toContain('Bed 2 is known by S = h/ρ = 0.300 S ±');
+    expect(item.factor!).toBeGreaterThan(1);
+    expect(item.factor!).toBeLessThan(fit.factors.thickness[1] ?? Infinity);
+  });
+
+  it('says that a thin resistive bed is known by its transverse resistance', () => {
+    const fit = fitOf({ resistivity: [50, 1500, 20], thickness: [10, 1.5] });
+    const item = describeDoubt(fit).find((doubt) => doubt.kind === 'resistance')!;
+    expect(item).toMatchObject({ bed: 1, unit: 'Ω·m²' });
+    expect(item.value! / 2250).toBeCloseTo(1, 1);
+    expect(item.text).toContain('Bed 2 is known by T = hρ');
+  });
+
+  it('takes S from a positive correlation, T from a negative one, and neither below 0.95', () => {
+    const fit = fitOf({ resistivity: [100, 5, 500], thickness: [10, 1.5] });
+    const kinds = (value: number) => {
+      const correlation = fit.correlation.map((row, a) =>
+        row.map((cell, b) => ((a === 1 && b === 4) || (a === 4 && b === 1) ? value : cell)),
+      );
+      return describeDoubt({ ...fit, correlation }).flatMap((item) => (item.bed === 1 ? [item.kind] : []));
+    };
+    expect(kinds(0.96)).toContain('conductance');
+    expect(kinds(-0.96)).toContain('resistance');
+    expect(kinds(0.94)).not.toContain('conductance');
+    expect(kinds(-0.94)).not.toContain('resistance');
+  });
+
+  it('names a middle bed that fewer beds explain away', () => {
+    const fit = fitOf({ resistivity: [10, 31.6, 100], thickness: [10, 2] });
+    const two = { layers: 2, chi2PerReading: 0.4, withinNoise: true };
+    const counts = [1, 3].map((layers) => ({ ...two, layers, withinNoise: layers === 3 }));
+    const rows = [...counts, two].map((row) => ({
+      ...row,
+      status: fit.status,
+      bic: 0,
+      aicc: null,
+      chosen: false,
+      earth: fit.earth,
+    }));
+    const item = describeDoubt({ ...fit, layerCounts: rows }).find((doubt) => doubt.kind === 'suppression')!;
+    expect(item).toMatchObject({ bed: 1, unit: 'm' });
+    expect(item.text).toContain('2 beds already explain the readings within their errors (χ²/N 0.400)');
+  });
+
+  it('has nothing to say of a ground that the readings settle', () => {
+    expect(describeDoubt(fitOf({ resistivity: [100, 20], thickness: [8] }))).toEqual([]);
+  });
+
+  it('names values that are not determined', () => {
+    const fit = fitOf({ resistivity: [100, 20], thickness: [8] });
+    const factors = { ...fit.factors, resistivity: [fit.factors.resistivity[0]!, null] };
+    expect(describeDoubt({ ...fit, factors })).toEqual([
+      expect.objectContaining({ bed: 1, kind: 'resistivity', unit: 'Ω·m', factor: null }),
+    ]);
+  });
+});
