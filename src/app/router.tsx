@@ -19,6 +19,10 @@ const PAGES: Partial<Record<RouteName, PageLoader>> = {
   surveySoundings: async () => (await import('../features/soundings/soundings-page')).SoundingsPage,
   bench: async () => (await import('../features/bench/bench-page')).BenchPage,
   readings: async () => (await import('../features/readings/field-sheet-page')).FieldSheetPage,
+  interpretations: async () =>
+    (await import('../features/interpretations/interpretations-page')).InterpretationsPage,
+  interpretation: async () =>
+    (await import('../features/interpretations/interpretation-page')).InterpretationPage,
   settings: async () => (await import('../features/account/settings-page')).SettingsPage,
 };
 

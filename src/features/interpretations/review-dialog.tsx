@@ -1,0 +1,92 @@
+import { useForm } from 'react-hook-form';
+import { createReviewEventSchema, type Interpretation } from '../../../server/contract/interpretations';
+import { formFaults } from '../../api/form-faults';
+import { Button } from '../../ui/button';
+import { Dialog } from '../../ui/dialog';
+import { Field } from '../../ui/field';
+import { FormErrors } from '../../ui/form-errors';
+import { formResolver } from '../../ui/form-resolver';
+import { Textarea } from '../../ui/textarea';
+import { useReviewEvent, type ReviewEventInput } from './interpretation-mutations';
+
+export type ReviewMove = 'submitted' | 'withdrawn' | 'changes-asked' | 'accepted';
+
+interface MoveWords {
+  title: string;
+  description: string;
+  comment: string;
+  verb: string;
+}
+
+const WORDS: Record<ReviewMove, MoveWords> = {
+  submitted: {
+    title: 'Submit for review',
+    description:
+      'It is frozen as it stands and goes to the hydrogeologists of the survey. It cannot be edited until they decide or it is withdrawn.',
+    comment: 'A word for the reviewer (may stay empty)',
+    verb: 'Submit',
+  },
+  withdrawn: {
+    title: 'Withdraw from review',
+    description: 'It becomes a draft again and can be edited. What was submitted stays in the history.',
+    comment: 'Why (may stay empty)',
+    verb: 'Withdraw',
+  },
+  'changes-asked': {
+    title: 'Ask for changes',
+    description: 'It goes back to its author, who can edit and submit it again.',
+    comment: 'What should change',
+    verb: 'Ask for changes',
+  },
+  accepted: {
+    title: 'Accept',
+    description:
+      'It stands as the interpretation of this sounding and cannot be edited any more. An interpretation accepted before is superseded.',
+    comment: 'A word for the record (may stay empty)',
+    verb: 'Accept',
+  },
+};
+
+export interface ReviewDialogProps {
+  interpretation: Interpretation;
+  move: ReviewMove;
+  onClose: () => void;
+}
+
+/** One step of the review, with its consequence told before it is taken. */
+export function ReviewDialog({ interpretation, move, onClose }: ReviewDialogProps) {
+  const words = WORDS[move];
+  const review = useReviewEvent(interpretation.id);
+  const form = useForm<ReviewEventInput>({
+    resolver: formResolver(createReviewEventSchema),
+    defaultValues: { kind: move, comment: '', version: interpretation.version },
+  });
+  const take = form.handleSubmit((event) => review.mutate(event, { onSuccess: onClose }));
+  return (
+    <Dialog
+      open
+      onOpenChange={(open) => !open && onClose()}
+      title={words.title}
+      description={words.description}
+      actions={
+        <>
+          <Button onClick={onClose}>Cancel</Button>
+          <Button kind="main" loading={review.isPending} onClick={take}>
+            {words.verb}
+          </Button>
+        </>
+      }
+    >
+      <form onSubmit={take} className="flex flex-col gap-4">
+        <FormErrors title="Not done" faults={formFaults(review.error, { comment: 'Comment' })} />
+        <Field
+          label={words.comment}
+          required={move === 'changes-asked'}
+          error={form.formState.errors.comment?.message}
+        >
+          <Textarea rows={4} {...form.register('comment')} />
+        </Field>
+      </form>
+    </Dialog>
+  );
+}
