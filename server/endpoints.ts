@@ -6,6 +6,7 @@ import { invitationEndpoints } from './invitations/invitation-routes';
 import { lineEndpoints } from './lines/line-routes';
 import { memberEndpoints } from './members/member-routes';
 import { passwordResetEndpoints } from './password-resets/password-reset-routes';
+import { importEndpoints } from './readings/import-routes';
 import { readingEndpoints } from './readings/reading-routes';
 import { runsEndpoints } from './runs/runs-routes';
 import { sessionEndpoints } from './session/session-routes';
@@ -23,6 +24,7 @@ export const endpoints: readonly Endpoint[] = [
   ...boreholeEndpoints,
   ...soundingEndpoints,
   ...readingEndpoints,
+  ...importEndpoints,
   ...adminEndpoints,
   ...runsEndpoints,
   ...interpretationsEndpoints,

@@ -1,34 +1,21 @@
+import { checkReadings } from '../../inversion/readings/check-readings';
 import { tryDeriveReading } from '../../inversion/readings/derive-reading';
 import { checkSpread } from '../../inversion/spread/check-spread';
 import { geometricFactor } from '../../inversion/spread/geometric-factor';
 import type { CellFault } from './cell-fault';
 import {
-  SPACING_COLUMNS,
   type DerivedReading,
   type Reading,
+  type ReadingCheck,
   type RowFault,
-  type SheetColumn,
   type SheetRow,
   type SheetUnits,
 } from './readings';
-import {
-  columnScale,
-  columnUnit,
-  NUMBER_COLUMNS,
-  SHEET_COLUMN_NAMES,
-  sheetColumnsOf,
-  type NumberColumnName,
-} from './sheet-columns';
-import { parseSheetNumber, scaleNumber, writeNumber, type DecimalMark } from './sheet-number';
-import { spreadOfLengths, spreadLengths, type SheetLengths } from './sheet-spread';
+import { cellText, parseCell, parseLengths, type SheetOptions } from './sheet-cells';
+import { columnScale, SHEET_COLUMN_NAMES, sheetColumnsOf, type NumberColumnName } from './sheet-columns';
+import { writeNumber } from './sheet-number';
+import { spreadOfLengths, spreadLengths } from './sheet-spread';
 import type { SpreadType } from './spread';
-
-export interface SheetOptions {
-  /** the survey's, relative; 0 = own errors alone */
-  readonly errorFloor?: number;
-  /** the sign that the whole file uses; both are taken when absent */
-  readonly decimalMark?: DecimalMark;
-}
 
 export type ParsedRow =
   | { readonly reading: Reading; readonly derived: DerivedReading; readonly faults: null }
@@ -42,58 +29,10 @@ export interface ParsedSheet {
   faults: RowFault[];
 }
 
-const cellText = (row: SheetRow, column: SheetColumn): string => (row.cells[column] ?? '').trim();
-
 export const isBlankRow = (row: SheetRow): boolean =>
   Object.values(row.cells).every((text) => text.trim() === '');
 
-/** What a cell of this column may hold, in the units of the sheet. */
-export function allowedNumber(column: NumberColumnName, units: SheetUnits): string {
-  const { low, high, openLow } = NUMBER_COLUMNS[column];
-  const scale = columnScale(column, units);
-  const unit = columnUnit(column, units);
-  const say = (bound: number) => `${Number((bound / scale).toPrecision(6))}${unit && ` ${unit}`}`;
-  const range = openLow ? `above ${say(low)} and up to ${say(high)}` : `from ${say(low)} to ${say(high)}`;
-  return `a number ${range}, such as 12.5 or 12,5`;
-}
-
-function parseCell(
-  row: SheetRow,
-  column: NumberColumnName,
-  units: SheetUnits,
-  options: SheetOptions,
-  faults: CellFault[],
-): number | null {
-  const text = cellText(row, column);
-  if (text === '') return null;
-  const parsed = parseSheetNumber(text, options.decimalMark);
-  const fault = (message: string) => {
-    faults.push({ column, found: text, message, allowed: allowedNumber(column, units) });
-    return null;
-  };
-  if (parsed.message !== null) return fault(parsed.message);
-  const value = scaleNumber(parsed.value, columnScale(column, units));
-  const { low, high, openLow } = NUMBER_COLUMNS[column];
-  if (value < low || (openLow && value === low)) return fault('is too small');
-  return value > high ? fault('is too large') : value;
-}
-
-const INFINITE = /^(∞|inf|infinity|infinite)$/i;
-
-function parseLengths(
-  row: SheetRow,
-  spreadType: SpreadType,
-  units: SheetUnits,
-  options: SheetOptions,
-  faults: CellFault[],
-): SheetLengths {
-  const lengths: SheetLengths = {};
-  for (const column of SPACING_COLUMNS[spreadType]) {
-    const atInfinity = spreadType === 'electrodes' && INFINITE.test(cellText(row, column));
-    lengths[column] = atInfinity ? null : parseCell(row, column, units, options, faults);
-  }
-  return lengths;
-}
+const LONGEST_TEXT = 500;
 
 /** One row of a Field sheet as a reading with what follows from it, or all its faults. */
 export function parseSheetRow(
@@ -116,6 +55,17 @@ export function parseSheetRow(
   const excluded = row.excluded?.trim() ?? null;
   if (excluded === '')
     faults.push({ column: 'excluded', found: '', message: 'no reason is given', allowed: 'a short reason' });
+  for (const [column, text] of [
+    ['remark', remark],
+    ['excluded', excluded ?? ''],
+  ] as const)
+    if (text.length > LONGEST_TEXT)
+      faults.push({
+        column,
+        found: `${text.length} signs`,
+        message: 'is too long',
+        allowed: `up to ${LONGEST_TEXT} signs`,
+      });
   if (faults.length > 0) return { reading: null, derived: null, faults };
   const spread = spreadOfLengths(spreadType, lengths);
   if ('column' in spread) return rowFault({ ...spread, found: foundIn(row, spread.column) });
@@ -153,6 +103,15 @@ export function parseSheet(
   });
   return sheet;
 }
+
+/** Every doubt about the good rows of a sheet; their rows are those of the sheet. */
+export const checkSheet = ({ readings, derived, rows }: ParsedSheet): ReadingCheck[] =>
+  checkReadings(
+    readings.flatMap((reading, i) => {
+      const [follows, row] = [derived[i], rows[i]];
+      return follows && row !== undefined ? [{ row, reading, derived: follows }] : [];
+    }),
+  );
 
 /** The name of a column at fault; empty for the row as a whole. */
 export function faultColumnName(column: CellFault['column']): string {

@@ -86,4 +86,30 @@ export const readingRows: AccessRow[] = [
     expected: membersGet(404),
     arrange: async (given) => ({ path: `/revisions/${(await savedReadings(given)).id}/source-file` }),
   },
+  {
+    endpoint: 'POST /soundings/:soundingId/import-previews',
+    expected: rolesGet(200, 'lead', 'geophysicist'),
+    arrange: async (given) => ({
+      path: `/soundings/${await newSounding(given)}/import-previews`,
+      file: { name: 'sheet.csv', content: 'a (m);R (ohm)\n5;2\n' },
+    }),
+  },
+  {
+    endpoint: 'POST /soundings/:soundingId/imports',
+    expected: rolesGet(201, 'lead', 'geophysicist'),
+    arrange: async (given) => ({
+      path: `/soundings/${await newSounding(given)}/imports`,
+      file: { name: 'sheet.csv', content: 'a (m);R (ohm)\n5;2\n' },
+      body: {
+        accept: 'all',
+        mapping: JSON.stringify({
+          hasHeader: true,
+          delimiter: ';',
+          decimalMark: '.',
+          columns: ['spacing', 'resistance'],
+          units,
+        }),
+      },
+    }),
+  },
 ];
