@@ -10,7 +10,7 @@ import { createServices } from '../../server/create-services';
 import type { Method } from '../../server/http/endpoint';
 import type { Services } from '../../server/http/context';
 import { createFactories, type Factories, type TestUser } from './factories';
-import { createTestDatabase } from './test-database';
+import { createTestDatabase, type TestDatabase } from './test-database';
 
 /** Sends requests below /api/v1 as one person, or as nobody. */
 export interface Client {
@@ -39,7 +39,14 @@ export interface TestServer extends Factories {
 
 /** The real server on a database of its own; await it at the top of a test file. `env` changes settings. */
 export async function createTestServer(env: NodeJS.ProcessEnv = {}): Promise<TestServer> {
-  const database = await createTestDatabase();
+  return serverOn(await createTestDatabase(), env);
+}
+
+/** The same on a database that the caller opened. */
+export async function serverOn(
+  database: Pick<TestDatabase, 'url' | 'knex' | 'pool'>,
+  env: NodeJS.ProcessEnv = {},
+): Promise<TestServer> {
   const running = await createServices({
     config: loadConfig({ DATABASE_URL: database.url, LOG_REQUESTS: 'false', ...env }),
     log: pino({ level: 'silent' }),
