@@ -14,6 +14,7 @@ import {
   residualLine,
   soundingAxes,
   soundingCurveOption,
+  type SoundingCurveInput,
 } from '../../../src/charts/sounding-curve-option';
 
 echarts.use([LineChart, CustomChart, GridComponent, TooltipComponent, SVGRenderer]);
@@ -41,7 +42,7 @@ const lineOf = (letter: string, residuals: (number | null)[], scale = 1): CurveL
   residuals,
 });
 const lines = [lineOf('A', [0.4, null, -2.4, 7]), lineOf('B', [1, null, 1, 1], 1.05)];
-const input = {
+const input: SoundingCurveInput = {
   readings,
   lines,
   chosenLine: 'A',
@@ -54,7 +55,7 @@ const input = {
 const listOf = <Item>(value: Item | Item[] | undefined): Item[] =>
   Array.isArray(value) ? value : value ? [value] : [];
 
-function drawn(changes: Partial<typeof input> = {}): string {
+function drawn(changes: Partial<SoundingCurveInput> = {}): string {
   const chart = echarts.init(null, null, { renderer: 'svg', ssr: true, width: 800, height: 480 });
   chart.setOption(soundingCurveOption({ ...input, ...changes }));
   const svg = chart.renderToSVGString();
@@ -136,7 +137,7 @@ describe('drawing', () => {
   });
 
   test('without residuals there is no strip', () => {
-    const bare = lines.map(({ residuals: _, ...line }) => line);
+    const bare = lines.map((line) => ({ ...line, residuals: undefined }));
     expect(listOf(soundingCurveOption({ ...input, lines: bare }).xAxis)).toHaveLength(1);
     expect(drawn({ lines: bare })).not.toContain('+2σ');
   });
