@@ -1,4 +1,3 @@
-import { once } from 'node:events';
 import { createInterface } from 'node:readline';
 import type { Readable, Writable } from 'node:stream';
 import { InversionError } from '../../inversion';
@@ -38,6 +37,18 @@ function answerOne(text: string, answer: (line: unknown) => object): { answered:
   }
 }
 
+/** Resolves when the output takes more, or never will: its errors are dealt with where it is listened to. */
+function roomAgain(output: Writable): Promise<void> {
+  const events = ['drain', 'close', 'error'];
+  return new Promise((resolve) => {
+    const done = () => {
+      for (const event of events) output.off(event, done);
+      resolve();
+    };
+    for (const event of events) output.on(event, done);
+  });
+}
+
 /**
  * Reads lines and writes one answer for each, in order, as they come; blank lines are skipped, CRLF and a byte order mark
  * are taken. Returns 0, or 1 when a line was refused. A reader that goes away ends the run quietly.
@@ -60,8 +71,7 @@ export async function answerLines(
     if (text.trim() === '') continue;
     const { answered, refused } = answerOne(text, answer);
     if (refused) status = 1;
-    if (!output.write(`${JSON.stringify(answered)}\n`))
-      await Promise.race([once(output, 'drain'), once(output, 'close')]);
+    if (!output.write(`${JSON.stringify(answered)}\n`) && !gone) await roomAgain(output);
   }
   return status;
 }

@@ -1,0 +1,231 @@
+import { spawn } from 'node:child_process';
+import { once } from 'node:events';
+import { readFileSync } from 'node:fs';
+import { PassThrough, Readable, Writable } from 'node:stream';
+import { describe, expect, it } from 'vitest';
+import { createForwardOperator, fitLayered } from '../../../inversion';
+import { runCommandLine } from '../../../server/cli/run-command-line';
+import {
+  COMMAND_LINE_SCHEMAS,
+  fitAnswerSchema,
+  forwardAnswerSchema,
+} from '../../../server/contract/command-line';
+import { layered } from '../support/fit-settings';
+
+function sink(): { stream: Writable; text: () => string } {
+  const chunks: string[] = [];
+  const stream = new Writable({
+    write: (chunk: Buffer, _encoding, done) => {
+      chunks.push(chunk.toString());
+      done();
+    },
+  });
+  return { stream, text: () => chunks.join('') };
+}
+
+async function run(args: string[], input = '') {
+  const [out, err] = [sink(), sink()];
+  const status = await runCommandLine(args, Readable.from([input]), out.stream, err.stream);
+  const answers: Record<string, unknown>[] = out
+    .text()
+    .split('\n')
+    .filter((line) => line.startsWith('{"'))
+    .map((line) => JSON.parse(line));
+  return { status, answers, output: out.text(), errors: err.text() };
+}
+
+const EARTH = { resistivity: [100, 20], thickness: [3] };
+const WENNER = { type: 'wenner', spacing: 5 } as const;
+const line = (value: object) => `${JSON.stringify(value)}\n`;
+
+describe('forward', () => {
+  it('answers each line in order, as the engine does, with K', async () => {
+    const spreads = [WENNER, { type: 'schlumberger', halfAB: 10, halfMN: null }] as const;
+    const { status, answers } = await run(
+      ['forward'],
+      line({ id: 'a', earth: EARTH, spreads }) + line({ id: 2, earth: EARTH, spreads: [WENNER] }),
+    );
+    expect(status).toBe(0);
+    expect(answers.map((answer) => answer.id)).toEqual(['a', 2]);
+    const first = forwardAnswerSchema.parse(answers[0]);
+    expect(first.apparentResistivity).toEqual(Array.from(createForwardOperator(spreads).predict(EARTH)));
+    expect(first.geometricFactor).toEqual([10 * Math.PI, null]);
+  });
+
+  it('takes CRLF, blank lines, a byte order mark and a last line without an end', async () => {
+    const good = JSON.stringify({ id: 1, earth: EARTH, spreads: [WENNER] });
+    const { status, answers } = await run(['forward'], `\uFEFF${good}\r\n\r\n   \n${good}`);
+    expect(status).toBe(0);
+    expect(answers).toHaveLength(2);
+  });
+
+  it('answers a bad line on its own line, the good ones still, and ends with 1', async () => {
+    const good = line({ id: 'good', earth: EARTH, spreads: [WENNER] });
+    const { status, answers } = await run(['forward'], `${good}not json\n${good}`);
+    expect(status).toBe(1);
+    expect(answers.map((answer) => answer.id)).toEqual(['good', null, 'good']);
+    expect(answers[1]!.error).toMatchObject({ code: 'invalid-json', path: [] });
+  });
+
+  it.each<[string, object, object]>([
+    [
+      'a length below zero',
+      { id: 1, earth: EARTH, spreads: [{ type: 'wenner', spacing: -5 }] },
+      {
+        path: ['spreads', 0, 'spacing'],
+        message: 'spreads[0].spacing: Too small: expected number to be >0; found -5',
+      },
+    ],
+    [
+      'a spread that is not one',
+      { id: 1, earth: EARTH, spreads: [WENNER, { type: 'wennr', spacing: 5 }] },
+      {
+        path: ['spreads', 1, 'type'],
+        message:
+          'spreads[1].type: expected one of schlumberger, half-schlumberger, wenner, pole-pole, dipole-dipole, electrodes; found "wennr"',
+      },
+    ],
+    [
+      'one thickness too many',
+      { id: 1, earth: { resistivity: [1], thickness: [2] }, spreads: [WENNER] },
+      {
+        path: ['earth', 'thickness'],
+        message: 'earth.thickness: must have one entry fewer than resistivity; found [2]',
+      },
+    ],
+    [
+      'MN beyond AB',
+      { id: 1, earth: EARTH, spreads: [{ type: 'schlumberger', halfAB: 5, halfMN: 6 }] },
+      { code: 'spread-halfmn', path: ['spreads', 0, 'halfMN'] },
+    ],
+    [
+      'electrodes that cancel',
+      { id: 1, earth: EARTH, spreads: [WENNER, { type: 'electrodes', am: 1, an: 1, bm: 2, bn: 2 }] },
+      { code: 'spread-cancels', path: ['spreads', 1, 'am'] },
+    ],
+    [
+      'a key that is not known',
+      { id: 1, earth: EARTH, spreads: [WENNER], colour: 'red' },
+      { code: 'invalid-line', path: [], message: expect.stringContaining('colour') },
+    ],
+  ])('refuses %s with its place', async (_, request, error) => {
+    const { status, answers } = await run(['forward'], line(request));
+    expect(status).toBe(1);
+    expect(answers).toEqual([{ id: 1, error: expect.objectContaining(error) }]);
+  });
+
+  it('refuses a line that is JSON but not an object, and an id of the wrong kind', async () => {
+    const { answers } = await run(['forward'], `[1]\n${line({ id: [1], earth: EARTH, spreads: [WENNER] })}`);
+    expect(answers.map((answer) => answer.id)).toEqual([null, null]);
+  });
+
+  it('answers ten thousand lines, waiting for a slow reader', { timeout: 60_000 }, async () => {
+    const out = new PassThrough({ highWaterMark: 1024 });
+    const one = line({ id: 1, earth: EARTH, spreads: [WENNER] });
+    const running = runCommandLine(['forward'], Readable.from([one.repeat(10_000)]), out, sink().stream);
+    let lines = 0;
+    out.on('data', (chunk: Buffer) => (lines += chunk.toString().split('\n').length - 1));
+    expect(await running).toBe(0);
+    expect(lines).toBe(10_000);
+  });
+});
+
+describe('fit', () => {
+  const readings = [1, 2, 4, 8, 16, 32].map((spacing, i) => ({
+    spread: { type: 'wenner', spacing } as const,
+    apparentResistivity: [95, 80, 52, 30, 23, 21][i]!,
+    relativeError: 0.03,
+  }));
+
+  it('gives what the engine gives, with defaults filled in', async () => {
+    const { status, answers } = await run(
+      ['fit'],
+      line({ id: 's1', readings, settings: { kind: 'layered', layers: 2 } }),
+    );
+    expect(status).toBe(0);
+    expect(answers[0]).toEqual({ id: 's1', ...fitLayered(readings, layered(2)) });
+    expect(fitAnswerSchema.parse(answers[0])).toEqual(answers[0]);
+  });
+
+  it('chooses the layers itself when asked, and takes the label of a branch', async () => {
+    const labelled = readings.map((reading) => ({ ...reading, branch: 'a' }));
+    const { answers } = await run(
+      ['fit'],
+      line({ id: 1, readings: labelled, settings: { kind: 'layered', layers: 'auto', seed: 5 } }),
+    );
+    const counts = fitAnswerSchema.parse(answers[0]).layerCounts!;
+    expect(counts.map((count) => count.layers)).toEqual([1, 2, 3]);
+  });
+
+  it.each<[object, (string | number)[]]>([
+    [{ layers: 9 }, ['settings', 'layers']],
+    [
+      { layers: 2, bounds: { resistivity: [10, 1], thickness: [1, 2] } },
+      ['settings', 'bounds', 'resistivity'],
+    ],
+    [{ layers: 2, fixed: [{ on: 'thickness', index: 1, value: 3 }] }, ['settings', 'fixed', 0, 'index']],
+    [{ layers: 2, seed: -1 }, ['settings', 'seed']],
+  ])('refuses the settings %j', async (settings, path) => {
+    const { status, answers } = await run(
+      ['fit'],
+      line({ id: 1, readings, settings: { kind: 'layered', ...settings } }),
+    );
+    expect(status).toBe(1);
+    expect(answers[0]).toMatchObject({ id: 1, error: { code: 'invalid-line', path } });
+  });
+});
+
+describe('schema', () => {
+  it('lists its names, and prints each as JSON Schema', async () => {
+    const names = (await run(['schema'])).output.trim().split('\n');
+    expect(names).toEqual(Object.keys(COMMAND_LINE_SCHEMAS));
+    for (const name of names) {
+      const { status, output } = await run(['schema', name]);
+      expect(status).toBe(0);
+      expect(JSON.parse(output)).toHaveProperty('$schema');
+    }
+    expect((await run(['schema', 'fit-status'])).output).toContain('converged-gradient');
+  });
+
+  it('refuses a name that is not one', async () => {
+    const { status, errors } = await run(['schema', 'nothing']);
+    expect(status).toBe(2);
+    expect(errors).toContain('"nothing" is not a schema; there are spread, earth');
+  });
+});
+
+describe('the command itself', () => {
+  it.each([[[]], [['plot']], [['forward', 'file.jsonl']]])('%j gives the usage and 2', async (args) => {
+    const { status, errors, output } = await run(args);
+    expect(status).toBe(2);
+    expect(errors).toContain('Usage: npm run -s layerwell -- COMMAND');
+    expect(output).toBe('');
+  });
+
+  it(
+    'runs as a process over the examples, and ends quietly when its reader goes away',
+    { timeout: 60_000 },
+    async () => {
+      const input = readFileSync(new URL('../../../examples/forward.jsonl', import.meta.url), 'utf8');
+      const start = () =>
+        spawn(process.execPath, ['--import', 'tsx', 'server/cli.ts', 'forward'], {
+          stdio: ['pipe', 'pipe', 'pipe'],
+        });
+      const whole = start();
+      let output = '';
+      whole.stdout.on('data', (chunk: Buffer) => (output += chunk.toString()));
+      whole.stdin.end(input);
+      expect(await once(whole, 'close')).toEqual([0, null]);
+      expect(output.trim().split('\n')).toHaveLength(input.trim().split('\n').length);
+
+      const cut = start();
+      let complaints = '';
+      cut.stderr.on('data', (chunk: Buffer) => (complaints += chunk.toString()));
+      cut.stdin.on('error', () => undefined);
+      cut.stdout.once('data', () => cut.stdout.destroy());
+      cut.stdin.end(input.repeat(3000));
+      await once(cut, 'close');
+      expect(complaints).toBe('');
+    },
+  );
+});
