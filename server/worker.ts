@@ -18,7 +18,9 @@ process.on('unhandledRejection', fail);
 
 const lost = (error: Error) => log.warn({ err: error }, 'a connection to the database was lost');
 const db = createDatabase(config, lost);
-const pool = createPool(config, lost);
+// two connections listen for good, the others take and end jobs
+const databasePool = Math.max(config.databasePool, config.workerThreads + 4);
+const pool = createPool({ ...config, databasePool }, lost);
 const isSource = import.meta.url.endsWith('.ts');
 const worker = startRunWorker({
   db,

@@ -3,6 +3,7 @@ import type { Notification, Pool, PoolClient } from 'pg';
 import type { Logger } from 'pino';
 import { z } from 'zod';
 import { runStateNameSchema } from '../contract/runs';
+import { createOutageLog } from './outage-log';
 
 const CHANNEL = 'run_changed';
 const RECONNECT_MS = 500;
@@ -50,6 +51,7 @@ export function createRunEvents(pool: Pool, log: Logger): RunEvents {
   let opening: Promise<void> | null = null;
   let retry: NodeJS.Timeout | null = null;
   let closed = false;
+  const outage = createOutageLog(log, 'announcements of changed runs');
 
   const hear = ({ payload }: Notification): void => {
     const change = readChange(payload);
@@ -65,21 +67,24 @@ export function createRunEvents(pool: Pool, log: Logger): RunEvents {
         if (client !== fresh) return;
         client = null;
         fresh.release(error ?? true);
-        if (!closed) reconnectLater(error);
+        reconnectLater(error);
       };
       fresh.on('error', lost);
       fresh.on('end', lost);
       fresh.on('notification', hear);
       client = fresh;
       await fresh.query(`LISTEN ${CHANNEL}`).catch(lost);
-      if (client === fresh) for (const { listener } of subscriptions) listener.missed();
+      if (client !== fresh) return;
+      outage.worked();
+      for (const { listener } of subscriptions) listener.missed();
     } catch (error) {
       reconnectLater(error);
     }
   };
 
   const reconnectLater = (error: unknown): void => {
-    log.warn({ err: error }, 'lost the line that announces changes of runs; connecting again');
+    if (closed) return;
+    outage.failed(error);
     retry = setTimeout(open, RECONNECT_MS);
   };
 

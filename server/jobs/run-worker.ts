@@ -14,6 +14,7 @@ import {
 } from './dead-workers';
 import { createFitPool } from './fit-pool';
 import { createJobQueue, RUN_TASK } from './job-queue';
+import { createOutageLog } from './outage-log';
 import { queueLog } from './queue-log';
 import { createRunEvents } from './run-events';
 import { createRunTask, type RunTask } from './run-task';
@@ -44,6 +45,8 @@ export function startRunWorker({ db, pool, log, threads, threadFile }: RunWorker
   const task = createRunTask({ db, jobs, runEvents, log, fits });
   const stop = new AbortController();
   const own: { id: string | null } = { id: null };
+  const taken = createOutageLog(log, 'taking runs from the queue');
+  const watched = createOutageLog(log, 'watching over runs and workers');
 
   const unsubscribe = runEvents.subscribe(null, {
     changed: ({ runId, state }) => state === 'cancelled' && task.drop(runId),
@@ -53,6 +56,7 @@ export function startRunWorker({ db, pool, log, threads, threadFile }: RunWorker
   const takeJobs = async (): Promise<void> => {
     await freeOwnEarlierLives(db);
     const runner = await launchRunner(pool, log, threads, task, own);
+    taken.worked();
     const halt = () => void runner.stop().catch(() => undefined);
     stop.signal.addEventListener('abort', halt);
     if (stop.signal.aborted) halt();
@@ -72,13 +76,16 @@ export function startRunWorker({ db, pool, log, threads, threadFile }: RunWorker
   };
 
   const taking = repeat(stop.signal, RESTART_MS, async () => {
-    await takeJobs().catch((error: unknown) => log.warn({ err: error }, 'the queue was lost; trying again'));
+    await takeJobs().catch((error: unknown) => taken.failed(error));
     const { id } = own;
     own.id = null;
     if (id && !stop.signal.aborted) await freeWorkers(db, [id]).catch(() => undefined);
   });
   const watching = repeat(stop.signal, BEAT_MS, () =>
-    watch().catch((error: unknown) => log.warn({ err: error }, 'the database cannot be reached just now')),
+    watch().then(
+      () => watched.worked(),
+      (error: unknown) => watched.failed(error),
+    ),
   );
 
   return {
