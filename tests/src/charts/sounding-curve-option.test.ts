@@ -131,7 +131,7 @@ describe('drawing', () => {
   });
 
   test('the reading walked to is ringed', () => {
-    expect(count(drawn({ focusedReading: 0 }), palette.copper)).toBeGreaterThan(
+    expect(count(drawn({ focusedReading: 1 }), palette.copper)).toBeGreaterThan(
       count(drawn(), palette.copper),
     );
   });
