@@ -8,16 +8,8 @@ import { AppError } from '../errors';
 import type { Work } from '../http/context';
 import { decideRefusal, MOVES, STATE_WORDS, type Move } from './interpretation-rules';
 import { presentBed, presentInterpretation } from './interpretations-presenter';
-import {
-  addContributor,
-  findAccepted,
-  getFrozenRun,
-  getInterpretation,
-  holdSoundingOf,
-  insertEvent,
-  setState,
-  type WholeInterpretation,
-} from './interpretations-store';
+import { addContributor, getInterpretation, type WholeInterpretation } from './interpretations-store';
+import { findAccepted, getFrozenRun, holdSoundingOf, insertEvent, setState } from './review-store';
 
 type EventInput = z.output<typeof createReviewEventSchema>;
 

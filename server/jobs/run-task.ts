@@ -7,11 +7,11 @@ import { errorOfPostgres } from '../errors';
 import type { FitPool } from './fit-pool';
 import type { ProgressReport } from './fit-progress';
 import type { FitAnswer } from './fit-thread';
+import { lostLeases } from './lost-leases';
 import {
   failRun,
   finishFromCache,
   giveBackRun,
-  lostLeases,
   storeResult,
   takeRun,
   writeProgress,

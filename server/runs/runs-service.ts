@@ -10,17 +10,8 @@ import { fitReadingsOf } from '../readings/fit-readings';
 import { computationKey } from './computation-key';
 import { requireEnoughReadings } from './require-enough-readings';
 import { presentRun, presentRunSummary } from './runs-presenter';
-import {
-  cancelRun,
-  findComputation,
-  findRunSource,
-  getRun,
-  holdSounding,
-  insertRun,
-  listRuns,
-  updateNote,
-  type FullRunRow,
-} from './runs-store';
+import { findComputation, findRunSource, holdSounding, insertRun } from './new-run-store';
+import { cancelRun, getRun, listRuns, updateNote, type FullRunRow } from './runs-store';
 
 export async function listSoundingRuns(
   { db, actor }: Work,

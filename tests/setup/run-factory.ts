@@ -6,7 +6,7 @@ import type { RunInput } from '../../server/contract/runs';
 import { resultHash } from '../../server/jobs/run-lease';
 import { fitReadingsOf } from '../../server/readings/fit-readings';
 import { computationKey } from '../../server/runs/computation-key';
-import { insertRun } from '../../server/runs/runs-store';
+import { insertRun } from '../../server/runs/new-run-store';
 
 export interface TestRun {
   readonly id: string;
