@@ -1,4 +1,4 @@
-import { queryOptions, useQuery } from '@tanstack/react-query';
+import { queryOptions } from '@tanstack/react-query';
 import { meSchema, type Me } from '../../server/contract/session';
 import { hasCode } from './api-error';
 import { getJson } from './http';
@@ -18,10 +18,3 @@ export const meQuery = queryOptions({
   },
   staleTime: 60_000,
 });
-
-/** The person signed in. Pages stand behind the sign-in guard, so there is one. */
-export function useMe(): Me {
-  const { data } = useQuery(meQuery);
-  if (!data) throw new Error('This page needs someone to be signed in.');
-  return data;
-}

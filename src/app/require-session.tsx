@@ -4,6 +4,7 @@ import { Navigate, Outlet, useLocation } from 'react-router-dom';
 import { signInAddress } from '../api/return-address';
 import { useSignOut } from '../api/session-mutations';
 import { meQuery } from '../api/session-queries';
+import { MeContext } from '../api/use-me';
 import { showToast } from '../ui/show-toast';
 import { FrameAccountContext, type FrameAccount } from './frame-account';
 import { LoadingPage } from './loading-page';
@@ -42,8 +43,10 @@ export function RequireSession() {
       </PageFrame>
     );
   return (
-    <FrameAccountContext value={account}>
-      <Outlet />
-    </FrameAccountContext>
+    <MeContext value={me.data}>
+      <FrameAccountContext value={account}>
+        <Outlet />
+      </FrameAccountContext>
+    </MeContext>
   );
 }

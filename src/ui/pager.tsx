@@ -1,5 +1,5 @@
 import { Button } from './button';
-import { formatSignificant } from './format';
+import { formatFixed } from './format';
 
 interface PagerProps {
   page: number;
@@ -10,7 +10,7 @@ interface PagerProps {
   what: string;
 }
 
-const count = (value: number) => formatSignificant(value, 9);
+const count = (value: number) => formatFixed(value, 0);
 
 /** "101–200 of 2000 soundings" with the way back and on. */
 export function Pager({ page, pageSize, total, onPage, what }: PagerProps) {

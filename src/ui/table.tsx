@@ -88,9 +88,13 @@ export function HeaderCell({ numeric, unit, sorted, onSort, className, children,
         <button
           type="button"
           onClick={onSort}
-          className="inline-flex min-h-6 items-center gap-1 rounded font-semibold hover:text-copper touch:min-h-11"
+          className={classNames(
+            'inline-flex min-h-6 items-center gap-1 rounded font-semibold hover:text-copper touch:min-h-11',
+            // the words stay over the figures, whose right edge is theirs
+            numeric && 'flex-row-reverse',
+          )}
         >
-          {words}
+          <span>{words}</span>
           <Arrow aria-hidden size={14} className={sorted ? 'text-copper' : 'opacity-0'} />
         </button>
       ) : (

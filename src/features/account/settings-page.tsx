@@ -1,6 +1,6 @@
 import type { ReactNode } from 'react';
 import { PageFrame } from '../../app/page-frame';
-import { useMe } from '../../api/session-queries';
+import { useMe } from '../../api/use-me';
 import { PageHeader } from '../../ui/page-header';
 import { Segmented } from '../../ui/segmented';
 import { chooseTheme, useThemeChoice } from '../../ui/theme';

@@ -37,7 +37,7 @@ export function CheckList({ checks, onJump }: CheckListProps) {
                     : null}
                 </p>
                 <p className="text-sm text-muted">
-                  {check.rule} Source: {check.source}
+                  Rule: {sentence(check.rule)} Source: {sentence(check.source)}
                 </p>
               </li>
             ))}
@@ -47,3 +47,5 @@ export function CheckList({ checks, onJump }: CheckListProps) {
     </section>
   );
 }
+
+const sentence = (text: string): string => (/[.?]$/.test(text) ? text : `${text}.`);

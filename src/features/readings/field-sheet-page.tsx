@@ -21,10 +21,15 @@ function SheetPage({ soundingId }: { soundingId: string }) {
   return (
     <SoundingPage
       section="Field sheet"
+      layout="fill"
       status={(sounding) => <DraftStatus keeper={keeper} sounding={sounding} />}
       keys={<SheetKeys />}
     >
-      {(sounding) => <LoadedSheet sounding={sounding} keeper={keeper} />}
+      {(sounding) => (
+        <div className="w-full px-4 py-5 sm:px-7">
+          <LoadedSheet sounding={sounding} keeper={keeper} />
+        </div>
+      )}
     </SoundingPage>
   );
 }

@@ -75,7 +75,7 @@ export function FieldSheetView({ sounding, fieldSheet, keeper }: FieldSheetViewP
       <SheetActions sounding={sounding} fieldSheet={fieldSheet} sheet={sheet} keeper={keeper} />
       <CrewCaution />
       <SheetNotices fieldSheet={fieldSheet} sheet={sheet} readOnly={readOnly} />
-      <div className="grid items-start gap-x-8 gap-y-6 xl:grid-cols-[minmax(0,1fr)_minmax(26rem,36rem)]">
+      <div className="grid items-start gap-x-8 gap-y-6 xl:grid-cols-[minmax(0,1fr)_minmax(24rem,36%)]">
         {/* The keys of undo belong to the sheet as a whole, not to the one cell that has the cursor. */}
         <div className="flex min-w-0 flex-col gap-3" onKeyDownCapture={onKeyDown}>
           {readOnly ? null : (

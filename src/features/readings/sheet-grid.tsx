@@ -1,4 +1,11 @@
-import { useImperativeHandle, useRef, type ClipboardEvent, type KeyboardEvent, type Ref } from 'react';
+import {
+  Fragment,
+  useImperativeHandle,
+  useRef,
+  type ClipboardEvent,
+  type KeyboardEvent,
+  type Ref,
+} from 'react';
 import type { SheetUnits } from '../../../server/contract/readings';
 import type { SpreadType } from '../../../server/contract/spread';
 import { classNames } from '../../ui/class-names';
@@ -98,6 +105,15 @@ const Spacer = ({ height }: { height: number }) =>
     </tbody>
   ) : null;
 
+/** What the sheet computes stands after what is written, on another ground. */
+const DerivedHeads = () => (
+  <>
+    <HeadCell name="K" unit="m" className="min-w-17 bg-sunken text-right" />
+    <HeadCell name="ρa" unit="Ω·m" className="min-w-17 bg-sunken text-right" />
+    <HeadCell name="total" unit="error" className="min-w-15 bg-sunken text-right" />
+  </>
+);
+
 interface GridHeadProps {
   columns: readonly GridColumn[];
   spreadType: SpreadType;
@@ -112,19 +128,15 @@ function GridHead({ columns, spreadType, units }: GridHeadProps) {
           <span className="sr-only">Row</span>
         </th>
         {columns.map((column) => (
-          <HeadCell
-            key={column}
-            name={gridColumnName(column, spreadType)}
-            unit={gridColumnUnit(column, units)}
-            className={classNames(
-              isTextColumn(column) ? 'min-w-28 text-left' : 'min-w-20 text-right',
-              column === 'excluded' && 'text-center',
-            )}
-          />
+          <Fragment key={column}>
+            {column === 'excluded' ? <DerivedHeads /> : null}
+            <HeadCell
+              name={gridColumnName(column, spreadType)}
+              unit={gridColumnUnit(column, units)}
+              className={isTextColumn(column) ? 'min-w-28 text-left' : 'min-w-17 text-right'}
+            />
+          </Fragment>
         ))}
-        <HeadCell name="K" unit="m" className="min-w-18 bg-sunken text-right" />
-        <HeadCell name="ρa" unit="Ω·m" className="min-w-18 bg-sunken text-right" />
-        <HeadCell name="total error" unit="" className="bg-sunken text-right" />
       </tr>
     </thead>
   );

@@ -1,4 +1,4 @@
-import { memo } from 'react';
+import { Fragment, memo } from 'react';
 import type { SheetRow, SheetUnits } from '../../../server/contract/readings';
 import type { SpreadType } from '../../../server/contract/spread';
 import { classNames } from '../../ui/class-names';
@@ -53,7 +53,10 @@ export const SheetRowView = memo(function SheetRowView(props: SheetRowViewProps)
       </th>
       {columns.map((column) =>
         column === 'excluded' ? (
-          <ExcludedCell key={column} {...props} fault={faults.get('excluded')} />
+          <Fragment key={column}>
+            <DerivedCells line={line} />
+            <ExcludedCell {...props} fault={faults.get('excluded')} />
+          </Fragment>
         ) : (
           <SheetCell
             key={column}
@@ -69,7 +72,6 @@ export const SheetRowView = memo(function SheetRowView(props: SheetRowViewProps)
           />
         ),
       )}
-      <DerivedCells line={line} />
     </tr>
   );
 });

@@ -1,5 +1,5 @@
 import { useEffect, useState } from 'react';
-import { useMe } from '../../api/session-queries';
+import { useMe } from '../../api/use-me';
 import { DraftKeeper } from './draft-keeper';
 import { useSendDraft } from './reading-mutations';
 

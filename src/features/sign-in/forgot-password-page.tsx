@@ -43,9 +43,9 @@ export function ForgotPasswordPage() {
           </Button>
         </form>
       )}
-      <Link to={addressOf('signIn')} className="self-start py-1">
-        Back to sign in
-      </Link>
+      <p>
+        <Link to={addressOf('signIn')}>Back to sign in</Link>
+      </p>
     </EntryFrame>
   );
 }

@@ -46,9 +46,9 @@ export function SignInPage() {
         <Button type="submit" kind="main" loading={signIn.isPending}>
           Sign in
         </Button>
-        <Link to={addressOf('forgotPassword')} className="self-start py-1">
-          Forgot the password?
-        </Link>
+        <p>
+          <Link to={addressOf('forgotPassword')}>Forgot the password?</Link>
+        </p>
       </form>
     </EntryFrame>
   );

@@ -66,26 +66,61 @@ export function alongLine<T extends PlanPoint>(points: readonly T[]): T[] {
   return points.toSorted((a, b) => place(a) - place(b));
 }
 
-export interface PlanLabel {
+export interface MarkOnPage {
   x: number;
   y: number;
-  text: string;
+  name: string;
 }
 
-const CHARACTER_PX = 7;
-const LINE_PX = 14;
+export interface LabelPlace {
+  dx: number;
+  dy: number;
+  anchor: 'start' | 'middle' | 'end';
+}
 
-/** The labels that can stand without overlapping one before them; the others are read from the table. */
-export function clearLabels<T extends PlanLabel>(labels: readonly T[]): Set<T> {
-  const placed: T[] = [];
-  for (const label of labels) {
-    const collides = placed.some(
-      (other) =>
-        Math.abs(other.y - label.y) < LINE_PX &&
-        label.x < other.x + other.text.length * CHARACTER_PX &&
-        other.x < label.x + label.text.length * CHARACTER_PX,
-    );
-    if (!collides) placed.push(label);
-  }
-  return new Set(placed);
+const CHARACTER_PX = 7.2;
+const LINE_PX = 13;
+const MARK_PX = 7;
+
+const PLACES: readonly LabelPlace[] = [
+  { dx: 9, dy: 4, anchor: 'start' },
+  { dx: 0, dy: -10, anchor: 'middle' },
+  { dx: 0, dy: 19, anchor: 'middle' },
+  { dx: -9, dy: 4, anchor: 'end' },
+];
+
+interface Box {
+  left: number;
+  right: number;
+  top: number;
+  bottom: number;
+}
+
+const overlaps = (a: Box, b: Box): boolean =>
+  a.left < b.right && b.left < a.right && a.top < b.bottom && b.top < a.bottom;
+
+function labelBox({ x, y, name }: MarkOnPage, { dx, dy, anchor }: LabelPlace): Box {
+  const width = name.length * CHARACTER_PX;
+  const left = x + dx - (anchor === 'start' ? 0 : anchor === 'middle' ? width / 2 : width);
+  return { left, right: left + width, top: y + dy - LINE_PX, bottom: y + dy + 3 };
+}
+
+const markBox = ({ x, y }: MarkOnPage): Box => ({
+  left: x - MARK_PX,
+  right: x + MARK_PX,
+  top: y - MARK_PX,
+  bottom: y + MARK_PX,
+});
+
+/** A place for each name that covers no mark and no name before it; null where there is none. */
+export function placeLabels(marks: readonly MarkOnPage[]): (LabelPlace | null)[] {
+  const taken = marks.map(markBox);
+  return marks.map((mark) => {
+    const place = PLACES.find((candidate) => {
+      const box = labelBox(mark, candidate);
+      return !taken.some((other) => overlaps(box, other));
+    });
+    if (place) taken.push(labelBox(mark, place));
+    return place ?? null;
+  });
 }

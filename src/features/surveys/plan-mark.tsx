@@ -3,7 +3,9 @@ import { Link } from 'react-router-dom';
 import { SOUNDING_STATE_LOOK } from '../../soundings/sounding-state-look';
 import { MarkGlyph } from '../../ui/mark-glyph';
 import { TONE_TEXT } from '../../ui/state-mark';
+import { classNames } from '../../ui/class-names';
 import type { PlanItem } from './plan-items';
+import type { LabelPlace } from './plan-layout';
 
 interface PlanMarkProps {
   item: PlanItem;
@@ -12,10 +14,11 @@ interface PlanMarkProps {
   isTabStop: boolean;
   onFocus: () => void;
   onKeyDown: (event: KeyboardEvent) => void;
-  labelShown: boolean;
+  /** null where the name would cover another; it then shows on hover and focus. */
+  label: LabelPlace | null;
 }
 
-export function PlanMark({ item, x, y, isTabStop, onFocus, onKeyDown, labelShown }: PlanMarkProps) {
+export function PlanMark({ item, x, y, isTabStop, onFocus, onKeyDown, label }: PlanMarkProps) {
   const what =
     item.kind === 'borehole'
       ? `Borehole ${item.name}`
@@ -27,7 +30,7 @@ export function PlanMark({ item, x, y, isTabStop, onFocus, onKeyDown, labelShown
       aria-label={what}
       onFocus={onFocus}
       onKeyDown={onKeyDown}
-      className="group outline-none"
+      className="group no-underline outline-none"
     >
       <title>{what}</title>
       <circle
@@ -47,13 +50,15 @@ export function PlanMark({ item, x, y, isTabStop, onFocus, onKeyDown, labelShown
         )}
       </g>
       <text
-        x={x + 9}
-        y={y + 4}
-        className={
-          labelShown
-            ? 'fill-ink text-xs'
-            : 'invisible fill-ink text-xs group-hover:visible group-focus-visible:visible'
-        }
+        x={x + (label?.dx ?? 0)}
+        y={y + (label?.dy ?? -12)}
+        textAnchor={label?.anchor ?? 'middle'}
+        strokeWidth="3"
+        paintOrder="stroke"
+        className={classNames(
+          'fill-ink stroke-sheet text-xs',
+          label === null && 'invisible group-hover:visible group-focus-visible:visible',
+        )}
       >
         {item.name}
       </text>

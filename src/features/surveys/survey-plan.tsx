@@ -1,7 +1,7 @@
 import { useMemo, useRef, useState, type KeyboardEvent } from 'react';
 import { formatSignificant, withUnit } from '../../ui/format';
 import { useElementWidth } from '../../ui/use-element-width';
-import { alongLine, clearLabels, planLayout } from './plan-layout';
+import { alongLine, placeLabels, planLayout } from './plan-layout';
 import { PlanMark } from './plan-mark';
 import type { PlanItem } from './plan-items';
 
@@ -33,8 +33,7 @@ export function SurveyPlan({ items, upward }: SurveyPlanProps) {
   };
   if (layout === null) return <nav ref={frame} aria-label="Plan" style={{ height }} />;
   const placed = items.map((item) => ({ item, ...layout.toPage(item) }));
-  const labels = placed.map((mark) => ({ x: mark.x + 9, y: mark.y + 4, text: mark.item.name }));
-  const clear = clearLabels(labels);
+  const places = placeLabels(placed.map(({ item, x, y }) => ({ name: item.name, x, y })));
   return (
     <nav ref={frame} aria-label={`Plan of ${items.length} positions, ${upward} upwards`}>
       <svg ref={drawing} width={width} height={height} className="block border border-rule bg-sheet">
@@ -48,7 +47,7 @@ export function SurveyPlan({ items, upward }: SurveyPlanProps) {
             isTabStop={i === current}
             onFocus={() => setCurrent(i)}
             onKeyDown={move}
-            labelShown={clear.has(labels[i]!)}
+            label={places[i] ?? null}
           />
         ))}
         <ScaleBar {...layout.scaleBar} height={height} />

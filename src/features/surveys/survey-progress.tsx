@@ -13,7 +13,7 @@ const FILL: Record<ProgressStep['key'], string> = {
 export function SurveyProgress({ progress }: { progress: Survey['progress'] }) {
   const steps = progressSteps(progress);
   return (
-    <div>
+    <div className="@container">
       <div aria-hidden className="relative h-1.5 overflow-hidden rounded-full bg-sunken">
         {steps.map((step) => (
           <span
@@ -23,17 +23,20 @@ export function SurveyProgress({ progress }: { progress: Survey['progress'] }) {
           />
         ))}
       </div>
-      <dl className="mt-2 grid grid-cols-5 gap-x-2">
+      <dl className="mt-2 grid gap-x-2 @md:grid-cols-5">
         {steps.map((step) => (
-          <div key={step.key} className="flex min-w-0 flex-col-reverse">
-            <dt className="flex items-center gap-1.5 text-xs text-muted sm:text-sm">
+          <div
+            key={step.key}
+            className="flex items-baseline justify-between gap-x-3 @md:flex-col-reverse @md:justify-end"
+          >
+            <dt className="flex items-center gap-1.5 text-sm text-muted">
               <span
                 aria-hidden
-                className={`hidden size-2 shrink-0 rounded-sm border border-edge/60 sm:block ${FILL[step.key]}`}
+                className={`size-2 shrink-0 rounded-sm border border-edge/60 ${FILL[step.key]}`}
               />
-              <span className="min-w-0 wrap-anywhere">{step.label}</span>
+              {step.label}
             </dt>
-            <dd className="figure text-lg leading-tight">{step.count}</dd>
+            <dd className="figure leading-snug @md:text-lg">{step.count}</dd>
           </div>
         ))}
       </dl>

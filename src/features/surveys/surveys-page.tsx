@@ -1,6 +1,6 @@
 import { useQuery } from '@tanstack/react-query';
 import { useState } from 'react';
-import { useMe } from '../../api/session-queries';
+import { useMe } from '../../api/use-me';
 import { surveyListQuery } from '../../api/survey-queries';
 import { PageFrame } from '../../app/page-frame';
 import { QueryView } from '../../app/query-view';
