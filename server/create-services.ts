@@ -1,3 +1,4 @@
+import { setMaxListeners } from 'node:events';
 import type { Knex } from 'knex';
 import type { Pool } from 'pg';
 import type { Logger } from 'pino';
@@ -7,7 +8,7 @@ import type { Config } from './config';
 import type { Services } from './http/context';
 import { createJobQueue } from './jobs/job-queue';
 import { createRunEvents } from './jobs/run-events';
-import { startMailSink } from './mail/mail-sink';
+import type { MailSink } from './mail/mail-sink';
 import { createMailer } from './mail/mailer';
 
 export interface RunningServices {
@@ -25,7 +26,9 @@ export async function createServices(given: {
 }): Promise<RunningServices> {
   const { config, log, db, pool } = given;
   const stop = new AbortController();
-  const sink = config.mailUrl === null ? await startMailSink(db, log) : null;
+  // every open stream listens
+  setMaxListeners(0, stop.signal);
+  const sink = config.mailUrl === null ? await startSink(db, log) : null;
   const mailer = createMailer(config.mailUrl ?? sink?.url ?? '', config.mailFrom);
   const background = createBackgroundTasks(log);
   const runEvents = createRunEvents(pool, log);
@@ -50,4 +53,9 @@ export async function createServices(given: {
       await runEvents.close();
     },
   };
+}
+
+async function startSink(db: Knex, log: Logger): Promise<MailSink> {
+  const { startMailSink } = await import('./mail/mail-sink');
+  return startMailSink(db, log);
 }

@@ -80,16 +80,25 @@ const SQLSTATE_CODES: Record<string, ErrorCode> = {
   '23505': 'already-exists',
   '23503': 'invalid',
   '23514': 'invalid',
+  '22021': 'invalid',
+  '22P05': 'invalid',
   '40001': 'conflict',
   '40P01': 'conflict',
   '53300': 'unavailable',
   '57P01': 'unavailable',
+  '57P02': 'unavailable',
   '57P03': 'unavailable',
   '08006': 'unavailable',
   '08001': 'unavailable',
   ECONNREFUSED: 'unavailable',
   ECONNRESET: 'unavailable',
+  EPIPE: 'unavailable',
+  ETIMEDOUT: 'unavailable',
+  EHOSTUNREACH: 'unavailable',
 };
+
+// what PostgreSQL says to U+0000 in text and in JSON
+const UNTYPABLE = new Set(['22021', '22P05']);
 
 /** A PostgreSQL failure told by SQLSTATE and constraint name; null when it is not one we know how to tell. */
 export function errorOfPostgres(error: unknown): AppError | null {
@@ -98,6 +107,8 @@ export function errorOfPostgres(error: unknown): AppError | null {
   const code = SQLSTATE_CODES[String(error.code)];
   if (!code) return isLostConnection(error) ? lostConnection() : null;
   if (code === 'unavailable') return lostConnection();
+  if (UNTYPABLE.has(String(error.code)))
+    return new AppError('invalid', 'Text must not hold the character NUL (U+0000).');
   const constraint = 'constraint' in error ? String(error.constraint) : '';
   const message = CONSTRAINT_MESSAGES[constraint];
   if (code === 'invalid' && !message) return null;

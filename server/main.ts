@@ -29,10 +29,12 @@ const housekeeping = startHousekeeping(running.services);
 stopOnSignal(log, async () => {
   housekeeping.stop();
   const closed = new Promise<void>((resolve) => server.close(() => resolve()));
-  server.closeIdleConnections();
-  await running.close();
+  // connections fall idle one by one, as the answers on them end
+  const sweep = setInterval(() => server.closeIdleConnections(), 50);
   setTimeout(() => server.closeAllConnections(), 5000).unref();
+  await running.close();
   await closed;
+  clearInterval(sweep);
   await db.destroy();
   if (!pool.ended) await pool.end();
 });

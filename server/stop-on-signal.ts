@@ -2,12 +2,16 @@ import type { Logger } from 'pino';
 
 const PATIENCE_MS = 10_000;
 
-/** Runs `stop` once at SIGTERM, SIGINT or the parent's end, then leaves; a second signal leaves at once. */
+/**
+ * Runs `stop` once at SIGTERM, SIGINT or the parent's end, then leaves. The same signal again leaves at once; another one
+ * does not, because Ctrl-C reaches a child both from the terminal and through its supervisor.
+ */
 export function stopOnSignal(log: Logger, stop: () => Promise<void>): void {
-  let stopping = false;
+  let first: string | null = null;
   const leave = (reason: string): void => {
-    if (stopping) process.exit(1);
-    stopping = true;
+    if (reason === first) process.exit(1);
+    if (first !== null) return;
+    first = reason;
     log.info({ reason }, 'stopping');
     setTimeout(() => process.exit(1), PATIENCE_MS).unref();
     stop().then(

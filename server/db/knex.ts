@@ -10,11 +10,12 @@ interface Connection {
   on(event: 'error', listener: (error: Error) => void): void;
 }
 
-/** `onError` hears of connections lost while idle, which would otherwise end the process. */
+/** `onError` hears of connections lost while idle, which would otherwise end the process, and of failures to connect. */
 export function createDatabase(
   config: DatabaseConfig,
   onError: (error: Error) => void = () => undefined,
 ): Knex {
+  const tell = (message: unknown) => onError(message instanceof Error ? message : new Error(String(message)));
   return knex({
     client: 'pg',
     connection: { connectionString: config.databaseUrl, application_name: 'layerwell' },
@@ -27,5 +28,7 @@ export function createDatabase(
       },
     },
     acquireConnectionTimeout: 15_000,
+    // Knex writes to the console by itself, past the log
+    log: { warn: tell, error: tell, deprecate: tell, debug: () => undefined },
   });
 }

@@ -1,8 +1,12 @@
+import { createRequire } from 'node:module';
+import { dirname } from 'node:path';
 import express, { Router } from 'express';
-import swaggerUi from 'swagger-ui-dist';
 import { ERROR_STATUS, ERROR_TITLE, type ErrorCode } from '../errors';
 import type { Endpoint } from './endpoint';
 import { openApiDocument } from './openapi';
+
+// found, not imported: the package would load the whole browser program into this process
+const SWAGGER_UI = dirname(createRequire(import.meta.url).resolve('swagger-ui-dist/package.json'));
 
 /** The contract for programs at /openapi.json, for people at /docs; all of it works without the internet. */
 export function apiPages(endpoints: readonly Endpoint[], publicUrl: string): Router {
@@ -20,7 +24,7 @@ export function apiPages(endpoints: readonly Endpoint[], publicUrl: string): Rou
   router.get('/docs/problems', (_request, response) => {
     response.type('html').send(problemsPage());
   });
-  router.use('/docs', express.static(swaggerUi.getAbsoluteFSPath(), { index: false, redirect: false }));
+  router.use('/docs', express.static(SWAGGER_UI, { index: false, redirect: false }));
   return router;
 }
 

@@ -29,6 +29,8 @@ export function createRouter(endpoints: readonly Endpoint[], services: Services)
 const guard =
   (definition: Endpoint, services: Services): RequestHandler =>
   async (request, response, next) => {
+    // answers belong to one person at one moment; no browser or proxy keeps them
+    response.set('Cache-Control', 'no-store');
     response.locals.context = await contextOf(definition, services, request);
     next();
   };
@@ -78,6 +80,8 @@ function parse(definition: Endpoint, request: Request): EndpointInput<undefined,
   // an id that cannot be one names nothing
   if (faults.length > 0) throw new AppError('not-found', 'Nothing is at this address.');
   const query = read(definition.query, request.query, 'query');
+  if (definition.body && !definition.upload && request.is('application/json') === false)
+    throw new AppError('unsupported-media', 'Send the body as application/json.');
   const body = read(definition.body, request.body ?? {}, 'body');
   if (faults.length > 0) throw new AppError('invalid', summary(faults), { faults });
   const version = definition.versioned ? versionOf(request) : 0;

@@ -3,6 +3,8 @@ import { once } from 'node:events';
 import { createServer } from 'node:net';
 import type { AddressInfo } from 'node:net';
 import { afterEach, expect, test, vi } from 'vitest';
+import { createSessions } from '../../server/access/sessions';
+import { createFactories } from '../setup/factories';
 import { createTestDatabase } from '../setup/test-database';
 
 const database = await createTestDatabase();
@@ -97,4 +99,22 @@ test('lists every unusable setting at once', async () => {
   child.stderr?.on('data', (chunk: Buffer) => (output += chunk.toString()));
   expect(await exitOf(child)).toBe(1);
   expect(output).toMatch(/^The settings are not usable:\n {2}DATABASE_URL: .+\n {2}PORT: .+\n$/);
+});
+
+test('a stream that is being read does not hold the stop up', async () => {
+  const factories = createFactories(database.knex);
+  const survey = await factories.createSurvey();
+  const user = await factories.createUser();
+  await factories.addMember(survey.id, user.id, 'guest');
+  const sounding = await factories.createSounding(survey.id);
+  const cookie = await createSessions(database.pool, database.config).create(user.id, '');
+  const { child, url } = await start();
+  const stream = await fetch(`${url}/api/v1/soundings/${sounding.id}/run-events`, { headers: { cookie } });
+  expect(stream.headers.get('content-type')).toContain('text/event-stream');
+  const asked = performance.now();
+  child.kill('SIGTERM');
+  await stream.text();
+  expect(await exitOf(child)).toBe(0);
+  // connections that do not end by themselves are cut after five seconds
+  expect(performance.now() - asked).toBeLessThan(4000);
 });
