@@ -2,6 +2,7 @@ import type { ReactNode } from 'react';
 import type { BoreholeLog } from './chart-data';
 import { haloOf, SANS, type ChartPalette } from './chart-palette';
 import type { DepthScale } from './depth-scale';
+import { fitText } from './fit-text';
 import { svgRole } from './svg-roles';
 
 export interface BoreholeBarProps {
@@ -69,10 +70,4 @@ function boreholeSentence(log: BoreholeLog): string {
   const water =
     log.waterLevel === undefined || log.waterLevel === null ? '' : `; water at ${log.waterLevel} m`;
   return `Borehole ${log.name}: ${beds}${water}`;
-}
-
-/** Shortens words to a width, px; Plex Sans at 12 px runs about 6.4 px a letter. */
-function fitText(text: string, width: number): string {
-  const letters = Math.max(3, Math.floor(width / 6.4));
-  return text.length <= letters ? text : `${text.slice(0, letters - 1)}…`;
 }

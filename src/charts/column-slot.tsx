@@ -4,7 +4,7 @@ import type { GroundColumn } from './chart-data';
 import { MONO, SANS, type ChartPalette } from './chart-palette';
 import type { DepthScale } from './depth-scale';
 import { GroundBar } from './ground-bar';
-import { GroundLabels } from './ground-labels';
+import { GroundLabels, labelRoom } from './ground-labels';
 import { groundBoundaries } from './ground-profile';
 import { runStyle } from './run-style';
 import { svgRole } from './svg-roles';
@@ -22,11 +22,14 @@ export interface ColumnSlotProps {
 }
 
 const WIDEST_BAR = 92;
+export const NARROWEST_BAR = 44;
+/** From the bar's end to its words, where whiskers and handles stand, px. */
+export const WHISKER_ROOM = 22;
 
 /** One ground with its letter, its bar, its intervals and the depth its data reach. */
 export function ColumnSlot(props: ColumnSlotProps): ReactNode {
   const { column, scale, x, width, palette, onMoveBoundary } = props;
-  const barWidth = Math.min(WIDEST_BAR, Math.max(44, width * 0.36));
+  const barWidth = barWidthOf(props);
   const barEnd = x + barWidth;
   const reach = column.depthOfInvestigation ?? null;
   return (
@@ -50,7 +53,14 @@ export function ColumnSlot(props: ColumnSlotProps): ReactNode {
         palette={palette}
         onMove={onMoveBoundary}
       />
-      <GroundLabels column={column} scale={scale} x={barEnd + 22} barEnd={barEnd} palette={palette} />
+      <GroundLabels
+        column={column}
+        scale={scale}
+        x={barEnd + WHISKER_ROOM}
+        barEnd={barEnd}
+        width={x + width - barEnd - WHISKER_ROOM - 6}
+        palette={palette}
+      />
       {reach !== null && reach < scale.maxDepth ? (
         <g aria-hidden>
           <line
@@ -68,6 +78,12 @@ export function ColumnSlot(props: ColumnSlotProps): ReactNode {
       ) : null}
     </g>
   );
+}
+
+/** The bar yields to the numbers beside it. */
+function barWidthOf({ column, scale, width }: ColumnSlotProps): number {
+  const left = width - WHISKER_ROOM - labelRoom(column, scale) - 6;
+  return Math.min(WIDEST_BAR, Math.max(NARROWEST_BAR, Math.min(width * 0.36, left)));
 }
 
 function columnSentence(column: GroundColumn): string {

@@ -5,9 +5,10 @@ import type { MoveBoundary } from './boundary-marks';
 import { ChartFrame } from './chart-frame';
 import type { BoreholeLog, GroundColumn } from './chart-data';
 import { SANS, useChartPalette } from './chart-palette';
-import { ColumnSlot } from './column-slot';
+import { ColumnSlot, NARROWEST_BAR, WHISKER_ROOM } from './column-slot';
 import { DepthAxis } from './depth-axis';
 import { depthScale, type DepthScaleKind } from './depth-scale';
+import { labelRoom } from './ground-labels';
 import { depthExtent } from './ground-profile';
 import { groundTable } from './ground-table';
 import { ResistivityLegend } from './resistivity-legend';
@@ -42,7 +43,6 @@ const AXIS = 42;
 const HEAD = 30;
 const FOOT = 20;
 const BOREHOLE = 156;
-const LEAST_SLOT = 128;
 
 /** Grounds side by side on one depth axis, as soft at each boundary as it is uncertain. */
 export function DepthColumns(props: DepthColumnsProps) {
@@ -70,7 +70,9 @@ export function DepthColumns(props: DepthColumnsProps) {
     props.onSelectBed?.(columnId, bed);
   };
   const logWidth = borehole ? BOREHOLE : 0;
-  const slot = Math.max(LEAST_SLOT, (size.width - AXIS - logWidth) / Math.max(1, columns.length));
+  const room = Math.max(0, ...columns.map((column) => labelRoom(column, scale)));
+  const leastSlot = NARROWEST_BAR + WHISKER_ROOM + room + 14;
+  const slot = Math.max(leastSlot, (size.width - AXIS - logWidth) / Math.max(1, columns.length));
   const width = AXIS + slot * columns.length + logWidth;
   const head = columns.some((column) => column.letter !== '') || borehole ? HEAD : 12;
   return (

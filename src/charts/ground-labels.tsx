@@ -3,6 +3,7 @@ import { formatResistivity } from '../ui/format';
 import type { GroundColumn } from './chart-data';
 import { haloOf, MONO, SANS, type ChartPalette } from './chart-palette';
 import type { DepthScale } from './depth-scale';
+import { fitText, textWidth } from './fit-text';
 import { LEAST_NUMBER_HEIGHT } from './ground-bar';
 import { groundBeds, groundBoundaries } from './ground-profile';
 import { placeLabels } from './place-labels';
@@ -24,11 +25,13 @@ export interface GroundLabelsProps {
   /** Left edge of the words; the bar ends at `barEnd`. */
   x: number;
   barEnd: number;
+  /** Room for the words, px; longer notes are cut. */
+  width: number;
   palette: ChartPalette;
 }
 
 /** Intervals of beds and boundaries beside the bar, kept apart, each tied to its place by a thin line. */
-export function GroundLabels({ column, scale, x, barEnd, palette }: GroundLabelsProps): ReactNode {
+export function GroundLabels({ column, scale, x, barEnd, width, palette }: GroundLabelsProps): ReactNode {
   const labels = groundLabels(column, scale);
   const heights = labels.map((label) => (label.note ? 2 : 1) * LINE + GAP);
   const middles = placeLabels(
@@ -73,7 +76,8 @@ export function GroundLabels({ column, scale, x, barEnd, palette }: GroundLabels
                 fill={palette.muted}
                 {...haloOf(palette)}
               >
-                {label.note}
+                {fitText(label.note, width)}
+                <title>{label.note}</title>
               </text>
             ) : null}
           </g>
@@ -81,6 +85,14 @@ export function GroundLabels({ column, scale, x, barEnd, palette }: GroundLabels
       })}
     </g>
   );
+}
+
+/** Least room for the words of a ground, px: its numbers whole, and of its notes a dozen letters. */
+export function labelRoom(column: GroundColumn, scale: DepthScale): number {
+  const widths = groundLabels(column, scale).map(({ strong, note }) =>
+    Math.max(textWidth(strong, 'mono'), textWidth((note ?? '').slice(0, 12), 'sans')),
+  );
+  return Math.max(0, ...widths);
 }
 
 /** What stands beside the bar: for each bed its interval (and its number where the bed is too thin), then its base. */

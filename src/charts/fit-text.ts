@@ -1,0 +1,15 @@
+/** Mean advance of a letter at 12 px: Plex Sans, and Plex Mono where all are alike. */
+const LETTER = { sans: 6.4, mono: 7.2 } as const;
+
+export type Face = keyof typeof LETTER;
+
+/** About how wide words of 12 px come out, px. */
+export function textWidth(text: string, face: Face): number {
+  return text.length * LETTER[face];
+}
+
+/** Words cut to a width, px, with an ellipsis; never below three letters. */
+export function fitText(text: string, width: number, face: Face = 'sans'): string {
+  const letters = Math.max(3, Math.floor(width / LETTER[face]));
+  return text.length <= letters ? text : `${text.slice(0, letters - 1).trimEnd()}…`;
+}
