@@ -49,12 +49,12 @@ async function runStage(stage: Stage, env: NodeJS.ProcessEnv): Promise<Tally> {
 }
 
 async function test(shutdown: Shutdown): Promise<void> {
-  const chosen = chosenStages(process.argv.slice(3));
   const total: Tally = { passed: 0, failed: 0 };
   // Printed by the last thing that happens, after everything has been stopped.
   process.on('exit', () => console.log(`${total.passed} passed, ${total.failed} failed`));
   // Until it is known what fails, a fault before the first stage is one failure.
   total.failed = 1;
+  const chosen = chosenStages(process.argv.slice(3));
   const env = await provide(chosen, shutdown);
   total.failed = 0;
   for (const stage of chosen) {

@@ -1,0 +1,23 @@
+import { expect, it } from 'vitest';
+import { accessibilityFaults, screenshot, useBrowser } from '../setup/browser';
+import { startApp } from '../setup/start-app';
+
+const app = await startApp();
+const browser = useBrowser();
+
+it('a visitor without a session meets the sign-in page, whole and accessible', async () => {
+  const { page, faults } = await browser.open();
+  await page.goto(app.baseUrl);
+  await page.getByLabel('Password').waitFor();
+  expect(await page.title()).toContain('Layerwell');
+  expect(await accessibilityFaults(page)).toEqual([]);
+  await screenshot(page, 'sign-in');
+  // Asking who is signed in is answered 401, which the browser itself reports.
+  expect(faults.filter((fault) => !fault.includes('401'))).toEqual([]);
+});
+
+it('pages of one test share no cookies', async () => {
+  const [first, second] = [await browser.open(), await browser.open()];
+  await first.context.addCookies([{ name: 'mark', value: 'one', url: app.baseUrl }]);
+  expect(await second.context.cookies()).toEqual([]);
+});
