@@ -23,6 +23,9 @@ const PAGES: Partial<Record<RouteName, PageLoader>> = {
     (await import('../features/interpretations/interpretations-page')).InterpretationsPage,
   interpretation: async () =>
     (await import('../features/interpretations/interpretation-page')).InterpretationPage,
+  surveyBoreholes: async () => (await import('../features/boreholes/boreholes-page')).BoreholesPage,
+  surveyMembers: async () => (await import('../features/members/members-page')).MembersPage,
+  admin: async () => (await import('../features/admin/admin-page')).AdminPage,
   settings: async () => (await import('../features/account/settings-page')).SettingsPage,
 };
 

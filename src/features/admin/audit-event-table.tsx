@@ -1,0 +1,49 @@
+import { useQuery } from '@tanstack/react-query';
+import { QueryView } from '../../app/query-view';
+import { formatMoment } from '../../ui/format';
+import { Pager } from '../../ui/pager';
+import { Cell, HeaderCell, Table, TableBody, TableHead, TableRow } from '../../ui/table';
+import { auditEventsQuery } from './admin-queries';
+import { detailsInWords } from './details-in-words';
+import { usePageParam } from './use-page-param';
+
+/** What was done and by whom, newest first; events are never changed or removed. */
+export function AuditEventTable() {
+  const [page, setPage] = usePageParam();
+  const events = useQuery(auditEventsQuery(page));
+  return (
+    <QueryView query={events} loadingLabel="Loading audit events">
+      {({ items, total, pageSize }) =>
+        items.length === 0 ? (
+          <p className="text-muted">No event yet.</p>
+        ) : (
+          <>
+            <Table caption="Audit events">
+              <TableHead>
+                <HeaderCell>When</HeaderCell>
+                <HeaderCell>Who</HeaderCell>
+                <HeaderCell>What</HeaderCell>
+                <HeaderCell>On</HeaderCell>
+                <HeaderCell className="hidden md:table-cell">Details</HeaderCell>
+              </TableHead>
+              <TableBody>
+                {items.map((event) => (
+                  <TableRow key={event.id}>
+                    <Cell className="figure whitespace-nowrap">{formatMoment(event.at)}</Cell>
+                    <Cell>{event.actorName ?? 'the system'}</Cell>
+                    <Cell className="figure">{event.action}</Cell>
+                    <Cell className="wrap-anywhere">{event.subject}</Cell>
+                    <Cell className="hidden wrap-anywhere text-muted md:table-cell">
+                      {detailsInWords(event.details)}
+                    </Cell>
+                  </TableRow>
+                ))}
+              </TableBody>
+            </Table>
+            <Pager page={page} pageSize={pageSize} total={total} what="events" onPage={setPage} />
+          </>
+        )
+      }
+    </QueryView>
+  );
+}

@@ -1,0 +1,72 @@
+import type { Borehole } from '../../../server/contract/surveys';
+import { Button } from '../../ui/button';
+import { formatDay, formatLength, formatSignificant, withUnit } from '../../ui/format';
+import { BoreholeLogDrawing } from './borehole-log-drawing';
+
+interface BoreholeCardProps {
+  borehole: Borehole;
+  maxDepthM: number;
+  onEdit?: () => void;
+}
+
+const metres = (value: number): string => withUnit(formatLength(value), 'm');
+
+export function BoreholeCard({ borehole, maxDepthM, onEdit }: BoreholeCardProps) {
+  const { name, note, intervals } = borehole;
+  return (
+    <li
+      id={borehole.id}
+      className="flex min-w-0 flex-col gap-3 border-t border-rule pt-3 target:border-water"
+    >
+      <div className="flex items-start justify-between gap-3">
+        <div className="min-w-0">
+          <h2 className="text-lg font-semibold">{name}</h2>
+          <p className="text-sm text-muted">{facts(borehole)}</p>
+        </div>
+        {onEdit ? (
+          <Button size="small" aria-label={`Edit ${name}`} onClick={onEdit}>
+            Edit
+          </Button>
+        ) : null}
+      </div>
+      {intervals.length === 0 ? (
+        <p className="text-muted">No log.</p>
+      ) : (
+        <BoreholeLogDrawing borehole={borehole} maxDepthM={maxDepthM} height={340} />
+      )}
+      <WaterLevels borehole={borehole} />
+      {note === '' ? null : <p className="max-w-prose whitespace-pre-wrap">{note}</p>}
+    </li>
+  );
+}
+
+function facts({ depthM, drilledOn, xM, yM, elevationM }: Borehole): string {
+  const parts = [`${metres(depthM)} deep`];
+  if (drilledOn !== null) parts.push(`drilled ${formatDay(drilledOn)}`);
+  if (xM !== null && yM !== null)
+    parts.push(`x ${formatSignificant(xM, 9)}, y ${formatSignificant(yM, 9)} m`);
+  if (elevationM !== null) parts.push(`at ${elevationM} m`);
+  return parts.join(' · ');
+}
+
+function WaterLevels({ borehole }: { borehole: Borehole }) {
+  const levels = borehole.waterLevels.toSorted((a, b) => b.measuredOn.localeCompare(a.measuredOn));
+  if (levels.length === 0) return <p className="text-muted">No water level.</p>;
+  return (
+    <table className="w-full max-w-xs text-left">
+      <caption className="mb-1 text-left font-semibold">Water levels</caption>
+      <tbody>
+        {levels.map(({ measuredOn, depthM }, i) => (
+          <tr key={i} className="border-t border-rule">
+            <th scope="row" className="figure py-1 font-normal text-muted">
+              {formatDay(measuredOn)}
+            </th>
+            <td className="figure py-1 text-right">
+              {depthM < 0 ? `${metres(-depthM)} above ground` : metres(depthM)}
+            </td>
+          </tr>
+        ))}
+      </tbody>
+    </table>
+  );
+}
