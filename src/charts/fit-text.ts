@@ -1,5 +1,5 @@
 /** Mean advance of a letter at 12 px: Plex Sans, and Plex Mono where all are alike. */
-const LETTER = { sans: 6.4, mono: 7.2 } as const;
+const LETTER = { sans: 6.0, mono: 7.2 } as const;
 
 export type Face = keyof typeof LETTER;
 

@@ -102,7 +102,7 @@ export function groundLabels(column: GroundColumn, scale: DepthScale): GroundLab
     const base = bed.base === null ? scale.height : scale.yOf(bed.base);
     const number = base - top < LEAST_NUMBER_HEIGHT ? formatResistivity(bed.resistivity) : '';
     const words = [number, bed.rangeText].filter((text) => text !== '').join(' · ');
-    const note = [bed.note, bed.locked ? 'held' : null].filter((word) => word !== null).join(', ');
+    const note = [bed.locked ? 'held' : null, bed.note].filter((word) => word !== null).join(', ');
     if (words === '' && note === '') return [];
     return [
       {
@@ -118,7 +118,7 @@ export function groundLabels(column: GroundColumn, scale: DepthScale): GroundLab
     key: `base ${boundary.index}`,
     y: scale.yOf(boundary.depth),
     strong: boundary.rangeText === '' ? `${Number(boundary.depth.toPrecision(3))} m` : boundary.rangeText,
-    note: boundary.unresolved ? 'depth unresolved' : null,
+    note: boundary.unresolved ? 'unresolved' : null,
     kind: 'boundary',
   }));
   return [...beds, ...bases].toSorted((first, second) => first.y - second.y);

@@ -108,7 +108,7 @@ test('labels beside the bar run down with the ground; a thin bed carries its num
   expect(labels.map((label) => label.key)).toEqual(['bed 0', 'base 0', 'bed 1', 'base 1', 'bed 2']);
   expect(labels[0]).toMatchObject({ strong: '139 · 134–145', note: 'dry cover' });
   expect(labels[2]).toMatchObject({ strong: '17.0 · 3.9–36', note: 'held' });
-  expect(labels[3]).toMatchObject({ strong: 'not bounded', note: 'depth unresolved' });
+  expect(labels[3]).toMatchObject({ strong: 'not bounded', note: 'unresolved' });
 });
 
 test('depths reach past every boundary, the depth of investigation and the borehole', () => {
