@@ -1,9 +1,9 @@
 import { expect, it } from 'vitest';
-import { accessibilityFaults, screenshot, useBrowser } from '../setup/browser';
+import { accessibilityFaults, screenshot, createBrowser } from '../setup/browser';
 import { startApp } from '../setup/start-app';
 
 const app = await startApp();
-const browser = useBrowser();
+const browser = createBrowser();
 
 it('a visitor without a session meets the sign-in page, whole and accessible', async () => {
   const { page, faults } = await browser.open();

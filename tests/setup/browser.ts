@@ -45,7 +45,7 @@ function collectFaults(page: Page): string[] {
 }
 
 /** Call it once at the top of a test file: one browser for the file, one context for every page opened. */
-export function useBrowser(): PageOpener {
+export function createBrowser(): PageOpener {
   let browser: Promise<Browser> | null = null;
   const contexts = new Set<BrowserContext>();
   afterEach(async () => {
