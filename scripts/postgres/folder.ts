@@ -5,8 +5,6 @@ import { runCommand } from '../lib/command';
 import { errorCode, PlainError } from '../lib/plain-error';
 import type { Account } from './account';
 
-const sharedRoot = '/var/lib/layerwell';
-
 export const checkoutKey = (path: string) =>
   createHash('sha256').update(realpathSync(path)).digest('hex').slice(0, 12);
 
@@ -37,6 +35,7 @@ export async function chooseFolder(
   checkout: string,
   account: Account,
   say: (line: string) => void,
+  sharedRoot = '/var/lib/layerwell',
 ): Promise<string> {
   const own = join(checkout, '.layerwell', 'postgres');
   const outside = join(sharedRoot, checkoutKey(checkout));
