@@ -1,16 +1,8 @@
-import { checkReadings } from '../../inversion/readings/check-readings';
 import { tryDeriveReading } from '../../inversion/readings/derive-reading';
 import { checkSpread } from '../../inversion/spread/check-spread';
 import { geometricFactor } from '../../inversion/spread/geometric-factor';
 import type { CellFault } from './cell-fault';
-import {
-  type DerivedReading,
-  type Reading,
-  type ReadingCheck,
-  type RowFault,
-  type SheetRow,
-  type SheetUnits,
-} from './readings';
+import { type DerivedReading, type Reading, type RowFault, type SheetRow, type SheetUnits } from './readings';
 import { cellText, parseCell, parseLengths, type SheetOptions } from './sheet-cells';
 import { columnScale, SHEET_COLUMN_NAMES, sheetColumnsOf, type NumberColumnName } from './sheet-columns';
 import { writeNumber } from './sheet-number';
@@ -103,15 +95,6 @@ export function parseSheet(
   });
   return sheet;
 }
-
-/** Every doubt about the good rows of a sheet; their rows are those of the sheet. */
-export const checkSheet = ({ readings, derived, rows }: ParsedSheet): ReadingCheck[] =>
-  checkReadings(
-    readings.flatMap((reading, i) => {
-      const [follows, row] = [derived[i], rows[i]];
-      return follows && row !== undefined ? [{ row, reading, derived: follows }] : [];
-    }),
-  );
 
 /** The name of a column at fault; empty for the row as a whole. */
 export function faultColumnName(column: CellFault['column']): string {

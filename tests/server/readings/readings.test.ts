@@ -96,6 +96,14 @@ describe('POST /soundings/:soundingId/revisions', () => {
     expect((await fieldSheet(lead)).draft).toBeNull();
   });
 
+  it('is no conflict when someone else saved the same content before', async () => {
+    const first = await savedBy(lead, THREE);
+    const theirs = await savedBy(other, THREE.slice(0, 2), first.id);
+    const same = await save(lead, THREE.slice(0, 2), first.id);
+    expect(same.status).toBe(200);
+    expect(same.body).toMatchObject({ id: theirs.id, author: { id: other.user?.id } });
+  });
+
   it('makes an older revision current again when its content returns', async () => {
     const first = await savedBy(lead, THREE);
     const second = await savedBy(lead, THREE.slice(0, 2), first.id);
@@ -137,7 +145,9 @@ describe('POST /soundings/:soundingId/revisions', () => {
       save(lead, [row('5', '7')], first.id),
       save(other, [row('5', '8')], first.id),
     ]);
-    expect(answers.map(({ status }) => status).toSorted((a, b) => a - b)).toEqual([201, 409]);
+    const [won, lost] = answers.toSorted((a, b) => a.status - b.status);
+    expect([won?.status, lost?.status]).toEqual([201, 409]);
+    expect(lost?.body).toMatchObject({ code: 'conflict', current: { id: (won?.body as { id: string }).id } });
   });
 
   it('never changes or deletes a revision', async () => {
