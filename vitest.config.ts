@@ -8,7 +8,12 @@ export default defineConfig({
     projects: [
       {
         extends: true,
-        test: { name: 'inversion', include: ['tests/{inversion,published}/**/*.test.ts', 'tests/*.test.ts'] },
+        test: {
+          name: 'inversion',
+          include: ['tests/{inversion,published}/**/*.test.ts', 'tests/*.test.ts'],
+          // fits and integrations are honest work, and the machine may be busy
+          testTimeout: 60_000,
+        },
       },
       { extends: true, test: { name: 'src', include: ['tests/src/**/*.test.{ts,tsx}'] } },
       {

@@ -11,6 +11,12 @@ const LOWEST_CHARGED = -133;
 /** farthest/nearest is rounded up to a power of 2³, so that one factorisation serves nearly every spread. */
 const OCTAVES_PER_CLASS = 3;
 const DEPTHS_PER_DECADE = 25;
+/**
+ * Design depths reach 10^this × the spread: beyond the slowest exponential, so that the uncounted images of a nearly
+ * insulating base (10⁹ of them at a contrast of 10⁹) add nothing.
+ */
+const DEEPEST_NEUTRAL = 6;
+const DEEPEST_CHARGED = 8.5;
 
 /** Weights of one reading on the lattice: node `first + j` carries `values[j]`. */
 export interface LatticeWeights {
@@ -55,7 +61,7 @@ function designFor(response: ImageResponse, anchor: number): Design {
     const lowest = response.neutral ? LOWEST_NEUTRAL : LOWEST_CHARGED;
     const decades = widening * OCTAVES_PER_CLASS * Math.LOG10E * Math.LN2;
     const first = lowest - widening * OCTAVES_PER_CLASS * NODES_PER_OCTAVE;
-    design = factorise(first, (response.neutral ? 5 : 8.5) + decades);
+    design = factorise(first, (response.neutral ? DEEPEST_NEUTRAL : DEEPEST_CHARGED) + decades);
     designs.set(key, design);
   }
   return design;

@@ -66,6 +66,22 @@ describe('createForwardOperator', () => {
     predicted.forEach((value) => expect(relativeError(value, 73)).toBeLessThan(1e-10));
   });
 
+  it('stays within 1e-6 of direct integration up to a contrast of 10⁹', () => {
+    const earth = { resistivity: [1, 1e9], thickness: [1] };
+    for (const size of [20, 200]) {
+      const spreads: Spread[] = [
+        { type: 'schlumberger', halfAB: size, halfMN: size / 5 },
+        { type: 'wenner', spacing: size },
+        { type: 'pole-pole', spacing: size },
+        { type: 'dipole-dipole', dipole: size / 5, n: 5 },
+      ];
+      const predicted = createForwardOperator(spreads).predict(earth);
+      spreads.forEach((spread, i) =>
+        expect(relativeError(predicted[i]!, integratedApparentResistivity(spread, earth))).toBeLessThan(1e-6),
+      );
+    }
+  });
+
   it('agrees with the two-layer ordinates of Wenner, gradient Schlumberger and pole–pole', () => {
     const columns: [string, (x: number) => Spread][] = [
       ['wenner_ra_over_r1', (spacing) => ({ type: 'wenner', spacing })],
