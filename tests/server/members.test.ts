@@ -1,4 +1,5 @@
 import { describe, expect, test } from 'vitest';
+import { keepALead } from '../../server/access/keep-a-lead';
 import { memberListSchema } from '../../server/contract/surveys';
 import { createTestServer } from '../setup/server';
 
@@ -73,14 +74,31 @@ describe('the last lead', () => {
     expect((await lead.delete(`/surveys/${surveyId}/members/${leadId}`)).status).toBe(204);
   });
 
-  test('stays when two leads make each other step down at once', async () => {
+  test('stays when two leads step down at the same moment', async () => {
     const { surveyId, lead, leadId } = await surveyWithLead();
     const second = await server.signInAs('lead', surveyId);
-    const answers = await Promise.all([
-      lead.put(`/surveys/${surveyId}/members/${second.user?.id}`, { role: 'guest' }),
-      second.put(`/surveys/${surveyId}/members/${leadId}`, { role: 'guest' }),
-    ]);
-    expect(answers.some((answer) => answer.status === 200)).toBe(true);
+    const secondSteps = await server.db.transaction(async (trx) => {
+      await keepALead(trx, surveyId, leadId);
+      await trx('survey_member').where({ survey_id: surveyId, user_id: leadId }).update({ role: 'guest' });
+      const answer = lead
+        .put(`/surveys/${surveyId}/members/${second.user?.id}`, { role: 'guest' })
+        .then(({ body }) => body as unknown);
+      await Promise.race([answer, untilOneWaits()]);
+      return { answer };
+    });
+    expect(await secondSteps.answer).toMatchObject({ code: 'wrong-state' });
     expect(await server.db('survey_member').where({ survey_id: surveyId, role: 'lead' })).toHaveLength(1);
   });
 });
+
+const untilOneWaits = () =>
+  expect
+    .poll(
+      () =>
+        server
+          .db('pg_stat_activity')
+          .where({ wait_event_type: 'Lock' })
+          .whereRaw('datname = current_database()'),
+      { timeout: 10_000 },
+    )
+    .toHaveLength(1);

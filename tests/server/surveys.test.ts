@@ -59,7 +59,7 @@ test('progress counts soundings at each stage', async () => {
         .db('interpretation')
         .insert({ sounding_id: soundingId, run_id: run, author_id: author, title: 'A reading of it', state });
   };
-  await server.createRevision(measured?.id ?? '', author);
+  await requestedRun(measured?.id ?? '', author);
   await finishedRun(fitted?.id ?? '', author);
   await interpret(stated?.id ?? '', ['in-review', 'in-review', 'accepted', 'superseded']);
   const other = await server.createSurvey();
@@ -70,6 +70,26 @@ test('progress counts soundings at each stage', async () => {
 });
 
 async function finishedRun(soundingId: string, author: string): Promise<string> {
+  const runId = await requestedRun(soundingId, author);
+  const [computation] = await server
+    .db('computation')
+    .insert({
+      key: 'key',
+      engine_version: '1.0.0',
+      input: '{}',
+      result: '{}',
+      result_hash: '',
+      duration_ms: 1,
+    })
+    .returning<{ id: string }[]>('id');
+  await server
+    .db('run_state')
+    .where({ run_id: runId })
+    .update({ state: 'finished', computation_id: computation?.id, ended_at: new Date() });
+  return runId;
+}
+
+async function requestedRun(soundingId: string, author: string): Promise<string> {
   const revision = await server.createRevision(soundingId, author);
   const [run] = await server
     .db('run')
@@ -83,23 +103,7 @@ async function finishedRun(soundingId: string, author: string): Promise<string> 
       requested_by: author,
     })
     .returning<{ id: string }[]>('id');
-  const [computation] = await server
-    .db('computation')
-    .insert({
-      key: 'key',
-      engine_version: '1.0.0',
-      input: '{}',
-      result: '{}',
-      result_hash: '',
-      duration_ms: 1,
-    })
-    .returning<{ id: string }[]>('id');
-  await server.db('run_state').insert({
-    run_id: run?.id,
-    state: 'finished',
-    computation_id: computation?.id,
-    ended_at: new Date(),
-  });
+  await server.db('run_state').insert({ run_id: run?.id, state: 'queued' });
   return run?.id ?? '';
 }
 
