@@ -129,27 +129,37 @@ function totalsSentence(a: FitResult, b: FitResult): string {
   return s === '' || t === '' ? '' : ` Total conductance ${s}; total transverse resistance ${t}.`;
 }
 
-function describePair(a: FitResult, b: FitResult, beds: readonly BedDifference[]): string {
+function describePair(
+  a: FitResult,
+  b: FitResult,
+  beds: readonly BedDifference[],
+  [nameA, nameB]: readonly [string, string],
+): string {
   const counts = [a, b].map((result) => result.earth.resistivity.length);
   const supported = beds.filter((bed) => bed.intervalsOverlap === false);
   const head =
     counts[0] === counts[1]
       ? `Both models have ${counts[0]} ${counts[0] === 1 ? 'bed' : 'beds'}.`
       : `The models have ${counts[0]} and ${counts[1]} beds; beds are matched from the surface, so only the shallow ones compare like with like.`;
+  const change = b.chi2PerReading - a.chi2PerReading;
+  const fitAlike = Math.abs(change) < 0.05 * Math.max(a.chi2PerReading, b.chi2PerReading);
   const middle =
     supported.length === 0
-      ? ' No bed differs beyond the 95 % intervals: the data do not tell these models apart.'
+      ? ` No bed differs beyond the 95 % intervals${fitAlike ? ': the data do not tell these models apart' : ''}.`
       : ` The data support ${supported.length === 1 ? 'one difference' : `${supported.length} differences`} beyond the 95 % intervals: ${supported.map(phrase).join('; ')}.`;
-  const change = b.chi2PerReading - a.chi2PerReading;
-  const tail =
-    Math.abs(change) < 0.05 * Math.max(a.chi2PerReading, b.chi2PerReading)
-      ? ` They fit alike (χ²/N ${a.chi2PerReading.toPrecision(3)} and ${b.chi2PerReading.toPrecision(3)}).`
-      : ` The ${change < 0 ? 'second' : 'first'} fits closer (χ²/N ${a.chi2PerReading.toPrecision(3)} and ${b.chi2PerReading.toPrecision(3)}).`;
+  const tail = fitAlike
+    ? ` They fit alike (χ²/N ${a.chi2PerReading.toPrecision(3)} and ${b.chi2PerReading.toPrecision(3)}).`
+    : ` ${change < 0 ? nameB : nameA} fits closer (χ²/N ${a.chi2PerReading.toPrecision(3)} and ${b.chi2PerReading.toPrecision(3)}).`;
   return head + middle + tail + totalsSentence(a, b);
 }
 
-/** Every pair of two or more results: bed by bed differences, misfit, S and T, and which differences the data support. */
-export function compareFits(results: readonly FitResult[]): FitComparison {
+const DEFAULT_NAMES = ['The first', 'The second'] as const;
+
+/**
+ * Every pair of two or more results: bed by bed differences, misfit, S and T, and which differences the data support.
+ * `names` begin a sentence in the words, one a result, as "Run A"; without them the words say the first and the second.
+ */
+export function compareFits(results: readonly FitResult[], names?: readonly string[]): FitComparison {
   const pairs = results.flatMap((a, first) =>
     results.slice(first + 1).map((b, offset): FitPairComparison => {
       const beds = bedDifferences(a, b);
@@ -162,7 +172,10 @@ export function compareFits(results: readonly FitResult[]): FitComparison {
         rmsPercentDifference: b.rmsPercent - a.rmsPercent,
         totalConductanceRatio: ratio(a.darZarrouk.totalConductanceS, b.darZarrouk.totalConductanceS),
         totalResistanceRatio: ratio(a.darZarrouk.totalResistanceOhmM2, b.darZarrouk.totalResistanceOhmM2),
-        text: describePair(a, b, beds),
+        text: describePair(a, b, beds, [
+          names?.[first] ?? DEFAULT_NAMES[0],
+          names?.[first + 1 + offset] ?? DEFAULT_NAMES[1],
+        ]),
       };
     }),
   );

@@ -71,6 +71,7 @@ export function InterpretationEditor(props: InterpretationEditorProps) {
   const theirs = currentOf(save.error, interpretationSchema);
   return (
     <form onSubmit={submit} className="flex flex-col gap-5" aria-label="Interpretation">
+      <h1 className="sr-only">{base.title}</h1>
       {interpretation.version > base.version && !theirs ? (
         <NewerVersion isDirty={isDirty} onTakeUp={() => takeUp(interpretation)} />
       ) : null}
@@ -81,7 +82,7 @@ export function InterpretationEditor(props: InterpretationEditorProps) {
       <FormErrors faults={theirs ? [] : formFaults(save.error, FIELD_LABELS)} />
       <div className="sticky bottom-0 flex flex-wrap items-center gap-3 border-t border-rule bg-paper py-3 print:hidden">
         <Button kind={isDirty ? 'main' : 'plain'} type="submit" disabled={!isDirty} loading={save.isPending}>
-          Save
+          Save changes
         </Button>
         <span className="text-sm text-muted">
           {isDirty ? 'Changes not saved yet' : 'Everything is saved'}

@@ -31,6 +31,7 @@ export function InterpretationGround(props: InterpretationGroundProps) {
       subject={soundingName}
       height={440}
       waterLevel={waterLevelDepthM}
+      className="lg:sticky lg:top-4 lg:self-start"
     />
   );
 }

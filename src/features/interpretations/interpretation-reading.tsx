@@ -66,12 +66,14 @@ function BedList({ beds, result }: { beds: Interpretation['beds']; result: FitRe
               <p className={bed.ground === '' ? 'text-muted' : 'font-semibold'}>
                 {bed.ground === '' ? 'Not named' : bed.ground}
               </p>
-              <p>
-                {BED_ROLE_WORDS[bed.role]}
-                <span className="text-muted">
-                  , confidence: {CONFIDENCE_WORDS[bed.confidence].toLowerCase()}
-                </span>
-              </p>
+              {bed.role === 'unknown' && bed.confidence === 'unstated' ? null : (
+                <p>
+                  {BED_ROLE_WORDS[bed.role]}
+                  <span className="text-muted">
+                    , confidence: {CONFIDENCE_WORDS[bed.confidence].toLowerCase()}
+                  </span>
+                </p>
+              )}
               {bed.otherCandidates === '' ? null : (
                 <p className="text-muted">It could also be: {bed.otherCandidates}</p>
               )}
