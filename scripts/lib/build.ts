@@ -6,7 +6,8 @@ import { buildInputs, hashInputs, isStale, markFresh, stampPath } from './stalen
 
 async function viteBuild(root: string, config: string): Promise<void> {
   const vite = join(root, 'node_modules', 'vite', 'bin', 'vite.js');
-  const args = [vite, 'build', '--config', config, '--logLevel', 'warn'];
+  // The runner writes no file into node_modules, which may belong to another account.
+  const args = [vite, 'build', '--config', config, '--logLevel', 'warn', '--configLoader', 'runner'];
   const env = { ...process.env, NODE_ENV: 'production' };
   const { code, output } = await runCommand(process.execPath, args, { cwd: root, env });
   if (code !== 0) throw new PlainError(`The build failed (vite build --config ${config}):\n${output}`);
