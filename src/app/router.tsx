@@ -19,6 +19,7 @@ const PAGES: Partial<Record<RouteName, PageLoader>> = {
   surveySoundings: async () => (await import('../features/soundings/soundings-page')).SoundingsPage,
   bench: async () => (await import('../features/bench/bench-page')).BenchPage,
   readings: async () => (await import('../features/readings/field-sheet-page')).FieldSheetPage,
+  sideBySide: async () => (await import('../features/side-by-side/side-by-side-page')).SideBySidePage,
   interpretations: async () =>
     (await import('../features/interpretations/interpretations-page')).InterpretationsPage,
   interpretation: async () =>

@@ -38,7 +38,6 @@ export function BenchDrawing({ sounding, data, run, curve }: BenchDrawingProps) 
         spacingName={SPACING_AXIS[sounding.spreadType]}
         note={`Ω·m, ${SPREAD_NAMES[sounding.spreadType]}, ${formatCount(data.kept.length, 'reading')}`}
         subject={sounding.name}
-        maxHeight={500}
       />
       <ExcludedList excluded={data.excluded} />
       {curve.fault === null ? null : (

@@ -1,0 +1,37 @@
+import type { Run } from '../../../server/contract/runs';
+import { Cell, Table, TableBody, TableRow } from '../../ui/table';
+import type { FactRow } from './run-facts-table';
+import { RunHeads } from './run-heads';
+
+export interface FactComparisonProps {
+  title: string;
+  runs: readonly Run[];
+  rows: readonly FactRow[];
+}
+
+/** Facts of each run in one row; a row whose values differ is marked by weight and by word. */
+export function FactComparison({ title, runs, rows }: FactComparisonProps) {
+  return (
+    <section aria-label={title}>
+      <h2 className="mb-1 font-semibold">{title}</h2>
+      <Table caption={title}>
+        <RunHeads runs={runs} first="Of the run" />
+        <TableBody>
+          {rows.map((row) => (
+            <TableRow key={row.label}>
+              <Cell className="whitespace-nowrap text-muted">
+                {row.label}
+                {row.differs ? <span className="ml-2 text-xs text-copper">differs</span> : null}
+              </Cell>
+              {row.values.map((value, i) => (
+                <Cell key={runs[i]?.id ?? i} className={row.differs ? 'font-semibold' : undefined}>
+                  {value}
+                </Cell>
+              ))}
+            </TableRow>
+          ))}
+        </TableBody>
+      </Table>
+    </section>
+  );
+}

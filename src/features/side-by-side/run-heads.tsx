@@ -1,0 +1,23 @@
+import { useChartPalette } from '../../charts/chart-palette';
+import { runStyle } from '../../charts/run-style';
+import type { Run } from '../../../server/contract/runs';
+import { letterOfRun, titleOfRun } from '../../runs/run-title';
+import { HeaderCell, TableHead } from '../../ui/table';
+
+/** A head with one column a run, after the column of what is compared. */
+export function RunHeads({ runs, first }: { runs: readonly Run[]; first: string }) {
+  const palette = useChartPalette();
+  return (
+    <TableHead>
+      <HeaderCell>{first}</HeaderCell>
+      {runs.map((run) => (
+        <HeaderCell key={run.id}>
+          <span className="figure" style={{ color: runStyle(letterOfRun(run), palette).color }}>
+            {letterOfRun(run)}
+          </span>{' '}
+          <span className="font-normal">{titleOfRun(run)}</span>
+        </HeaderCell>
+      ))}
+    </TableHead>
+  );
+}
