@@ -28,13 +28,12 @@ export async function streamRunEvents(
   let everything = false;
   let telling = false;
 
-  const takeChanged = async (): Promise<RunSummary[] | null> => {
+  // read in the person's own scope: after leaving the survey nothing comes back
+  const takeChanged = async (): Promise<RunSummary[]> => {
     const only = everything ? { limit: RECENT_RUNS } : { runIds: [...changed] };
     everything = false;
     changed.clear();
-    const rows = await listRuns(db, actor, soundingId, only);
-    // a run that was announced and cannot be read is one of a survey that the person has left
-    return 'runIds' in only && rows.length === 0 ? null : rows.map(presentRunSummary).reverse();
+    return (await listRuns(db, actor, soundingId, only)).map(presentRunSummary).reverse();
   };
 
   const tell = async (): Promise<void> => {
@@ -42,9 +41,8 @@ export async function streamRunEvents(
     telling = true;
     try {
       while (!response.writableEnded && (everything || changed.size > 0)) {
-        const runs = await takeChanged();
-        if (!runs) return void response.end();
-        for (const run of runs) await send(response, `event: run\ndata: ${JSON.stringify(run)}\n\n`);
+        for (const run of await takeChanged())
+          await send(response, `event: run\ndata: ${JSON.stringify(run)}\n\n`);
       }
     } catch (error) {
       log.debug({ err: error }, 'changes of runs could not be told; trying again');

@@ -306,7 +306,7 @@ describe('run events', () => {
     stream.response.destroy();
   });
 
-  it('end for a person who is no longer a member, before the next change is told', async () => {
+  it('tell nothing more to a person who is no longer a member, and end', { timeout: 30_000 }, async () => {
     const soundingId = await measured();
     const leaver = await server.signInAs('guest', survey.id);
     const stream = await openStream(leaver, soundingId);
