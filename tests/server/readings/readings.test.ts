@@ -35,6 +35,13 @@ const save = (client: Client, rows: SheetRow[], base: string | null = null) =>
   client.post(`/soundings/${soundingId}/revisions`, sheet(rows, base));
 const savedBy = async (client: Client, rows: SheetRow[], base: string | null = null) =>
   revisionSchema.parse((await save(client, rows, base)).body);
+const waitingForLocks = async (): Promise<number> => {
+  const [found] = await server
+    .db('pg_stat_activity')
+    .whereRaw(`datname = current_database() AND wait_event_type = 'Lock'`)
+    .count<{ count: string }[]>();
+  return Number(found?.count ?? 0);
+};
 const fieldSheet = async (client: Client) =>
   fieldSheetSchema.parse((await client.get(`/soundings/${soundingId}/readings`)).body);
 
@@ -139,16 +146,26 @@ describe('POST /soundings/:soundingId/revisions', () => {
     expect((await save(lead, [row('5', '7')], null)).status).toBe(409);
   });
 
-  it('lets one of two people win who save at the same moment', async () => {
+  it('waits for a save that is under way, and then judges by what it left', async () => {
     const first = await savedBy(lead, THREE);
-    const answers = await Promise.all([
-      save(lead, [row('5', '7')], first.id),
-      save(other, [row('5', '8')], first.id),
-    ]);
-    const [won, lost] = answers.toSorted((a, b) => a.status - b.status);
-    expect([won?.status, lost?.status]).toEqual([201, 409]);
-    const { id } = revisionSchema.parse(won?.body);
-    expect(lost?.body).toMatchObject({ code: 'conflict', current: { id } });
+    const trx = await server.db.transaction();
+    await trx('sounding').where({ id: soundingId }).forUpdate().first('id');
+    const made = await trx('data_revision')
+      .insert({
+        sounding_id: soundingId,
+        number: 2,
+        content_hash: 'theirs',
+        readings: JSON.stringify(first.readings),
+        author_id: other.user?.id,
+      })
+      .returning<{ id: string }[]>('id');
+    await trx('sounding').where({ id: soundingId }).update({ current_revision_id: made[0]?.id });
+    const mine = save(lead, [row('5', '7')], first.id).then((answer) => answer);
+    await expect.poll(waitingForLocks, { timeout: 15_000 }).toBeGreaterThan(0);
+    await trx.commit();
+    const answer = await mine;
+    expect(answer.status).toBe(409);
+    expect(answer.body).toMatchObject({ code: 'conflict', current: made[0] });
   });
 
   it('never changes or deletes a revision', async () => {
