@@ -1,4 +1,3 @@
-import { existsSync } from 'node:fs';
 import { fileURLToPath } from 'node:url';
 import { defineConfig } from 'vite';
 
@@ -20,9 +19,7 @@ export default defineConfig({
     sourcemap: true,
     rolldownOptions: {
       input: Object.fromEntries(
-        Object.entries(entries)
-          .map(([name, path]) => [name, fileURLToPath(new URL(path, import.meta.url))] as const)
-          .filter(([, path]) => existsSync(path)),
+        Object.entries(entries).map(([name, path]) => [name, fileURLToPath(new URL(path, import.meta.url))]),
       ),
       output: { entryFileNames: '[name].js', chunkFileNames: 'chunks/[name]-[hash].js' },
     },

@@ -5,7 +5,7 @@ import { join } from 'node:path';
 import { fileURLToPath } from 'node:url';
 
 const root = fileURLToPath(new URL('..', import.meta.url));
-const commands = ['start', 'dev', 'worker', 'test'];
+const commands = ['start', 'dev', 'worker', 'test', 'add-admin'];
 
 const stop = (message) => {
   console.error(`\n${message}`);
