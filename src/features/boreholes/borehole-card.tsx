@@ -1,6 +1,6 @@
 import type { Borehole } from '../../../server/contract/surveys';
 import { Button } from '../../ui/button';
-import { formatDay, formatLength, formatSignificant, withUnit } from '../../ui/format';
+import { formatDay, formatLength, withUnit } from '../../ui/format';
 import { BoreholeLogDrawing } from './borehole-log-drawing';
 
 interface BoreholeCardProps {
@@ -8,6 +8,9 @@ interface BoreholeCardProps {
   maxDepthM: number;
   onEdit?: () => void;
 }
+
+/** To the centimetre, without zeros that say nothing. */
+const coordinate = (value: number): string => String(Number(value.toFixed(2)));
 
 const metres = (value: number): string => withUnit(formatLength(value), 'm');
 
@@ -43,8 +46,7 @@ export function BoreholeCard({ borehole, maxDepthM, onEdit }: BoreholeCardProps)
 function facts({ depthM, drilledOn, xM, yM, elevationM }: Borehole): string {
   const parts = [`${metres(depthM)} deep`];
   if (drilledOn !== null) parts.push(`drilled ${formatDay(drilledOn)}`);
-  if (xM !== null && yM !== null)
-    parts.push(`x ${formatSignificant(xM, 9)}, y ${formatSignificant(yM, 9)} m`);
+  if (xM !== null && yM !== null) parts.push(`x ${coordinate(xM)}, y ${coordinate(yM)} m`);
   if (elevationM !== null) parts.push(`at ${elevationM} m`);
   return parts.join(' · ');
 }

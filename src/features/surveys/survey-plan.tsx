@@ -1,6 +1,6 @@
 import { useMemo, useRef, useState, type KeyboardEvent } from 'react';
-import { formatSignificant, withUnit } from '../../ui/format';
-import { useElementWidth } from '../../ui/use-element-width';
+import { useBoxSize } from '../../charts/use-box-size';
+import { withUnit } from '../../ui/format';
 import { alongLine, placeLabels, planLayout } from './plan-layout';
 import { PlanMark } from './plan-mark';
 import type { PlanItem } from './plan-items';
@@ -15,7 +15,8 @@ const MARGIN = 48;
 
 /** Positions on one scale for both axes. One tab stop; the arrow keys go from mark to mark. */
 export function SurveyPlan({ items, upward }: SurveyPlanProps) {
-  const [frame, width] = useElementWidth<HTMLElement>();
+  const { ref: frame, size } = useBoxSize<HTMLElement>();
+  const { width } = size;
   const [current, setCurrent] = useState(0);
   const drawing = useRef<SVGSVGElement>(null);
   const height = Math.round(Math.min(620, Math.max(300, width * 0.62)));
@@ -77,7 +78,7 @@ function LinePaths({ items, toPage }: LinePathsProps) {
           className="fill-none stroke-edge"
           strokeDasharray="5 4"
         />
-        <text x={first.x} y={first.y - 14} textAnchor="middle" className="fill-muted text-xs">
+        <text x={first.x - 14} y={first.y + 4} textAnchor="end" className="fill-muted text-xs">
           {name}
         </text>
       </g>
@@ -87,10 +88,7 @@ function LinePaths({ items, toPage }: LinePathsProps) {
 
 function ScaleBar({ lengthM, pixels, height }: { lengthM: number; pixels: number; height: number }) {
   const y = height - 14;
-  const words =
-    lengthM >= 1000
-      ? withUnit(formatSignificant(lengthM / 1000), 'km')
-      : withUnit(formatSignificant(lengthM), 'm');
+  const words = lengthM >= 1000 ? withUnit(String(lengthM / 1000), 'km') : withUnit(String(lengthM), 'm');
   return (
     <g aria-label={`Scale bar of ${words}`}>
       <path

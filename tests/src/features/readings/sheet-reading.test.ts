@@ -1,0 +1,128 @@
+import { describe, expect, it } from 'vitest';
+import { DEFAULT_SHEET_UNITS, type Reading, type SheetRow } from '../../../../server/contract/readings';
+import { compareSheets } from '../../../../src/features/readings/compare-sheets';
+import { importReadiness } from '../../../../src/features/readings/import-readiness';
+import { createSheetReader } from '../../../../src/features/readings/sheet-reader';
+import { startSheet } from '../../../../src/features/readings/start-sheet';
+import { rowRange } from '../../../../src/features/readings/use-row-window';
+
+const row = (cells: SheetRow['cells'], excluded: string | null = null): SheetRow => ({ cells, excluded });
+const good = row({ halfAB: '10', halfMN: '0.5', voltage: '10', current: '100' });
+
+describe('reading a sheet', () => {
+  const read = createSheetReader('schlumberger', DEFAULT_SHEET_UNITS, 0.03);
+
+  it('gives readings with their row, faults with their cell, and nothing for blank rows', () => {
+    const sheet = read([good, row({}), row({ halfAB: 'x', voltage: '1,5,2' })]);
+    expect(sheet.readings.map((reading) => reading.row)).toEqual([1]);
+    // K = π(10² − 0.5²)/(2·0.5) = 313.37 m, R = 0.1 Ω
+    expect(sheet.readings[0]?.derived.apparentResistivityOhmM).toBeCloseTo(31.337, 3);
+    expect(sheet.faults.map(({ row: at, column }) => [at, column])).toEqual([
+      [3, 'halfAB'],
+      [3, 'voltage'],
+    ]);
+    expect(sheet.lines).toHaveLength(3);
+    expect(sheet.lines[1]?.parsed).toBeNull();
+  });
+
+  it('tells K as soon as the lengths stand, whatever else is missing', () => {
+    const [line] = read([row({ halfAB: '10', halfMN: '0.5' })]).lines;
+    expect(line?.parsed?.faults).not.toBeNull();
+    expect(line?.geometricFactorM).toBeCloseTo(313.374, 2);
+  });
+
+  it('does not read an unchanged row again', () => {
+    const first = read([good]).lines[0];
+    expect(read([row({}), good]).lines[1]).toBe(first);
+  });
+});
+
+describe('two people on one sheet', () => {
+  const reading = (halfAB: number, voltageMv: number, excluded: string | null = null): Reading => ({
+    spread: { type: 'schlumberger', halfAB, halfMN: 0.5 },
+    voltageMv,
+    currentMa: 100,
+    resistanceOhm: null,
+    sheetApparentResistivityOhmM: null,
+    standardError: null,
+    remark: '',
+    excluded,
+  });
+
+  it('differ where values, presence or leaving out differ; the rest is counted', () => {
+    const { differences, same } = compareSheets(
+      [reading(1, 10), reading(2, 20), reading(3, 30)],
+      [reading(1, 10), reading(2, 21), reading(4, 40)],
+      DEFAULT_SHEET_UNITS,
+    );
+    expect(same).toBe(1);
+    expect(
+      differences.map(({ spacing, mine, theirs }) => [spacing, mine?.cells.voltage, theirs?.cells.voltage]),
+    ).toEqual([
+      ['2 / 0.5', '20', '21'],
+      ['3 / 0.5', '30', undefined],
+      ['4 / 0.5', undefined, '40'],
+    ]);
+    expect(compareSheets([reading(1, 1)], [reading(1, 1, 'wet')], DEFAULT_SHEET_UNITS).same).toBe(0);
+  });
+
+  it('pair repeats of one spacing in their order', () => {
+    const { differences, same } = compareSheets(
+      [reading(1, 10), reading(1, 11)],
+      [reading(1, 10), reading(1, 12)],
+      DEFAULT_SHEET_UNITS,
+    );
+    expect([differences.length, same]).toEqual([1, 1]);
+  });
+});
+
+describe('what a sheet opens with', () => {
+  const draft = {
+    rows: [good],
+    units: DEFAULT_SHEET_UNITS,
+    baseRevisionId: null,
+    updatedAt: '2026-01-02T10:00:00.000Z',
+  };
+  const base = { soundingId: 'x', spreadType: 'schlumberger', revision: null } as const;
+  const local = (editedAt: string) => ({
+    draft: { rows: [row({ halfAB: '7' })], units: DEFAULT_SHEET_UNITS, baseRevisionId: null },
+    editedAt,
+  });
+
+  it('is whatever was written last, here or on the server', () => {
+    expect(startSheet({ ...base, draft: null }, null).origin).toBe('empty');
+    expect(startSheet({ ...base, draft }, null).origin).toBe('draft');
+    expect(startSheet({ ...base, draft }, local('2026-01-02T10:00:01.000Z')).origin).toBe('unsent');
+    expect(startSheet({ ...base, draft }, local('2026-01-02T09:59:59.000Z')).origin).toBe('draft');
+    const unsent = startSheet({ ...base, draft: null }, local('2026-01-01T00:00:00.000Z'));
+    expect(unsent.content.rows[0]?.cells.halfAB).toBe('7');
+  });
+});
+
+describe('reading in a file', () => {
+  const clear = { faults: [], readings: [{}], missingColumns: [], unitsStated: true } as never;
+  const withFault = { faults: [{}], readings: [{}], missingColumns: [], unitsStated: true } as never;
+
+  it('is open as a whole only without faults, and by its good rows only with some', () => {
+    expect(importReadiness(clear, false)).toEqual({ all: true, goodRows: false });
+    expect(importReadiness(withFault, false)).toEqual({ all: false, goodRows: true });
+  });
+
+  it('waits for the units to be stated, for every column, and for at least one reading', () => {
+    const unstated = { faults: [], readings: [{}], missingColumns: [], unitsStated: false } as never;
+    expect(importReadiness(unstated, false).all).toBe(false);
+    expect(importReadiness(unstated, true).all).toBe(true);
+    const missing = { faults: [], readings: [{}], missingColumns: ['AB/2'], unitsStated: true } as never;
+    expect(importReadiness(missing, true).all).toBe(false);
+    const none = { faults: [{}], readings: [], missingColumns: [], unitsStated: true } as never;
+    expect(importReadiness(none, true).goodRows).toBe(false);
+  });
+});
+
+describe('rows that are drawn', () => {
+  it('are those in view and some around them', () => {
+    expect(rowRange(5000, 33, { scrollTop: 0, height: 660 })).toEqual({ start: 0, end: 32 });
+    expect(rowRange(5000, 33, { scrollTop: 33_000, height: 660 })).toEqual({ start: 988, end: 1032 });
+    expect(rowRange(10, 33, { scrollTop: 33_000, height: 660 })).toEqual({ start: 10, end: 10 });
+  });
+});
