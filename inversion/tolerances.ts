@@ -6,8 +6,10 @@ export const TOLERANCES = {
   designRidge: 1e-14,
   /** Predicted/observed below this: the log residual goes on along its tangent, so that a ρa ≤ 0 keeps a finite, falling misfit. */
   logResidualFloor: 1e-3,
-  /** converged-gradient: max |Jᵀr| of the free parameters ≤ this × max(1, χ²). */
-  gradient: 1e-7,
+  /** converged-gradient: max |Jᵀr|ⱼ/‖Jⱼ‖ of the free parameters ≤ this × √χ²; below it rounding decides the next step. */
+  gradient: 1e-6,
+  /** χ² below this counts as this in the line above: the readings are met exactly. */
+  exactFit: 1e-12,
   /** converged-step: max |Δ ln parameter| ≤ this. */
   step: 1e-8,
   /** converged-decrease: χ² fell by less than this × χ² in each of the last three accepted steps. */

@@ -36,6 +36,8 @@ const FASTER = 4;
 const SLOWER = 5;
 const INITIAL_DAMPING = 0.3;
 const LOWEST_DAMPING = 1e-9;
+/** A parameter is damped as if its sensitivity were at least this share of the strongest one's. */
+const SCALE_FLOOR = 0.1;
 
 interface Trial {
   readonly parameters: Float64Array;
@@ -112,6 +114,28 @@ function slopes(jacobian: Float64Array, residual: Float64Array, n: number) {
 }
 
 /**
+ * The parameters that a step may move (one on a bound that would leave it is held), and the steepest |Jᵀr|ⱼ/‖Jⱼ‖ among
+ * them: √χ² times the cosine between the residual and a column, so a scale-free slope.
+ */
+function freeParameters(
+  problem: LeastSquaresProblem,
+  parameters: Float64Array,
+  gradient: Float64Array,
+  norms: Float64Array,
+) {
+  const free: number[] = [];
+  let steepest = 0;
+  gradient.forEach((slope, j) => {
+    const leaves =
+      (parameters[j]! <= problem.low[j]! && slope > 0) || (parameters[j]! >= problem.high[j]! && slope < 0);
+    if (leaves) return;
+    free.push(j);
+    if (slope !== 0) steepest = Math.max(steepest, Math.abs(slope) / norms[j]!);
+  });
+  return { free, steepest };
+}
+
+/**
  * Bounded Levenberg–Marquardt from `start`: the packaged solver driven one step at a time, a step kept only if χ² falls,
  * damping ÷4 on success and ×5 on failure. A parameter that sits on a bound and would leave it is held for that step.
  * Source: Marquardt 1963; scaled damping after Moré 1978.
@@ -145,18 +169,9 @@ export function minimise(
   });
   let { gradient, norms } = slopes(jacobian, current.residual, n);
   for (let iteration = 0; iteration < limit; iteration++) {
-    const free: number[] = [];
-    let steepest = 0;
-    for (let j = 0; j < n; j++) {
-      const leaves =
-        (current.parameters[j]! <= problem.low[j]! && gradient[j]! > 0) ||
-        (current.parameters[j]! >= problem.high[j]! && gradient[j]! < 0);
-      if (leaves) continue;
-      free.push(j);
-      steepest = Math.max(steepest, Math.abs(gradient[j]!));
-    }
-    if (steepest <= TOLERANCES.gradient * Math.max(1, current.chi2))
-      return done('converged-gradient', iteration);
+    const { free, steepest } = freeParameters(problem, current.parameters, gradient, norms);
+    const level = Math.sqrt(Math.max(current.chi2, TOLERANCES.exactFit));
+    if (steepest <= TOLERANCES.gradient * level) return done('converged-gradient', iteration);
     const strongest = Math.max(...norms);
     const scale = norms.map((norm) => Math.max(norm, SCALE_FLOOR * strongest, 1e-300));
     const trial = oneStep(problem, current, jacobian, free, scale, damping, data);
@@ -180,5 +195,3 @@ export function minimise(
   }
   return done('iteration-limit', limit);
 }
-
-const SCALE_FLOOR = 0.1;

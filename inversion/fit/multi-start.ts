@@ -24,7 +24,7 @@ export interface SearchEffort {
 const FULL: SearchEffort = {
   screened: 200,
   random: 8,
-  shortRun: 10,
+  shortRun: 6,
   patience: 3,
   carried: 40,
   polish: TOLERANCES.iterations,

@@ -8,7 +8,8 @@ function fitOf(earth: LayeredEarth, layers = earth.resistivity.length) {
   const predicted = createForwardOperator(SPREADS).predict(earth);
   const readings = SPREADS.map((spread, i) => ({
     spread,
-    apparentResistivity: predicted[i]!,
+    // an even scatter of 1 %, so that every fit has a misfit to speak of
+    apparentResistivity: predicted[i]! * (i % 2 === 0 ? 1.01 : 0.99),
     relativeError: 0.03,
   }));
   return fitLayered(readings, layered(layers));
@@ -40,8 +41,8 @@ describe('compareFits', () => {
     expect(pair!.text).toContain('The models have 2 and 1 beds');
     expect(pair!.text).toContain('The first fits closer');
     const thicker = compareFits([BASE, fitOf({ resistivity: [100, 20], thickness: [10] })]).pairs[0]!;
-    expect(thicker.totalConductanceRatio).toBeCloseTo(2, 3);
-    expect(thicker.totalResistanceRatio).toBeCloseTo(2, 3);
+    expect(thicker.totalConductanceRatio).toBeCloseTo(2, 1);
+    expect(thicker.totalResistanceRatio).toBeCloseTo(2, 1);
   });
 
   it('compares every pair of three and names the closest fit', () => {

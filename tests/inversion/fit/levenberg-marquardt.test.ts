@@ -42,7 +42,7 @@ describe('minimise', () => {
   it('stops on a bound at the least value that the bound allows', () => {
     const outcome = minimise(valley([-5, -5], [0.5, 5]), [-1.2, 1]);
     expect(outcome.parameters[0]).toBe(0.5);
-    expect(outcome.parameters[1]).toBeCloseTo(0.25, 8);
+    expect(outcome.parameters[1]).toBeCloseTo(0.25, 6);
     expect(outcome.chi2).toBeCloseTo(0.25, 10);
   });
 
