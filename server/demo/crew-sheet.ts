@@ -3,7 +3,7 @@ import { createForwardOperator, geometricFactor, type Spread } from '../../inver
 import { spreadsOf, type DemoSounding } from './scenario';
 
 /** Relative scatter of the invented readings, one standard deviation. */
-const SCATTER = 0.03;
+const SCATTER = 0.025;
 
 interface CrewReading {
   readonly spread: Spread;
@@ -46,7 +46,7 @@ function troubleOf(sounding: DemoSounding, spread: Spread): { factor: number; re
 export function crewReadings(sounding: DemoSounding): CrewReading[] {
   const spreads = spreadsOf(sounding.array);
   const exact = createForwardOperator(spreads).predict(sounding.ground);
-  const { uniform, normal } = deviates(7000 + Number(sounding.name.slice(2)));
+  const { uniform, normal } = deviates(1500 + Number(sounding.name.slice(2)));
   return spreads.map((spread, i) => {
     const { factor, remark } = troubleOf(sounding, spread);
     const currentMa = currentFor(spacingOf(spread), uniform());

@@ -211,7 +211,7 @@ export const SCHLUMBERGER_LADDER: readonly (readonly [number, number])[] = [
   ...[1.5, 2, 2.7, 3.6].map((halfAB) => [halfAB, 0.25] as const),
   ...[3.6, 5, 6.8, 9, 12].map((halfAB) => [halfAB, 0.5] as const),
   ...[12, 16, 21, 28, 38, 50].map((halfAB) => [halfAB, 2] as const),
-  ...[50, 68, 90, 120, 160].map((halfAB) => [halfAB, 10] as const),
+  ...[50, 68, 90, 120, 160].map((halfAB) => [halfAB, 8] as const),
   ...[160, 210, 280, 370].map((halfAB) => [halfAB, 30] as const),
 ];
 /** Wenner spacings a, m. */
