@@ -108,8 +108,10 @@ const WORDS: Record<BedQuantity, string> = {
   resistance: 'transverse resistance',
 };
 
+const number = (value: number): string => (value >= 1000 ? String(Math.round(value)) : value.toPrecision(3));
+
 function phrase(difference: BedDifference): string {
-  const [a, b] = [difference.first, difference.second].map((v) => v.toPrecision(3));
+  const [a, b] = [difference.first, difference.second].map(number);
   return `${WORDS[difference.quantity]} of bed ${difference.bed + 1} (${a} against ${b} ${difference.unit})`;
 }
 
@@ -120,9 +122,7 @@ function ratio(first: number, second: number): number | null {
 function totalsSentence(a: FitResult, b: FitResult): string {
   const pair = ([x, y]: [number, number], unit: string) => {
     const change = ratio(x, y);
-    return change === null
-      ? ''
-      : `${x.toPrecision(3)} against ${y.toPrecision(3)} ${unit} (× ${change.toFixed(2)})`;
+    return change === null ? '' : `${number(x)} against ${number(y)} ${unit} (× ${change.toFixed(2)})`;
   };
   const s = pair([a.darZarrouk.totalConductanceS, b.darZarrouk.totalConductanceS], 'S');
   const t = pair([a.darZarrouk.totalResistanceOhmM2, b.darZarrouk.totalResistanceOhmM2], 'Ω·m²');
@@ -142,14 +142,14 @@ function describePair(
       ? `Both models have ${counts[0]} ${counts[0] === 1 ? 'bed' : 'beds'}.`
       : `The models have ${counts[0]} and ${counts[1]} beds; beds are matched from the surface, so only the shallow ones compare like with like.`;
   const change = b.chi2PerReading - a.chi2PerReading;
-  const fitAlike = Math.abs(change) < 0.05 * Math.max(a.chi2PerReading, b.chi2PerReading);
+  const fitAlike = Math.abs(change) < Math.max(0.02, 0.05 * Math.max(a.chi2PerReading, b.chi2PerReading));
   const middle =
     supported.length === 0
       ? ` No bed differs beyond the 95 % intervals${fitAlike ? ': the data do not tell these models apart' : ''}.`
       : ` The data support ${supported.length === 1 ? 'one difference' : `${supported.length} differences`} beyond the 95 % intervals: ${supported.map(phrase).join('; ')}.`;
   const tail = fitAlike
-    ? ` They fit alike (χ²/N ${a.chi2PerReading.toPrecision(3)} and ${b.chi2PerReading.toPrecision(3)}).`
-    : ` ${change < 0 ? nameB : nameA} fits closer (χ²/N ${a.chi2PerReading.toPrecision(3)} and ${b.chi2PerReading.toPrecision(3)}).`;
+    ? ` They fit alike (χ²/N ${number(a.chi2PerReading)} and ${number(b.chi2PerReading)}).`
+    : ` ${change < 0 ? nameB : nameA} fits closer (χ²/N ${number(a.chi2PerReading)} and ${number(b.chi2PerReading)}).`;
   return head + middle + tail + totalsSentence(a, b);
 }
 

@@ -4,6 +4,7 @@ import { BedSwatch } from '../../runs/bed-swatch';
 import { formatLength, formatRange, formatResistivity, withUnit } from '../../ui/format';
 import { Cell, Table, TableBody, TableRow } from '../../ui/table';
 import { RunHeads } from './run-heads';
+import { tableWidth } from './table-width';
 
 /** Bed by bed from the surface: value and 95 % range of each run. */
 export function BedComparison({ runs }: { runs: readonly Run[] }) {
@@ -13,7 +14,7 @@ export function BedComparison({ runs }: { runs: readonly Run[] }) {
       <h2 id="beds-title" className="mb-1 font-semibold">
         Beds <span className="ml-2 text-sm font-normal text-muted">value, and its 95 % range below</span>
       </h2>
-      <Table caption="Beds of each run">
+      <Table caption="Beds of each run" className="table-fixed" style={tableWidth(runs.length)}>
         <RunHeads runs={runs} first="Bed" />
         <TableBody>
           {Array.from({ length: most }, (_, bed) => (

@@ -59,13 +59,13 @@ export function Comparison({ sounding, runs, baseId, onBase }: ComparisonProps) 
       ) : null}
       <ComparedCurves sounding={sounding} runs={ordered} base={base} />
       <DepthColumns columns={columns} title="Ground" subject={sounding.name} height={440} />
-      <BedComparison runs={ordered} />
-      <FactComparison title="How they fit" runs={ordered} rows={outcomeRows(ordered)} />
-      <FactComparison title="What was asked for" runs={ordered} rows={settingRows(ordered)} />
       {pairs.map((pair) => {
         const other = ordered[pair.second];
         return other ? <DifferenceSection key={other.id} base={base} other={other} pair={pair} /> : null;
       })}
+      <BedComparison runs={ordered} />
+      <FactComparison title="How they fit" runs={ordered} rows={outcomeRows(ordered)} />
+      <FactComparison title="What was asked for" runs={ordered} rows={settingRows(ordered)} />
     </div>
   );
 }

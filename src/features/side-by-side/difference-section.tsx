@@ -27,7 +27,7 @@ export function DifferenceSection({ base, other, pair }: DifferenceSectionProps)
   return (
     <section aria-label={`Runs ${title}`} className="break-inside-avoid">
       <h2 className="font-semibold">{title}</h2>
-      <p className="mt-1 max-w-prose">{pair.text}</p>
+      <p className="mt-1 max-w-3xl">{pair.text}</p>
       <details className="mt-2">
         <summary className="min-h-6 w-fit rounded text-muted hover:text-ink touch:min-h-11">
           Differences in numbers

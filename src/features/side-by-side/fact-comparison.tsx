@@ -2,6 +2,7 @@ import type { Run } from '../../../server/contract/runs';
 import { Cell, Table, TableBody, TableRow } from '../../ui/table';
 import type { FactRow } from './run-facts-table';
 import { RunHeads } from './run-heads';
+import { tableWidth } from './table-width';
 
 export interface FactComparisonProps {
   title: string;
@@ -14,7 +15,7 @@ export function FactComparison({ title, runs, rows }: FactComparisonProps) {
   return (
     <section aria-label={title}>
       <h2 className="mb-1 font-semibold">{title}</h2>
-      <Table caption={title}>
+      <Table caption={title} className="table-fixed" style={tableWidth(runs.length)}>
         <RunHeads runs={runs} first="Of the run" />
         <TableBody>
           {rows.map((row) => (

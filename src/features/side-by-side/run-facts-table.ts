@@ -52,16 +52,21 @@ export function settingRows(runs: readonly FinishedRun[]): FactRow[] {
     ...labels.map((label) =>
       row(
         label,
-        words.map((facts) => facts.find((fact) => fact.label === label)?.value ?? 'as usual'),
+        words.map(
+          (facts) =>
+            facts.find((fact) => fact.label === label)?.value ?? (label === 'Held' ? 'none' : 'as usual'),
+        ),
       ),
     ),
     row(
       'Engine',
       runs.map((run) => run.engineVersion),
     ),
-    row(
-      'Asked by',
-      runs.map((run) => `${run.requestedBy.name}, ${formatMoment(run.requestedAt)}`),
-    ),
+    // Who asked has no part in what comes out.
+    {
+      label: 'Asked by',
+      values: runs.map((run) => `${run.requestedBy.name}, ${formatMoment(run.requestedAt)}`),
+      differs: false,
+    },
   ];
 }

@@ -9,9 +9,9 @@ export function RunHeads({ runs, first }: { runs: readonly Run[]; first: string 
   const palette = useChartPalette();
   return (
     <TableHead>
-      <HeaderCell>{first}</HeaderCell>
+      <HeaderCell className="w-36">{first}</HeaderCell>
       {runs.map((run) => (
-        <HeaderCell key={run.id}>
+        <HeaderCell key={run.id} className="truncate">
           <span className="figure" style={{ color: runStyle(letterOfRun(run), palette).color }}>
             {letterOfRun(run)}
           </span>{' '}

@@ -40,6 +40,8 @@ describe('compareFits', () => {
     expect(pair!.chi2PerReadingDifference).toBeCloseTo(worse.chi2PerReading - BASE.chi2PerReading, 12);
     expect(pair!.text).toContain('The models have 2 and 1 beds');
     expect(pair!.text).toContain('The first fits closer');
+    expect(pair!.text).not.toContain('do not tell these models apart');
+    expect(compareFits([BASE, worse], ['Run C', 'Run A']).pairs[0]!.text).toContain('Run C fits closer');
     const thicker = compareFits([BASE, fitOf({ resistivity: [100, 20], thickness: [10] })]).pairs[0]!;
     expect(thicker.totalConductanceRatio).toBeCloseTo(2, 1);
     expect(thicker.totalResistanceRatio).toBeCloseTo(2, 1);
