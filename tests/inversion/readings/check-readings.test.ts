@@ -124,6 +124,14 @@ describe('branches of different MN', () => {
     expect(check?.message).toMatch(/MN\/2 2 m lies 30 % above that of MN\/2 0\.5 m/);
   });
 
+  it('compares at shared spacings alone where there are any, as a line between two spacings cuts a bend', () => {
+    const narrow = [schlumberger(10, 0.5), schlumberger(20, 0.5), schlumberger(40, 0.5)];
+    const wide = [schlumberger(20, 2), schlumberger(28, 2)];
+    const values = [100, 100, 50, 100, 100];
+    const readings = [...narrow, ...wide].map((spread, i) => [spread, rhoa(values[i] ?? 0)] as const);
+    expect(kinds(sheet(readings))).toEqual([]);
+  });
+
   it('tells a step where they overlap without a shared spacing', () => {
     expect(kinds(sheet(branches(1.3, 30)))).toEqual([['branch-jump', [4, 5, 6]]]);
   });
