@@ -4,7 +4,7 @@ import { recordAudit } from '../access/audit';
 import { hashPassword } from '../access/password';
 import { createToken } from '../access/secret-token';
 import { findUserByEmail, insertUser } from '../access/user-store';
-import { insertReset } from '../password-resets/password-reset-store';
+import { insertReset } from '../access/password-reset-store';
 
 const LINK_LIFE_S = 3600;
 

@@ -6,7 +6,7 @@ import { invalidateSessionsOf } from '../access/sessions';
 import { findUserByEmail, setPasswordHash } from '../access/user-store';
 import { AppError } from '../errors';
 import type { PublicContext } from '../http/context';
-import { findOpenReset, insertReset, useReset } from './password-reset-store';
+import { findOpenReset, insertReset, useReset } from '../access/password-reset-store';
 
 const HOUR_S = 3600;
 
