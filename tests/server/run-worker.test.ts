@@ -3,14 +3,14 @@ import { describe, expect, it } from 'vitest';
 import type { FitSettingsInput } from '../../server/contract/fit';
 import { runSchema, type Run } from '../../server/contract/runs';
 import { HEAVY, heavyReadings } from '../setup/heavy-readings';
-import { startWorkerProcess, type WorkerProcess } from '../setup/run-worker';
+import { workerProcesses, type WorkerProcess } from '../setup/run-worker';
 import { createTestServer, type Client } from '../setup/server';
 
 const server = await createTestServer();
 const { db, services } = server;
 const survey = await server.createSurvey();
 const geophysicist = await server.signInAs('geophysicist', survey.id);
-const databaseUrl = services.config.databaseUrl;
+const startWorker = workerProcesses(services.config.databaseUrl);
 
 const LONG: FitSettingsInput = { kind: 'layered', layers: 'auto' };
 const SHORT: FitSettingsInput = { kind: 'layered', layers: 3 };
@@ -34,7 +34,7 @@ async function ask(
 const read = async (runId: string): Promise<Run> =>
   runSchema.parse((await geophysicist.get(`/runs/${runId}`)).body);
 
-async function until(runId: string, reached: (run: Run) => boolean, patienceMs = 45_000): Promise<Run> {
+async function until(runId: string, reached: (run: Run) => boolean, patienceMs = 90_000): Promise<Run> {
   const giveUpAt = Date.now() + patienceMs;
   for (;;) {
     const run = await read(runId);
@@ -58,11 +58,11 @@ async function untilNoJobs(): Promise<void> {
 }
 
 /** One after the other: each scene goes on with the worker that the last one left. */
-describe('workers on one database', { timeout: 120_000 }, () => {
+describe('workers on one database', { timeout: 200_000 }, () => {
   let worker: WorkerProcess;
 
   it('computes a run, tells its progress, and answers the same request from the cache', async () => {
-    worker = startWorkerProcess(databaseUrl);
+    worker = startWorker();
     const soundingId = await soundingWith(heavyReadings());
     const asked = await ask(soundingId, LONG);
     expect(asked.state).toBe('queued');
@@ -94,9 +94,9 @@ describe('workers on one database', { timeout: 120_000 }, () => {
     await until(asked.id, isRunning);
     const answer = await geophysicist.put(`/runs/${asked.id}/cancellation`);
     expect(answer.body).toMatchObject({ state: 'cancelled' });
-    // the only thread would be busy for minutes had it not been ended
+    // the only thread would be busy for longer than this had it not been ended
     const next = await ask(await soundingWith(), SHORT);
-    await until(next.id, hasEnded);
+    await until(next.id, hasEnded, 30_000);
     expect((await read(asked.id)).state).toBe('cancelled');
     expect(await computationsOf(asked)).toBe(0);
     await untilNoJobs();
@@ -121,7 +121,7 @@ describe('workers on one database', { timeout: 120_000 }, () => {
     expect(await worker.end('SIGTERM')).toBe(0);
     expect(await read(asked.id)).toMatchObject({ state: 'queued', startedAt: null, progress: 0 });
     expect(await db('worker_heartbeat')).toEqual([]);
-    worker = startWorkerProcess(databaseUrl);
+    worker = startWorker();
     const finished = await until(asked.id, hasEnded);
     expect(finished.state).toBe('finished');
     expect(await computationsOf(finished)).toBe(1);
@@ -131,7 +131,7 @@ describe('workers on one database', { timeout: 120_000 }, () => {
   it('ends a run once when its worker is killed in the middle', async () => {
     const asked = await ask(await soundingWith(heavyReadings(HEAVY + 2)), LONG);
     await until(asked.id, isRunning);
-    const other = startWorkerProcess(databaseUrl);
+    const other = startWorker();
     await worker.end('SIGKILL');
     const finished = await until(asked.id, hasEnded);
     expect(finished.state).toBe('finished');
@@ -145,7 +145,7 @@ describe('workers on one database', { timeout: 120_000 }, () => {
     const asked = await ask(await soundingWith(heavyReadings(HEAVY + 3)), LONG);
     await until(asked.id, isRunning);
     worker.signal('SIGSTOP');
-    const other = startWorkerProcess(databaseUrl);
+    const other = startWorker();
     const finished = await until(asked.id, hasEnded);
     expect(await attemptsOf(finished)).toBe(2);
     await other.end('SIGTERM');

@@ -6,32 +6,41 @@ import { afterAll } from 'vitest';
 const ROOT = join(import.meta.dirname, '../..');
 
 export interface WorkerProcess {
-  readonly pid: number;
-  /** resolves when the process has ended */
   signal(name: NodeJS.Signals): void;
+  /** resolves to the exit code when the process has ended */
   end(name: 'SIGTERM' | 'SIGKILL'): Promise<number | null>;
 }
 
-/** A worker process of its own, as on another machine; killed after the file if it still runs. */
-export function startWorkerProcess(databaseUrl: string): WorkerProcess {
-  const child = spawn(process.execPath, ['--import', 'tsx', 'server/worker.ts'], {
-    cwd: ROOT,
-    env: { ...process.env, DATABASE_URL: databaseUrl, LOG_LEVEL: process.env.TEST_WORKER_LOG ?? 'silent' },
-    stdio: ['ignore', process.env.TEST_WORKER_LOG ? 'inherit' : 'ignore', 'inherit'],
-  });
-  const ended = once(child, 'exit').then(() => child.exitCode);
+/**
+ * The way to start worker processes, each as on another machine. Call it at the top of a test file, after the server was
+ * made: whatever still runs when the file ends is killed before the database goes.
+ */
+export function workerProcesses(databaseUrl: string): () => WorkerProcess {
+  const children: ChildProcess[] = [];
   afterAll(async () => {
-    if (isRunning(child)) child.kill('SIGKILL');
-    await ended;
+    const running = children.filter((child) => child.exitCode === null && child.signalCode === null);
+    await Promise.all(
+      running.map((child) => {
+        const ended = once(child, 'exit');
+        child.kill('SIGKILL');
+        return ended;
+      }),
+    );
   });
-  return {
-    pid: child.pid ?? 0,
-    signal: (name) => void child.kill(name),
-    end(name) {
-      child.kill(name);
-      return ended;
-    },
+  return () => {
+    const child = spawn(process.execPath, ['--import', 'tsx', 'server/worker.ts'], {
+      cwd: ROOT,
+      env: { ...process.env, DATABASE_URL: databaseUrl, LOG_LEVEL: 'silent' },
+      stdio: 'ignore',
+    });
+    children.push(child);
+    const ended = once(child, 'exit').then(() => child.exitCode);
+    return {
+      signal: (name) => void child.kill(name),
+      end(name) {
+        child.kill(name);
+        return ended;
+      },
+    };
   };
 }
-
-const isRunning = (child: ChildProcess): boolean => child.exitCode === null && child.signalCode === null;
