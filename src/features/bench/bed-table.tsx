@@ -34,7 +34,7 @@ export function BedTable(props: BedTableProps) {
           <HeaderCell>Bed</HeaderCell>
           <HeaderCell unit="Ω·m">ρ</HeaderCell>
           <HeaderCell unit="m">Thickness</HeaderCell>
-          <HeaderCell numeric unit="m">
+          <HeaderCell numeric unit="m" className="hidden sm:table-cell">
             Base
           </HeaderCell>
           <HeaderCell>
@@ -77,7 +77,7 @@ function BedRow(props: BedTableProps & { index: number }) {
       ) : (
         <>
           <ValueCells {...props} value={{ on: 'thickness', index }} />
-          <Cell numeric className="align-top leading-8">
+          <Cell numeric className="hidden align-top leading-8 sm:table-cell">
             {formatLength(base)}
           </Cell>
         </>

@@ -74,7 +74,7 @@ function Numbers({ sounding, run, model, selectedBed, onSelectBed }: Omit<BenchG
   if (!earth) return null;
   const shownRun = model.hand ? null : run;
   return (
-    <section className="flex flex-col gap-1">
+    <section className="flex max-w-4xl flex-col gap-1">
       <HandBar model={model} runLetter={run ? letterOfRun(run) : null}>
         <ModelSaveMenu soundingName={sounding.name} earth={earth} run={shownRun} />
       </HandBar>

@@ -59,7 +59,7 @@ export function BenchWorkspace({ sounding, revision, runs, run }: BenchWorkspace
     request.mutate(settings, { onSuccess: (asked) => awaitRun(asked.id) });
   const result = model.hand ? null : (run?.result ?? null);
   return (
-    <div className="grid flex-1 grid-cols-1 lg:grid-cols-[minmax(17rem,19rem)_minmax(0,1fr)] xl:grid-cols-[minmax(17rem,21rem)_minmax(0,1fr)_minmax(20rem,24rem)]">
+    <div className="grid flex-1 grid-cols-1 lg:grid-cols-[18rem_minmax(0,1fr)] xl:grid-cols-[19rem_minmax(0,1fr)_22rem] 2xl:grid-cols-[21rem_minmax(0,1fr)_24rem]">
       <DrawingRegion
         onFit={can.run ? () => askForFit.current() : null}
         onUndo={model.undo}

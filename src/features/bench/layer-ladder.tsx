@@ -16,7 +16,7 @@ const NOISE_WORDS = { true: 'yes', false: 'no', null: 'not testable' } as const;
 /** Every count that was tried, with what decided between them. */
 export function LayerLadder({ counts, onTakeUp, onAdopt }: LayerLadderProps) {
   return (
-    <>
+    <div className="max-w-4xl">
       <Table caption="Counts of beds that were tried">
         <TableHead>
           <HeaderCell numeric>Beds</HeaderCell>
@@ -59,6 +59,6 @@ export function LayerLadder({ counts, onTakeUp, onAdopt }: LayerLadderProps) {
       <p className="mt-2 text-sm text-muted">
         Chosen is the fewest beds whose χ² lies below its 95 % point; where none does, the least BIC.
       </p>
-    </>
+    </div>
   );
 }

@@ -96,7 +96,7 @@ function RunMarks({ run, runs }: { run: RunSummary; runs: readonly RunSummary[] 
         <Pin aria-hidden size={12} /> pinned
       </span>
     ),
-    run.fromCache && <Badge key="cache">from cache</Badge>,
+    run.fromCache && <Badge key="cache">from an earlier run</Badge>,
     run.ofOlderReadings && (
       <Badge key="older" tone="copper">
         older readings, revision {run.revisionNumber}

@@ -30,7 +30,7 @@ export function RunFacts({ run, runs, can }: RunFactsProps) {
       label: 'Computed',
       value: [
         run.durationMs === null ? null : `in ${formatDuration(run.durationMs)}`,
-        run.fromCache ? 'answered from the cache' : null,
+        run.fromCache ? 'answered from an earlier run' : null,
         `engine ${run.engineVersion}`,
       ]
         .filter((part) => part !== null)
