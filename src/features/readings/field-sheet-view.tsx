@@ -1,4 +1,4 @@
-import { useDeferredValue, useMemo, useRef, useState, type KeyboardEvent } from 'react';
+import { useMemo, useRef, useState, type KeyboardEvent } from 'react';
 import { checkReadings } from '../../../inversion/readings/check-readings';
 import type { FieldSheet } from '../../../server/contract/readings';
 import type { Sounding } from '../../../server/contract/soundings';
@@ -16,8 +16,12 @@ import { SheetGrid, type SheetGridHandle } from './sheet-grid';
 import { SheetNotices } from './sheet-notices';
 import { pasteBlock, setRow, withCell, withExcluded, type GridColumn } from './sheet-rows';
 import { SheetToolbar } from './sheet-toolbar';
+import { useSettled } from './use-settled';
 import { useSheet } from './use-sheet';
 import type { CellPlace } from './use-grid-focus';
+
+const LONG_SHEET = 300;
+const LONG_SHEET_REST_MS = 400;
 
 interface FieldSheetViewProps {
   sounding: Sounding;
@@ -31,7 +35,8 @@ export function FieldSheetView({ sounding, fieldSheet, keeper }: FieldSheetViewP
   const grid = useRef<SheetGridHandle>(null);
   const { content, edit } = sheet;
   const { readings, faults } = sheet.sheet;
-  const settled = useDeferredValue(readings);
+  // typing comes first; curve and checks of a long sheet follow when it rests
+  const settled = useSettled(readings, readings.length > LONG_SHEET ? LONG_SHEET_REST_MS : 0);
   const checks = useMemo(() => checkReadings(settled), [settled]);
   const doubtedRows = useMemo(() => new Set(checks.flatMap((check) => check.rows)), [checks]);
   const columns = gridColumns(sounding.spreadType);
@@ -102,7 +107,7 @@ export function FieldSheetView({ sounding, fieldSheet, keeper }: FieldSheetViewP
           />
         </div>
         <div className="flex min-w-0 flex-col gap-6">
-          <SheetCurve sounding={sounding} readings={readings} onFocusRow={setCurrentRow} />
+          <SheetCurve sounding={sounding} readings={settled} onFocusRow={setCurrentRow} />
           <CheckList checks={checks} onJump={jumpToRow} />
           <RevisionList sounding={sounding} sheet={sheet} />
         </div>

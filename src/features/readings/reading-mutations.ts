@@ -7,7 +7,9 @@ import {
   type FieldSheet,
   type ImportMapping,
 } from '../../../server/contract/readings';
+import { hasCode } from '../../api/api-error';
 import { sendForm, sendJson, sendJsonWithStatus } from '../../api/http';
+import { meKey } from '../../api/session-queries';
 import { soundingKeys } from '../../api/sounding-queries';
 import { surveyKeys } from '../../api/survey-queries';
 import type { Draft } from './draft-keeper';
@@ -25,7 +27,11 @@ export function useSendDraft(soundingId: string) {
   const client = useQueryClient();
   return useCallback(
     async (draft: Draft): Promise<void> => {
-      const kept = await sendJson('PUT', `/soundings/${soundingId}/reading-draft`, draft, draftSchema);
+      const path = `/soundings/${soundingId}/reading-draft`;
+      const kept = await sendJson('PUT', path, draft, draftSchema).catch((error: unknown) => {
+        if (hasCode(error, 'unauthenticated')) client.setQueryData(meKey, null);
+        throw error;
+      });
       client.setQueryData<FieldSheet>(soundingKeys.fieldSheet(soundingId), (sheet) =>
         sheet ? { ...sheet, draft: kept } : sheet,
       );

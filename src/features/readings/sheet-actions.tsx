@@ -100,7 +100,7 @@ export function SheetActions({ sounding, fieldSheet, sheet, keeper }: SheetActio
                   disabled={faults.length > 0 || readings.length === 0 || !sheet.isChanged}
                   onClick={() => void saveOver(sheet.baseRevisionId)}
                 >
-                  Save
+                  Save the readings
                 </Button>
               </>
             ) : null}

@@ -1,10 +1,11 @@
-import { useDeferredValue, useMemo } from 'react';
+import { useMemo } from 'react';
 import type { Sounding } from '../../../server/contract/soundings';
 import type { CurveReading } from '../../charts/chart-data';
 import { SoundingCurve } from '../../charts/sounding-curve';
 import { SPACING_AXIS, SPREAD_NAMES, spacingLabel } from '../../runs/spread-words';
 import { formatCount } from '../../ui/format';
 import type { SheetReading } from './sheet-reader';
+import { thinReadings } from './thin-readings';
 
 const NO_LINES = [] as const;
 
@@ -14,15 +15,18 @@ interface SheetCurveProps {
   onFocusRow: (row: number) => void;
 }
 
-/** The curve of what stands on the sheet now; it may lag a moment behind fast typing, never the other way. */
+/** The curve of what stands on the sheet now. */
 export function SheetCurve({ sounding, readings, onFocusRow }: SheetCurveProps) {
-  const settled = useDeferredValue(readings);
-  const points = useMemo(() => settled.map(curveReading), [settled]);
-  const left = points.filter((point) => point.excluded).length;
+  const { points, every } = useMemo(() => {
+    const thinned = thinReadings(readings);
+    return { points: thinned.drawn.map(curveReading), every: thinned.every };
+  }, [readings]);
+  const left = readings.filter(({ reading }) => reading.excluded !== null).length;
   const note = [
     'Ω·m',
     SPREAD_NAMES[sounding.spreadType],
-    formatCount(points.length, 'reading'),
+    formatCount(readings.length, 'reading'),
+    ...(every > 1 ? [`one in ${every} drawn`] : []),
     ...(left > 0 ? [`${left} left out`] : []),
   ].join(', ');
   return (
@@ -34,8 +38,8 @@ export function SheetCurve({ sounding, readings, onFocusRow }: SheetCurveProps) 
       subject={sounding.name}
       maxHeight={420}
       onFocusReading={(index) => {
-        const row = index === null ? undefined : settled[index]?.row;
-        if (row !== undefined) onFocusRow(row - 1);
+        const point = index === null ? undefined : points[index];
+        if (point) onFocusRow(Number(point.id) - 1);
       }}
     />
   );

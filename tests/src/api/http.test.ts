@@ -29,7 +29,8 @@ const realFetch = globalThis.fetch;
 beforeAll(async () => {
   await new Promise<void>((resolve) => server.listen(0, '127.0.0.1', resolve));
   const origin = `http://127.0.0.1:${(server.address() as AddressInfo).port}`;
-  globalThis.fetch = (input, init) => realFetch(`${origin}${String(input)}`, init);
+  globalThis.fetch = (input, init) =>
+    realFetch(new URL(typeof input === 'string' ? input : '/', origin), init);
 });
 afterEach(() => {
   asked.length = 0;

@@ -4,6 +4,7 @@ import { compareSheets } from '../../../../src/features/readings/compare-sheets'
 import { importReadiness } from '../../../../src/features/readings/import-readiness';
 import { createSheetReader } from '../../../../src/features/readings/sheet-reader';
 import { startSheet } from '../../../../src/features/readings/start-sheet';
+import { thinReadings } from '../../../../src/features/readings/thin-readings';
 import { rowRange } from '../../../../src/features/readings/use-row-window';
 
 const row = (cells: SheetRow['cells'], excluded: string | null = null): SheetRow => ({ cells, excluded });
@@ -124,5 +125,16 @@ describe('rows that are drawn', () => {
     expect(rowRange(5000, 33, { scrollTop: 0, height: 660 })).toEqual({ start: 0, end: 32 });
     expect(rowRange(5000, 33, { scrollTop: 33_000, height: 660 })).toEqual({ start: 988, end: 1032 });
     expect(rowRange(10, 33, { scrollTop: 33_000, height: 660 })).toEqual({ start: 10, end: 10 });
+  });
+});
+
+describe('a curve of thousands', () => {
+  it('is drawn by a few hundred of its readings, from the first to the last', () => {
+    const items = Array.from({ length: 4990 }, (_, i) => i);
+    const { drawn, every } = thinReadings(items);
+    expect(every).toBe(13);
+    expect(drawn.length).toBeLessThanOrEqual(401);
+    expect([drawn[0], drawn.at(-1)]).toEqual([0, 4989]);
+    expect(thinReadings([1, 2, 3])).toEqual({ drawn: [1, 2, 3], every: 1 });
   });
 });
