@@ -80,7 +80,13 @@ async function loadSurvey(actors: Actors, as: As): Promise<void> {
   for (const sounding of SOUNDINGS) {
     const { name, xM, yM, elevationM, azimuthDeg, measuredOn, note = '' } = sounding;
     const { id } = await createSounding(as('geophysicist'), survey.id, {
-      ...{ name, xM, yM, elevationM, azimuthDeg, measuredOn, note },
+      name,
+      xM,
+      yM,
+      elevationM,
+      azimuthDeg,
+      measuredOn,
+      note,
       lineId: lineIds.get(sounding.line) ?? null,
       spreadType: sounding.array,
       elevationDatum: 'village benchmark, 390.00 m',
