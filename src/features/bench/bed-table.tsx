@@ -125,7 +125,11 @@ function ValueCells(props: BedTableProps & { value: ModelValue }) {
           onCommit={(next) => onEdit(withValue(earth, value, next))}
         />
       </span>
-      {result ? <RangeText result={result} value={value} heldInRun={heldInRun} /> : null}
+      {result ? (
+        <div className={onHold ? 'pl-6.5' : 'pl-1.5'}>
+          <RangeText result={result} value={value} heldInRun={heldInRun} />
+        </div>
+      ) : null}
     </Cell>
   );
 }
@@ -143,7 +147,7 @@ function RangeText({ result, value, heldInRun }: RangeTextProps) {
   const grade = determinationOf(factor, isHeld);
   const format = on === 'resistivity' ? formatResistivity : formatLength;
   return (
-    <span className="block pb-1 pl-6 leading-tight">
+    <span className="block pb-1 leading-tight">
       {isHeld ? null : (
         <span className="figure block text-sm">
           {formatRange(result.intervals[on][index] ?? [null, null], format)}

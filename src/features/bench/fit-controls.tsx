@@ -65,7 +65,8 @@ export function FitControls(props: FitControlsProps) {
           Fit beds
         </Button>
         {isCountOfModel ? (
-          <Field label="Beds" className="w-40">
+          // Keyed apart: the browser's list must not carry its choice from one of the two to the other.
+          <Field key="of model" label="Beds" className="w-40">
             <Select
               value={String(count)}
               disabled
@@ -73,7 +74,7 @@ export function FitControls(props: FitControlsProps) {
             />
           </Field>
         ) : (
-          <Field label="Beds" className="w-40">
+          <Field key="asked" label="Beds" className="w-40">
             <Select options={LAYER_OPTIONS} {...form.register('layers')} />
           </Field>
         )}

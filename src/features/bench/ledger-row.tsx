@@ -31,7 +31,7 @@ export function LedgerRow(props: LedgerRowProps) {
   return (
     <li
       className={classNames(
-        'grid grid-cols-[1.25rem_1.25rem_1.25rem_minmax(0,1fr)_auto_auto] items-start gap-x-2.5 border-b border-rule py-2.5 pl-1',
+        'grid grid-cols-[1.25rem_1.25rem_1.25rem_minmax(0,1fr)_auto_auto] items-start gap-x-2 border-b border-rule py-2.5 pl-1',
         isShown && 'bg-water-tint',
       )}
     >

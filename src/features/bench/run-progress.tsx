@@ -22,14 +22,14 @@ export function RunProgress({ run, can }: { run: RunSummary; can: SurveyCan }) {
   return (
     <div className="mt-1.5">
       <progress
-        value={run.state === 'queued' ? undefined : percent}
+        value={run.state === 'queued' ? 0 : percent}
         max={100}
         aria-label={`Progress of run ${letterOfRun(run)}`}
         aria-valuetext={words}
-        className="bar block h-1.5 w-full"
+        className="block h-1.5 w-full appearance-none overflow-hidden rounded-sm bg-rule [&::-moz-progress-bar]:bg-water [&::-webkit-progress-bar]:bg-rule [&::-webkit-progress-value]:bg-water"
       />
-      <div className="mt-1 flex items-center justify-between gap-2">
-        <span className="figure text-sm text-muted">{words}</span>
+      <div className="mt-1 flex flex-wrap items-center justify-between gap-x-2">
+        <span className="text-sm text-muted tabular-nums">{words}</span>
         {can.run ? (
           <Button
             kind="quiet"

@@ -46,7 +46,7 @@ function CommentForm({ interpretation }: { interpretation: Interpretation }) {
   });
   const say = form.handleSubmit((event) => review.mutate(event, { onSuccess: () => form.reset() }));
   return (
-    <form onSubmit={say} className="flex flex-col items-start gap-2 print:hidden" aria-label="Comment">
+    <form onSubmit={say} className="flex flex-col items-start gap-2 print:hidden" aria-label="Say something">
       <Field label="Comment" className="w-full" error={form.formState.errors.comment?.message}>
         <Textarea rows={3} {...form.register('comment')} />
       </Field>
