@@ -22,7 +22,7 @@ interface FrameHeaderProps {
 export function FrameHeader({ crumbs, nav, navLabel, status }: FrameHeaderProps) {
   const account = useContext(FrameAccountContext);
   return (
-    <header className="border-b border-rule px-4 sm:px-7">
+    <header className="border-b border-rule px-4 sm:px-7 print:hidden">
       <div className="flex min-h-12 items-center gap-x-4 lg:gap-x-7">
         <Link
           to={addressOf('surveys')}

@@ -50,7 +50,7 @@ export function ChartFrame(props: ChartFrameProps) {
           </Heading>
           {note ? <span className="text-sm text-muted">{note}</span> : null}
         </div>
-        <div className="flex items-center gap-1.5">
+        <div className="flex items-center gap-1.5 print:hidden">
           {view === 'drawing' ? actions : null}
           <Segmented label={`${title}: show as`} value={view} options={VIEWS} onChange={setView} />
           <SaveMenu
