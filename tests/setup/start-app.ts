@@ -14,6 +14,8 @@ export interface RunningApp extends TestDatabase {
 }
 
 export interface StartAppOptions {
+  /** On a database that holds the demo survey. */
+  demo?: boolean;
   /** Puts rows in the database before the processes start. */
   seed?: (database: TestDatabase) => Promise<void>;
   /** Settings on top of the defaults. */
@@ -24,8 +26,8 @@ export interface StartAppOptions {
  * A real web process and a real worker process, from the built bundles, on a database of their own. Await it at the top
  * of a test file; everything ends with the file.
  */
-export async function startApp({ seed, env = {} }: StartAppOptions = {}): Promise<RunningApp> {
-  const database = await createTestDatabase();
+export async function startApp({ demo = false, seed, env = {} }: StartAppOptions = {}): Promise<RunningApp> {
+  const database = await createTestDatabase({ demo });
   await seed?.(database);
   const port = await anyFreePort();
   const baseUrl = `http://127.0.0.1:${port}`;

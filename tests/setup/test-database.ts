@@ -15,17 +15,24 @@ export interface TestDatabase {
   pool: Pool;
 }
 
+interface DatabaseOptions {
+  empty?: boolean;
+  demo?: boolean;
+}
+
+const templateOf = ({ empty = false, demo = false }: DatabaseOptions): string =>
+  empty ? 'template0' : inject(demo ? 'demoTemplateName' : 'templateName');
+
 const runOnCluster = (sql: string) => runSql(inject('clusterUrl'), sql);
 
 /**
  * A migrated database of one's own, dropped after the file. Await it at the top of a test file or in a describe block's
- * body, not inside a hook. `empty` gives one without a single table.
+ * body, not inside a hook. `empty` gives one without a single table,
+ * `demo` (browser tests) one that holds the demo survey.
  */
-export async function createTestDatabase(options: { empty?: boolean } = {}): Promise<TestDatabase> {
+export async function createTestDatabase(options: DatabaseOptions = {}): Promise<TestDatabase> {
   const name = `test_${randomBytes(6).toString('hex')}`;
-  await runOnCluster(
-    `CREATE DATABASE ${name} TEMPLATE ${options.empty === true ? 'template0' : inject('templateName')}`,
-  );
+  await runOnCluster(`CREATE DATABASE ${name} TEMPLATE ${templateOf(options)}`);
   const url = withDatabase(inject('clusterUrl'), name);
   const config = loadConfig({ DATABASE_URL: url, LOG_LEVEL: 'silent' });
   const [knex, pool] = [createDatabase(config), createPool(config)];
