@@ -30,10 +30,10 @@ export function AuditEventTable() {
                 {items.map((event) => (
                   <TableRow key={event.id}>
                     <Cell className="figure whitespace-nowrap">{formatMoment(event.at)}</Cell>
-                    <Cell>{event.actorName ?? 'the system'}</Cell>
+                    <Cell className="whitespace-nowrap">{event.actorName ?? 'the system'}</Cell>
                     <Cell className="figure">{event.action}</Cell>
-                    <Cell className="wrap-anywhere">{event.subject}</Cell>
-                    <Cell className="hidden wrap-anywhere text-muted md:table-cell">
+                    <Cell className="min-w-48 wrap-anywhere">{event.subject}</Cell>
+                    <Cell className="hidden min-w-64 wrap-anywhere text-muted md:table-cell">
                       {detailsInWords(event.details)}
                     </Cell>
                   </TableRow>

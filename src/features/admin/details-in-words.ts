@@ -1,6 +1,7 @@
 /** "role guest, fields name, note". */
 export const detailsInWords = (details: Readonly<Record<string, unknown>>): string =>
   Object.entries(details)
+    .filter(([, value]) => value !== null)
     .map(([key, value]) => `${key} ${valueInWords(value)}`)
     .join('; ');
 

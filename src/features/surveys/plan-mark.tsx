@@ -41,7 +41,8 @@ export function PlanMark({ item, x, y, isTabStop, onFocus, onKeyDown, label }: P
       />
       <g transform={`translate(${(x - 6).toFixed(1)} ${(y - 6).toFixed(1)})`}>
         {item.kind === 'borehole' ? (
-          <path d="M1 1h10v10H1zM6 1v10" className="fill-sheet stroke-ink" strokeWidth="1.5" />
+          // wider than a sounding’s mark, so that one at the same place shows within it
+          <path d="M-2.5 -2.5h17v17h-17z" className="fill-none stroke-ink" strokeWidth="1.5" />
         ) : (
           <g className={TONE_TEXT[SOUNDING_STATE_LOOK[item.state].tone]}>
             <circle cx="6" cy="6" r="5" className="fill-sheet" />

@@ -88,7 +88,7 @@ function PlanLegend({ items, surveyId }: { items: readonly PlanItem[]; surveyId:
             className="inline-flex min-h-6 items-center gap-1.5 no-underline"
           >
             <svg aria-hidden width="12" height="12" viewBox="0 0 12 12">
-              <path d="M1 1h10v10H1zM6 1v10" className="fill-none stroke-ink" strokeWidth="1.5" />
+              <path d="M1 1h10v10H1z" className="fill-none stroke-ink" strokeWidth="1.5" />
             </svg>
             Borehole <span className="figure text-muted">{holes}</span>
           </Link>

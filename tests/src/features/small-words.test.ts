@@ -18,7 +18,9 @@ it.each([
 ])('names the device of %s', (userAgent, name) => expect(deviceName(userAgent)).toBe(name));
 
 it('tells the details of an event in words', () => {
-  expect(detailsInWords({ role: 'guest', fields: ['name', 'note'] })).toBe('role guest; fields name, note');
+  expect(detailsInWords({ role: 'guest', fields: ['name', 'note'], file: null })).toBe(
+    'role guest; fields name, note',
+  );
 });
 
 it('takes the water level that was measured last, in whatever order they were written', () => {
