@@ -4,7 +4,7 @@ import type { Run } from '../../server/contract/runs';
 import type { CurveLine, CurvePoint, CurveReading, GroundColumn } from '../charts/chart-data';
 import { formatLength, withUnit } from '../ui/format';
 import { letterOfRun, titleOfRun } from './run-title';
-import { spacingLabel } from './spread-words';
+import { spacingLabel } from '../soundings/spread-words';
 
 /** A kept reading as the fit takes it, with its place in the revision. */
 export type KeptReading = Pick<

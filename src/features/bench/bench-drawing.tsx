@@ -6,7 +6,7 @@ import { addressOf } from '../../app/addresses';
 import { SoundingCurve } from '../../charts/sounding-curve';
 import { chartReadings, type CurveData } from '../../runs/curve-of-run';
 import { letterOfRun } from '../../runs/run-title';
-import { SPACING_AXIS, SPREAD_NAMES } from '../../runs/spread-words';
+import { SPACING_AXIS, SPREAD_NAMES } from '../../soundings/spread-words';
 import { formatCount } from '../../ui/format';
 import { Notice } from '../../ui/notice';
 import { ExcludedList } from './excluded-list';

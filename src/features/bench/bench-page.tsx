@@ -4,7 +4,7 @@ import type { Sounding } from '../../../server/contract/soundings';
 import { runListQuery, runQuery } from '../../api/run-queries';
 import { fieldSheetQuery } from '../../api/sounding-queries';
 import { addressOf } from '../../app/addresses';
-import { PageWait, SoundingPage } from '../../runs/sounding-page';
+import { PageWait, SoundingPage } from '../../soundings/sounding-page';
 import { ButtonLink } from '../../ui/button';
 import { EmptyState } from '../../ui/view-states';
 import { BenchKeys } from './bench-keys';

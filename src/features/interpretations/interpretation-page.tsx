@@ -7,7 +7,7 @@ import type { Sounding } from '../../../server/contract/soundings';
 import { hasCode } from '../../api/api-error';
 import { runQuery } from '../../api/run-queries';
 import { addressOf } from '../../app/addresses';
-import { PageWait, SoundingPage } from '../../runs/sounding-page';
+import { PageWait, SoundingPage } from '../../soundings/sounding-page';
 import { ButtonLink } from '../../ui/button';
 import { EmptyState } from '../../ui/view-states';
 import { InterpretationEditor } from './interpretation-editor';

@@ -4,7 +4,7 @@ import { useParams } from 'react-router-dom';
 import type { Sounding } from '../../../server/contract/soundings';
 import { fieldSheetQuery } from '../../api/sounding-queries';
 import { QueryView } from '../../app/query-view';
-import { SoundingPage } from '../../runs/sounding-page';
+import { SoundingPage } from '../../soundings/sounding-page';
 import { Kbd } from '../../ui/kbd';
 import type { DraftKeeper } from './draft-keeper';
 import { draftWords } from './draft-words';

@@ -17,12 +17,13 @@ import { useImport, usePreviewImport } from './reading-mutations';
 interface ImportDialogProps {
   sounding: Sounding;
   hasDraft: boolean;
+  baseRevisionId: string | null;
   onImported: (revision: Revision) => void;
   onClose: () => void;
 }
 
 /** Reads in a file: shown first with every fault, stored only when a person says what to take. */
-export function ImportDialog({ sounding, hasDraft, onImported, onClose }: ImportDialogProps) {
+export function ImportDialog({ sounding, hasDraft, baseRevisionId, onImported, onClose }: ImportDialogProps) {
   const [file, setFile] = useState<File | null>(null);
   const [shown, setShown] = useState<ImportPreview | null>(null);
   const [unitsConfirmed, setUnitsConfirmed] = useState(false);
@@ -40,7 +41,7 @@ export function ImportDialog({ sounding, hasDraft, onImported, onClose }: Import
   const take = (accept: 'all' | 'good-rows') => {
     if (!file || !shown) return;
     store.mutate(
-      { file, mapping: shown.mapping, accept },
+      { file, mapping: shown.mapping, accept, baseRevisionId },
       {
         onSuccess: (revision) => {
           onImported(revision);

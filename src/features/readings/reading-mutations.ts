@@ -80,14 +80,26 @@ export const usePreviewImport = (soundingId: string) =>
       sendForm(`/soundings/${soundingId}/import-previews`, importForm(request), importPreviewSchema),
   });
 
+interface AcceptedImport extends ImportRequest {
+  accept: 'all' | 'good-rows';
+  /** the revision the person saw before the import */
+  baseRevisionId: string | null;
+}
+
 export function useImport(soundingId: string) {
   const client = useQueryClient();
   return useMutation({
-    mutationFn: ({ accept, ...request }: ImportRequest & { accept: 'all' | 'good-rows' }) => {
+    mutationFn: ({ accept, baseRevisionId, ...request }: AcceptedImport) => {
       const form = importForm(request);
       form.set('accept', accept);
+      form.set('baseRevisionId', baseRevisionId ?? '');
       return sendForm(`/soundings/${soundingId}/imports`, form, revisionSchema);
     },
     onSuccess: () => afterNewReadings(client, soundingId),
+    // shows whose readings came first, so that the person can decide on them
+    onError: (error) =>
+      hasCode(error, 'conflict')
+        ? client.invalidateQueries({ queryKey: soundingKeys.fieldSheet(soundingId) })
+        : undefined,
   });
 }

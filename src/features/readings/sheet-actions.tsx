@@ -115,6 +115,7 @@ export function SheetActions({ sounding, fieldSheet, sheet, keeper }: SheetActio
         <ImportDialog
           sounding={sounding}
           hasDraft={sheet.isChanged}
+          baseRevisionId={fieldSheet.revision?.id ?? null}
           onImported={show}
           onClose={() => setOpen(null)}
         />

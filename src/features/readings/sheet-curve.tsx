@@ -2,7 +2,7 @@ import { useMemo } from 'react';
 import type { Sounding } from '../../../server/contract/soundings';
 import type { CurveReading } from '../../charts/chart-data';
 import { SoundingCurve } from '../../charts/sounding-curve';
-import { SPACING_AXIS, SPREAD_NAMES, spacingLabel } from '../../runs/spread-words';
+import { SPACING_AXIS, SPREAD_NAMES, spacingLabel } from '../../soundings/spread-words';
 import { formatCount } from '../../ui/format';
 import type { SheetReading } from './sheet-reader';
 import { thinReadings } from './thin-readings';

@@ -5,7 +5,7 @@ import type { Sounding } from '../../../server/contract/soundings';
 import { SoundingCurve } from '../../charts/sounding-curve';
 import { chartReadings, curveDataOfRun, lineOfRun } from '../../runs/curve-of-run';
 import { letterOfRun, titleOfRun } from '../../runs/run-title';
-import { SPACING_AXIS } from '../../runs/spread-words';
+import { SPACING_AXIS } from '../../soundings/spread-words';
 import { Segmented } from '../../ui/segmented';
 
 export interface ComparedCurvesProps {

@@ -3,7 +3,7 @@ import { useSearchParams } from 'react-router-dom';
 import type { Sounding } from '../../../server/contract/soundings';
 import { runListQuery, runQuery } from '../../api/run-queries';
 import { addressOf } from '../../app/addresses';
-import { PageWait, SoundingPage } from '../../runs/sounding-page';
+import { PageWait, SoundingPage } from '../../soundings/sounding-page';
 import { ButtonLink } from '../../ui/button';
 import { PageHeader } from '../../ui/page-header';
 import { EmptyState } from '../../ui/view-states';

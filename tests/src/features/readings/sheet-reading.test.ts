@@ -101,22 +101,25 @@ describe('what a sheet opens with', () => {
 });
 
 describe('reading in a file', () => {
-  const clear = { faults: [], readings: [{}], missingColumns: [], unitsStated: true } as never;
-  const withFault = { faults: [{}], readings: [{}], missingColumns: [], unitsStated: true } as never;
+  const preview = { faults: [], rows: [{ line: 2 }], readings: [{}], missingColumns: [], unitsStated: true };
+  const inLine = (row: number) => [{ row, column: 'V', found: 'x', message: '', allowed: '' }];
+  const readiness = (change: object, unitsConfirmed = false) =>
+    importReadiness({ ...preview, ...change } as never, unitsConfirmed);
 
   it('is open as a whole only without faults, and by its good rows only with some', () => {
-    expect(importReadiness(clear, false)).toEqual({ all: true, goodRows: false });
-    expect(importReadiness(withFault, false)).toEqual({ all: false, goodRows: true });
+    expect(readiness({})).toEqual({ all: true, goodRows: false });
+    expect(readiness({ faults: inLine(2) })).toEqual({ all: false, goodRows: true });
+  });
+
+  it('is closed to good rows too when the headings are at fault', () => {
+    expect(readiness({ faults: inLine(1) })).toEqual({ all: false, goodRows: false });
   });
 
   it('waits for the units to be stated, for every column, and for at least one reading', () => {
-    const unstated = { faults: [], readings: [{}], missingColumns: [], unitsStated: false } as never;
-    expect(importReadiness(unstated, false).all).toBe(false);
-    expect(importReadiness(unstated, true).all).toBe(true);
-    const missing = { faults: [], readings: [{}], missingColumns: ['AB/2'], unitsStated: true } as never;
-    expect(importReadiness(missing, true).all).toBe(false);
-    const none = { faults: [{}], readings: [], missingColumns: [], unitsStated: true } as never;
-    expect(importReadiness(none, true).goodRows).toBe(false);
+    expect(readiness({ unitsStated: false }).all).toBe(false);
+    expect(readiness({ unitsStated: false }, true).all).toBe(true);
+    expect(readiness({ missingColumns: ['AB/2'] }, true).all).toBe(false);
+    expect(readiness({ faults: inLine(2), readings: [] }, true).goodRows).toBe(false);
   });
 });
 

@@ -1,5 +1,5 @@
 import { expect, it } from 'vitest';
-import { chosenRuns, searchOf, withRun } from '../../../src/features/side-by-side/chosen-runs';
+import { chosenRuns, searchOf, withRun } from '../../../../src/features/side-by-side/chosen-runs';
 
 const known = new Set(['a', 'b', 'c', 'd', 'e', 'f', 'g']);
 const read = (text: string) => chosenRuns(new URLSearchParams(text), known);

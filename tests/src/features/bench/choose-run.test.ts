@@ -1,6 +1,6 @@
 import { expect, it } from 'vitest';
-import type { RunSummary } from '../../../server/contract/runs';
-import { chooseRun, ledgerOrder } from '../../../src/features/bench/choose-run';
+import type { RunSummary } from '../../../../server/contract/runs';
+import { chooseRun, ledgerOrder } from '../../../../src/features/bench/choose-run';
 
 const run = (number: number, state: RunSummary['state'], pinned = false) =>
   ({

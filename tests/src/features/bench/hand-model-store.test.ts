@@ -1,5 +1,5 @@
 import { beforeEach, expect, it } from 'vitest';
-import { historyOf, useHandModelStore } from '../../../src/features/bench/hand-model-store';
+import { historyOf, useHandModelStore } from '../../../../src/features/bench/hand-model-store';
 
 const run = { resistivity: [100, 10], thickness: [5] };
 const first = { resistivity: [110, 10], thickness: [5] };

@@ -1,4 +1,4 @@
-import { boundaryDepths } from '../../../src/charts/chart-data';
+import { boundaryDepths } from '../../../../src/charts/chart-data';
 import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
 import {
@@ -7,7 +7,7 @@ import {
   withBoundary,
   withoutBed,
   withValue,
-} from '../../../src/features/bench/hand-model';
+} from '../../../../src/features/bench/hand-model';
 
 const earth = { resistivity: [140, 12, 120, 11], thickness: [3, 3, 36] };
 

@@ -1,6 +1,6 @@
 import { expect, it } from 'vitest';
-import { tableToCsv } from '../../../src/charts/chart-table';
-import { modelJson, modelTable } from '../../../src/features/bench/model-file';
+import { tableToCsv } from '../../../../src/charts/chart-table';
+import { modelJson, modelTable } from '../../../../src/features/bench/model-file';
 
 const earth = { resistivity: [138.25, 11.5], thickness: [2.894] };
 

@@ -3,8 +3,8 @@ import {
   interpretationVersions,
   mergedInterpretation,
   type InterpretationForm,
-} from '../../../src/features/interpretations/interpretation-form';
-import { clashesOf } from '../../../src/ui/merge-versions';
+} from '../../../../src/features/interpretations/interpretation-form';
+import { clashesOf } from '../../../../src/ui/merge-versions';
 
 const bed = (layerIndex: number, ground = '') => ({
   layerIndex,

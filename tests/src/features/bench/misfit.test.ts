@@ -1,5 +1,5 @@
 import { expect, it } from 'vitest';
-import { misfitOf } from '../../../src/features/bench/misfit';
+import { misfitOf } from '../../../../src/features/bench/misfit';
 
 it('follows the definitions of χ² per reading and rms', () => {
   const readings = [

@@ -1,11 +1,11 @@
 import { expect, it } from 'vitest';
-import { fitSettingsSchema } from '../../../server/contract/fit';
+import { fitSettingsSchema } from '../../../../server/contract/fit';
 import {
   DEFAULT_FIT_FORM,
   faultsOfSettings,
   fitFormSchema,
   settingsOf,
-} from '../../../src/features/bench/fit-form';
+} from '../../../../src/features/bench/fit-form';
 
 const model = { resistivity: [140, 12, 120], thickness: [3, 4] };
 
