@@ -50,7 +50,6 @@ export function PageFrame(props: PageFrameProps) {
             : 'flex w-full min-w-0 flex-1 flex-col outline-none'
         }
       >
-        {layout === 'fill' ? <h1 className="sr-only">{title}</h1> : null}
         {children}
       </main>
       <footer className="flex flex-wrap items-center gap-x-7 gap-y-2 border-t border-rule px-4 py-2 text-sm text-muted sm:px-7">

@@ -2,6 +2,7 @@ import { useId } from 'react';
 import { classNames } from '../ui/class-names';
 import { rampStops } from './resistivity-ramp';
 
+/** In a narrow place the second largest gives way, so that no two numbers touch. */
 const MARKS = ['1', '10', '100', '1000', '10\u202f000'];
 const PLACE: Record<number, string> = { 0: 'justify-start', 4: 'justify-end' };
 
@@ -10,7 +11,7 @@ export function ResistivityLegend({ className }: { className?: string }) {
   const gradientId = useId();
   return (
     <div className={classNames('flex w-full max-w-80 gap-2.5', className)}>
-      <div className="min-w-0 flex-1">
+      <div className="@container min-w-0 flex-1">
         <svg
           role="img"
           aria-label="Colours of resistivity, from dark blue at 1 through teal, green and ochre to cream at 10 000 ohm metres"
@@ -29,7 +30,11 @@ export function ResistivityLegend({ className }: { className?: string }) {
           {MARKS.map((mark, index) => (
             <span
               key={mark}
-              className={classNames('flex w-0 whitespace-nowrap', PLACE[index] ?? 'justify-center')}
+              className={classNames(
+                'flex w-0 whitespace-nowrap',
+                PLACE[index] ?? 'justify-center',
+                index === 3 && 'invisible @2xs:visible',
+              )}
             >
               {mark}
             </span>

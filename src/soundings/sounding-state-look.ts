@@ -14,7 +14,7 @@ export const SOUNDING_STATE_LOOK: Record<SoundingState, SoundingStateLook> = {
   measured: { label: 'Measured', shape: 'part', tone: 'neutral' },
   fitted: { label: 'Fitted', shape: 'half', tone: 'water' },
   draft: { label: 'In draft', shape: 'half', tone: 'copper' },
-  'in-review': { label: 'In review', shape: 'part', tone: 'copper' },
+  'in-review': { label: 'In review', shape: 'most', tone: 'copper' },
   'changes-asked': { label: 'Changes asked', shape: 'cross', tone: 'rust' },
   accepted: { label: 'Accepted', shape: 'full', tone: 'water' },
 };

@@ -1,12 +1,15 @@
-/** "role guest, fields name, note". */
+const UUID = /^[0-9a-f]{8}-[0-9a-f-]{27}$/;
+
+/** "role guest; fields name, note; run 55b9ee2e": what has no name is told by the first part of its id. */
 export const detailsInWords = (details: Readonly<Record<string, unknown>>): string =>
   Object.entries(details)
     .filter(([, value]) => value !== null)
-    .map(([key, value]) => `${key} ${valueInWords(value)}`)
+    .map(([key, value]) => `${key.replace(/Id$/, '')} ${valueInWords(value)}`)
     .join('; ');
 
 function valueInWords(value: unknown): string {
   if (Array.isArray(value)) return value.map(valueInWords).join(', ');
   if (typeof value === 'object' && value !== null) return JSON.stringify(value);
-  return String(value);
+  const text = String(value);
+  return UUID.test(text) ? text.slice(0, 8) : text;
 }

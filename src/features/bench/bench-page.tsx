@@ -21,7 +21,12 @@ export function BenchPage() {
       keys={<BenchKeys />}
       status={(sounding) => <BenchStatus soundingId={sounding.id} />}
     >
-      {(sounding) => <Bench key={sounding.id} sounding={sounding} />}
+      {(sounding) => (
+        <>
+          <h1 className="sr-only">{sounding.name}, Bench</h1>
+          <Bench key={sounding.id} sounding={sounding} />
+        </>
+      )}
     </SoundingPage>
   );
 }

@@ -47,7 +47,7 @@ function facts({ depthM, drilledOn, xM, yM, elevationM }: Borehole): string {
   const parts = [`${metres(depthM)} deep`];
   if (drilledOn !== null) parts.push(`drilled ${formatDay(drilledOn)}`);
   if (xM !== null && yM !== null) parts.push(`x ${coordinate(xM)}, y ${coordinate(yM)} m`);
-  if (elevationM !== null) parts.push(`at ${elevationM} m`);
+  if (elevationM !== null) parts.push(`elevation ${coordinate(elevationM)} m`);
   return parts.join(' · ');
 }
 

@@ -5,8 +5,8 @@ import { StateMark } from '../../ui/state-mark';
 import { STATE_WORDS } from './interpretation-words';
 
 const LOOK: Record<InterpretationState, { shape: MarkShape; tone: Tone }> = {
-  draft: { shape: 'empty', tone: 'copper' },
-  'in-review': { shape: 'half', tone: 'copper' },
+  draft: { shape: 'half', tone: 'copper' },
+  'in-review': { shape: 'most', tone: 'copper' },
   'changes-asked': { shape: 'cross', tone: 'rust' },
   accepted: { shape: 'full', tone: 'water' },
   superseded: { shape: 'empty', tone: 'neutral' },

@@ -39,6 +39,7 @@ export function SheetCell(props: SheetCellProps) {
         inputMode={alignLeft ? 'text' : 'decimal'}
         maxLength={500}
         readOnly={readOnly}
+        title={alignLeft && text !== '' ? text : undefined}
         value={text}
         placeholder={derived}
         onChange={(event) => props.onText(row, column, event.target.value)}

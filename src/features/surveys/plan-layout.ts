@@ -78,14 +78,14 @@ export interface LabelPlace {
   anchor: 'start' | 'middle' | 'end';
 }
 
-const CHARACTER_PX = 7.2;
+const CHARACTER_PX = 6.8;
 const LINE_PX = 13;
 const MARK_PX = 7;
 
 const PLACES: readonly LabelPlace[] = [
   { dx: 9, dy: 4, anchor: 'start' },
   { dx: 0, dy: -10, anchor: 'middle' },
-  { dx: 0, dy: 19, anchor: 'middle' },
+  { dx: 0, dy: 20, anchor: 'middle' },
   { dx: -9, dy: 4, anchor: 'end' },
 ];
 

@@ -20,7 +20,7 @@ function Overview({ survey }: { survey: Survey }) {
     <>
       <PageHeader
         title={survey.name}
-        note={`You are ${ROLE_LABELS[survey.role].toLowerCase()} · since ${formatDay(survey.createdAt)}`}
+        note={`Your role: ${ROLE_LABELS[survey.role].toLowerCase()} · begun ${formatDay(survey.createdAt)}`}
         actions={
           <>
             {survey.can.editSurvey ? <Button onClick={() => setEditing(true)}>Settings</Button> : null}
@@ -57,7 +57,7 @@ function Facts({ survey }: { survey: Survey }) {
       {facts.map(([label, value]) => (
         <div key={label} className="flex justify-between gap-4 border-b border-rule py-1.5">
           <dt className="text-muted">{label}</dt>
-          <dd className="figure text-right">{value}</dd>
+          <dd className={/^\d/.test(value) ? 'figure text-right' : 'text-right'}>{value}</dd>
         </div>
       ))}
     </dl>

@@ -16,12 +16,12 @@ export function SurveyRow({ survey }: { survey: Survey }) {
           </Link>
         </h2>
         <p className="mt-0.5 flex flex-wrap items-center gap-x-3 gap-y-1 text-muted">
-          <span>You are {ROLE_LABELS[survey.role].toLowerCase()}</span>
+          <span>Your role: {ROLE_LABELS[survey.role].toLowerCase()}</span>
           <Link to={addressOf('surveySoundings', { surveyId: survey.id })}>Soundings</Link>
           {inReview > 0 ? <Badge tone="copper">{inReview} in review</Badge> : null}
         </p>
         {survey.description === '' ? null : (
-          <p className="mt-2 line-clamp-2 max-w-prose">{survey.description}</p>
+          <p className="mt-2 line-clamp-4 max-w-prose">{survey.description}</p>
         )}
       </div>
       <SurveyProgress progress={survey.progress} />

@@ -21,6 +21,7 @@ it('tells the details of an event in words', () => {
   expect(detailsInWords({ role: 'guest', fields: ['name', 'note'], file: null })).toBe(
     'role guest; fields name, note',
   );
+  expect(detailsInWords({ runId: '55b9ee2e-1e86-404e-a67f-aca37524c81a' })).toBe('run 55b9ee2e');
 });
 
 it('takes the water level that was measured last, in whatever order they were written', () => {
