@@ -54,7 +54,12 @@ export async function allScreens(db: Knex): Promise<Screen[]> {
       role: 'geophysicist',
       shows: { role: 'table', name: 'Readings' },
     },
-    { name: 'bench', path: `/soundings/${site}/bench`, role: 'geophysicist', shows: heading(/^Run [A-Z]/) },
+    {
+      name: 'bench',
+      path: `/soundings/${site}/bench?run=${runs[0]}`,
+      role: 'geophysicist',
+      shows: heading(/^Run [A-Z]/),
+    },
     {
       name: 'bench-without-runs',
       path: `/soundings/${unfitted}/bench`,

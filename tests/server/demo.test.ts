@@ -23,6 +23,15 @@ describe('the demo', () => {
     ]);
   }, 240_000);
 
+  it('lets the run of the found count stand for the proposed site', async () => {
+    const pinned = await db('run_note')
+      .join('run', 'run.id', 'run_note.run_id')
+      .join('sounding', 'sounding.id', 'run.sounding_id')
+      .where({ pinned: true, 'sounding.name': 'S-07' })
+      .pluck('run.number');
+    expect(pinned).toEqual([1]);
+  });
+
   it('leaves no job for the queue', async () => {
     expect((await db.raw('SELECT count(*)::int AS n FROM graphile_worker.jobs')).rows[0].n).toBe(0);
   });

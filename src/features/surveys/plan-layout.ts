@@ -80,13 +80,14 @@ export interface LabelPlace {
 
 const CHARACTER_PX = 6.8;
 const LINE_PX = 13;
-const MARK_PX = 7;
+/** Half of the largest mark, a borehole's square. */
+const MARK_PX = 9;
 
 const PLACES: readonly LabelPlace[] = [
-  { dx: 9, dy: 4, anchor: 'start' },
-  { dx: 0, dy: -10, anchor: 'middle' },
-  { dx: 0, dy: 20, anchor: 'middle' },
-  { dx: -9, dy: 4, anchor: 'end' },
+  { dx: 12, dy: 4, anchor: 'start' },
+  { dx: 0, dy: -12, anchor: 'middle' },
+  { dx: 0, dy: 22, anchor: 'middle' },
+  { dx: -12, dy: 4, anchor: 'end' },
 ];
 
 interface Box {
