@@ -1,7 +1,8 @@
 import { z } from 'zod';
 import { idSchema, listOf, personSchema, timestampSchema, versionSchema } from './common';
 import { fitReadingSchema, fitResultSchema, fitSettingsSchema } from './fit';
-import { spreadTypeSchema } from './spread';
+import { standingStateSchema } from './interpretations';
+import { spreadSchema, spreadTypeSchema } from './spread';
 
 export const runStateNameSchema = z.enum(['queued', 'running', 'finished', 'failed', 'cancelled']);
 
@@ -42,12 +43,18 @@ export const runSummarySchema = z
     durationMs: z.number().nullable().describe('of the computation itself'),
     errorMessage: z.string().nullable(),
     comparison: runComparisonSchema.nullable(),
+    interpretedAs: standingStateSchema
+      .nullable()
+      .describe(
+        'weightiest state of the interpretations that stand on the run; null = none, or only replaced ones',
+      ),
     outcome: z
       .strictObject({
         earth: fitResultSchema.shape.earth,
         status: fitResultSchema.shape.status,
         chi2PerReading: z.number(),
         rmsPercent: z.number(),
+        misfitProbability: fitResultSchema.shape.misfitProbability,
       })
       .nullable(),
     note: z.strictObject({
@@ -78,8 +85,10 @@ export const runSchema = runSummarySchema
       .array(
         z.strictObject({
           row: z.number().int(),
+          spread: spreadSchema,
           plottingSpacingM: z.number(),
           apparentResistivity: z.number(),
+          relativeError: z.number().describe('own error and the survey’s floor in quadrature'),
           reason: z.string(),
         }),
       )

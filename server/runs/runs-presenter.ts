@@ -35,7 +35,7 @@ export function presentRunSummary(row: RunRow): RunSummary {
 function presentOutcome(row: RunRow): RunSummary['outcome'] {
   const { earth, fit_status: status, chi2_per_reading: chi2PerReading, rms_percent: rmsPercent } = row;
   if (!earth || !status || chi2PerReading === null || rmsPercent === null) return null;
-  return { earth, status, chi2PerReading, rmsPercent };
+  return { earth, status, chi2PerReading, rmsPercent, misfitProbability: row.misfit_probability };
 }
 
 export function presentRun(row: FullRunRow): Run {

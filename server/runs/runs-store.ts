@@ -34,6 +34,7 @@ export interface RunRow {
   fit_status: FitResult['status'] | null;
   chi2_per_reading: number | null;
   rms_percent: number | null;
+  misfit_probability: number | null;
   label: string;
   note: string;
   pinned: boolean;
@@ -96,6 +97,7 @@ const visibleRuns = (knex: Knex, actor: Actor) =>
       knex.raw("computation.result ->> 'status' AS fit_status"),
       knex.raw("(computation.result ->> 'chi2PerReading')::float8 AS chi2_per_reading"),
       knex.raw("(computation.result ->> 'rmsPercent')::float8 AS rms_percent"),
+      knex.raw("(computation.result ->> 'misfitProbability')::float8 AS misfit_probability"),
     );
 
 /** Newest first; only some of them where ids or a limit are given. */

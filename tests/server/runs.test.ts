@@ -85,6 +85,7 @@ describe('asking for a run', () => {
       status: done.result?.status,
       chi2PerReading: done.result?.chi2PerReading,
       rmsPercent: done.result?.rmsPercent,
+      misfitProbability: done.result?.misfitProbability,
     });
   });
 
