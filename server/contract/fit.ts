@@ -63,7 +63,9 @@ export const fitSettingsSchema = z
     }
     settings.fixed.forEach((held, i) => {
       const count = held.on === 'resistivity' ? settings.layers : Number(settings.layers) - 1;
-      if (held.index >= Number(count)) issue(['fixed', i, 'index'], `must be below ${count}`);
+      const before = settings.fixed.findIndex((one) => one.on === held.on && one.index === held.index);
+      if (before < i) issue(['fixed', i], `is fixed already by entry ${before}; a value can be fixed once`);
+      if (held.index >= Number(count)) issue(['fixed', i, 'index'], Number(count) > 0 ? `must be below ${count}` : 'one layer has no thickness to fix');
       const [low, high] = settings.bounds[held.on];
       if (held.value < low || held.value > high)
         issue(['fixed', i, 'value'], `must lie within the bounds ${low} to ${high}`);

@@ -18,6 +18,12 @@ export const interpretationStateSchema = z.enum([
 ]);
 export type InterpretationState = z.infer<typeof interpretationStateSchema>;
 
+/** States of what still counts: all but what a newer acceptance replaced. */
+export const standingStateSchema = interpretationStateSchema.exclude(['superseded']);
+export type StandingState = z.infer<typeof standingStateSchema>;
+/** Weightiest first: where several interpretations stand, the first state of this list that one of them has is told. */
+export const STANDING_STATES: readonly StandingState[] = ['in-review', 'changes-asked', 'accepted', 'draft'];
+
 export const bedRoleSchema = z.enum(['cover', 'aquifer', 'aquitard', 'saline', 'basement', 'unknown']);
 export type BedRole = z.infer<typeof bedRoleSchema>;
 export const bedConfidenceSchema = z.enum(['well-supported', 'likely', 'possible', 'unstated']);
@@ -41,7 +47,9 @@ export type InterpretationBed = z.infer<typeof interpretationBedSchema>;
 export const reviewEventSchema = z
   .strictObject({
     id: z.string(),
-    kind: z.enum(['submitted', 'withdrawn', 'changes-asked', 'accepted', 'superseded', 'commented']),
+    kind: z
+      .enum(['submitted', 'withdrawn', 'changes-asked', 'accepted', 'superseded', 'commented', 'edited'])
+      .describe('edited: the actor, who is not the author, changed the statement from then on'),
     actor: personSchema,
     at: timestampSchema,
     comment: z.string(),
@@ -71,6 +79,7 @@ export const interpretationSchema = z
       withdraw: z.boolean(),
       decide: z.boolean(),
       comment: z.boolean(),
+      discard: z.boolean().describe('delete it: a draft that was never submitted and holds no history'),
     }),
     decideRefusal: z
       .string()

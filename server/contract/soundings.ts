@@ -106,7 +106,9 @@ export const soundingRowSchema = z
         ofOlderReadings: z.boolean(),
       })
       .nullable()
-      .describe('the pinned finished run, else the newest'),
+      .describe(
+        'the finished run that stands for it: the pinned one, else that of the weightiest interpretation, else the newest',
+      ),
     updatedAt: timestampSchema,
   })
   .meta({ id: 'SoundingRow' });
