@@ -1,3 +1,4 @@
+import { threeDigits } from '../three-digits';
 import type { FitResult, Interval } from '../types';
 
 export type BedQuantity = 'resistivity' | 'thickness' | 'depth' | 'conductance' | 'resistance';
@@ -108,10 +109,8 @@ const WORDS: Record<BedQuantity, string> = {
   resistance: 'transverse resistance',
 };
 
-const number = (value: number): string => (value >= 1000 ? String(Math.round(value)) : value.toPrecision(3));
-
 function phrase(difference: BedDifference): string {
-  const [a, b] = [difference.first, difference.second].map(number);
+  const [a, b] = [difference.first, difference.second].map(threeDigits);
   return `${WORDS[difference.quantity]} of bed ${difference.bed + 1} (${a} against ${b} ${difference.unit})`;
 }
 
@@ -122,7 +121,9 @@ function ratio(first: number, second: number): number | null {
 function totalsSentence(a: FitResult, b: FitResult): string {
   const pair = ([x, y]: [number, number], unit: string) => {
     const change = ratio(x, y);
-    return change === null ? '' : `${number(x)} against ${number(y)} ${unit} (× ${change.toFixed(2)})`;
+    return change === null
+      ? ''
+      : `${threeDigits(x)} against ${threeDigits(y)} ${unit} (× ${change.toFixed(2)})`;
   };
   const s = pair([a.darZarrouk.totalConductanceS, b.darZarrouk.totalConductanceS], 'S');
   const t = pair([a.darZarrouk.totalResistanceOhmM2, b.darZarrouk.totalResistanceOhmM2], 'Ω·m²');
@@ -148,8 +149,8 @@ function describePair(
       ? ` No bed differs beyond the 95 % intervals${fitAlike ? ': the data do not tell these models apart' : ''}.`
       : ` The data support ${supported.length === 1 ? 'one difference' : `${supported.length} differences`} beyond the 95 % intervals: ${supported.map(phrase).join('; ')}.`;
   const tail = fitAlike
-    ? ` They fit alike (χ²/N ${number(a.chi2PerReading)} and ${number(b.chi2PerReading)}).`
-    : ` ${change < 0 ? nameB : nameA} fits closer (χ²/N ${number(a.chi2PerReading)} and ${number(b.chi2PerReading)}).`;
+    ? ` They fit alike (χ²/N ${threeDigits(a.chi2PerReading)} and ${threeDigits(b.chi2PerReading)}).`
+    : ` ${change < 0 ? nameB : nameA} fits closer (χ²/N ${threeDigits(a.chi2PerReading)} and ${threeDigits(b.chi2PerReading)}).`;
   return head + middle + tail + totalsSentence(a, b);
 }
 

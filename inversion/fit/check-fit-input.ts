@@ -1,3 +1,4 @@
+import { requireEarth } from '../earth/check-earth';
 import { InversionError } from '../inversion-error';
 import { requireSpread } from '../spread/require-spread';
 import type { FitSettings, Reading } from '../types';
@@ -33,6 +34,17 @@ function requireBounds({ bounds }: FitSettings): void {
   }
 }
 
+function requireStart({ start, layers }: FitSettings): void {
+  if (!start) return;
+  requireEarth(start, ['settings', 'start']);
+  if (layers !== 'auto' && start.resistivity.length !== layers)
+    throw new InversionError(
+      'earth-shape',
+      `the start has ${start.resistivity.length} layers; it must have ${layers}`,
+      ['settings', 'start', 'resistivity'],
+    );
+}
+
 function requireFixed({ fixed, layers, bounds }: FitSettings): void {
   fixed.forEach(({ on, index, value }, i) => {
     const path = ['settings', 'fixed', i];
@@ -42,8 +54,17 @@ function requireFixed({ fixed, layers, bounds }: FitSettings): void {
     if (!(Number.isInteger(index) && index >= 0 && index < count))
       throw new InversionError(
         'fixed-parameter',
-        `fixed ${on} index is ${index}; it must be below ${count}`,
+        count > 0
+          ? `fixed ${on} index is ${index}; it must be a whole number from 0 to ${count - 1}`
+          : `fixed ${on} index is ${index}; one layer has no thickness to fix`,
         [...path, 'index'],
+      );
+    const before = fixed.findIndex((one) => one.on === on && one.index === index);
+    if (before < i)
+      throw new InversionError(
+        'fixed-parameter',
+        `${on} ${index} is fixed twice, at ${fixed[before]!.value} and at ${value}; a value can be fixed once`,
+        path,
       );
     const [low, high] = bounds[on];
     if (!(value >= low && value <= high))
@@ -59,17 +80,12 @@ function requireFixed({ fixed, layers, bounds }: FitSettings): void {
 export function requireFitInput(readings: readonly Reading[], settings: FitSettings): void {
   requireReadings(readings);
   requireBounds(settings);
-  const { layers, start } = settings;
+  const { layers } = settings;
   if (layers !== 'auto' && !(Number.isInteger(layers) && layers >= 1 && layers <= MOST_LAYERS))
     throw new InversionError('layer-count', `layers is ${layers}; it must be 1 to ${MOST_LAYERS} or "auto"`, [
       'settings',
       'layers',
     ]);
   requireFixed(settings);
-  if (start && layers !== 'auto' && start.resistivity.length !== layers)
-    throw new InversionError(
-      'earth-shape',
-      `the start has ${start.resistivity.length} layers; it must have ${layers}`,
-      ['settings', 'start', 'resistivity'],
-    );
+  requireStart(settings);
 }

@@ -2,6 +2,7 @@ import { createForwardOperator } from '../operator/forward-operator';
 import type { OperatorCache } from '../operator/operator-cache';
 import { createRandomStream } from '../random';
 import type { FitProgress, FitResult, FitSettings, LayerCountFit, Reading } from '../types';
+import { earthOf, type FittedModel } from './allowed-models';
 import { MOST_LAYERS, requireFitInput } from './check-fit-input';
 import { buildFitResult } from './fit-result';
 import { aicc, bic, chooseLayerCount, withinNoise } from './layer-count';
@@ -21,6 +22,7 @@ interface CountFit {
   readonly layers: number;
   readonly outcome: MultiStartOutcome;
   readonly logParameters: Float64Array;
+  readonly others: readonly FittedModel[];
   readonly held: readonly boolean[];
 }
 
@@ -54,7 +56,16 @@ export function fitLayered(
       fewer: scouts[layers - 2],
       onProgress: options.onProgress,
     });
-    fits.push({ layers, outcome, logParameters: layered.expand(outcome.parameters), held: layered.held });
+    fits.push({
+      layers,
+      outcome,
+      logParameters: layered.expand(outcome.parameters),
+      others: outcome.others.map(({ parameters, chi2 }) => ({
+        logParameters: layered.expand(parameters),
+        chi2,
+      })),
+      held: layered.held,
+    });
   }
   const rows = fits.map((fit) => describeCount(fit, readings.length));
   const index = settings.layers === 'auto' ? chooseLayerCount(rows) : 0;
@@ -88,7 +99,6 @@ function scoutModels(
 
 function describeCount({ layers, outcome, logParameters }: CountFit, readings: number): LayerCountFit {
   const parameters = 2 * layers - 1;
-  const values = Array.from(logParameters, Math.exp);
   return {
     layers,
     status: outcome.status,
@@ -97,6 +107,6 @@ function describeCount({ layers, outcome, logParameters }: CountFit, readings: n
     aicc: aicc(outcome.chi2, parameters, readings),
     withinNoise: withinNoise(outcome.chi2, parameters, readings),
     chosen: false,
-    earth: { resistivity: values.slice(0, layers), thickness: values.slice(layers) },
+    earth: earthOf(logParameters, []),
   };
 }

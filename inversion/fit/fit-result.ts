@@ -1,8 +1,9 @@
 import { ENGINE_VERSION } from '../engine-version';
 import { darZarrouk } from '../hydro/dar-zarrouk';
 import { geometricFactor } from '../spread/geometric-factor';
-import { logCovariance, parameterDoubt, type ParameterDoubt } from '../uncertainty/covariance';
+import { parameterDoubt, type ParameterDoubt } from '../uncertainty/parameter-doubt';
 import type { EarthModel, FitResult, FitSettings, FitStatus, LayerCountFit, Reading } from '../types';
+import { allowedModels, earthOf, standsApart, type FittedModel } from './allowed-models';
 import { fitWarnings } from './fit-warnings';
 import { misfitProbability } from './layer-count';
 import type { ResidualSystem } from './residual-system';
@@ -13,6 +14,8 @@ export interface FitResultParts {
   readonly system: ResidualSystem;
   readonly layers: number;
   readonly logParameters: Float64Array;
+  /** where other starts of the same search ended */
+  readonly others: readonly FittedModel[];
   readonly held: readonly boolean[];
   readonly status: FitStatus;
   readonly layerCounts: LayerCountFit[] | null;
@@ -48,16 +51,12 @@ function summariseDarZarrouk(earth: EarthModel, doubt: ParameterDoubt): FitResul
 export function buildFitResult(parts: FitResultParts): FitResult {
   const { readings, settings, system, layers, logParameters, held } = parts;
   const m = readings.length;
-  // a held value is given back as it was stated, not through exp(ln v)
-  const values = Array.from(logParameters, Math.exp);
-  for (const { on, index, value } of settings.fixed)
-    values[on === 'resistivity' ? index : layers + index] = value;
-  const earth: EarthModel = { resistivity: values.slice(0, layers), thickness: values.slice(layers) };
+  const earth = earthOf(logParameters, settings.fixed);
   const residual = new Float64Array(m);
-  const jacobian = new Float64Array(m * (2 * layers - 1));
-  const chi2 = system.linearise(logParameters, layers, residual, jacobian);
+  const chi2 = system.evaluate(logParameters, layers, residual);
   const predicted = Array.from(system.operator.predict(earth));
-  const doubt = parameterDoubt(earth, logCovariance(jacobian, m, held), settings.bounds);
+  const models = allowedModels({ logParameters, chi2 }, parts.others, system, held, settings.fixed);
+  const doubt = parameterDoubt(models, settings.bounds);
   const free = held.filter((isHeld) => !isHeld).length;
   const probability = misfitProbability(chi2, free, m);
   return {
@@ -82,6 +81,7 @@ export function buildFitResult(parts: FitResultParts): FitResult {
       chi2,
       freeParameters: free,
       probability,
+      apart: standsApart(models),
     }),
     layerCounts: parts.layerCounts,
     starts: parts.starts,

@@ -1,4 +1,6 @@
+import { threeDigits } from '../three-digits';
 import { TOLERANCES } from '../tolerances';
+import type { AllowedModel } from '../uncertainty/parameter-doubt';
 import type { EarthModel, FitSettings, Reading } from '../types';
 
 export interface FitWarningInput {
@@ -10,10 +12,33 @@ export interface FitWarningInput {
   readonly chi2: number;
   readonly freeParameters: number;
   readonly probability: number | null;
+  /** a model that fits alike and lies outside of the best one's own intervals */
+  readonly apart: AllowedModel | null;
 }
 
+/** "reading 4", "readings 1–3, 7": numbers that follow one another are joined. */
 function list(numbers: readonly number[]): string {
-  return numbers.length === 1 ? `reading ${numbers[0]}` : `readings ${numbers.join(', ')}`;
+  const runs: [number, number][] = [];
+  for (const number of numbers) {
+    const run = runs.at(-1);
+    if (run && run[1] === number - 1) run[1] = number;
+    else runs.push([number, number]);
+  }
+  const words = runs.map(([from, to]) =>
+    from === to ? `${from}` : `${from}${to === from + 1 ? ', ' : '–'}${to}`,
+  );
+  return `${numbers.length === 1 ? 'reading' : 'readings'} ${words.join(', ')}`;
+}
+
+/** The other ground, where the readings determine a model at all. */
+function anotherGround({ apart, chi2, readings, freeParameters }: FitWarningInput): string[] {
+  if (!apart || freeParameters > readings.length) return [];
+  const { resistivity, thickness } = apart.earth;
+  const perReading = (value: number) => threeDigits(value / readings.length);
+  const over = thickness.length === 0 ? '' : ` over thicknesses ${thickness.map(threeDigits).join(', ')} m`;
+  return [
+    `Another model fits nearly as well (χ²/N ${perReading(chi2 + apart.excess)} against ${perReading(chi2)}): ${resistivity.map(threeDigits).join(', ')} Ω·m${over}. The intervals reach over both.`,
+  ];
 }
 
 function improbableMisfit({ chi2, readings, freeParameters, probability }: FitWarningInput): string[] {
@@ -62,5 +87,5 @@ export function fitWarnings(input: FitWarningInput): string[] {
     warnings.push(
       `${readings.length} ${readings.length === 1 ? 'reading does' : 'readings do'} not determine ${freeParameters} unknowns: this is one of endlessly many models that fit.`,
     );
-  return [...warnings, ...valuesAtBounds(input)];
+  return [...warnings, ...anotherGround(input), ...valuesAtBounds(input)];
 }

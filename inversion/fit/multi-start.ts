@@ -25,7 +25,7 @@ const FULL: SearchEffort = {
   screened: 200,
   random: 8,
   shortRun: 6,
-  patience: 3,
+  patience: 5,
   carried: 40,
   polish: TOLERANCES.iterations,
 };
@@ -34,6 +34,8 @@ const SCOUT: SearchEffort = { screened: 0, random: 0, shortRun: 8, patience: 0, 
 
 export interface MultiStartOutcome extends LeastSquaresOutcome {
   readonly starts: number;
+  /** where the other carried starts ended, in the order in which they were carried */
+  readonly others: readonly Pick<LeastSquaresOutcome, 'parameters' | 'chi2'>[];
 }
 
 export interface MultiStartOptions {
@@ -104,16 +106,23 @@ function search(
         }
       : { start, outcome };
   let best = goOn(leader!, effort.carried);
+  const ends = [best];
   let idle = 0;
   for (const candidate of others) {
     if (idle >= effort.patience) break;
     const end = goOn(candidate, effort.carried);
+    ends.push(end);
     const gain = 1 - end.outcome.chi2 / best.outcome.chi2;
     idle = gain > TOLERANCES.startImprovement ? 0 : idle + 1;
     if (gain > 0) best = end;
   }
   const { outcome } = goOn(best, effort.polish);
-  return { ...outcome, iterations, starts: queue.length };
+  return {
+    ...outcome,
+    iterations,
+    starts: queue.length,
+    others: ends.filter((end) => end !== best).map((end) => end.outcome),
+  };
 }
 
 /**

@@ -1,4 +1,5 @@
 import { TOLERANCES } from '../tolerances';
+import { threeDigits } from '../three-digits';
 import type { FitResult } from '../types';
 
 /** One thing the data cannot tell, or can tell only in combination. */
@@ -12,10 +13,6 @@ export interface DoubtItem {
   unit: 'S' | 'Ω·m²' | 'Ω·m' | 'm';
   /** 68 % factor of the value; null = not determined */
   factor: number | null;
-}
-
-function number(value: number): string {
-  return value >= 1000 ? String(Math.round(value)) : value.toPrecision(3);
 }
 
 function percent(factor: number): string {
@@ -36,7 +33,7 @@ function equivalenceOf({ earth, correlation, darZarrouk }: FitResult, bed: numbe
   return {
     bed,
     kind: conductive ? 'conductance' : 'resistance',
-    text: `Bed ${bed + 1} is known by ${symbol} = ${number(value)} ${unit}${range}, not by its thickness and resistivity apart: twice as thick at ${
+    text: `Bed ${bed + 1} is known by ${symbol} = ${threeDigits(value)} ${unit}${range}, not by its thickness and resistivity apart: twice as thick at ${
       conductive ? 'twice' : 'half'
     } the resistivity gives nearly the same curve.`,
     value,
@@ -78,7 +75,7 @@ function undetermined(result: FitResult, bed: number): DoubtItem[] {
       {
         bed,
         kind,
-        text: `The ${kind} of bed ${bed + 1} is not determined: ${number(value)} ${unit} is one of many values that fit.`,
+        text: `The ${kind} of bed ${bed + 1} is not determined: ${threeDigits(value)} ${unit} is one of many values that fit.`,
         value,
         unit,
         factor: null,

@@ -57,21 +57,26 @@ export const fitSettingsSchema = z
   .superRefine((settings, context) => {
     const issue = (path: (string | number)[], message: string) =>
       context.addIssue({ code: 'custom', path, message });
-    if (settings.layers === 'auto') {
-      if (settings.fixed.length > 0) issue(['fixed'], 'needs a stated layer count');
+    const { layers, fixed, bounds, start } = settings;
+    if (layers === 'auto') {
+      if (fixed.length > 0) issue(['fixed'], 'needs a stated layer count');
       return;
     }
-    settings.fixed.forEach((held, i) => {
-      const count = held.on === 'resistivity' ? settings.layers : Number(settings.layers) - 1;
-      const before = settings.fixed.findIndex((one) => one.on === held.on && one.index === held.index);
+    fixed.forEach(({ on, index, value }, i) => {
+      const count = on === 'resistivity' ? layers : layers - 1;
+      const before = fixed.findIndex((one) => one.on === on && one.index === index);
       if (before < i) issue(['fixed', i], `is fixed already by entry ${before}; a value can be fixed once`);
-      if (held.index >= Number(count)) issue(['fixed', i, 'index'], Number(count) > 0 ? `must be below ${count}` : 'one layer has no thickness to fix');
-      const [low, high] = settings.bounds[held.on];
-      if (held.value < low || held.value > high)
+      if (index >= count)
+        issue(
+          ['fixed', i, 'index'],
+          count > 0 ? `must be below ${count}` : 'one layer has no thickness to fix',
+        );
+      const [low, high] = bounds[on];
+      if (value < low || value > high)
         issue(['fixed', i, 'value'], `must lie within the bounds ${low} to ${high}`);
     });
-    if (settings.start && settings.start.resistivity.length !== settings.layers)
-      issue(['start', 'resistivity'], `must have ${settings.layers} entries, one for each layer`);
+    if (start && start.resistivity.length !== layers)
+      issue(['start', 'resistivity'], `must have ${layers} entries, one for each layer`);
   })
   .meta({ id: 'FitSettings' });
 

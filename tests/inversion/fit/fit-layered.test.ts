@@ -161,6 +161,35 @@ describe('fitLayered', () => {
     expect(fit.warnings).toEqual([expect.stringContaining('MN was not recorded for reading 4')]);
   });
 
+  it('joins the numbers of readings that follow one another', () => {
+    const missing = new Set([0, 1, 2, 5, 7, 8]);
+    const spreads = WENNER.map((_, i): Spread => ({
+      type: 'schlumberger',
+      halfAB: 1.5 ** i,
+      halfMN: missing.has(i) ? null : 0.2,
+    }));
+    expect(fitLayered(sounding(H_TYPE, spreads), layered(2)).warnings.join(' ')).toContain(
+      'for readings 1–3, 6, 8, 9: the ideal gradient',
+    );
+  });
+
+  it('tells of another ground that fits alike, and its intervals reach over both', () => {
+    const one = inversionCases().find(({ id }) => id === '211-35')!;
+    const fit = fitLayered(readingsOf(one), layered(one.layers));
+    const words =
+      /^Another model fits nearly as well \(χ²\/N [\d.]+ against [\d.]+\): (.*) Ω·m over thicknesses (.*) m\./;
+    const [, resistivity, thickness] = fit.warnings.flatMap((warning) => words.exec(warning) ?? []);
+    for (const [on, list] of [
+      ['resistivity', resistivity],
+      ['thickness', thickness],
+    ] as const)
+      list!.split(', ').forEach((value, i) => {
+        const [low, high] = fit.intervals[on][i]!;
+        expect(Number(value)).toBeGreaterThan((low ?? 0) * 0.99);
+        expect(Number(value)).toBeLessThan((high ?? Infinity) * 1.01);
+      });
+  });
+
   it('names a predicted ρa of zero or less and still fits the other readings', () => {
     const odd: Spread = { type: 'electrodes', am: 25.6, an: 66.8, bm: 18.3, bn: 37.5 };
     expect(createForwardOperator([odd]).predict(H_TYPE)[0]).toBeLessThan(0);
@@ -286,6 +315,24 @@ describe('fitLayered refuses', () => {
       { code: 'fixed-parameter', path: ['settings', 'fixed', 0, 'value'] },
     ],
     [
+      'a value that is fixed twice',
+      readings,
+      layered(2, {
+        fixed: [
+          { on: 'resistivity', index: 1, value: 10 },
+          { on: 'thickness', index: 0, value: 10 },
+          { on: 'resistivity', index: 1, value: 20 },
+        ],
+      }),
+      { code: 'fixed-parameter', path: ['settings', 'fixed', 2] },
+    ],
+    [
+      'a thickness fixed where there is one layer',
+      readings,
+      layered(1, { fixed: [{ on: 'thickness', index: 0, value: 5 }] }),
+      { code: 'fixed-parameter', message: expect.stringContaining('one layer has no thickness') },
+    ],
+    [
       'a fixed value without a count',
       readings,
       layered('auto', { fixed: [{ on: 'resistivity', index: 0, value: 10 }] }),
@@ -296,6 +343,18 @@ describe('fitLayered refuses', () => {
       readings,
       layered(2, { start: H_TYPE }),
       { code: 'earth-shape', path: ['settings', 'start', 'resistivity'] },
+    ],
+    [
+      'a start that is no earth',
+      readings,
+      layered('auto', { start: { resistivity: [10, 20], thickness: [] } }),
+      { code: 'earth-shape', path: ['settings', 'start', 'thickness'] },
+    ],
+    [
+      'a start below zero',
+      readings,
+      layered(2, { start: { resistivity: [10, -20], thickness: [3] } }),
+      { code: 'earth-value', path: ['settings', 'start', 'resistivity', 1] },
     ],
   ];
   it.each(cases)('%s', (_, given, settings, fault) => {
