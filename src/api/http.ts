@@ -55,15 +55,14 @@ export async function sendJsonWithStatus<S extends z.ZodType | null>(
   return { status: response.status, data: data as S extends z.ZodType ? z.output<S> : null };
 }
 
-/** POST of a file with text fields. */
+/** POST of a file with text fields; the status tells 201 made anew, 200 there already. */
 export async function sendForm<S extends z.ZodType>(
   path: string,
   form: FormData,
   schema: S,
-  options: { signal?: AbortSignal } = {},
-): Promise<z.output<S>> {
-  const response = await ask(path, { method: 'POST', body: form, signal: options.signal ?? null });
-  return read(response, schema);
+): Promise<{ status: number; data: z.output<S> }> {
+  const response = await ask(path, { method: 'POST', body: form });
+  return { status: response.status, data: await read(response, schema) };
 }
 
 /** `queryText({ page: 2, search: '' })` → "?page=2"; absent and empty values are left out. */

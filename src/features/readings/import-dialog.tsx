@@ -13,17 +13,19 @@ import { FilePicker } from './file-picker';
 import { ImportPreviewView } from './import-preview-view';
 import { importReadiness } from './import-readiness';
 import { useImport, usePreviewImport } from './reading-mutations';
+import { saveOutcome } from './save-outcome';
 
 interface ImportDialogProps {
   sounding: Sounding;
   hasDraft: boolean;
-  baseRevisionId: string | null;
+  /** the revision that the sheet shows */
+  current: Revision | null;
   onImported: (revision: Revision) => void;
   onClose: () => void;
 }
 
 /** Reads in a file: shown first with every fault, stored only when a person says what to take. */
-export function ImportDialog({ sounding, hasDraft, baseRevisionId, onImported, onClose }: ImportDialogProps) {
+export function ImportDialog({ sounding, hasDraft, current, onImported, onClose }: ImportDialogProps) {
   const [file, setFile] = useState<File | null>(null);
   const [shown, setShown] = useState<ImportPreview | null>(null);
   const [unitsConfirmed, setUnitsConfirmed] = useState(false);
@@ -41,12 +43,12 @@ export function ImportDialog({ sounding, hasDraft, baseRevisionId, onImported, o
   const take = (accept: 'all' | 'good-rows') => {
     if (!file || !shown) return;
     store.mutate(
-      { file, mapping: shown.mapping, accept, baseRevisionId },
+      { file, mapping: shown.mapping, accept, baseRevisionId: current?.id ?? null },
       {
-        onSuccess: (revision) => {
-          onImported(revision);
+        onSuccess: (outcome) => {
+          onImported(outcome.revision);
           showToast({
-            title: `${formatCount(revision.readings.length, 'reading')} read in as revision ${revision.number}`,
+            title: `${formatCount(outcome.revision.readings.length, 'reading')} read in. ${saveOutcome(outcome)}`,
             kind: 'good',
           });
           onClose();
@@ -80,10 +82,11 @@ export function ImportDialog({ sounding, hasDraft, baseRevisionId, onImported, o
     >
       <div className="flex flex-col gap-5">
         <FilePicker fileName={file?.name ?? null} onPick={(picked) => look(picked, null)} />
-        {hasDraft ? (
+        {hasDraft || current ? (
           <Notice tone="caution">
-            The sheet holds rows that are not saved. Reading in a file puts its readings in their place; undo
-            brings them back while the page is open.
+            The file takes the place of {whatIsReplaced(hasDraft, current)}.
+            {current ? ' Every saved revision stays and can be brought back.' : ''}
+            {hasDraft ? ' Undo brings the unsaved rows back while the page is open.' : ''}
           </Notice>
         ) : null}
         <FormErrors title="Not read in" faults={[...formFaults(preview.error), ...formFaults(store.error)]} />
@@ -104,4 +107,11 @@ export function ImportDialog({ sounding, hasDraft, baseRevisionId, onImported, o
       </div>
     </Dialog>
   );
+}
+
+function whatIsReplaced(hasDraft: boolean, current: Revision | null): string {
+  const saved = current
+    ? `the ${formatCount(current.readings.length, 'reading')} of revision ${current.number}`
+    : '';
+  return [saved, hasDraft ? 'the rows that are not saved' : ''].filter((part) => part !== '').join(' and ');
 }

@@ -76,8 +76,10 @@ function importForm({ file, mapping }: ImportRequest): FormData {
 /** What a file would give; nothing is stored. */
 export const usePreviewImport = (soundingId: string) =>
   useMutation({
-    mutationFn: (request: ImportRequest) =>
-      sendForm(`/soundings/${soundingId}/import-previews`, importForm(request), importPreviewSchema),
+    mutationFn: async (request: ImportRequest) => {
+      const path = `/soundings/${soundingId}/import-previews`;
+      return (await sendForm(path, importForm(request), importPreviewSchema)).data;
+    },
   });
 
 interface AcceptedImport extends ImportRequest {
@@ -89,11 +91,13 @@ interface AcceptedImport extends ImportRequest {
 export function useImport(soundingId: string) {
   const client = useQueryClient();
   return useMutation({
-    mutationFn: ({ accept, baseRevisionId, ...request }: AcceptedImport) => {
+    mutationFn: async ({ accept, baseRevisionId, ...request }: AcceptedImport) => {
       const form = importForm(request);
       form.set('accept', accept);
       form.set('baseRevisionId', baseRevisionId ?? '');
-      return sendForm(`/soundings/${soundingId}/imports`, form, revisionSchema);
+      const path = `/soundings/${soundingId}/imports`;
+      const { status, data } = await sendForm(path, form, revisionSchema);
+      return { isNew: status === 201, revision: data };
     },
     onSuccess: () => afterNewReadings(client, soundingId),
     // shows whose readings came first, so that the person can decide on them

@@ -4,4 +4,4 @@ import type { Revision } from '../../../server/contract/readings';
 export const saveOutcome = ({ isNew, revision }: { isNew: boolean; revision: Revision }): string =>
   isNew
     ? `Saved as revision ${revision.number}.`
-    : `Same content as revision ${revision.number}; nothing new was made.`;
+    : `Same content as revision ${revision.number}, which is the current one again.`;

@@ -115,7 +115,7 @@ export function SheetActions({ sounding, fieldSheet, sheet, keeper }: SheetActio
         <ImportDialog
           sounding={sounding}
           hasDraft={sheet.isChanged}
-          baseRevisionId={fieldSheet.revision?.id ?? null}
+          current={fieldSheet.revision}
           onImported={show}
           onClose={() => setOpen(null)}
         />

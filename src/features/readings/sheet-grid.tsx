@@ -133,7 +133,7 @@ function GridHead({ columns, spreadType, units }: GridHeadProps) {
             <HeadCell
               name={gridColumnName(column, spreadType)}
               unit={gridColumnUnit(column, units)}
-              className={isTextColumn(column) ? 'min-w-28 text-left 2xl:min-w-52' : 'min-w-17 text-right'}
+              className={isTextColumn(column) ? 'min-w-28 text-left 2xl:min-w-52' : 'min-w-20 text-right'}
             />
           </Fragment>
         ))}
