@@ -2,7 +2,6 @@ import type { LayeredEarthModel } from '../../server/contract/fit';
 import type { Revision } from '../../server/contract/readings';
 import type { Run } from '../../server/contract/runs';
 import type { CurveLine, CurvePoint, CurveReading, GroundColumn } from '../charts/chart-data';
-import { formatLength, withUnit } from '../ui/format';
 import { letterOfRun, titleOfRun } from './run-title';
 import { spacingLabel } from '../soundings/spread-words';
 
@@ -12,71 +11,57 @@ export type KeptReading = Pick<
   'row' | 'spread' | 'plottingSpacingM' | 'apparentResistivity' | 'relativeError'
 >;
 
+export type ExcludedReading = Run['excluded'][number];
+
 /** The readings a curve is drawn from: those that count, and those left out with their reason. */
 export interface CurveData {
   kept: readonly KeptReading[];
-  excluded: Run['excluded'];
+  excluded: readonly ExcludedReading[];
 }
 
 export const curveDataOfRun = (run: Run): CurveData => ({ kept: run.readings, excluded: run.excluded });
 
 export function curveDataOfRevision(revision: Revision): CurveData {
   const kept: KeptReading[] = [];
-  const excluded: Run['excluded'] = [];
+  const excluded: ExcludedReading[] = [];
   revision.readings.forEach((reading, i) => {
     const derived = revision.derived[i];
     if (!derived) return;
-    const at = { row: i + 1, plottingSpacingM: derived.plottingSpacingM };
-    if (reading.excluded !== null)
-      excluded.push({
-        ...at,
-        apparentResistivity: derived.apparentResistivityOhmM,
-        reason: reading.excluded,
-      });
-    else
-      kept.push({
-        ...at,
-        spread: reading.spread,
-        apparentResistivity: derived.apparentResistivityOhmM,
-        relativeError: derived.relativeError,
-      });
+    const values = {
+      row: i + 1,
+      spread: reading.spread,
+      plottingSpacingM: derived.plottingSpacingM,
+      apparentResistivity: derived.apparentResistivityOhmM,
+      relativeError: derived.relativeError,
+    };
+    if (reading.excluded === null) kept.push(values);
+    else excluded.push({ ...values, reason: reading.excluded });
   });
   return { kept, excluded };
 }
 
 /** Readings as charts take them, in the order of the sheet; those left out stand among the kept. */
 export function chartReadings({ kept, excluded }: CurveData): CurveReading[] {
-  const rows = [
-    ...kept.map((reading) => ({
-      row: reading.row,
+  const reasons = new Map(excluded.map((reading) => [reading.row, reading.reason]));
+  return [...kept, ...excluded]
+    .toSorted((a, b) => a.row - b.row)
+    .map((reading) => ({
       id: `row ${reading.row}`,
       spacing: reading.plottingSpacingM,
       label: spacingLabel(reading.spread),
       apparentResistivity: reading.apparentResistivity,
       relativeError: reading.relativeError,
-      excluded: false,
-    })),
-    ...excluded.map((reading) => ({
-      row: reading.row,
-      id: `row ${reading.row}`,
-      spacing: reading.plottingSpacingM,
-      label: withUnit(formatLength(reading.plottingSpacingM), 'm'),
-      apparentResistivity: reading.apparentResistivity,
-      relativeError: 0,
-      excluded: true,
-      reason: reading.reason,
-    })),
-  ];
-  return rows.toSorted((a, b) => a.row - b.row).map(({ row: _row, ...reading }) => reading);
+      excluded: reasons.has(reading.row),
+      reason: reasons.get(reading.row),
+    }));
 }
 
-/** Values of the kept readings spread over all readings in the sheet's order; null where one is left out. */
+/** Values of the kept readings and then of those left out, laid over all in the sheet's order; null where none is known. */
 export function overReadings({ kept, excluded }: CurveData, values: readonly number[]): (number | null)[] {
-  const byRow = new Map(kept.map((reading, i) => [reading.row, values[i] ?? null]));
   return [...kept, ...excluded]
-    .map(({ row }) => row)
-    .toSorted((a, b) => a - b)
-    .map((row) => byRow.get(row) ?? null);
+    .map(({ row }, i) => ({ row, value: values[i] ?? null }))
+    .toSorted((a, b) => a.row - b.row)
+    .map(({ value }) => value);
 }
 
 /** A predicted curve in order of spacing. */
@@ -91,18 +76,37 @@ export function curvePoints(kept: readonly KeptReading[], predicted: readonly nu
     .toSorted((a, b) => a.spacing - b.spacing);
 }
 
-/** The curve of a finished run; null before it has one. */
-export function lineOfRun(run: Run, kind: CurveLine['kind'] = 'run'): CurveLine | null {
+/** What the engine gives of a model beyond the readings that were fitted, Ω·m. */
+export interface BeyondReadings {
+  /** One a reading that was left out. */
+  excluded: readonly number[];
+  /** The curve between the readings. */
+  points: readonly CurvePoint[];
+}
+
+/** (ln predicted − ln measured)/σ of each reading that was left out; these took no part in the fit. */
+export const residualsOf = (
+  readings: readonly Pick<KeptReading, 'apparentResistivity' | 'relativeError'>[],
+  predicted: readonly number[],
+): number[] =>
+  readings.map(
+    ({ apparentResistivity, relativeError }, i) =>
+      Math.log((predicted[i] ?? Number.NaN) / apparentResistivity) / relativeError,
+  );
+
+/** The curve of a finished run; null before it has one. Straight between the readings until `beyond` is known. */
+export function lineOfRun(run: Run, beyond: BeyondReadings | null = null): CurveLine | null {
   if (!run.result) return null;
   const data = curveDataOfRun(run);
+  const left = beyond?.excluded ?? [];
   return {
     id: run.id,
-    kind,
+    kind: 'run',
     letter: letterOfRun(run),
     name: titleOfRun(run),
-    points: curvePoints(run.readings, run.result.predicted),
-    predicted: overReadings(data, run.result.predicted),
-    residuals: overReadings(data, run.result.residuals),
+    points: beyond?.points ?? curvePoints(run.readings, run.result.predicted),
+    predicted: overReadings(data, [...run.result.predicted, ...left]),
+    residuals: overReadings(data, [...run.result.residuals, ...residualsOf(run.excluded, left)]),
   };
 }
 

@@ -1,7 +1,7 @@
 import { describeDoubt } from '../../inversion';
 import type { FitResult } from '../../server/contract/fit';
 import type { Run } from '../../server/contract/runs';
-import { formatLength, withUnit } from '../ui/format';
+import { spacingLabel } from '../soundings/spread-words';
 
 export interface DoubtListProps {
   result: FitResult;
@@ -15,7 +15,7 @@ export function doubtsOf(result: FitResult, excluded: Run['excluded']): string[]
     ...result.warnings,
     ...excluded.map(
       (reading) =>
-        `The reading at ${withUnit(formatLength(reading.plottingSpacingM), 'm')} (row ${reading.row}) is left out: ${reading.reason}.`,
+        `The reading at ${spacingLabel(reading.spread)} (row ${reading.row}) is left out: ${reading.reason}.`,
     ),
   ];
 }

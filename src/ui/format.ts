@@ -36,6 +36,11 @@ export function formatResistivity(value: number): string {
   return formatSignificant(value, 3);
 }
 
+/** χ² per reading, the same three significant figures wherever it stands. */
+export function formatMisfit(chi2PerReading: number): string {
+  return formatSignificant(chi2PerReading, 3);
+}
+
 /** Length in m, no unit: two significant figures below 10 m (3.1), three above (12.4). */
 export function formatLength(value: number): string {
   return formatSignificant(value, Math.abs(value) < 9.95 ? 2 : 3);

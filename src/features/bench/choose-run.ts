@@ -1,16 +1,10 @@
 import type { RunSummary } from '../../../server/contract/runs';
+import { byStanding, isShowable } from '../../runs/run-standing';
 
-const isShowable = (run: RunSummary): boolean => run.state === 'finished' && run.outcome !== null;
-
-/** The run asked for by the address; else the pinned one, else the newest that has a result. */
+/** The run asked for by the address; else the one that stands for the sounding. */
 export function chooseRun(runs: readonly RunSummary[], wanted: string | null): RunSummary | null {
   const finished = runs.filter(isShowable);
-  return (
-    finished.find((run) => run.id === wanted) ??
-    finished.find((run) => run.note.pinned) ??
-    finished.toSorted((a, b) => b.number - a.number)[0] ??
-    null
-  );
+  return finished.find((run) => run.id === wanted) ?? finished.toSorted(byStanding)[0] ?? null;
 }
 
 /** Pinned runs first, then newest first. */

@@ -1,8 +1,9 @@
-import type { Run } from '../../../server/contract/runs';
-import { formatLength, formatResistivity, withUnit } from '../../ui/format';
+import type { ExcludedReading } from '../../runs/curve-of-run';
+import { spacingLabel } from '../../soundings/spread-words';
+import { formatResistivity, withUnit } from '../../ui/format';
 
 /** Readings that were left out, each with its reason; they are drawn hollow. */
-export function ExcludedList({ excluded }: { excluded: Run['excluded'] }) {
+export function ExcludedList({ excluded }: { excluded: readonly ExcludedReading[] }) {
   if (excluded.length === 0) return null;
   return (
     <p className="text-sm text-muted">
@@ -10,7 +11,7 @@ export function ExcludedList({ excluded }: { excluded: Run['excluded'] }) {
       {excluded
         .map(
           (reading) =>
-            `${withUnit(formatLength(reading.plottingSpacingM), 'm')}, ${withUnit(formatResistivity(reading.apparentResistivity), 'Ω·m')} (row ${reading.row}): ${reading.reason}`,
+            `${spacingLabel(reading.spread)}, ${withUnit(formatResistivity(reading.apparentResistivity), 'Ω·m')} (row ${reading.row}): ${reading.reason}`,
         )
         .join('; ')}
     </p>

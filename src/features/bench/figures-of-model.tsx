@@ -1,7 +1,7 @@
 import { darZarrouk } from '../../../inversion';
 import type { LayeredEarthModel } from '../../../server/contract/fit';
 import { FigureStrip, type FigureItem } from '../../ui/figure-strip';
-import { formatFixed, formatPercent, formatSignificant, withUnit } from '../../ui/format';
+import { formatMisfit, formatPercent, formatSignificant, withUnit } from '../../ui/format';
 
 export interface FiguresProps {
   earth: LayeredEarthModel;
@@ -13,7 +13,7 @@ export function FiguresOfModel({ earth, misfit }: FiguresProps) {
   const sums = darZarrouk(earth);
   const last = earth.resistivity.length;
   const fit: FigureItem[] = [
-    { value: misfit ? formatFixed(misfit.chi2PerReading, 2) : '–', label: 'χ² per reading' },
+    { value: misfit ? formatMisfit(misfit.chi2PerReading) : '–', label: 'χ² per reading' },
     { value: misfit ? formatPercent(misfit.rmsPercent) : '–', label: 'rms misfit' },
   ];
   const along: FigureItem[] = [

@@ -1,7 +1,7 @@
 import { Play } from 'lucide-react';
 import { useEffect, useState } from 'react';
-import { useForm, useWatch } from 'react-hook-form';
-import type { FitSettingsInput, LayeredEarthModel } from '../../../server/contract/fit';
+import { useController, useForm } from 'react-hook-form';
+import type { FitSettings, FitSettingsInput, LayeredEarthModel } from '../../../server/contract/fit';
 import { Button } from '../../ui/button';
 import { Field } from '../../ui/field';
 import { FormErrors, type FormFault } from '../../ui/form-errors';
@@ -15,8 +15,17 @@ import {
   fitFormSchema,
   LAYER_CHOICES,
   settingsOf,
+  settingsOfCount,
+  shownChoices,
   type FitForm,
 } from './fit-form';
+
+/** What can be asked for from outside the controls, as they stand. */
+export interface FitCommands {
+  fit: () => void;
+  /** One count of beds of the run that is shown, from the model found for it. */
+  fitCount: (asked: FitSettings, earth: LayeredEarthModel) => void;
+}
 
 export interface FitControlsProps {
   /** The model drawn now; a fit may start from it and hold values of it. */
@@ -26,8 +35,8 @@ export interface FitControlsProps {
   onFit: (settings: FitSettingsInput) => void;
   isAsking: boolean;
   faults: readonly FormFault[];
-  /** Called with a function that asks for the fit as the controls stand, for the F key. */
-  onReady: (fit: () => void) => void;
+  /** Called with what the F key and the counts of beds ask for. */
+  onReady: (commands: FitCommands) => void;
 }
 
 const LAYER_OPTIONS = LAYER_CHOICES.map((value) => ({
@@ -48,38 +57,42 @@ export function FitControls(props: FitControlsProps) {
     resolver: formResolver(fitFormSchema),
     defaultValues: DEFAULT_FIT_FORM,
   });
-  const start = useWatch({ control: form.control, name: 'start' });
-  const count = model?.resistivity.length ?? 0;
-  const isCountOfModel = model !== null && (held.length > 0 || start === 'model');
-  const ask = form.handleSubmit((values) => {
-    const settings = settingsOf(values, model, held);
+  const start = useController({ control: form.control, name: 'start' }).field;
+  const layers = useController({ control: form.control, name: 'layers' }).field;
+  const shown = shownChoices({ layers: layers.value, start: start.value }, model, held);
+  const request = (settings: FitSettingsInput) => {
     const faults = faultsOfSettings(settings);
     setOwnFaults(faults.map((message) => ({ message })));
     if (faults.length === 0) onFit(settings);
-  });
-  useEffect(() => onReady(() => void ask()));
+  };
+  const ask = form.handleSubmit((values) => request(settingsOf(values, model, held)));
+  useEffect(() =>
+    onReady({
+      fit: () => void ask(),
+      fitCount: (asked, earth) =>
+        void form.handleSubmit((values) => request(settingsOfCount(values, asked, earth)))(),
+    }),
+  );
   return (
     <form onSubmit={ask} aria-label="Fit" className="flex flex-col gap-3">
       <div className="flex flex-wrap items-end gap-x-3 gap-y-3">
         <Button kind="main" type="submit" loading={isAsking} icon={<Play aria-hidden size={14} />}>
           Fit beds
         </Button>
-        {isCountOfModel ? (
-          // Keyed apart: the browser's list must not carry its choice from one of the two to the other.
-          <Field key="of model" label="Beds" className="w-40">
-            <Select
-              value={String(count)}
-              disabled
-              options={[{ value: String(count), label: formatCount(count, 'bed') }]}
-            />
-          </Field>
-        ) : (
-          <Field key="asked" label="Beds" className="w-40">
-            <Select options={LAYER_OPTIONS} {...form.register('layers')} />
-          </Field>
-        )}
+        <Field label="Beds" className="w-40">
+          <Select
+            {...layers}
+            value={shown.layers}
+            disabled={shown.isCountOfModel}
+            options={LAYER_OPTIONS}
+          />
+        </Field>
         <Field label="Start" className="w-40">
-          <Select options={model ? START_OPTIONS : START_OPTIONS.slice(0, 1)} {...form.register('start')} />
+          <Select
+            {...start}
+            value={shown.start}
+            options={model ? START_OPTIONS : START_OPTIONS.slice(0, 1)}
+          />
         </Field>
         {held.length > 0 ? (
           <p className="flex min-h-8 items-center gap-2 text-sm text-muted">
@@ -90,10 +103,10 @@ export function FitControls(props: FitControlsProps) {
           </p>
         ) : null}
       </div>
-      {isCountOfModel ? (
+      {shown.isCountOfModel ? (
         <p className="text-sm text-muted">
           {held.length > 0 ? 'Held values belong to this model' : 'The fit starts from this model'}, so it has{' '}
-          {formatCount(count, 'bed')}.
+          {formatCount(Number(shown.layers), 'bed')}.
         </p>
       ) : null}
       <FitBoundsFields form={form} />

@@ -2,10 +2,11 @@ import { z } from 'zod';
 import {
   DEFAULT_BOUNDS,
   fitSettingsSchema,
+  type FitSettings,
   type FitSettingsInput,
   type LayeredEarthModel,
 } from '../../../server/contract/fit';
-import { MAX_BEDS, type ModelValue } from './hand-model';
+import type { ModelValue } from './hand-model';
 import { heldKey } from './hand-model-store';
 
 export const LAYER_CHOICES = ['auto', '1', '2', '3', '4', '5', '6', '7', '8'] as const;
@@ -52,6 +53,25 @@ export function valuesOfModel(earth: LayeredEarthModel): ModelValue[] {
   ];
 }
 
+/** What the controls stand for beside the model that is shown: the same for the eye and for the request. */
+export interface ShownChoices {
+  start: FitForm['start'];
+  layers: FitForm['layers'];
+  /** Values are held or the fit starts from the model, so its count of beds is the one asked for. */
+  isCountOfModel: boolean;
+}
+
+export function shownChoices(
+  form: Pick<FitForm, 'layers' | 'start'>,
+  model: LayeredEarthModel | null,
+  held: readonly string[],
+): ShownChoices {
+  const layers = LAYER_CHOICES.find((choice) => choice === String(model?.resistivity.length));
+  if (!layers) return { start: 'curve', layers: form.layers, isCountOfModel: false };
+  const isCountOfModel = held.length > 0 || form.start === 'model';
+  return { start: form.start, layers: isCountOfModel ? layers : form.layers, isCountOfModel };
+}
+
 /**
  * The request for a run. A model that holds values, or that is started from, states the count of beds;
  * what is asked for otherwise then has no say.
@@ -61,25 +81,48 @@ export function settingsOf(
   model: LayeredEarthModel | null,
   held: readonly string[],
 ): FitSettingsInput {
-  const count = model?.resistivity.length;
-  const hasModel = model !== null && count !== undefined && count <= MAX_BEDS;
-  const usesModel = hasModel && (held.length > 0 || form.start === 'model');
+  const { start, layers, isCountOfModel } = shownChoices(form, model, held);
   return {
     kind: 'layered',
-    layers: usesModel ? count : form.layers === 'auto' ? 'auto' : Number(form.layers),
+    layers: layers === 'auto' ? 'auto' : Number(layers),
     seed: form.seed,
-    bounds: {
-      resistivity: [form.resistivityLow, form.resistivityHigh],
-      thickness: [form.thicknessLow, form.thicknessHigh],
-    },
-    fixed: hasModel
-      ? valuesOfModel(model)
-          .filter((value) => held.includes(heldKey(value)))
-          .map(({ on, index }) => ({ on, index, value: model[on][index] ?? Number.NaN }))
-      : [],
-    ...(hasModel && form.start === 'model' ? { start: model } : {}),
+    bounds: boundsOf(form),
+    fixed:
+      model && isCountOfModel
+        ? valuesOfModel(model)
+            .filter((value) => held.includes(heldKey(value)))
+            .map(({ on, index }) => ({ on, index, value: model[on][index] ?? Number.NaN }))
+        : [],
+    ...(model && start === 'model' ? { start: model } : {}),
   };
 }
+
+/**
+ * The request for one count of beds out of those that a run tried, starting from what it found there. Bounds and seed that
+ * were set since count; where they stand as usual, the run's own are kept.
+ */
+export function settingsOfCount(
+  form: FitForm,
+  asked: FitSettings,
+  earth: LayeredEarthModel,
+): FitSettingsInput {
+  const bounds = boundsOf(form);
+  const pick = (on: ModelValue['on']) =>
+    bounds[on].every((bound, i) => bound === DEFAULT_BOUNDS[on][i]) ? asked.bounds[on] : bounds[on];
+  return {
+    kind: 'layered',
+    layers: earth.resistivity.length,
+    seed: form.seed === DEFAULT_FIT_FORM.seed ? asked.seed : form.seed,
+    bounds: { resistivity: pick('resistivity'), thickness: pick('thickness') },
+    fixed: [],
+    start: earth,
+  };
+}
+
+const boundsOf = (form: FitForm): FitSettings['bounds'] => ({
+  resistivity: [form.resistivityLow, form.resistivityHigh],
+  thickness: [form.thicknessLow, form.thicknessHigh],
+});
 
 /** Faults the contract finds in the settings, in words of the Bench. */
 export function faultsOfSettings(settings: FitSettingsInput): string[] {

@@ -1,6 +1,6 @@
 import type { FitResult, LayeredEarthModel } from '../../../server/contract/fit';
 import { Button } from '../../ui/button';
-import { formatFixed } from '../../ui/format';
+import { formatFixed, formatMisfit } from '../../ui/format';
 import { Cell, HeaderCell, Table, TableBody, TableHead, TableRow } from '../../ui/table';
 
 export interface LayerLadderProps {
@@ -31,7 +31,7 @@ export function LayerLadder({ counts, onTakeUp, onAdopt }: LayerLadderProps) {
           {counts.map((count) => (
             <TableRow key={count.layers} selected={count.chosen}>
               <Cell numeric>{count.layers}</Cell>
-              <Cell numeric>{formatFixed(count.chi2PerReading, 2)}</Cell>
+              <Cell numeric>{formatMisfit(count.chi2PerReading)}</Cell>
               <Cell numeric>{formatFixed(count.bic, 1)}</Cell>
               <Cell>{NOISE_WORDS[`${count.withinNoise}`]}</Cell>
               <Cell className="text-right whitespace-nowrap">

@@ -3,12 +3,14 @@ import type { SurveyCan } from '../../../server/contract/roles';
 import type { RunSummary } from '../../../server/contract/runs';
 import { runStyle } from '../../charts/run-style';
 import { useChartPalette } from '../../charts/chart-palette';
+import { InterpretationStateMark } from '../../runs/interpretation-state-mark';
 import { MiniColumn } from '../../runs/mini-column';
+import { RejectedMark } from '../../runs/rejected-mark';
 import { letterOfRun, titleOfRun } from '../../runs/run-title';
 import { Badge } from '../../ui/badge';
 import { Checkbox } from '../../ui/checkbox';
 import { classNames } from '../../ui/class-names';
-import { formatFixed, formatMoment, formatPercent } from '../../ui/format';
+import { formatMisfit, formatMoment, formatPercent } from '../../ui/format';
 import { LedgerMenu } from './ledger-menu';
 import { RunProgress } from './run-progress';
 
@@ -68,6 +70,7 @@ export function LedgerRow(props: LedgerRowProps) {
         <p className="text-sm text-muted">
           {formatMoment(run.requestedAt)}, {run.requestedBy.name}
         </p>
+        <RejectedMark fit={run.outcome} />
         <RunMarks run={run} runs={runs} />
         <RunProgress run={run} can={can} />
       </div>
@@ -75,7 +78,7 @@ export function LedgerRow(props: LedgerRowProps) {
         {run.outcome ? (
           <>
             <span className="block" title="χ² per reading">
-              {formatFixed(run.outcome.chi2PerReading, 2)}
+              {formatMisfit(run.outcome.chi2PerReading)}
             </span>
             <span className="block text-sm text-muted" title="rms misfit">
               {formatPercent(run.outcome.rmsPercent)}
@@ -91,6 +94,12 @@ export function LedgerRow(props: LedgerRowProps) {
 function RunMarks({ run, runs }: { run: RunSummary; runs: readonly RunSummary[] }) {
   const original = runs.find((other) => other.id === run.recomputesRunId);
   const marks = [
+    run.interpretedAs !== null && (
+      <span key="interpreted" className="text-sm">
+        <span className="sr-only">Interpretation: </span>
+        <InterpretationStateMark state={run.interpretedAs} />
+      </span>
+    ),
     run.note.pinned && (
       <span key="pin" className="inline-flex items-center gap-1 text-sm text-muted">
         <Pin aria-hidden size={12} /> pinned

@@ -12,7 +12,7 @@ import { ButtonLink } from '../../ui/button';
 import { EmptyState } from '../../ui/view-states';
 import { InterpretationEditor } from './interpretation-editor';
 import { InterpretationReading } from './interpretation-reading';
-import { InterpretationStateMark } from './interpretation-state-mark';
+import { InterpretationStateMark } from '../../runs/interpretation-state-mark';
 import { interpretationQuery } from './interpretation-queries';
 import { ReviewHistory } from './review-history';
 import { ReviewPanel } from './review-panel';

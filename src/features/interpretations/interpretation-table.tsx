@@ -4,7 +4,7 @@ import { addressOf } from '../../app/addresses';
 import { letterOfRun } from '../../runs/run-title';
 import { formatLength, formatMoment, withUnit } from '../../ui/format';
 import { Cell, HeaderCell, Table, TableBody, TableHead, TableRow } from '../../ui/table';
-import { InterpretationStateMark } from './interpretation-state-mark';
+import { InterpretationStateMark } from '../../runs/interpretation-state-mark';
 
 export interface InterpretationTableProps {
   soundingId: string;

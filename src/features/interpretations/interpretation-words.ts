@@ -1,16 +1,4 @@
-import type {
-  InterpretationBed,
-  InterpretationState,
-  ReviewEvent,
-} from '../../../server/contract/interpretations';
-
-export const STATE_WORDS: Record<InterpretationState, string> = {
-  draft: 'Draft',
-  'in-review': 'In review',
-  'changes-asked': 'Changes asked',
-  accepted: 'Accepted',
-  superseded: 'Superseded',
-};
+import type { InterpretationBed, ReviewEvent } from '../../../server/contract/interpretations';
 
 export const BED_ROLE_WORDS: Record<InterpretationBed['role'], string> = {
   cover: 'Cover',
@@ -35,6 +23,7 @@ export const EVENT_WORDS: Record<ReviewEvent['kind'], string> = {
   accepted: 'accepted',
   superseded: 'accepted another in its place',
   commented: 'commented',
+  edited: 'changed the text',
 };
 
 export const optionsOf = <Key extends string>(words: Record<Key, string>) =>

@@ -4,7 +4,7 @@ import { addressOf } from '../../app/addresses';
 import { DoubtList } from '../../runs/doubt-list';
 import { letterOfRun, titleOfRun } from '../../runs/run-title';
 import { FigureStrip } from '../../ui/figure-strip';
-import { formatFixed, formatPercent } from '../../ui/format';
+import { formatMisfit, formatPercent } from '../../ui/format';
 
 /** The run the words stand on: how it fits and what it leaves open. */
 export function RunBasis({ run }: { run: Run }) {
@@ -20,7 +20,7 @@ export function RunBasis({ run }: { run: Run }) {
         <>
           <FigureStrip
             items={[
-              { value: formatFixed(result.chi2PerReading, 2), label: 'χ² per reading' },
+              { value: formatMisfit(result.chi2PerReading), label: 'χ² per reading' },
               { value: formatPercent(result.rmsPercent), label: 'rms misfit' },
             ]}
           />

@@ -12,7 +12,7 @@ import { Dialog } from '../../ui/dialog';
 import { Field } from '../../ui/field';
 import { FormErrors } from '../../ui/form-errors';
 import { formResolver } from '../../ui/form-resolver';
-import { formatFixed } from '../../ui/format';
+import { formatMisfit } from '../../ui/format';
 import { Input } from '../../ui/input';
 import { Select } from '../../ui/select';
 import { useCreateInterpretation } from './interpretation-mutations';
@@ -28,7 +28,7 @@ export interface StartInterpretationDialogProps {
 
 const optionOf = (run: RunSummary) => ({
   value: run.id,
-  label: `${letterOfRun(run)}: ${titleOfRun(run)}, χ²/N ${run.outcome ? formatFixed(run.outcome.chi2PerReading, 2) : '–'}`,
+  label: `${letterOfRun(run)}: ${titleOfRun(run)}, χ²/N ${run.outcome ? formatMisfit(run.outcome.chi2PerReading) : '–'}`,
 });
 
 export function StartInterpretationDialog(props: StartInterpretationDialogProps) {

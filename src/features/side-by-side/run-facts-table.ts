@@ -1,6 +1,6 @@
 import type { Run } from '../../../server/contract/runs';
 import { settingsWords } from '../../runs/run-settings-words';
-import { formatFixed, formatMoment, formatPercent, formatSignificant, withUnit } from '../../ui/format';
+import { formatMisfit, formatMoment, formatPercent, formatSignificant, withUnit } from '../../ui/format';
 
 export interface FactRow {
   label: string;
@@ -23,7 +23,7 @@ export function outcomeRows(runs: readonly FinishedRun[]): FactRow[] {
   return [
     row(
       'χ² per reading',
-      runs.map((run) => formatFixed(run.result.chi2PerReading, 2)),
+      runs.map((run) => formatMisfit(run.result.chi2PerReading)),
     ),
     row(
       'rms misfit',

@@ -3,7 +3,7 @@ import { runStyle } from '../../charts/run-style';
 import type { RunSummary } from '../../../server/contract/runs';
 import { letterOfRun, titleOfRun } from '../../runs/run-title';
 import { Checkbox } from '../../ui/checkbox';
-import { formatFixed, formatMoment } from '../../ui/format';
+import { formatMisfit, formatMoment } from '../../ui/format';
 import { MOST_RUNS, withRun, type ChosenRuns } from './chosen-runs';
 
 export interface RunPickerProps {
@@ -49,7 +49,7 @@ export function RunPicker({ runs, chosen, onChoose }: RunPickerProps) {
                 <>
                   χ²/N{' '}
                   <span className="figure">
-                    {run.outcome ? formatFixed(run.outcome.chi2PerReading, 2) : '–'}
+                    {run.outcome ? formatMisfit(run.outcome.chi2PerReading) : '–'}
                   </span>
                   , {formatMoment(run.requestedAt)}
                 </>

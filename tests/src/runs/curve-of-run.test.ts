@@ -5,6 +5,7 @@ import {
   curveDataOfRevision,
   curvePoints,
   overReadings,
+  residualsOf,
 } from '../../../src/runs/curve-of-run';
 
 const reading = (halfAB: number, excluded: string | null = null): Revision['readings'][number] => ({
@@ -37,7 +38,14 @@ it('keeps readings that count apart from those left out, with their rows', () =>
     [3, 2, 0.036],
   ]);
   expect(data.excluded).toEqual([
-    { row: 2, plottingSpacingM: 6.8, apparentResistivity: 95, reason: 'wet cable' },
+    {
+      row: 2,
+      spread: { type: 'schlumberger', halfAB: 6.8, halfMN: 0.5 },
+      plottingSpacingM: 6.8,
+      apparentResistivity: 95,
+      relativeError: 0.036,
+      reason: 'wet cable',
+    },
   ]);
 });
 
@@ -48,10 +56,18 @@ it('draws all readings in the order of the sheet, hollow ones with their reason'
     [6.8, true, 'wet cable'],
     [2, false, undefined],
   ]);
+  expect(readings[1]).toMatchObject({ label: 'AB/2 6.8\u00a0m', relativeError: 0.036 });
 });
 
-it('lays values of the kept readings over all readings', () => {
-  expect(overReadings(curveDataOfRevision(revision), [1.5, -0.5])).toEqual([1.5, null, -0.5]);
+it('lays values of the kept readings, then of those left out, over all readings', () => {
+  const data = curveDataOfRevision(revision);
+  expect(overReadings(data, [1.5, -0.5])).toEqual([1.5, null, -0.5]);
+  expect(overReadings(data, [1.5, -0.5, 3])).toEqual([1.5, 3, -0.5]);
+});
+
+it('tells how far a curve passes from a reading that was left out, in its own error', () => {
+  const [residual] = residualsOf(curveDataOfRevision(revision).excluded, [95 * Math.exp(0.072)]);
+  expect(residual).toBeCloseTo(2, 12);
 });
 
 it('orders a predicted curve by spacing and leaves out what has no logarithm', () => {
