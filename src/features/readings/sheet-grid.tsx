@@ -133,7 +133,9 @@ function GridHead({ columns, spreadType, units }: GridHeadProps) {
             <HeadCell
               name={gridColumnName(column, spreadType)}
               unit={gridColumnUnit(column, units)}
-              className={isTextColumn(column) ? 'min-w-28 text-left 2xl:min-w-52' : 'min-w-20 text-right'}
+              className={
+                isTextColumn(column) ? 'min-w-28 text-left 2xl:min-w-36' : 'min-w-20 text-right 2xl:min-w-22'
+              }
             />
           </Fragment>
         ))}
