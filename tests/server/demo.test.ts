@@ -23,13 +23,16 @@ describe('the demo', () => {
     ]);
   }, 240_000);
 
-  it('lets the run of the found count stand for the proposed site', async () => {
-    const pinned = await db('run_note')
-      .join('run', 'run.id', 'run_note.run_id')
+  it('lets a run of four beds stand for the proposed site', async () => {
+    const [standing] = await db('run')
+      .join('run_note', 'run_note.run_id', 'run.id')
+      .join('run_state', 'run_state.run_id', 'run.id')
+      .join('computation', 'computation.id', 'run_state.computation_id')
       .join('sounding', 'sounding.id', 'run.sounding_id')
-      .where({ pinned: true, 'sounding.name': 'S-07' })
-      .pluck('run.number');
-    expect(pinned).toEqual([1]);
+      .where('sounding.name', 'S-07')
+      .orderByRaw('run_note.pinned DESC, run.number DESC')
+      .select(db.raw(`jsonb_array_length(computation.result -> 'earth' -> 'resistivity') AS beds`));
+    expect(standing.beds).toBe(4);
   });
 
   it('leaves no job for the queue', async () => {
