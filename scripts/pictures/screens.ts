@@ -56,7 +56,7 @@ export async function allScreens(db: Knex): Promise<Screen[]> {
     },
     {
       name: 'bench',
-      path: `/soundings/${site}/bench?run=${runs[0]}`,
+      path: `/soundings/${site}/bench`,
       role: 'geophysicist',
       shows: heading(/^Run [A-Z]/),
     },
