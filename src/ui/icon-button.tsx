@@ -16,7 +16,7 @@ export function IconButton({ label, icon, className, ...rest }: IconButtonProps)
       aria-label={label}
       className={classNames(
         'inline-flex size-8 shrink-0 items-center justify-center rounded text-muted hover:bg-sunken hover:text-ink touch:size-11',
-        'disabled:cursor-not-allowed disabled:opacity-55',
+        'disabled:cursor-not-allowed disabled:opacity-55 aria-disabled:cursor-not-allowed aria-disabled:opacity-55',
         className,
       )}
     >

@@ -11,10 +11,7 @@ export function BenchKeys() {
         <Kbd>←</Kbd> <Kbd>→</Kbd> on a bed: its ρ
       </span>
       <span>
-        <Kbd>F</Kbd> fit
-      </span>
-      <span>
-        <Kbd>Z</Kbd> undo
+        in the drawing: <Kbd>F</Kbd> fit, <Kbd>Z</Kbd> undo
       </span>
     </p>
   );

@@ -12,7 +12,7 @@ import { BenchGround } from './bench-ground';
 import { useRequestRun } from './bench-mutations';
 import { DrawingRegion } from './drawing-region';
 import { FiguresOfModel } from './figures-of-model';
-import { FitControls } from './fit-controls';
+import { FitControls, type FitCommands } from './fit-controls';
 import { modelFromCurve } from './hand-model';
 import { LayerLadder } from './layer-ladder';
 import { Ledger } from './ledger';
@@ -35,7 +35,7 @@ export function BenchWorkspace({ sounding, revision, runs, run }: BenchWorkspace
   const { can } = sounding;
   const [, setSearch] = useSearchParams();
   const [selectedBed, setSelectedBed] = useState<number | null>(null);
-  const askForFit = useRef<() => void>(() => undefined);
+  const commands = useRef<FitCommands | null>(null);
   const request = useRequestRun(sounding.id);
   const data = useMemo(() => (run ? curveDataOfRun(run) : curveDataOfRevision(revision)), [run, revision]);
   const fallback = useMemo(
@@ -61,10 +61,10 @@ export function BenchWorkspace({ sounding, revision, runs, run }: BenchWorkspace
   return (
     <div className="grid flex-1 grid-cols-1 lg:grid-cols-[18rem_minmax(0,1fr)] xl:grid-cols-[19rem_minmax(0,1fr)_22rem] 2xl:grid-cols-[21rem_minmax(0,1fr)_24rem]">
       <DrawingRegion
-        onFit={can.run ? () => askForFit.current() : null}
+        onFit={can.run ? () => commands.current?.fit() : null}
         onUndo={model.undo}
         onRedo={model.redo}
-        className="contents"
+        className="grid min-w-0 grid-cols-1 content-start lg:col-span-2 lg:grid-cols-subgrid"
       >
         <div className="flex min-w-0 flex-col gap-6 px-4 py-5 sm:px-7 lg:order-2 lg:border-l lg:border-rule">
           <BenchDrawing sounding={sounding} data={data} run={run} curve={curve} />
@@ -76,8 +76,8 @@ export function BenchWorkspace({ sounding, revision, runs, run }: BenchWorkspace
               onFit={fit}
               isAsking={request.isPending}
               faults={formFaults(request.error)}
-              onReady={(ask) => {
-                askForFit.current = ask;
+              onReady={(ready) => {
+                commands.current = ready;
               }}
             />
           ) : null}
@@ -89,19 +89,15 @@ export function BenchWorkspace({ sounding, revision, runs, run }: BenchWorkspace
             selectedBed={selectedBed}
             onSelectBed={setSelectedBed}
           />
-          {result?.layerCounts ? (
+          {run?.result?.layerCounts ? (
             <section aria-labelledby="ladder-title">
               <h2 id="ladder-title" className="mb-1 font-semibold">
                 How many beds
               </h2>
               <LayerLadder
-                counts={result.layerCounts}
+                counts={run.result.layerCounts}
                 onTakeUp={(earth) => model.edit(earth)}
-                onAdopt={
-                  can.run && run
-                    ? (earth) => fit({ ...run.settings, layers: earth.resistivity.length, start: earth })
-                    : undefined
-                }
+                onAdopt={can.run ? (earth) => commands.current?.fitCount(run.settings, earth) : undefined}
               />
             </section>
           ) : null}

@@ -14,9 +14,17 @@ const isWriting = (target: EventTarget | null): boolean =>
   target instanceof HTMLTextAreaElement ||
   target instanceof HTMLSelectElement;
 
-/** Single keys count only while the focus is in here (WCAG 2.1.4). */
+/** Whether the focus is where a person just put it to write or to choose, and must not be taken away. */
+const isBusy = (element: Element | null): boolean =>
+  isWriting(element) || Boolean(element?.closest('[role="dialog"], [role="menu"]'));
+
+/**
+ * Single keys count only while the focus is in here (WCAG 2.1.4). So the region takes the focus on arrival, and takes it back
+ * when the control that had it goes or greys out.
+ */
 export function DrawingRegion({ onFit, onUndo, onRedo, className, children }: DrawingRegionProps) {
-  const region = useRef<HTMLDivElement>(null);
+  const region = useRef<HTMLElement>(null);
+  const hasFocus = useRef(false);
   const onKey = useEffectEvent((event: KeyboardEvent) => {
     if (event.ctrlKey || event.metaKey || event.altKey || isWriting(event.target)) return;
     const key = event.key.toLowerCase();
@@ -29,12 +37,33 @@ export function DrawingRegion({ onFit, onUndo, onRedo, className, children }: Dr
   useEffect(() => {
     const element = region.current;
     const hear = (event: KeyboardEvent) => onKey(event);
+    const follow = (event: Event) => {
+      hasFocus.current = event.target instanceof Node && (element?.contains(event.target) ?? false);
+    };
     element?.addEventListener('keydown', hear);
-    return () => element?.removeEventListener('keydown', hear);
+    document.addEventListener('focusin', follow);
+    document.addEventListener('pointerdown', follow);
+    if (!isBusy(document.activeElement)) element?.focus({ preventScroll: true });
+    return () => {
+      element?.removeEventListener('keydown', hear);
+      document.removeEventListener('focusin', follow);
+      document.removeEventListener('pointerdown', follow);
+    };
   }, []);
+  useEffect(() => {
+    const active = document.activeElement;
+    const isLost = active === null || active === document.body || active.matches(':disabled');
+    if (hasFocus.current && isLost) region.current?.focus({ preventScroll: true });
+  });
   return (
-    <div ref={region} className={className}>
+    <section
+      ref={region}
+      aria-label="Ground and curve"
+      aria-keyshortcuts={onFit ? 'F Z Shift+Z' : 'Z Shift+Z'}
+      tabIndex={-1}
+      className={className}
+    >
       {children}
-    </div>
+    </section>
   );
 }

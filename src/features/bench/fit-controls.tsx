@@ -80,12 +80,7 @@ export function FitControls(props: FitControlsProps) {
           Fit beds
         </Button>
         <Field label="Beds" className="w-40">
-          <Select
-            {...layers}
-            value={shown.layers}
-            disabled={shown.isCountOfModel}
-            options={LAYER_OPTIONS}
-          />
+          <Select {...layers} value={shown.layers} disabled={shown.isCountOfModel} options={LAYER_OPTIONS} />
         </Field>
         <Field label="Start" className="w-40">
           <Select

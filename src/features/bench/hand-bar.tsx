@@ -29,13 +29,13 @@ export function HandBar({ model, runLetter, children }: HandBarProps) {
       <IconButton
         label="Undo"
         icon={<Undo2 aria-hidden size={16} />}
-        disabled={!model.canUndo}
+        aria-disabled={!model.canUndo}
         onClick={model.undo}
       />
       <IconButton
         label="Redo"
         icon={<Redo2 aria-hidden size={16} />}
-        disabled={!model.canRedo}
+        aria-disabled={!model.canRedo}
         onClick={model.redo}
       />
       {children}

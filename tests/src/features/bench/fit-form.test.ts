@@ -5,6 +5,8 @@ import {
   faultsOfSettings,
   fitFormSchema,
   settingsOf,
+  settingsOfCount,
+  shownChoices,
 } from '../../../../src/features/bench/fit-form';
 
 const model = { resistivity: [140, 12, 120], thickness: [3, 4] };
@@ -31,6 +33,46 @@ it('starts from the model when asked to', () => {
     start: model,
   });
   expect(settingsOf({ ...DEFAULT_FIT_FORM, start: 'model' }, null, []).start).toBeUndefined();
+});
+
+it('shows the choices that the request is made from', () => {
+  const asked = { layers: '5', start: 'model' } as const;
+  for (const held of [[], ['thickness 1']])
+    for (const shown of [null, model]) {
+      const settings = settingsOf({ ...DEFAULT_FIT_FORM, ...asked }, shown, held);
+      expect(shownChoices(asked, shown, held)).toEqual({
+        layers: String(settings.layers),
+        start: settings.start ? 'model' : 'curve',
+        isCountOfModel: shown !== null,
+      });
+    }
+  expect(shownChoices({ layers: '5', start: 'curve' }, model, [])).toMatchObject({
+    layers: '5',
+    start: 'curve',
+    isCountOfModel: false,
+  });
+});
+
+it('asks for one count of a run within the bounds that are set, else within those of the run', () => {
+  const asked = fitSettingsSchema.parse({
+    kind: 'layered',
+    layers: 'auto',
+    seed: 7,
+    bounds: { resistivity: [1, 500], thickness: [0.5, 60] },
+  });
+  expect(settingsOfCount(DEFAULT_FIT_FORM, asked, model)).toEqual({
+    kind: 'layered',
+    layers: 3,
+    seed: 7,
+    bounds: asked.bounds,
+    fixed: [],
+    start: model,
+  });
+  const set = { ...DEFAULT_FIT_FORM, resistivityHigh: 2000, seed: 3 };
+  expect(settingsOfCount(set, asked, model)).toMatchObject({
+    seed: 3,
+    bounds: { resistivity: [0.1, 2000], thickness: [0.5, 60] },
+  });
 });
 
 it('tells a held value that lies outside the bounds by its bed', () => {
