@@ -1,13 +1,17 @@
+import { useState } from 'react';
 import { useForm } from 'react-hook-form';
 import { createReviewEventSchema, type Interpretation } from '../../../server/contract/interpretations';
 import { formFaults } from '../../api/form-faults';
 import { Button } from '../../ui/button';
+import { Checkbox } from '../../ui/checkbox';
 import { Dialog } from '../../ui/dialog';
 import { Field } from '../../ui/field';
 import { FormErrors } from '../../ui/form-errors';
 import { formResolver } from '../../ui/form-resolver';
+import { Notice } from '../../ui/notice';
 import { Textarea } from '../../ui/textarea';
 import { useReviewEvent, type ReviewEventInput } from './interpretation-mutations';
+import { unwrittenParts } from './unwritten-parts';
 
 export type ReviewMove = 'submitted' | 'withdrawn' | 'changes-asked' | 'accepted';
 
@@ -61,7 +65,13 @@ export function ReviewDialog({ interpretation, move, onClose }: ReviewDialogProp
     resolver: formResolver(createReviewEventSchema),
     defaultValues: { kind: move, comment: '', version: interpretation.version },
   });
-  const take = form.handleSubmit((event) => review.mutate(event, { onSuccess: onClose }));
+  const unwritten = move === 'submitted' ? unwrittenParts(interpretation) : [];
+  const [isMeant, setIsMeant] = useState(false);
+  const [isAskedTwice, setIsAskedTwice] = useState(false);
+  const take = form.handleSubmit((event) => {
+    if (unwritten.length > 0 && !isMeant) setIsAskedTwice(true);
+    else review.mutate(event, { onSuccess: onClose });
+  });
   return (
     <Dialog
       open
@@ -86,7 +96,38 @@ export function ReviewDialog({ interpretation, move, onClose }: ReviewDialogProp
         >
           <Textarea rows={4} {...form.register('comment')} />
         </Field>
+        {unwritten.length > 0 ? (
+          <UnwrittenNotice parts={unwritten} isMeant={isMeant} onMeant={setIsMeant} isAsked={isAskedTwice} />
+        ) : null}
       </form>
     </Dialog>
+  );
+}
+
+interface UnwrittenNoticeProps {
+  parts: readonly string[];
+  isMeant: boolean;
+  onMeant: (isMeant: boolean) => void;
+  /** It was to be sent without the tick: says what is needed. */
+  isAsked: boolean;
+}
+
+/** Names what the reviewer would find empty, and asks once more whether that is meant. */
+function UnwrittenNotice({ parts, isMeant, onMeant, isAsked }: UnwrittenNoticeProps) {
+  const isMissing = isAsked && !isMeant;
+  return (
+    <Notice tone="caution" title={parts.join(' ')}>
+      <Checkbox
+        label="Submit it with this left empty"
+        checked={isMeant}
+        aria-invalid={isMissing || undefined}
+        onChange={(event) => onMeant(event.target.checked)}
+      />
+      {isMissing ? (
+        <p role="alert" className="text-sm text-rust">
+          Tick this to submit it so, or cancel and write what is missing.
+        </p>
+      ) : null}
+    </Notice>
   );
 }
