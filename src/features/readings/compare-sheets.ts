@@ -6,6 +6,10 @@ export interface SheetDifference {
   spacing: string;
   mine: SheetRow | null;
   theirs: SheetRow | null;
+  /** As both began with it: null = it was not there, undefined = not known. */
+  base: SheetRow | null | undefined;
+  /** Who changed it since then; null = not known. */
+  changedBy: 'me' | 'them' | 'both' | null;
 }
 
 export interface SheetComparison {
@@ -13,26 +17,44 @@ export interface SheetComparison {
   same: number;
 }
 
-/** Two sets of readings, paired by their electrodes and the order among equals; what both say alike is only counted. */
+/**
+ * Two sets of readings, paired by their electrodes and the order among equals; what both say alike is only counted.
+ * `base` are the readings that both were written over, where they are known.
+ */
 export function compareSheets(
   mine: readonly Reading[],
   theirs: readonly Reading[],
   units: SheetUnits,
+  base: readonly Reading[] | null = null,
 ): SheetComparison {
   const [own, other] = [byPlace(mine, units), byPlace(theirs, units)];
+  const origin = base && byPlace(base, units);
   const differences: SheetDifference[] = [];
   let same = 0;
   for (const key of new Set([...own.keys(), ...other.keys()])) {
     const [left, right] = [own.get(key) ?? null, other.get(key) ?? null];
+    const before = origin && (origin.get(key) ?? null);
     if (left && right && left.text === right.text) same += 1;
     else
       differences.push({
         spacing: (left ?? right)?.spacing ?? '',
         mine: left?.row ?? null,
         theirs: right?.row ?? null,
+        base: origin ? (before?.row ?? null) : undefined,
+        changedBy: origin ? changedBy(left?.text, right?.text, before?.text) : null,
       });
   }
   return { differences, same };
+}
+
+/** The two differ, so at least one of them is not as before. */
+function changedBy(
+  mine: string | undefined,
+  theirs: string | undefined,
+  before: string | undefined,
+): 'me' | 'them' | 'both' {
+  if (mine === before) return 'them';
+  return theirs === before ? 'me' : 'both';
 }
 
 interface PlacedRow {

@@ -1,11 +1,16 @@
+import { useQuery } from '@tanstack/react-query';
 import { useMemo } from 'react';
-import type { Revision, SheetRow } from '../../../server/contract/readings';
+import type { Revision } from '../../../server/contract/readings';
+import { revisionQuery } from '../../api/sounding-queries';
 import { Button } from '../../ui/button';
 import { Dialog } from '../../ui/dialog';
 import { formatCount, formatMoment } from '../../ui/format';
 import { Cell, HeaderCell, Table, TableBody, TableHead, TableRow } from '../../ui/table';
 import { compareSheets } from './compare-sheets';
+import { rowParts, type RowPart } from './row-parts';
 import type { Sheet } from './use-sheet';
+
+const NO_READINGS = [] as const;
 
 interface SheetConflictDialogProps {
   sheet: Sheet;
@@ -19,14 +24,20 @@ interface SheetConflictDialogProps {
 /** Two people wrote on one sheet: both versions, reading by reading, and a choice. Revisions are never lost either way. */
 export function SheetConflictDialog(props: SheetConflictDialogProps) {
   const { sheet, theirs, working, onSaveMine, onTakeTheirs, onClose } = props;
+  const began = useQuery({
+    ...revisionQuery(sheet.baseRevisionId ?? ''),
+    enabled: sheet.baseRevisionId !== null,
+  });
+  const base = sheet.baseRevisionId === null ? NO_READINGS : (began.data?.readings ?? null);
   const { differences, same } = useMemo(
     () =>
       compareSheets(
         sheet.sheet.readings.map(({ reading }) => reading),
         theirs.readings,
         sheet.content.units,
+        base,
       ),
-    [sheet.sheet, sheet.content.units, theirs],
+    [sheet.sheet, sheet.content.units, theirs, base],
   );
   return (
     <Dialog
@@ -48,7 +59,13 @@ export function SheetConflictDialog(props: SheetConflictDialogProps) {
       <p className="mb-3">
         {differences.length === 0
           ? 'Both versions hold the same readings.'
-          : `${formatCount(differences.length, 'reading')} differ, ${same} are the same in both.`}
+          : `${formatCount(differences.length, 'reading differs', 'readings differ')}, ${same === 1 ? '1 is' : `${same} are`} the same in both.`}{' '}
+        {base && differences.length > 0
+          ? `Bold is what was changed since ${began.data ? `revision ${began.data.number}, which both began from` : 'the sheet was empty'}.`
+          : null}
+        {began.error
+          ? 'Who changed what cannot be told: the revision that both began from could not be read.'
+          : null}
       </p>
       {differences.length === 0 ? null : (
         <Table caption="Readings that differ">
@@ -56,13 +73,23 @@ export function SheetConflictDialog(props: SheetConflictDialogProps) {
             <HeaderCell numeric>Spacing, m</HeaderCell>
             <HeaderCell>Yours</HeaderCell>
             <HeaderCell>Revision {theirs.number}</HeaderCell>
+            {base ? <HeaderCell>Changed in</HeaderCell> : null}
           </TableHead>
           <TableBody>
             {differences.map((difference, i) => (
               <TableRow key={i}>
                 <Cell numeric>{difference.spacing}</Cell>
-                <Cell className="figure">{rowInWords(difference.mine)}</Cell>
-                <Cell className="figure">{rowInWords(difference.theirs)}</Cell>
+                <Cell>
+                  <RowWords parts={rowParts(difference.mine, difference.base)} />
+                </Cell>
+                <Cell>
+                  <RowWords parts={rowParts(difference.theirs, difference.base)} />
+                </Cell>
+                {difference.changedBy ? (
+                  <Cell className="whitespace-nowrap">
+                    {{ me: 'yours', them: `revision ${theirs.number}`, both: 'both' }[difference.changedBy]}
+                  </Cell>
+                ) : null}
               </TableRow>
             ))}
           </TableBody>
@@ -72,21 +99,15 @@ export function SheetConflictDialog(props: SheetConflictDialogProps) {
   );
 }
 
-const VALUES = [
-  ['voltage', 'V'],
-  ['current', 'I'],
-  ['resistance', 'R'],
-  ['apparentResistivity', 'ρa'],
-  ['standardError', 'error'],
-] as const;
-
-function rowInWords(row: SheetRow | null): string {
-  if (row === null) return 'not there';
-  const values = VALUES.flatMap(([column, name]) => {
-    const text = row.cells[column];
-    return text === undefined ? [] : [`${name} ${text}`];
-  });
-  const words = [...values, ...(row.cells.remark ? [row.cells.remark] : [])];
-  if (row.excluded !== null) words.push(`left out: ${row.excluded}`);
-  return words.join(', ');
+function RowWords({ parts }: { parts: readonly RowPart[] }) {
+  return (
+    <ul className="flex flex-wrap gap-x-3">
+      {parts.map(({ text, change }) => (
+        <li key={`${text} ${change}`}>
+          <span className={change === null ? 'figure' : 'figure font-semibold'}>{text}</span>
+          {change === null ? null : <span className="text-sm text-copper"> {change}</span>}
+        </li>
+      ))}
+    </ul>
+  );
 }

@@ -2,6 +2,7 @@ import { describe, expect, it } from 'vitest';
 import { DEFAULT_SHEET_UNITS, type Reading, type SheetRow } from '../../../../server/contract/readings';
 import { compareSheets } from '../../../../src/features/readings/compare-sheets';
 import { importReadiness } from '../../../../src/features/readings/import-readiness';
+import { rowParts } from '../../../../src/features/readings/row-parts';
 import { createSheetReader } from '../../../../src/features/readings/sheet-reader';
 import { startSheet } from '../../../../src/features/readings/start-sheet';
 import { thinReadings } from '../../../../src/features/readings/thin-readings';
@@ -65,6 +66,40 @@ describe('two people on one sheet', () => {
       ['4 / 0.5', undefined, '40'],
     ]);
     expect(compareSheets([reading(1, 1)], [reading(1, 1, 'wet')], DEFAULT_SHEET_UNITS).same).toBe(0);
+  });
+
+  it('tell who changed a reading since the revision both began from, and from what', () => {
+    const { differences } = compareSheets(
+      [reading(1, 11), reading(2, 20), reading(3, 31), reading(4, 40), reading(6, 60)],
+      [reading(1, 10), reading(2, 21), reading(3, 32), reading(5, 50), reading(6, 60, 'wet')],
+      DEFAULT_SHEET_UNITS,
+      [reading(1, 10), reading(2, 20), reading(3, 30), reading(4, 40), reading(6, 60)],
+    );
+    const words = (row: SheetRow | null, base: SheetRow | null | undefined) =>
+      rowParts(row, base)
+        .filter(({ change }) => change !== null)
+        .map(({ text, change }) => `${text} ${change}`.trim());
+    expect(
+      differences.map((found) => [
+        found.spacing.split(' ')[0],
+        found.changedBy,
+        words(found.mine, found.base),
+        words(found.theirs, found.base),
+      ]),
+    ).toEqual([
+      ['1', 'me', ['V 11 was 10'], []],
+      ['2', 'them', [], ['V 21 was 20']],
+      ['3', 'both', ['V 31 was 30'], ['V 32 was 30']],
+      ['4', 'them', [], ['not there taken out']],
+      ['6', 'them', [], ['left out: wet was kept']],
+      ['5', 'them', [], ['added']],
+    ]);
+  });
+
+  it('tell of no change where the revision before is not known', () => {
+    const { differences } = compareSheets([reading(1, 11)], [reading(1, 10)], DEFAULT_SHEET_UNITS);
+    expect(differences[0]).toMatchObject({ base: undefined, changedBy: null });
+    expect(rowParts(differences[0]!.mine, undefined).map(({ change }) => change)).toEqual([null, null]);
   });
 
   it('pair repeats of one spacing in their order', () => {
