@@ -24,6 +24,8 @@ export interface CurvePoint {
   spacing: number;
   /** Ω·m */
   apparentResistivity: number;
+  /** The curve is not drawn through from the point before: another branch begins here. */
+  startsBranch?: boolean | undefined;
 }
 
 /** `run` a computed fit, `hand` the model being moved now, `ghost` what stood before. */
@@ -36,7 +38,7 @@ export interface CurveLine {
   letter: string;
   /** In words, as "4 beds, fitted". */
   name: string;
-  /** In order of spacing. A curve may be denser than the readings. */
+  /** In order of spacing within each branch. A curve may be denser than the readings. */
   points: readonly CurvePoint[];
   /** (ln predicted − ln measured)/σ, one a reading in the readings' order; null where there is none. */
   residuals?: readonly (number | null)[] | undefined;

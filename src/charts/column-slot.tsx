@@ -1,4 +1,5 @@
 import type { ReactNode } from 'react';
+import { formatCount } from '../ui/format';
 import { BoundaryMarks, type MoveBoundary } from './boundary-marks';
 import type { GroundColumn } from './chart-data';
 import { MONO, SANS, type ChartPalette } from './chart-palette';
@@ -91,5 +92,5 @@ function columnSentence(column: GroundColumn): string {
   const reach = column.depthOfInvestigation
     ? `; the data reach about ${column.depthOfInvestigation.toPrecision(2)} m`
     : '';
-  return `${name}: ${column.earth.resistivity.length} beds${reach}`;
+  return `${name}: ${formatCount(column.earth.resistivity.length, 'bed')}${reach}`;
 }

@@ -28,7 +28,7 @@ export function curveSeries(
     silent: true,
     animation: false,
     z: line.kind === 'ghost' ? 2 : line.id === chosen ? 4 : 3,
-    data: line.points.map((point) => [Math.log10(point.spacing), Math.log10(point.apparentResistivity)]),
+    data: lineData(line),
     lineStyle: lineStyle(line, palette, line.id === chosen),
     itemStyle: { color: lineColor(line, palette) },
     endLabel: {
@@ -43,6 +43,14 @@ export function curveSeries(
     },
     labelLayout: { hideOverlap: false },
   }));
+}
+
+/** Points in decades, with a gap before each branch that is not drawn through. */
+function lineData({ points }: CurveLine): (number | null)[][] {
+  return points.flatMap((point) => {
+    const place = [Math.log10(point.spacing), Math.log10(point.apparentResistivity)];
+    return point.startsBranch ? [[place[0] ?? null, null], place] : [place];
+  });
 }
 
 function lineColor(line: CurveLine, palette: ChartPalette): string {

@@ -19,8 +19,8 @@ export function readingFacts(reading: CurveReading, index: number, line: CurveLi
   const of = line && line.letter !== '' ? `, run ${line.letter}` : '';
   if (predicted !== null)
     facts.push({ label: `Predicted${of}`, value: withUnit(formatResistivity(predicted), 'Ω·m') });
+  if (residual !== null) facts.push({ label: `Residual${of}`, value: formatResidual(residual) });
   if (reading.excluded) facts.push({ label: 'Left out', value: reading.reason ?? 'no reason given' });
-  else if (residual !== null) facts.push({ label: `Residual${of}`, value: formatResidual(residual) });
   return facts;
 }
 

@@ -1,15 +1,22 @@
 import type { EChartsOption, XAXisComponentOption, YAXisComponentOption } from 'echarts';
-import type { CurveLine, CurveReading } from './chart-data';
+import type { CurveLine, CurvePoint, CurveReading } from './chart-data';
 import { MONO, SANS, type ChartPalette } from './chart-palette';
 import { curveSeries } from './curve-lines';
 import { curveTooltip } from './curve-tooltip';
 import { gridSeries, readingSeries } from './curve-marks';
 import { labelledTicks, squareLogAxes, tickLabel, type LogAxes, type LogRange } from './log-axes';
+import type { BoxSize } from './use-box-size';
 import { residualPoints, residualSeries, STRIP_SIGMA, stripGridSeries } from './residual-strip';
 
-export interface SoundingCurveInput {
+/** What the axes of a drawing have to hold. */
+export interface CurveContent {
   readings: readonly CurveReading[];
   lines: readonly CurveLine[];
+}
+
+export interface SoundingCurveInput extends CurveContent {
+  /** What the axes hold, where several drawings share them; else what is drawn. */
+  axesOf?: CurveContent | undefined;
   /** The line whose residuals are shown and that is drawn strongest. */
   chosenLine: string | null;
   focusedReading: number | null;
@@ -28,8 +35,11 @@ const AXIS_ROOM = 26;
 const STRIP_HEIGHT = 76;
 const FOOT = 42;
 const STRIP_FOOT = 24;
-/** The curve may have this much empty room above and below it, decades. */
-const SPARE_DECADES = 0.5;
+/** Empty room that a curve may have on both sides together, decades. */
+const SPARE_DECADES_DOWN = 0.5;
+const SPARE_DECADES_ACROSS = 0.3;
+/** A drawing is not made smaller than this to save room, px. */
+const LEAST_SIDE = 260;
 
 export interface CurveLayout {
   plot: { left: number; top: number; width: number; height: number };
@@ -47,29 +57,42 @@ export function curveLayout(width: number, height: number, hasStrip: boolean): C
 }
 
 /**
- * Height for a width, px: square decades tie the two, so a narrow drawing is made lower rather than left half empty.
- * Between 260 and `maxHeight`.
+ * Size of a drawing within a width and a height, px: square decades tie the two, so it is made lower or narrower rather
+ * than left half empty. At least 260 either way where there is that much room.
  */
-export function curveHeight(
-  readings: readonly CurveReading[],
-  lines: readonly CurveLine[],
-  width: number,
-  maxHeight: number,
-): number {
-  const hasStrip = residualLine(lines, null) !== null;
+export function curveSize(content: CurveContent, width: number, maxHeight: number): BoxSize {
+  const hasStrip = residualLine(content.lines, null) !== null;
   const layout = curveLayout(width, maxHeight, hasStrip);
-  const { y, pixelsPerDecade } = soundingAxes(readings, lines, layout);
-  const needed = dataDecades(readings, lines) + SPARE_DECADES;
-  const spare = Math.max(0, y.max - y.min - needed) * pixelsPerDecade;
-  return Math.round(Math.max(Math.min(260, maxHeight), maxHeight - spare));
+  const { x, y, pixelsPerDecade } = soundingAxes(content, layout);
+  const points = pointsOf(content);
+  const trimmed = (whole: number, range: LogRange, values: number[], spareDecades: number) => {
+    const needed = decadesOf(values) + spareDecades;
+    const spare = Math.max(0, range.max - range.min - needed) * pixelsPerDecade;
+    return Math.round(Math.max(Math.min(LEAST_SIDE, whole), whole - spare));
+  };
+  return {
+    width: trimmed(
+      width,
+      x,
+      points.map((point) => point.spacing),
+      SPARE_DECADES_ACROSS,
+    ),
+    height: trimmed(
+      maxHeight,
+      y,
+      points.map((point) => point.apparentResistivity),
+      SPARE_DECADES_DOWN,
+    ),
+  };
 }
 
-function dataDecades(readings: readonly CurveReading[], lines: readonly CurveLine[]): number {
-  const points = [
-    ...readings,
-    ...lines.filter((line) => line.kind !== 'ghost').flatMap((line) => line.points),
-  ];
-  const logs = points.map((point) => Math.log10(point.apparentResistivity)).filter(Number.isFinite);
+const pointsOf = ({ readings, lines }: CurveContent): CurvePoint[] => [
+  ...readings,
+  ...lines.filter((line) => line.kind !== 'ghost').flatMap((line) => line.points),
+];
+
+function decadesOf(values: readonly number[]): number {
+  const logs = values.map(Math.log10).filter(Number.isFinite);
   return logs.length === 0 ? 1 : Math.max(...logs) - Math.min(...logs);
 }
 
@@ -84,7 +107,7 @@ export function soundingCurveOption(input: SoundingCurveInput): EChartsOption {
   const { readings, lines, palette, focusedReading, width, height } = input;
   const shown = residualLine(lines, input.chosenLine);
   const layout = curveLayout(width, height, shown !== null);
-  const axes = soundingAxes(readings, lines, layout);
+  const axes = soundingAxes(input.axesOf ?? input, layout);
   const strip =
     shown?.residuals && layout.strip
       ? [
@@ -108,18 +131,14 @@ export function soundingCurveOption(input: SoundingCurveInput): EChartsOption {
   };
 }
 
-export function soundingAxes(
-  readings: readonly CurveReading[],
-  lines: readonly CurveLine[],
-  { plot }: CurveLayout,
-): LogAxes {
-  const points = lines.filter((line) => line.kind !== 'ghost').flatMap((line) => line.points);
-  const spread = readings.flatMap(({ apparentResistivity, relativeError }) => [
+export function soundingAxes(content: CurveContent, { plot }: CurveLayout): LogAxes {
+  const points = pointsOf(content);
+  const spread = content.readings.flatMap(({ apparentResistivity, relativeError }) => [
     apparentResistivity * Math.exp(relativeError),
     apparentResistivity * Math.exp(-relativeError),
   ]);
   return squareLogAxes(
-    [...readings, ...points].map((point) => point.spacing),
+    points.map((point) => point.spacing),
     [...spread, ...points.map((point) => point.apparentResistivity)],
     plot.width,
     plot.height,

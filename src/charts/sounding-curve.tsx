@@ -5,7 +5,7 @@ import { useChartPalette } from './chart-palette';
 import { curveTable } from './curve-table';
 import { echarts, ReactECharts } from './echarts-svg';
 import { readingFacts, readingSentence } from './reading-facts';
-import { curveHeight, residualLine, soundingCurveOption } from './sounding-curve-option';
+import { curveSize, residualLine, soundingCurveOption, type CurveContent } from './sounding-curve-option';
 import { useBoxSize } from './use-box-size';
 
 export interface SoundingCurveProps {
@@ -13,6 +13,8 @@ export interface SoundingCurveProps {
   lines: readonly CurveLine[];
   /** The line drawn strongest, whose residuals stand below. */
   chosenLine?: string | null;
+  /** What the axes hold, where several drawings share them. */
+  axesOf?: CurveContent;
   /** Name of the x axis with its unit, as "AB/2, m". */
   spacingName: string;
   title?: string;
@@ -35,7 +37,7 @@ export function SoundingCurve(props: SoundingCurveProps) {
     title = 'Apparent resistivity',
     className,
   } = props;
-  const { maxHeight = tallest(), onFocusReading } = props;
+  const { maxHeight = tallest(), axesOf, onFocusReading } = props;
   const palette = useChartPalette();
   const { ref, size } = useBoxSize<HTMLDivElement>();
   const [focused, setFocused] = useState<number | null>(null);
@@ -44,16 +46,16 @@ export function SoundingCurve(props: SoundingCurveProps) {
     setFocused(index);
     onFocusReading?.(index);
   };
-  const { width } = size;
-  const height = useMemo(
-    () => curveHeight(readings, lines, width, maxHeight),
-    [readings, lines, width, maxHeight],
+  const { width, height } = useMemo(
+    () => curveSize(axesOf ?? { readings, lines }, size.width, maxHeight),
+    [axesOf, readings, lines, size.width, maxHeight],
   );
   const option = useMemo(
     () =>
       soundingCurveOption({
         readings,
         lines,
+        axesOf,
         chosenLine,
         focusedReading,
         spacingName,
@@ -61,7 +63,7 @@ export function SoundingCurve(props: SoundingCurveProps) {
         height,
         palette,
       }),
-    [readings, lines, chosenLine, focusedReading, spacingName, width, height, palette],
+    [readings, lines, axesOf, chosenLine, focusedReading, spacingName, width, height, palette],
   );
   const table = useMemo(() => curveTable(readings, lines, spacingName), [readings, lines, spacingName]);
   const shown = residualLine(lines, chosenLine);

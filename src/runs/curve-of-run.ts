@@ -1,7 +1,8 @@
-import type { LayeredEarthModel } from '../../server/contract/fit';
+import type { FitReading, LayeredEarthModel } from '../../server/contract/fit';
 import type { Revision } from '../../server/contract/readings';
 import type { Run } from '../../server/contract/runs';
 import type { CurveLine, CurvePoint, CurveReading, GroundColumn } from '../charts/chart-data';
+import { curvePlaces, type CurvePlace } from './curve-places';
 import { letterOfRun, titleOfRun } from './run-title';
 import { spacingLabel } from '../soundings/spread-words';
 
@@ -80,8 +81,8 @@ export function curvePoints(kept: readonly KeptReading[], predicted: readonly nu
 export interface BeyondReadings {
   /** One a reading that was left out. */
   excluded: readonly number[];
-  /** The curve between the readings. */
-  points: readonly CurvePoint[];
+  /** The curve between the readings; null where these lie dense enough to be joined. */
+  points: readonly CurvePoint[] | null;
 }
 
 /** (ln predicted − ln measured)/σ of each reading that was left out; these took no part in the fit. */
@@ -110,6 +111,29 @@ export function lineOfRun(run: Run, beyond: BeyondReadings | null = null): Curve
   };
 }
 
+/** What the engine is asked for to draw a model whole: the readings left out, then the curve between the readings. */
+export interface CurveRequest {
+  excluded: readonly ExcludedReading[];
+  places: readonly CurvePlace[];
+}
+
+export const curveRequest = ({ kept, excluded }: CurveData): CurveRequest => ({
+  excluded,
+  places: curvePlaces(kept.map((reading) => reading.spread)),
+});
+
+export const spreadsOf = ({ excluded, places }: CurveRequest): FitReading['spread'][] =>
+  [...excluded, ...places].map(({ spread }) => spread);
+
+/** The engine's answer to `spreadsOf`, Ω·m. What has no logarithm is not drawn. */
+export function beyondOf({ excluded, places }: CurveRequest, predicted: readonly number[]): BeyondReadings {
+  const points = places.flatMap(({ spacing, startsBranch }, i): CurvePoint[] => {
+    const apparentResistivity = predicted[excluded.length + i] ?? 0;
+    return apparentResistivity > 0 ? [{ spacing, apparentResistivity, startsBranch }] : [];
+  });
+  return { excluded: predicted.slice(0, excluded.length), points: points.length > 0 ? points : null };
+}
+
 /** Beds of which any value was held in the fit. */
 export function heldBeds(run: Pick<Run, 'settings'>): number[] {
   return [...new Set(run.settings.fixed.map((held) => held.index))].toSorted((a, b) => a - b);
@@ -129,6 +153,10 @@ export function columnOfRun(run: Run, bedNotes?: readonly (string | null)[]): Gr
 }
 
 /** A model by hand has no intervals: nothing was computed about its doubt. */
-export function columnOfHand(earth: LayeredEarthModel, lockedBeds: readonly number[]): GroundColumn {
-  return { id: 'hand', letter: '', name: 'By hand', earth, lockedBeds };
+export function columnOfHand(
+  earth: LayeredEarthModel,
+  name: string,
+  lockedBeds: readonly number[],
+): GroundColumn {
+  return { id: 'hand', letter: '', name, earth, lockedBeds };
 }

@@ -51,7 +51,7 @@ function NoGround({ model }: { model: ModelHandle }) {
 function Column({ sounding, run, model, selectedBed, onSelectBed }: Omit<BenchGroundProps, 'part'>) {
   const { earth } = model;
   const column: GroundColumn | null = model.hand
-    ? columnOfHand(model.hand, bedsHeld(model.held))
+    ? columnOfHand(model.hand, model.handName, bedsHeld(model.held))
     : run && columnOfRun(run);
   if (!column || !earth) return null;
   return (

@@ -43,7 +43,7 @@ export function BenchWorkspace({ sounding, revision, runs, run }: BenchWorkspace
     [data],
   );
   const model = useModel(sounding.id, run, fallback);
-  const curve = useBenchCurve(data, run, model.hand);
+  const curve = useBenchCurve(data, run, model);
   const { takeUpRun } = model;
   const open = useCallback(
     (opened: Pick<RunSummary, 'id'>) => {
@@ -64,7 +64,7 @@ export function BenchWorkspace({ sounding, revision, runs, run }: BenchWorkspace
         onFit={can.run ? () => commands.current?.fit() : null}
         onUndo={model.undo}
         onRedo={model.redo}
-        className="grid min-w-0 grid-cols-1 content-start lg:col-span-2 lg:grid-cols-subgrid"
+        className="grid min-w-0 grid-cols-1 content-start lg:col-span-2 lg:grid-cols-subgrid lg:content-stretch"
       >
         <div className="flex min-w-0 flex-col gap-6 px-4 py-5 sm:px-7 lg:order-2 lg:border-l lg:border-rule">
           <BenchDrawing sounding={sounding} data={data} run={run} curve={curve} />
@@ -96,7 +96,7 @@ export function BenchWorkspace({ sounding, revision, runs, run }: BenchWorkspace
               </h2>
               <LayerLadder
                 counts={run.result.layerCounts}
-                onTakeUp={(earth) => model.edit(earth)}
+                onTakeUp={model.lookAt}
                 onAdopt={can.run ? (earth) => commands.current?.fitCount(run.settings, earth) : undefined}
               />
             </section>

@@ -18,7 +18,7 @@ export function HandBar({ model, runLetter, children }: HandBarProps) {
       <h2 className="mr-auto font-semibold">
         Beds
         <span className="ml-3 text-sm font-normal text-muted">
-          {model.hand ? 'by hand' : runLetter === null ? '' : `run ${runLetter}`}
+          {model.hand ? model.handName : runLetter === null ? '' : `run ${runLetter}`}
         </span>
       </h2>
       {model.hand ? (

@@ -7,6 +7,8 @@ export interface HandState {
   earth: LayeredEarthModel | null;
   /** Values held in the next fit, as "resistivity 0". */
   held: readonly string[] | null;
+  /** Where the model comes from while it stands untouched; absent for one made by hand. */
+  name?: string;
 }
 
 interface HandHistory {
@@ -22,6 +24,8 @@ interface HandModelStore {
   begin: (soundingId: string, earth: LayeredEarthModel) => void;
   /** From the model that was shown to the one wanted; edits of one gesture (one drag) are undone as one. */
   edit: (soundingId: string, from: LayeredEarthModel, to: LayeredEarthModel, gesture?: string) => void;
+  /** A model that was computed, to look at and to go on from. */
+  lookAt: (soundingId: string, earth: LayeredEarthModel, name: string) => void;
   hold: (soundingId: string, held: readonly string[]) => void;
   /** Back to the run's own model, or on to another run: undone like any other edit. */
   takeUpRun: (soundingId: string) => void;
@@ -74,6 +78,8 @@ export const useHandModelStore = create<HandModelStore>()((set) => {
           ? history
           : advance(history, { earth: to, held: heldAfter(history.now, from, to) }, gesture),
       ),
+    lookAt: (soundingId, earth, name) =>
+      change(soundingId, (history) => advance(history, { earth, held: [], name })),
     hold: (soundingId, held) => change(soundingId, (history) => advance(history, { ...history.now, held })),
     takeUpRun: (soundingId) =>
       change(soundingId, (history) =>

@@ -1,12 +1,13 @@
 import type { FitResult, LayeredEarthModel } from '../../../server/contract/fit';
+import { bedCount } from '../../runs/run-title';
 import { Button } from '../../ui/button';
 import { formatFixed, formatMisfit } from '../../ui/format';
 import { Cell, HeaderCell, Table, TableBody, TableHead, TableRow } from '../../ui/table';
 
 export interface LayerLadderProps {
   counts: NonNullable<FitResult['layerCounts']>;
-  /** Takes one count's model up by hand, to look at and to fit from. */
-  onTakeUp: (earth: LayeredEarthModel) => void;
+  /** Takes one count's model up, under the name given, to look at and to fit from. */
+  onTakeUp: (earth: LayeredEarthModel, name: string) => void;
   /** Asks for a run of this count; absent where the reader may not run. */
   onAdopt?: ((earth: LayeredEarthModel) => void) | undefined;
 }
@@ -39,14 +40,14 @@ export function LayerLadder({ counts, onTakeUp, onAdopt }: LayerLadderProps) {
                   <span className="text-sm font-semibold">chosen</span>
                 ) : (
                   <>
-                    <Button kind="quiet" size="small" onClick={() => onTakeUp(count.earth)}>
+                    <Button kind="quiet" size="small" onClick={() => onTakeUp(count.earth, `${bedCount(count.layers)}, from the ladder`)}>
                       Look
-                      <span className="sr-only"> at the model of {count.layers} beds</span>
+                      <span className="sr-only"> at the model of {bedCount(count.layers)}</span>
                     </Button>
                     {onAdopt ? (
                       <Button kind="quiet" size="small" onClick={() => onAdopt(count.earth)}>
                         Adopt
-                        <span className="sr-only"> {count.layers} beds</span>
+                        <span className="sr-only"> {bedCount(count.layers)}</span>
                       </Button>
                     ) : null}
                   </>

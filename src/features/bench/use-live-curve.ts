@@ -1,10 +1,11 @@
 import { useEffect, useRef, useState } from 'react';
-import type { LayeredEarthModel } from '../../../server/contract/fit';
-import type { KeptReading } from '../../runs/curve-of-run';
+import type { FitReading, LayeredEarthModel } from '../../../server/contract/fit';
 import { predictCurve } from '../../workers/engine';
 
+type Spreads = readonly FitReading['spread'][];
+
 export interface LiveCurve {
-  /** Ω·m, one a kept reading; of the newest model that has been computed */
+  /** Ω·m, one a spread; of the newest model that has been computed */
   predicted: readonly number[] | null;
   fault: string | null;
 }
@@ -12,18 +13,18 @@ export interface LiveCurve {
 const NONE: LiveCurve = { predicted: null, fault: null };
 
 /** The curve of a model under the hand, computed beside the page; while one is under way only the newest waits. */
-export function useLiveCurve(kept: readonly KeptReading[], earth: LayeredEarthModel | null): LiveCurve {
+export function useLiveCurve(spreads: Spreads, earth: LayeredEarthModel | null): LiveCurve {
   const [curve, setCurve] = useState<LiveCurve>(NONE);
-  const wanted = useRef<{ kept: readonly KeptReading[]; earth: LayeredEarthModel } | null>(null);
+  const wanted = useRef<{ spreads: Spreads; earth: LayeredEarthModel } | null>(null);
   const isComputing = useRef(false);
   useEffect(() => {
-    wanted.current = earth && kept.length > 0 ? { kept, earth } : null;
+    wanted.current = earth && spreads.length > 0 ? { spreads, earth } : null;
     if (isComputing.current) return;
     const computeNewest = async () => {
       isComputing.current = true;
       while (wanted.current) {
         const job = wanted.current;
-        const next = await computed(job.kept, job.earth);
+        const next = await computed(job.spreads, job.earth);
         if (wanted.current === null) break;
         setCurve(next);
         if (wanted.current === job) break;
@@ -31,17 +32,13 @@ export function useLiveCurve(kept: readonly KeptReading[], earth: LayeredEarthMo
       isComputing.current = false;
     };
     void computeNewest();
-  }, [kept, earth]);
+  }, [spreads, earth]);
   return earth === null ? NONE : curve;
 }
 
-async function computed(kept: readonly KeptReading[], earth: LayeredEarthModel): Promise<LiveCurve> {
+async function computed(spreads: Spreads, earth: LayeredEarthModel): Promise<LiveCurve> {
   try {
-    const predicted = await predictCurve(
-      kept.map((reading) => reading.spread),
-      earth,
-    );
-    return { predicted: [...predicted], fault: null };
+    return { predicted: [...(await predictCurve(spreads, earth))], fault: null };
   } catch (error) {
     return { predicted: null, fault: error instanceof Error ? error.message : String(error) };
   }

@@ -9,10 +9,14 @@ export interface ModelHandle {
   earth: LayeredEarthModel | null;
   /** The model by hand; null while the run's own is shown. */
   hand: LayeredEarthModel | null;
+  /** What the model by hand is, as "5 beds, from the ladder". */
+  handName: string;
   held: readonly string[];
   canUndo: boolean;
   canRedo: boolean;
   edit: (next: LayeredEarthModel, gesture?: string) => void;
+  /** Puts a computed model on the Bench, under its name until it is changed. */
+  lookAt: (earth: LayeredEarthModel, name: string) => void;
   setHeld: (value: ModelValue, isHeld: boolean) => void;
   releaseAll: () => void;
   /** Puts a first model down where no run is there; null where the readings give none. */
@@ -37,10 +41,12 @@ export function useModel(
   return {
     earth,
     hand,
+    handName: history.now.name ?? 'by hand',
     held,
     canUndo: history.past.length > 0,
     canRedo: history.future.length > 0,
     edit: (next, gesture) => earth && store.edit(soundingId, earth, next, gesture),
+    lookAt: (next, name) => store.lookAt(soundingId, next, name),
     setHeld: (value, isHeld) => {
       const others = held.filter((key) => key !== heldKey(value));
       store.hold(soundingId, isHeld ? [...others, heldKey(value)] : others);

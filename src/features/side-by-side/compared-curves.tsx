@@ -3,8 +3,10 @@ import { useSearchParams } from 'react-router-dom';
 import type { Run } from '../../../server/contract/runs';
 import type { Sounding } from '../../../server/contract/soundings';
 import { SoundingCurve } from '../../charts/sounding-curve';
-import { chartReadings, curveDataOfRun, lineOfRun } from '../../runs/curve-of-run';
+import { chartReadings, curveDataOfRun } from '../../runs/curve-of-run';
+import { isRejected, REJECTED_WORDS } from '../../runs/rejected-fit';
 import { letterOfRun, titleOfRun } from '../../runs/run-title';
+import { useRunLines } from '../../runs/use-run-lines';
 import { SPACING_AXIS } from '../../soundings/spread-words';
 import { Segmented } from '../../ui/segmented';
 
@@ -41,11 +43,7 @@ export function ComparedCurves({ sounding, runs, base }: ComparedCurvesProps) {
       {view === 'overlaid' ? (
         <OverlaidCurves sounding={sounding} runs={runs} base={base} />
       ) : (
-        <div className="grid gap-x-8 gap-y-8 md:grid-cols-2 2xl:grid-cols-3">
-          {runs.map((run) => (
-            <CurveApart key={run.id} sounding={sounding} run={run} />
-          ))}
-        </div>
+        <CurvesApart sounding={sounding} runs={runs} />
       )}
     </section>
   );
@@ -53,16 +51,17 @@ export function ComparedCurves({ sounding, runs, base }: ComparedCurvesProps) {
 
 function OverlaidCurves({ sounding, runs, base }: ComparedCurvesProps) {
   const readings = useMemo(() => chartReadings(curveDataOfRun(base)), [base]);
-  const lines = useMemo(() => {
-    // Where the readings differ, another run's residuals do not belong to the readings drawn.
-    const bare = (run: Run) => run.revisionId !== base.revisionId;
-    return runs.flatMap((run) => {
-      const line = lineOfRun(run);
-      if (!line) return [];
-      const { residuals: _residuals, predicted: _predicted, ...curve } = line;
-      return [bare(run) ? curve : line];
-    });
-  }, [runs, base]);
+  const whole = useRunLines(runs);
+  const lines = useMemo(
+    () =>
+      whole.map((line) => {
+        // Where the readings differ, another run's residuals do not belong to the readings drawn.
+        const isOfBase = runs.some((run) => run.id === line.id && run.revisionId === base.revisionId);
+        const { residuals: _residuals, predicted: _predicted, ...bare } = line;
+        return isOfBase ? line : bare;
+      }),
+    [whole, runs, base],
+  );
   return (
     <SoundingCurve
       readings={readings}
@@ -75,19 +74,26 @@ function OverlaidCurves({ sounding, runs, base }: ComparedCurvesProps) {
   );
 }
 
-function CurveApart({ sounding, run }: { sounding: Sounding; run: Run }) {
-  const readings = useMemo(() => chartReadings(curveDataOfRun(run)), [run]);
-  const lines = useMemo(() => [lineOfRun(run)].filter((line) => line !== null), [run]);
+function CurvesApart({ sounding, runs }: Omit<ComparedCurvesProps, 'base'>) {
+  const lines = useRunLines(runs);
+  const readings = useMemo(() => runs.map((run) => chartReadings(curveDataOfRun(run))), [runs]);
+  const axesOf = useMemo(() => ({ readings: readings.flat(), lines }), [readings, lines]);
   return (
-    <SoundingCurve
-      readings={readings}
-      lines={lines}
-      chosenLine={run.id}
-      spacingName={SPACING_AXIS[sounding.spreadType]}
-      title={`Run ${letterOfRun(run)}`}
-      note={`Ω·m, ${titleOfRun(run)}`}
-      subject={sounding.name}
-      maxHeight={380}
-    />
+    <div className="grid gap-x-8 gap-y-8 md:grid-cols-2 2xl:grid-cols-3">
+      {runs.map((run, i) => (
+        <SoundingCurve
+          key={run.id}
+          readings={readings[i] ?? []}
+          lines={lines.filter((line) => line.id === run.id)}
+          axesOf={axesOf}
+          chosenLine={run.id}
+          spacingName={SPACING_AXIS[sounding.spreadType]}
+          title={`Run ${letterOfRun(run)}`}
+          note={isRejected(run.result) ? `${titleOfRun(run)}, ${REJECTED_WORDS}` : titleOfRun(run)}
+          subject={sounding.name}
+          maxHeight={380}
+        />
+      ))}
+    </div>
   );
 }

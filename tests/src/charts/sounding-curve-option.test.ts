@@ -9,8 +9,8 @@ import { curveTable } from '../../../src/charts/curve-table';
 import { readingFacts, readingSentence } from '../../../src/charts/reading-facts';
 import { residualPoints } from '../../../src/charts/residual-strip';
 import {
-  curveHeight,
   curveLayout,
+  curveSize,
   residualLine,
   soundingAxes,
   soundingCurveOption,
@@ -83,22 +83,38 @@ describe('axes', () => {
 
   test('whiskers and curves lie inside the range, a ghost does not stretch it', () => {
     const layout = curveLayout(800, 480, true);
-    const plain = soundingAxes(readings, lines, layout);
+    const plain = soundingAxes({ readings, lines }, layout);
     const ghost: CurveLine = {
       ...lines[0]!,
       id: 'g',
       kind: 'ghost',
       points: [{ spacing: 5, apparentResistivity: 1e6 }],
     };
-    expect(soundingAxes(readings, [...lines, ghost], layout)).toEqual(plain);
+    expect(soundingAxes({ readings, lines: [...lines, ghost] }, layout)).toEqual(plain);
     const far: CurveLine = { ...ghost, kind: 'hand' };
-    expect(soundingAxes(readings, [...lines, far], layout).y.max).toBeGreaterThan(6);
+    expect(soundingAxes({ readings, lines: [...lines, far] }, layout).y.max).toBeGreaterThan(6);
   });
 
-  test('a narrow drawing is lower', () => {
-    expect(curveHeight(readings, lines, 360, 600)).toBeLessThan(450);
-    expect(curveHeight(readings, lines, 360, 600)).toBeGreaterThanOrEqual(260);
-    expect(curveHeight(readings, lines, 1600, 480)).toBe(480);
+  test('a narrow drawing is lower, a low one narrower', () => {
+    const narrow = curveSize({ readings, lines }, 360, 600);
+    expect(narrow.width).toBe(360);
+    expect(narrow.height).toBeLessThan(450);
+    expect(narrow.height).toBeGreaterThanOrEqual(260);
+    const low = curveSize({ readings, lines }, 1600, 480);
+    expect(low.height).toBe(480);
+    const axes = soundingAxes({ readings, lines }, curveLayout(low.width, low.height, true));
+    expect(axes.x.max - axes.x.min).toBeLessThan(Math.log10(300 / 1.5) + 0.31);
+  });
+
+  test('drawings that share their axes have the same', () => {
+    const far = { ...lines[1]!, points: [{ spacing: 4000, apparentResistivity: 5 }] };
+    const shared = { readings, lines: [lines[0]!, far] };
+    const rangeOf = (of: Partial<SoundingCurveInput>) => {
+      const [x] = listOf(soundingCurveOption({ ...input, ...of }).xAxis) as { max: number }[];
+      return x!.max;
+    };
+    expect(rangeOf({ lines: [lines[0]!] })).toBeLessThan(Math.log10(4000));
+    expect(rangeOf({ lines: [lines[0]!], axesOf: shared })).toBe(rangeOf({ lines: [far], axesOf: shared }));
   });
 });
 
@@ -110,6 +126,13 @@ describe('drawing', () => {
     expect(svg).toContain('stroke-dasharray="7,4"');
     expect(svg).toContain(palette.runs[0]!);
     expect(svg).toContain(palette.runs[1]!);
+  });
+
+  test('a curve has a gap before a branch that it is not drawn through to', () => {
+    const points = lines[0]!.points.map((point, i) => ({ ...point, startsBranch: i === 2 }));
+    const series = listOf(soundingCurveOption({ ...input, lines: [{ ...lines[0]!, points }] }).series);
+    const { data } = series.find((one) => one.id === 'curve-A') as { data: (number | null)[][] };
+    expect(data.map(([, y]) => y === null)).toEqual([false, false, true, false, false]);
   });
 
   test('the axis is numbered 1, 2, 5 with its unit', () => {
@@ -165,9 +188,11 @@ describe('words', () => {
     expect(readingSentence(facts)).toContain('residual, run A \u22122.40\u00a0standard errors');
   });
 
-  test('a left out reading says why and has no residual', () => {
+  test('a left out reading says why, with the residual it would have', () => {
     const facts = readingFacts(readings[1]!, 1, lines[0]!);
     expect(facts.at(-1)).toEqual({ label: 'Left out', value: 'wet cable' });
+    const told = readingFacts(readings[1]!, 1, lineOf('B', [1, 2.5, 1, 1]));
+    expect(told.slice(-2).map((fact) => fact.value)).toEqual(['+2.50\u00a0σ', 'wet cable']);
   });
 
   test('an unknown error is not shown as 0 %', () => {

@@ -1,11 +1,14 @@
 import { expect, it } from 'vitest';
 import type { Revision } from '../../../server/contract/readings';
 import {
+  beyondOf,
   chartReadings,
   curveDataOfRevision,
   curvePoints,
+  curveRequest,
   overReadings,
   residualsOf,
+  spreadsOf,
 } from '../../../src/runs/curve-of-run';
 
 const reading = (halfAB: number, excluded: string | null = null): Revision['readings'][number] => ({
@@ -68,6 +71,20 @@ it('lays values of the kept readings, then of those left out, over all readings'
 it('tells how far a curve passes from a reading that was left out, in its own error', () => {
   const [residual] = residualsOf(curveDataOfRevision(revision).excluded, [95 * Math.exp(0.072)]);
   expect(residual).toBeCloseTo(2, 12);
+});
+
+it('asks the engine for the readings left out and then for the curve, and tells its answer apart', () => {
+  const request = curveRequest(curveDataOfRevision(revision));
+  const spreads = spreadsOf(request);
+  expect(spreads[0]).toEqual({ type: 'schlumberger', halfAB: 6.8, halfMN: 0.5 });
+  expect(spreads).toHaveLength(1 + 18);
+  const beyond = beyondOf(
+    request,
+    spreads.map((_, i) => (i === 1 ? -1 : 100 + i)),
+  );
+  expect(beyond.excluded).toEqual([100]);
+  expect(beyond.points?.[0]).toMatchObject({ apparentResistivity: 102 });
+  expect(beyond.points).toHaveLength(17);
 });
 
 it('orders a predicted curve by spacing and leaves out what has no logarithm', () => {

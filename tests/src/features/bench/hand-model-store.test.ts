@@ -67,3 +67,14 @@ it('keeps soundings apart', () => {
   store().edit('a', run, first);
   expect(historyOf(store(), 'b').now.earth).toBeNull();
 });
+
+it('names a model taken from elsewhere until it is changed', () => {
+  store().lookAt('a', first, '2 beds, from the ladder');
+  expect(now()).toEqual({ earth: first, held: [], name: '2 beds, from the ladder' });
+  store().hold('a', ['resistivity 0']);
+  expect(now().name).toBe('2 beds, from the ladder');
+  store().edit('a', first, second);
+  expect(now().name).toBeUndefined();
+  store().undo('a');
+  expect(now().name).toBe('2 beds, from the ladder');
+});
