@@ -1,5 +1,5 @@
-import { DEFAULT_BOUNDS, type FitSettings } from '../../server/contract/fit';
-import { formatSignificant, withUnit } from '../ui/format';
+import { DEFAULT_BOUNDS, type FitSettings, type LayeredEarthModel } from '../../server/contract/fit';
+import { formatLength, formatResistivity, formatSignificant, withUnit } from '../ui/format';
 import { bedCount } from './run-title';
 
 const UNIT = { resistivity: 'Ω·m', thickness: 'm' } as const;
@@ -23,9 +23,25 @@ export function settingsWords(settings: FitSettings): { label: string; value: st
       label: 'Beds',
       value: settings.layers === 'auto' ? 'count to be found, 1 to 8' : bedCount(settings.layers),
     },
-    { label: 'Start', value: settings.start ? 'a given model, beside the curve' : 'the curve' },
+    {
+      label: 'Start',
+      value: settings.start ? `a model beside the curve: ${earthWords(settings.start)}` : 'the curve',
+    },
     ...(held.length > 0 ? [{ label: 'Held', value: held.join('; ') }] : []),
     ...bounds,
     { label: 'Seed', value: String(settings.seed) },
   ];
+}
+
+/** "120 Ω·m to 2.1 m, 45 Ω·m to 15.4 m, 300 Ω·m below"; depths from the surface. */
+function earthWords({ resistivity, thickness }: LayeredEarthModel): string {
+  let depth = 0;
+  return resistivity
+    .map((value, i) => {
+      const bed = withUnit(formatResistivity(value), UNIT.resistivity);
+      const height = thickness[i];
+      if (height !== undefined) return `${bed} to ${withUnit(formatLength((depth += height)), 'm')}`;
+      return i === 0 ? `${bed} throughout` : `${bed} below`;
+    })
+    .join(', ');
 }

@@ -3,6 +3,7 @@ import type { SurveyCan } from '../../../server/contract/roles';
 import type { RunSummary } from '../../../server/contract/runs';
 import { runStyle } from '../../charts/run-style';
 import { useChartPalette } from '../../charts/chart-palette';
+import { cacheWords } from '../../runs/cache-words';
 import { InterpretationStateMark } from '../../runs/interpretation-state-mark';
 import { MiniColumn } from '../../runs/mini-column';
 import { RejectedMark } from '../../runs/rejected-mark';
@@ -105,7 +106,7 @@ function RunMarks({ run, runs }: { run: RunSummary; runs: readonly RunSummary[] 
         <Pin aria-hidden size={12} /> pinned
       </span>
     ),
-    run.fromCache && <Badge key="cache">from an earlier run</Badge>,
+    run.fromCache && <Badge key="cache">{cacheWords(run, runs)}</Badge>,
     run.ofOlderReadings && (
       <Badge key="older" tone="copper">
         older readings, revision {run.revisionNumber}

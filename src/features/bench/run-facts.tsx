@@ -3,6 +3,7 @@ import type { Run, RunSummary } from '../../../server/contract/runs';
 import { fitStatusMessage } from '../../../inversion';
 import { messageOf } from '../../api/api-error';
 import { addressOf } from '../../app/addresses';
+import { cacheWords } from '../../runs/cache-words';
 import { settingsWords } from '../../runs/run-settings-words';
 import { letterOfRun } from '../../runs/run-title';
 import { Button, ButtonLink } from '../../ui/button';
@@ -30,7 +31,7 @@ export function RunFacts({ run, runs, can }: RunFactsProps) {
       label: 'Computed',
       value: [
         run.durationMs === null ? null : `in ${formatDuration(run.durationMs)}`,
-        run.fromCache ? 'answered from an earlier run' : null,
+        run.fromCache ? cacheWords(run, runs) : null,
         `engine ${run.engineVersion}`,
       ]
         .filter((part) => part !== null)

@@ -42,7 +42,7 @@ export function Comparison({ sounding, runs, baseId, onBase }: ComparisonProps) 
   const revisions = new Set(ordered.map((run) => run.revisionNumber));
   return (
     <div className="mt-6 flex flex-col gap-9">
-      <Field label="Held against run" className="w-56 print:hidden">
+      <Field label="Compare with run" className="w-56 print:hidden">
         <Select
           value={base.id}
           onChange={(event) => onBase(event.target.value)}

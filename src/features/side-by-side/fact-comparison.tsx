@@ -20,12 +20,15 @@ export function FactComparison({ title, runs, rows }: FactComparisonProps) {
         <TableBody>
           {rows.map((row) => (
             <TableRow key={row.label}>
-              <Cell className="whitespace-nowrap text-muted">
+              <Cell className="align-top text-muted">
                 {row.label}
-                {row.differs ? <span className="ml-2 text-xs text-copper">differs</span> : null}
+                {row.differs ? <span className="block text-xs text-copper">differs</span> : null}
               </Cell>
               {row.values.map((value, i) => (
-                <Cell key={runs[i]?.id ?? i} className={row.differs ? 'font-semibold' : undefined}>
+                <Cell
+                  key={runs[i]?.id ?? i}
+                  className={row.differs ? 'align-top font-semibold' : 'align-top'}
+                >
                   {value}
                 </Cell>
               ))}

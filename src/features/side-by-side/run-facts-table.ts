@@ -31,14 +31,18 @@ export function outcomeRows(runs: readonly FinishedRun[]): FactRow[] {
     ),
     row(
       'S = Σh/ρ',
-      runs.map((run) => withUnit(formatSignificant(run.result.darZarrouk.totalConductanceS), 'S')),
+      runs.map(({ result }) => sumOf(result, result.darZarrouk.totalConductanceS, 'S')),
     ),
     row(
       'T = Σhρ',
-      runs.map((run) => withUnit(formatSignificant(run.result.darZarrouk.totalResistanceOhmM2), 'Ω·m²')),
+      runs.map(({ result }) => sumOf(result, result.darZarrouk.totalResistanceOhmM2, 'Ω·m²')),
     ),
   ];
 }
+
+/** Of the beds above the lowest; one bed alone reaches to any depth and sums to nothing. */
+const sumOf = ({ earth }: FinishedRun['result'], sum: number, unit: string): string =>
+  earth.thickness.length === 0 ? 'none' : withUnit(formatSignificant(sum), unit);
 
 /** What each run was asked for, fact by fact in one order. */
 export function settingRows(runs: readonly FinishedRun[]): FactRow[] {
