@@ -7,6 +7,7 @@ import * as createInterpretations from './20261201000500_create_interpretations'
 import * as createNaturalCollation from './20261201000600_create_natural_collation';
 import * as addUnitsToReadingDraft from './20261201000700_add_units_to_reading_draft';
 import * as createInterpretationContributors from './20261201000800_create_interpretation_contributors';
+import * as addEditedToReviewEvent from './20261201000900_add_edited_to_review_event';
 
 export interface NamedMigration {
   name: string;
@@ -26,4 +27,5 @@ export const migrations: readonly NamedMigration[] = [
     name: '20261201000800_create_interpretation_contributors',
     migration: createInterpretationContributors,
   },
+  { name: '20261201000900_add_edited_to_review_event', migration: addEditedToReviewEvent },
 ];

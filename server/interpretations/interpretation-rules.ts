@@ -1,9 +1,10 @@
 import type { Actor } from '../access/actor';
 import { surveyCan } from '../access/policy';
+import { AppError } from '../errors';
 import type { Interpretation, InterpretationState, ReviewEvent } from '../contract/interpretations';
 import type { WholeInterpretation } from './interpretations-store';
 
-export type Move = Exclude<ReviewEvent['kind'], 'superseded' | 'commented'>;
+export type Move = Exclude<ReviewEvent['kind'], 'superseded' | 'commented' | 'edited'>;
 
 /** The course of an interpretation: from which states each move leads, and to which. */
 export const MOVES: Record<Move, { from: readonly InterpretationState[]; to: InterpretationState }> = {
@@ -33,14 +34,43 @@ export function decideRefusal(actor: Actor, { row, contributorIds }: WholeInterp
   return null;
 }
 
+/** Its author edits it; others do where they could submit it as well. Null = the actor may. */
+export function editRefusal(actor: Actor, { row }: WholeInterpretation): string | null {
+  if (row.author_id === actor.userId || surveyCan(row.role).submit) return null;
+  return `As ${row.role} of this survey you may edit only interpretations of your own; this one is ${row.author_name}’s.`;
+}
+
+/** Only what has left no history is ever deleted. Null = the actor may. */
+export function discardRefusal(actor: Actor, { row, events }: WholeInterpretation): AppError | null {
+  if (row.author_id !== actor.userId && row.role !== 'lead')
+    return new AppError(
+      'forbidden',
+      'Only its author or a lead of the survey may discard an interpretation.',
+    );
+  if (row.state !== 'draft')
+    return new AppError('wrong-state', `It cannot be discarded: ${STATE_WORDS[row.state]}.`);
+  if (events.some(({ kind }) => kind === 'submitted'))
+    return new AppError(
+      'wrong-state',
+      'It cannot be discarded: it was submitted once, and what was submitted is kept.',
+    );
+  if (events.length > 0)
+    return new AppError(
+      'wrong-state',
+      'It cannot be discarded: it was commented on or edited by others, and its history is kept.',
+    );
+  return null;
+}
+
 export function interpretationCan(actor: Actor, whole: WholeInterpretation): Interpretation['can'] {
   const { role, state } = whole.row;
   const can = surveyCan(role);
   return {
-    edit: can.interpret && EDITABLE.includes(state),
+    edit: can.interpret && EDITABLE.includes(state) && editRefusal(actor, whole) === null,
     submit: can.submit && MOVES.submitted.from.includes(state),
     withdraw: can.submit && MOVES.withdrawn.from.includes(state),
     decide: can.decide && MOVES.accepted.from.includes(state) && decideRefusal(actor, whole) === null,
     comment: can.comment,
+    discard: can.interpret && discardRefusal(actor, whole) === null,
   };
 }

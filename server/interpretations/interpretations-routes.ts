@@ -11,6 +11,7 @@ import { endpoint, type Endpoint } from '../http/endpoint';
 import {
   changeInterpretation,
   createInterpretation,
+  discardInterpretation,
   listSoundingInterpretations,
   showInterpretation,
 } from './interpretations-service';
@@ -64,6 +65,16 @@ export const interpretationsEndpoints: Endpoint[] = [
     answers: { 200: interpretationSchema },
     handle: (context, { params, body, version }) =>
       changeInterpretation(context, params.interpretationId, version, body),
+  }),
+  endpoint({
+    method: 'delete',
+    path: '/interpretations/:interpretationId',
+    summary: 'Discard a draft that was never submitted and holds no history',
+    tag,
+    access: 'signed-in',
+    params: interpretationParams,
+    answers: { 204: null },
+    handle: (context, { params }) => discardInterpretation(context, params.interpretationId),
   }),
   endpoint({
     method: 'post',

@@ -1,4 +1,5 @@
 import type { z } from 'zod';
+import type { Actor } from '../access/actor';
 import { recordAudit } from '../access/audit';
 import { getSoundingAccess, requireCan } from '../access/survey-access';
 import { surveyCan } from '../access/policy';
@@ -10,10 +11,12 @@ import type {
 } from '../contract/interpretations';
 import { AppError } from '../errors';
 import type { Work } from '../http/context';
-import { EDITABLE, STATE_WORDS } from './interpretation-rules';
+import { announceRun } from './announce-run';
+import { discardRefusal, editRefusal, EDITABLE, STATE_WORDS } from './interpretation-rules';
 import { presentInterpretation } from './interpretations-presenter';
 import {
   addContributor,
+  deleteInterpretation,
   findRunOfSounding,
   getInterpretation,
   insertInterpretation,
@@ -21,6 +24,7 @@ import {
   updateStatement,
   type WholeInterpretation,
 } from './interpretations-store';
+import { holdSoundingOf, insertEvent } from './review-store';
 
 export async function listSoundingInterpretations(
   { db, actor }: Work,
@@ -38,10 +42,11 @@ export const showInterpretation = async (
   presentInterpretation(actor, await getInterpretation(db, actor, interpretationId));
 
 export async function createInterpretation(
-  { db, actor }: Work,
+  context: Work,
   soundingId: string,
   { runId, title }: z.output<typeof createInterpretationSchema>,
 ): Promise<Interpretation> {
+  const { db, actor } = context;
   const access = await getSoundingAccess(db, actor, soundingId);
   requireCan(access, 'interpret');
   const run = await findRunOfSounding(db, soundingId, runId);
@@ -63,6 +68,7 @@ export async function createInterpretation(
       subject: title,
       details: { soundingId, interpretationId: id },
     });
+    await announceRun(context, trx, soundingId, runId);
     return presentInterpretation(actor, await getInterpretation(trx, actor, id));
   });
 }
@@ -77,6 +83,8 @@ export async function changeInterpretation(
     const before = await getInterpretation(trx, actor, interpretationId);
     const { role, state } = before.row;
     requireCan({ role, can: surveyCan(role) }, 'interpret');
+    const refusal = editRefusal(actor, before);
+    if (refusal) throw new AppError('forbidden', refusal);
     if (!EDITABLE.includes(state))
       throw new AppError(
         'wrong-state',
@@ -89,7 +97,39 @@ export async function changeInterpretation(
         current: presentInterpretation(actor, await getInterpretation(trx, actor, interpretationId)),
       });
     await addContributor(trx, interpretationId, actor.userId);
+    if (beginsStretch(actor, before))
+      await insertEvent(trx, { interpretationId, kind: 'edited', actorId: actor.userId, comment: '' });
     return presentInterpretation(actor, await getInterpretation(trx, actor, interpretationId));
+  });
+}
+
+/** Of edits one after the other by the same person only the first becomes a line of the history. */
+function beginsStretch({ userId }: Actor, { row, events }: WholeInterpretation): boolean {
+  const latest = events.at(-1);
+  return row.author_id !== userId && !(latest?.kind === 'edited' && latest.actor_id === userId);
+}
+
+/** Deletes a draft that nobody was ever asked to review. */
+export async function discardInterpretation(context: Work, interpretationId: string): Promise<void> {
+  const { db, actor } = context;
+  await db.transaction(async (trx) => {
+    await getInterpretation(trx, actor, interpretationId);
+    // whoever edits, comments or submits at this moment is waited for, and counts
+    await holdSoundingOf(trx, interpretationId);
+    const whole = await getInterpretation(trx, actor, interpretationId);
+    const { role, survey_id: surveyId, sounding_id: soundingId, run_id: runId, title } = whole.row;
+    requireCan({ role, can: surveyCan(role) }, 'interpret');
+    const refusal = discardRefusal(actor, whole);
+    if (refusal) throw refusal;
+    await deleteInterpretation(trx, interpretationId);
+    await recordAudit(trx, {
+      actorId: actor.userId,
+      surveyId,
+      action: 'interpretation.discarded',
+      subject: title,
+      details: { soundingId, interpretationId, runId },
+    });
+    await announceRun(context, trx, soundingId, runId);
   });
 }
 

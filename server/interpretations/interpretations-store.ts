@@ -173,6 +173,11 @@ export async function addContributor(trx: Knex, interpretationId: string, userId
     .ignore();
 }
 
+/** With its beds and contributors; the database refuses it where review events are. */
+export async function deleteInterpretation(trx: Knex, interpretationId: string): Promise<void> {
+  await trx('interpretation').where({ id: interpretationId }).delete();
+}
+
 export interface Statement {
   title?: string | undefined;
   narrative?: string | undefined;

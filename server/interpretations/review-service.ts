@@ -6,6 +6,7 @@ import { requireCan } from '../access/survey-access';
 import type { createReviewEventSchema, Interpretation } from '../contract/interpretations';
 import { AppError } from '../errors';
 import type { Work } from '../http/context';
+import { announceRun } from './announce-run';
 import { decideRefusal, MOVES, STATE_WORDS, type Move } from './interpretation-rules';
 import { presentBed, presentInterpretation } from './interpretations-presenter';
 import { addContributor, getInterpretation, type WholeInterpretation } from './interpretations-store';
@@ -65,7 +66,7 @@ async function move(
   input: EventInput,
 ): Promise<void> {
   const { actor } = context;
-  const { id, state, survey_id: surveyId, sounding_id: soundingId, title } = whole.row;
+  const { id, state, survey_id: surveyId, sounding_id: soundingId, run_id: runId, title } = whole.row;
   const refusal = NEEDS[kind] === 'decide' ? decideRefusal(actor, whole) : null;
   if (refusal) throw new AppError('forbidden', refusal);
   if (!MOVES[kind].from.includes(state))
@@ -84,6 +85,7 @@ async function move(
     subject: title,
     details: { soundingId, interpretationId: id },
   });
+  await announceRun(context, trx, soundingId, runId);
 }
 
 /** The whole statement and the run it stands on, as the reviewer gets to see them. */
@@ -98,14 +100,15 @@ async function snapshotOf(trx: Knex, { row, beds }: WholeInterpretation): Promis
   };
 }
 
-async function supersedeAccepted({ actor }: Work, trx: Knex, soundingId: string): Promise<void> {
+async function supersedeAccepted(context: Work, trx: Knex, soundingId: string): Promise<void> {
   const older = await findAccepted(trx, soundingId);
   if (!older) return;
   await setState(trx, older.id, 'superseded');
   await insertEvent(trx, {
     interpretationId: older.id,
     kind: 'superseded',
-    actorId: actor.userId,
+    actorId: context.actor.userId,
     comment: '',
   });
+  await announceRun(context, trx, soundingId, older.run_id);
 }

@@ -21,10 +21,13 @@ export async function setState(
 }
 
 /** What stood accepted for this sounding, to be superseded. */
-export async function findAccepted(trx: Knex, soundingId: string): Promise<{ id: string } | null> {
+export async function findAccepted(
+  trx: Knex,
+  soundingId: string,
+): Promise<{ id: string; run_id: string } | null> {
   const row = await trx('interpretation')
     .where({ sounding_id: soundingId, state: 'accepted' })
-    .first<{ id: string } | undefined>('id');
+    .first<{ id: string; run_id: string } | undefined>('id', 'run_id');
   return row ?? null;
 }
 

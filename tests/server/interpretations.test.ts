@@ -48,7 +48,14 @@ describe('beginning an interpretation', () => {
       [0, 1, 2, 3].map((layer) => [layer, 'unknown', 'unstated', '']),
     );
     expect(made).toMatchObject({ state: 'draft', version: 1, events: [], runNumber: 1 });
-    expect(made.can).toEqual({ edit: true, submit: true, withdraw: false, decide: false, comment: true });
+    expect(made.can).toEqual({
+      edit: true,
+      submit: true,
+      withdraw: false,
+      decide: false,
+      comment: true,
+      discard: true,
+    });
   });
 
   it('takes only a finished run of the same sounding', async () => {
@@ -139,6 +146,111 @@ describe('editing', () => {
     await told(geophysicist, made, 'submitted');
     await told(hydrogeologist, made, 'accepted');
     expect(await edit()).toBe(409);
+  });
+});
+
+describe('editing by others', () => {
+  const edit = async (client: Client, one: Interpretation, title: string) => {
+    const { version } = await read(client, one);
+    return client.patch(`/interpretations/${one.id}`, { title }, version);
+  };
+
+  it('is for those who may submit; an analyst edits only what they began', async () => {
+    const [analyst, colleague] = [
+      await server.signInAs('analyst', survey.id),
+      await server.signInAs('analyst', survey.id),
+    ];
+    const given = await fittedSounding();
+    const theirs = await draft(given, analyst);
+    expect((await edit(analyst, theirs, 'Mine')).status).toBe(200);
+    expect((await edit(geophysicist, theirs, 'Better')).status).toBe(200);
+    const ours = await draft(given);
+    for (const one of [theirs, ours]) {
+      const refused = await edit(colleague, one, 'Other');
+      expect(refused.body).toMatchObject({ status: 403, code: 'forbidden' });
+      expect(refused.body.detail).toContain(`this one is ${one.author.name}’s`);
+      expect((await read(colleague, one)).can.edit).toBe(false);
+      expect((await read(geophysicist, one)).can.edit).toBe(true);
+    }
+    expect((await read(analyst, theirs)).can.edit).toBe(true);
+  });
+
+  it('leaves one line for each stretch of edits by one person, and none for the author', async () => {
+    const made = await draft(await fittedSounding());
+    const other = await server.signInAs('geophysicist', survey.id);
+    const lead = await server.signInAs('lead', survey.id);
+    for (const person of [geophysicist, other, other, lead, lead, other]) await edit(person, made, 'Again');
+    await told(hydrogeologist, made, 'commented', { comment: 'Which clay?' });
+    await edit(other, made, 'Grey clay');
+    const { events } = await read(geophysicist, made);
+    expect(events.map((event) => [event.kind, event.actor.id])).toEqual([
+      ['edited', idOf(other)],
+      ['edited', idOf(lead)],
+      ['edited', idOf(other)],
+      ['commented', idOf(hydrogeologist)],
+      ['edited', idOf(other)],
+    ]);
+    expect(events[0]?.actor.name).toBe(other.user?.name);
+  });
+
+  it('leaves no line where nothing was changed', async () => {
+    const made = await draft(await fittedSounding());
+    const other = await server.signInAs('geophysicist', survey.id);
+    expect((await other.patch(`/interpretations/${made.id}`, { title: 'Late' }, 7)).status).toBe(409);
+    expect((await read(geophysicist, made)).events).toEqual([]);
+  });
+});
+
+describe('discarding', () => {
+  const discard = (client: Client, { id }: Interpretation) => client.delete(`/interpretations/${id}`);
+
+  it('is for its author, or a lead', async () => {
+    const given = await fittedSounding();
+    const [lead, other] = [
+      await server.signInAs('lead', survey.id),
+      await server.signInAs('geophysicist', survey.id),
+    ];
+    const [mine, theirs] = [await draft(given), await draft(given)];
+    const refused = await discard(other, mine);
+    expect(refused.body).toMatchObject({
+      status: 403,
+      detail: 'Only its author or a lead of the survey may discard an interpretation.',
+    });
+    expect((await read(other, mine)).can.discard).toBe(false);
+    expect((await read(lead, theirs)).can.discard).toBe(true);
+    expect((await discard(geophysicist, mine)).status).toBe(204);
+    expect((await discard(lead, theirs)).status).toBe(204);
+    expect((await discard(lead, theirs)).status).toBe(404);
+    const list = await geophysicist.get(`/soundings/${given.soundingId}/interpretations`);
+    expect(list.body.items).toEqual([]);
+    const audited = await db('audit_event').where({ action: 'interpretation.discarded' }).orderBy('at');
+    expect(audited.map((event) => [event.actor_id, event.details.interpretationId])).toEqual([
+      [idOf(geophysicist), mine.id],
+      [idOf(lead), theirs.id],
+    ]);
+  });
+
+  it('is refused once there is a history, which is kept', async () => {
+    const given = await fittedSounding();
+    const inReview = await draft(given);
+    await told(geophysicist, inReview, 'submitted');
+    const cameBack = await draft(given);
+    await told(geophysicist, cameBack, 'submitted');
+    await told(geophysicist, cameBack, 'withdrawn');
+    const spokenOf = await draft(given);
+    await told(hydrogeologist, spokenOf, 'commented', { comment: 'Which clay?' });
+    for (const [one, detail] of [
+      [inReview, 'It cannot be discarded: it is in review.'],
+      [cameBack, 'It cannot be discarded: it was submitted once, and what was submitted is kept.'],
+      [spokenOf, 'It cannot be discarded: it was commented on or edited by others, and its history is kept.'],
+    ] as const) {
+      expect((await read(geophysicist, one)).can.discard).toBe(false);
+      expect((await discard(geophysicist, one)).body).toMatchObject({
+        status: 409,
+        code: 'wrong-state',
+        detail,
+      });
+    }
   });
 });
 

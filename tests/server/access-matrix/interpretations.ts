@@ -37,12 +37,19 @@ export const interpretationRows: AccessRow[] = [
   },
   {
     endpoint: 'PATCH /interpretations/:interpretationId',
-    expected: rolesGet(200, 'lead', 'geophysicist', 'analyst'),
+    // the draft is another person’s, so that an analyst may not
+    expected: rolesGet(200, 'lead', 'geophysicist'),
     arrange: async (given) => ({
       path: `/interpretations/${await draftOf(given)}`,
       body: { narrative: 'A wet sand.' },
       version: 1,
     }),
+  },
+  {
+    endpoint: 'DELETE /interpretations/:interpretationId',
+    // the draft is another person’s
+    expected: rolesGet(204, 'lead'),
+    arrange: async (given) => ({ path: `/interpretations/${await draftOf(given)}` }),
   },
   {
     endpoint: 'POST /interpretations/:interpretationId/review-events',
