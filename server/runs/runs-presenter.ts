@@ -27,6 +27,7 @@ export function presentRunSummary(row: RunRow): RunSummary {
     durationMs: row.duration_ms,
     errorMessage: row.error_message,
     comparison: row.comparison,
+    interpretedAs: row.interpreted_as,
     outcome: presentOutcome(row),
     note: { label: row.label, note: row.note, pinned: row.pinned, version: row.note_version },
   };
@@ -41,6 +42,10 @@ function presentOutcome(row: RunRow): RunSummary['outcome'] {
 export function presentRun(row: FullRunRow): Run {
   const numbered = row.revision_readings.map((reading, index) => ({ reading, row: index + 1 }));
   const keptRows = numbered.filter(({ reading }) => reading.excluded === null);
+  const floor = frozenFloor(
+    keptRows.map(({ reading }) => reading.standardError),
+    row.input.readings.map((reading) => reading.relativeError),
+  );
   return {
     ...presentRunSummary(row),
     soundingName: row.sounding_name,
@@ -51,21 +56,32 @@ export function presentRun(row: FullRunRow): Run {
       row: keptRows[index]?.row ?? index + 1,
       plottingSpacingM: plottingSpacing(reading.spread),
     })),
-    excluded: numbered.flatMap(({ reading, row: at }) => presentExcluded(reading, at)),
+    excluded: numbered.flatMap(({ reading, row: at }) => presentExcluded(reading, at, floor)),
     result: row.result,
   };
 }
 
+/**
+ * The error floor that a run was asked with, found again from what it added to the errors of the kept readings: the
+ * survey's may be another one by now. Taken where the own error is least, which leaves the most of its digits.
+ */
+function frozenFloor(own: readonly (number | null)[], total: readonly number[]): number {
+  const least = total.reduce((best, _, i) => ((own[i] ?? 0) < (own[best] ?? 0) ? i : best), 0);
+  return Math.sqrt(Math.max(0, (total[least] ?? 0) ** 2 - (own[least] ?? 0) ** 2));
+}
+
 /** An excluded reading from which no ρa follows has no place on a curve. */
-function presentExcluded(reading: Reading, row: number): Run['excluded'] {
+function presentExcluded(reading: Reading, row: number, floor: number): Run['excluded'] {
   if (reading.excluded === null) return [];
-  const { derived } = tryDeriveReading(reading, 0);
+  const { derived } = tryDeriveReading(reading, floor);
   if (!derived) return [];
   return [
     {
       row,
+      spread: reading.spread,
       plottingSpacingM: derived.plottingSpacingM,
       apparentResistivity: derived.apparentResistivityOhmM,
+      relativeError: derived.relativeError,
       reason: reading.excluded,
     },
   ];

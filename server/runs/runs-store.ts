@@ -3,8 +3,10 @@ import type { z } from 'zod';
 import type { Actor } from '../access/actor';
 import type { FitResult, FitSettings } from '../contract/fit';
 import type { Reading } from '../contract/readings';
+import type { StandingState } from '../contract/interpretations';
 import type { RunInput, RunSummary, runComparisonSchema } from '../contract/runs';
 import type { SpreadType } from '../contract/spread';
+import { OF_RUN_SQL, weightiestStateSql } from '../db/interpretation-weight';
 import { notFound } from '../errors';
 
 export interface RunRow {
@@ -30,6 +32,7 @@ export interface RunRow {
   duration_ms: number | null;
   error_message: string | null;
   comparison: z.infer<typeof runComparisonSchema> | null;
+  interpreted_as: StandingState | null;
   earth: FitResult['earth'] | null;
   fit_status: FitResult['status'] | null;
   chi2_per_reading: number | null;
@@ -91,6 +94,7 @@ const visibleRuns = (knex: Knex, actor: Actor) =>
     .where('survey_member.user_id', actor.userId)
     .select(
       ...SUMMARY_COLUMNS,
+      knex.raw(`${weightiestStateSql(OF_RUN_SQL)} AS interpreted_as`),
       // only what a list shows of a result: whole ones are large
       knex.raw("run.input -> 'settings' AS settings"),
       knex.raw("computation.result -> 'earth' AS earth"),

@@ -5,6 +5,7 @@ import type { Reading } from '../contract/readings';
 import type { RunInput } from '../contract/runs';
 import type { SoundingState, soundingQuerySchema } from '../contract/soundings';
 import type { SpreadType } from '../contract/spread';
+import { leastWeightSql, OF_RUN_SQL } from '../db/interpretation-weight';
 import { SOUNDING_STATE_SQL, SOUNDING_STATES } from './sounding-state';
 
 export type SoundingQuery = z.output<typeof soundingQuerySchema>;
@@ -32,7 +33,7 @@ export interface SoundingPageRow {
   predicted: number[] | null;
 }
 
-/** The run that stands for a sounding: the pinned finished one, else the newest finished one. */
+/** The run that stands for a sounding: the pinned finished one, else that of the weightiest interpretation, else the newest. */
 const LATEST_RUN_SQL = `LATERAL (
   SELECT run.id, run.number, run.revision_id, run.input, computation.result
   FROM run
@@ -40,7 +41,7 @@ const LATEST_RUN_SQL = `LATERAL (
   JOIN run_note ON run_note.run_id = run.id
   JOIN computation ON computation.id = run_state.computation_id
   WHERE run.sounding_id = sounding.id
-  ORDER BY run_note.pinned DESC, run.number DESC LIMIT 1
+  ORDER BY run_note.pinned DESC, ${leastWeightSql(OF_RUN_SQL)} ASC NULLS LAST, run.number DESC LIMIT 1
 ) AS latest ON true`;
 
 const LAYERS_SQL = `jsonb_array_length(latest.result -> 'earth' -> 'resistivity')`;

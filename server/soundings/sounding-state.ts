@@ -1,4 +1,5 @@
 import type { SoundingState } from '../contract/soundings';
+import { weightiestStateSql } from '../db/interpretation-weight';
 
 /** From the first to the last, as a table sorts them. */
 export const SOUNDING_STATES: readonly SoundingState[] = [
@@ -12,13 +13,12 @@ export const SOUNDING_STATES: readonly SoundingState[] = [
 ];
 
 /**
- * How far a sounding has come, as an SQL expression over a row of `sounding`: accepted where one interpretation is,
- * else the state of the interpretation touched last, else whether a run has finished, else whether readings are saved.
+ * How far a sounding has come, as an SQL expression over a row of `sounding`: the weightiest state of its
+ * interpretations, so that no newer draft hides a decision or a wait for one; else whether a run has finished; else
+ * whether readings are saved.
  */
 export const SOUNDING_STATE_SQL = `coalesce(
-  (SELECT interpretation.state FROM interpretation
-    WHERE interpretation.sounding_id = sounding.id AND interpretation.state <> 'superseded'
-    ORDER BY interpretation.state = 'accepted' DESC, interpretation.updated_at DESC LIMIT 1),
+  ${weightiestStateSql('interpretation.sounding_id = sounding.id')},
   CASE
     WHEN sounding.current_revision_id IS NULL THEN 'no-readings'
     WHEN EXISTS (SELECT 1 FROM run JOIN run_state ON run_state.run_id = run.id

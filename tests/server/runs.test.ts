@@ -70,7 +70,15 @@ describe('asking for a run', () => {
     expect(run.readings.map((reading) => reading.row)).toEqual([1, 2, 3, 5, 6, 7, 8, 9, 10, 11, 12]);
     expect(run.readings[3]?.plottingSpacingM).toBe(10);
     expect(run.excluded).toEqual([
-      { row: 4, plottingSpacingM: 6, apparentResistivity: 76, reason: 'wire moved' },
+      {
+        row: 4,
+        spread: readings[3].spread,
+        plottingSpacingM: 6,
+        apparentResistivity: 76,
+        // with the floor the run was asked with, not the one of now
+        relativeError: expect.closeTo(Math.hypot(0.02, 0.05), 12),
+        reason: 'wire moved',
+      },
     ]);
     const done = await finished(run);
     expect(done).toMatchObject({
@@ -188,6 +196,58 @@ describe('the key of a computation', () => {
   });
 });
 
+describe('what stands on a run', () => {
+  it('is told by the weightiest state of its interpretations', async () => {
+    const soundingId = await measured();
+    const [run, other] = [
+      await createRun(db, soundingId, { requestedBy: authorId }),
+      await createRun(db, soundingId, { requestedBy: authorId }),
+    ];
+    const told = async () => {
+      const list = await geophysicist.get(`/soundings/${soundingId}/runs`);
+      return list.body.items.map((one: RunSummary) => [one.id, one.interpretedAs]);
+    };
+    expect(await told()).toEqual([
+      [other.id, null],
+      [run.id, null],
+    ]);
+    const states = [
+      'superseded',
+      'draft',
+      'accepted',
+      'draft',
+      'changes-asked',
+      'accepted',
+      'in-review',
+      'draft',
+    ];
+    const seen: unknown[] = [];
+    for (const state of states) {
+      await db('interpretation').where({ run_id: run.id, state: 'accepted' }).update({ state: 'superseded' });
+      await db('interpretation').insert({
+        sounding_id: soundingId,
+        run_id: run.id,
+        author_id: authorId,
+        title: state,
+        state,
+      });
+      seen.push((await told())[1]?.[1]);
+    }
+    expect(seen).toEqual([
+      null,
+      'draft',
+      'accepted',
+      'draft',
+      'changes-asked',
+      'changes-asked',
+      'in-review',
+      'in-review',
+    ]);
+    expect(await told()).toContainEqual([other.id, null]);
+    expect((await geophysicist.get(`/runs/${run.id}`)).body).toMatchObject({ interpretedAs: 'in-review' });
+  });
+});
+
 describe('compute again', () => {
   it('computes past the cache and finds the same bits', async () => {
     const first = await finished(await asked(await measured(), { ...THREE, seed: 21 }));
@@ -294,6 +354,21 @@ describe('run events', () => {
       .map((one) => one.state);
     expect(states.at(-1)).toBe('finished');
     expect(states).toContain('queued');
+    stream.response.destroy();
+  });
+
+  it('tell that an interpretation stands on a run, and that it was discarded', async () => {
+    const soundingId = await measured();
+    const run = await createRun(db, soundingId, { requestedBy: authorId });
+    const stream = await openStream(geophysicist, soundingId);
+    await stream.until((runs) => runs.length > 0);
+    const made = await geophysicist.post(`/soundings/${soundingId}/interpretations`, {
+      runId: run.id,
+      title: 'Sand',
+    });
+    await stream.until((runs) => runs.at(-1)?.interpretedAs === 'draft');
+    expect(await geophysicist.delete(`/interpretations/${made.body.id}`)).toMatchObject({ status: 204 });
+    await stream.until((runs) => runs.at(-1)?.interpretedAs === null);
     stream.response.destroy();
   });
 

@@ -218,21 +218,57 @@ describe('GET /surveys/:surveyId/soundings', () => {
     expect(v1).toMatchObject({ revisionNumber: 2, latestRun: { number: 1, ofOlderReadings: true } });
   });
 
-  it('tells the state of the interpretation once there is one', async () => {
-    const { id, latestRun } = (await list('')).items[2] ?? {};
-    const add = (state: string) =>
-      server.db('interpretation').insert({
-        sounding_id: id,
-        run_id: latestRun?.id,
-        author_id: lead.user?.id,
-        title: state,
-        state,
-      });
-    for (const state of ['superseded', 'draft', 'in-review', 'accepted', 'changes-asked']) {
-      await add(state);
-      const expected = { superseded: 'fitted', 'changes-asked': 'accepted' }[state] ?? state;
-      expect((await list('')).items[2]?.state).toBe(expected);
+  const interpret = (soundingId: string, runId: string, state: string) =>
+    server.db('interpretation').insert({
+      sounding_id: soundingId,
+      run_id: runId,
+      author_id: lead.user?.id,
+      title: state,
+      state,
+    });
+
+  it('tells the weightiest state of the interpretations, whichever was touched last', async () => {
+    const { id = '', latestRun } = (await list('')).items[2] ?? {};
+    const seen: string[] = [];
+    for (const state of ['superseded', 'draft', 'accepted', 'draft', 'changes-asked', 'in-review', 'draft']) {
+      await interpret(id, latestRun?.id ?? '', state);
+      seen.push((await list('')).items[2]?.state ?? '');
     }
+    expect(seen).toEqual([
+      'fitted',
+      'draft',
+      'accepted',
+      'accepted',
+      'changes-asked',
+      'in-review',
+      'in-review',
+    ]);
+    expect((await lead.get(`/soundings/${id}`)).body).toMatchObject({ state: 'in-review' });
+  });
+
+  it('shows the run of the weightiest interpretation before the newest, and the pinned one before both', async () => {
+    const { id } = await server.createSounding(listed, { name: 'V 20' });
+    const revision = await server.createRevision(id, lead.user?.id ?? '');
+    const runs: string[] = [];
+    for (const number of [1, 2, 3, 4])
+      runs.push(await finishRun(id, revision.id, number, { layers: number, chi2: 1 }));
+    const shown = async () => (await list('?search=V%2020')).items[0]?.latestRun?.number;
+    expect(await shown()).toBe(4);
+    const seen: unknown[] = [];
+    for (const [run, state] of [
+      [0, 'superseded'],
+      [0, 'draft'],
+      [1, 'draft'],
+      [0, 'accepted'],
+      [2, 'in-review'],
+      [1, 'changes-asked'],
+    ] as const) {
+      await interpret(id, runs[run] ?? '', state);
+      seen.push(await shown());
+    }
+    expect(seen).toEqual([4, 1, 2, 1, 3, 3]);
+    await server.db('run_note').where({ run_id: runs[3] }).update({ pinned: true });
+    expect(await shown()).toBe(4);
   });
 });
 
