@@ -5,6 +5,7 @@ import type { Borehole, writeBoreholeSchema } from '../contract/surveys';
 import { AppError } from '../errors';
 import type { Work } from '../http/context';
 import { presentBorehole } from './borehole-presenter';
+import { requireDaysUpTo, tomorrow } from './require-days-up-to';
 import {
   getBoreholeRow,
   insertBorehole,
@@ -27,8 +28,10 @@ export async function createBorehole(
   { db, actor }: Work,
   surveyId: string,
   fields: BoreholeFields,
+  lastDay = tomorrow(),
 ): Promise<Borehole> {
   requireCan(await getSurveyAccess(db, actor, surveyId), 'editBoreholes');
+  requireDaysUpTo(lastDay, fields);
   return db.transaction(async (trx) => {
     const id = await insertBorehole(trx, surveyId, fields);
     await replaceParts(trx, id, fields);
@@ -50,6 +53,7 @@ export async function replaceBorehole(
 ): Promise<Borehole> {
   const { survey_id: surveyId } = await getBoreholeRow(db, actor, id);
   requireCan(await getSurveyAccess(db, actor, surveyId), 'editBoreholes');
+  requireDaysUpTo(tomorrow(), fields);
   return db.transaction(async (trx) => {
     if (!(await updateBoreholeRow(trx, id, version, fields)))
       throw new AppError('conflict', 'Someone else changed this borehole meanwhile.', {

@@ -127,7 +127,7 @@ const logFaults = (
   log: {
     depthM: number;
     intervals: { topM: number; baseM: number }[];
-    waterLevels: { measuredOn: string }[];
+    waterLevels: { measuredOn: string; depthM: number }[];
   },
   context: z.RefinementCtx,
 ): void => {
@@ -137,6 +137,12 @@ const logFaults = (
         code: 'custom',
         path: ['waterLevels', i, 'measuredOn'],
         message: 'must not be a day that another level has',
+      });
+    if (level.depthM > log.depthM)
+      context.addIssue({
+        code: 'custom',
+        path: ['waterLevels', i, 'depthM'],
+        message: `must not lie below the end of the hole: ${level.depthM} m, where the hole ends at ${log.depthM} m`,
       });
   });
   log.intervals.forEach((interval, i) => {

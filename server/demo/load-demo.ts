@@ -13,7 +13,7 @@ import { createSurvey } from '../surveys/survey-service';
 import { loadInterpretations } from './load-interpretations';
 import { loadReadings } from './load-readings';
 import { loadRuns } from './load-runs';
-import { BOREHOLES, DEMO_PASSWORD, LINES, PEOPLE, SOUNDINGS, SURVEY } from './scenario';
+import { BOREHOLES, DEMO_PASSWORD, LAST_FIELD_DAY, LINES, PEOPLE, SOUNDINGS, SURVEY } from './scenario';
 
 export interface DemoAccount {
   readonly email: string;
@@ -72,11 +72,12 @@ async function loadSurvey(actors: Actors, as: As): Promise<void> {
   const lineIds = new Map<string, string>();
   for (const name of LINES) lineIds.set(name, (await createLine(as('lead'), survey.id, name)).id);
   for (const hole of BOREHOLES)
-    await createBorehole(as('hydrogeologist'), survey.id, {
-      ...hole,
-      intervals: [...hole.intervals],
-      waterLevels: [...hole.waterLevels],
-    });
+    await createBorehole(
+      as('hydrogeologist'),
+      survey.id,
+      { ...hole, intervals: [...hole.intervals], waterLevels: [...hole.waterLevels] },
+      LAST_FIELD_DAY,
+    );
   for (const sounding of SOUNDINGS) {
     const { name, xM, yM, elevationM, azimuthDeg, measuredOn, note = '' } = sounding;
     const { id } = await createSounding(as('geophysicist'), survey.id, {

@@ -18,23 +18,21 @@ const FURTHER_RUNS: Record<string, { layers: number; label: string; note: string
   'S-12': [{ layers: 4, label: 'with weathered rock', note: 'No better than three beds.' }],
 };
 
-/** Here the run of the found count stands for the sounding, not the poorer one that was asked for after it. */
-const FIRST_RUN_STANDS = ['S-07', 'S-10'];
-
-/** Runs by their number of layers, as ids. The automatic choice comes first, then what the interpretation needs. */
+/**
+ * Runs by their number of layers, as ids. What was tried on the way comes first: the newest run stands for a sounding
+ * that nobody has interpreted, and that is to be the automatic choice. Last comes what the interpretation needs beside.
+ */
 export async function loadRuns(as: As, soundingId: string, name: string): Promise<Map<number, string>> {
   const ids = new Map<number, string>();
   if (NOT_FITTED.includes(name)) return ids;
   const work = as('geophysicist');
-  const found = await finishRun(work, soundingId, { kind: 'layered', layers: 'auto' });
-  ids.set(found.layers, found.id);
-  if (FIRST_RUN_STANDS.includes(name))
-    await changeRunNote(work, found.id, found.noteVersion, { pinned: true });
   for (const { layers, label, note } of FURTHER_RUNS[name] ?? []) {
     const run = await finishRun(work, soundingId, { kind: 'layered', layers });
     await changeRunNote(work, run.id, run.noteVersion, { label, note });
     ids.set(layers, run.id);
   }
+  const found = await finishRun(work, soundingId, { kind: 'layered', layers: 'auto' });
+  ids.set(found.layers, found.id);
   for (const { layers } of INTERPRETATIONS.filter(({ sounding }) => sounding === name))
     if (!ids.has(layers))
       ids.set(layers, (await finishRun(work, soundingId, { kind: 'layered', layers })).id);

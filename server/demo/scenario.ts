@@ -16,6 +16,9 @@ export const SURVEY = {
   errorFloor: 0.03,
 } as const;
 
+/** The last day of the crew's season; the demo stands by it, whatever the clock of the machine says. */
+export const LAST_FIELD_DAY = '2026-05-26';
+
 export const DEMO_PASSWORD = 'ostrel-valley-well';
 
 export interface DemoPerson {
@@ -75,7 +78,7 @@ const onLine = (
 
 const L1 = onLine('Line 1', 2400, '2026-05-18');
 const L2 = onLine('Line 2', 1300, '2026-05-20');
-const L3 = onLine('Line 3', 250, '2026-05-26');
+const L3 = onLine('Line 3', 250, LAST_FIELD_DAY);
 
 export const SOUNDINGS: readonly DemoSounding[] = [
   // Line 1, the upper valley: gravel over crystalline basement, shallow on the flanks
@@ -118,7 +121,7 @@ export const SOUNDINGS: readonly DemoSounding[] = [
       kind: 'outlier',
       spacing: 6.8,
       factor: 1.24,
-      excluded: 'wet cable, the crew repeated it dry the next day',
+      excluded: 'cable wet in the rain; not repeated',
     },
     note: 'Proposed site of the second supply well.',
   },
@@ -291,7 +294,7 @@ export const BOREHOLES = [
     ],
     waterLevels: [
       { measuredOn: '2019-10-25', depthM: 1.6 },
-      { measuredOn: '2026-05-26', depthM: 1.9 },
+      { measuredOn: LAST_FIELD_DAY, depthM: 1.9 },
     ],
   },
 ] as const;

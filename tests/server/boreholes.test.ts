@@ -1,5 +1,6 @@
 import { describe, expect, test } from 'vitest';
 import { boreholeSchema } from '../../server/contract/surveys';
+import { tomorrow } from '../../server/boreholes/require-days-up-to';
 import { createTestServer } from '../setup/server';
 
 const server = await createTestServer();
@@ -92,5 +93,52 @@ describe('writing anew', () => {
     expect((await hydrogeologist.get(`/boreholes/${id}`)).body).toMatchObject({
       intervals: borehole.intervals,
     });
+  });
+});
+
+test('no water lies below the end of the hole', async () => {
+  const level = (depthM: number) => ({ ...borehole, waterLevels: [{ measuredOn: '2020-01-01', depthM }] });
+  const answer = await hydrogeologist.post(path, level(60.5));
+  expect(answer.body).toMatchObject({
+    status: 422,
+    faults: [
+      {
+        path: ['body', 'waterLevels', 0, 'depthM'],
+        message: 'must not lie below the end of the hole: 60.5 m, where the hole ends at 60 m',
+      },
+    ],
+  });
+  const { id } = await server.createBorehole(survey.id);
+  expect((await hydrogeologist.put(`/boreholes/${id}`, { ...level(60), name: 'B dry' }, 1)).status).toBe(200);
+});
+
+describe('days', () => {
+  const day = (ahead: number) => new Date(Date.now() + ahead * 86_400_000).toISOString().slice(0, 10);
+  const on = (name: string, drilledOn: string, measuredOn: string) => ({
+    ...borehole,
+    name,
+    drilledOn,
+    waterLevels: [borehole.waterLevels[0], { measuredOn, depthM: 3 }],
+  });
+
+  test('that lie in the future are refused, with the last one that is not', async () => {
+    const [tomorrow, late] = [day(1), day(2)];
+    const expected = {
+      status: 422,
+      faults: [
+        { path: ['body', 'drilledOn'], found: late, allowed: `up to ${tomorrow}` },
+        { path: ['body', 'waterLevels', 1, 'measuredOn'], found: late, allowed: `up to ${tomorrow}` },
+      ],
+    };
+    expect((await hydrogeologist.post(path, on('B late', late, late))).body).toMatchObject(expected);
+    const { id } = await server.createBorehole(survey.id);
+    expect((await hydrogeologist.put(`/boreholes/${id}`, on('B late', late, late), 1)).body).toMatchObject(
+      expected,
+    );
+  });
+
+  test('may be tomorrow, as they are already somewhere', async () => {
+    expect((await hydrogeologist.post(path, on('B early', day(1), day(1)))).status).toBe(201);
+    expect(tomorrow(new Date('2024-02-28T23:59:59Z'))).toBe('2024-02-29');
   });
 });

@@ -1,4 +1,6 @@
 import { describe, expect, it } from 'vitest';
+import { soundingPageSchema } from '../../server/contract/soundings';
+import { INTERPRETATIONS } from '../../server/demo/interpretations';
 import { loadDemo } from '../../server/demo/load-demo';
 import { DEMO_PASSWORD, PEOPLE, SOUNDINGS } from '../../server/demo/scenario';
 import { createTestServer } from '../setup/server';
@@ -23,16 +25,20 @@ describe('the demo', () => {
     ]);
   }, 240_000);
 
-  it('lets a run of four beds stand for the proposed site', async () => {
-    const [standing] = await db('run')
-      .join('run_note', 'run_note.run_id', 'run.id')
-      .join('run_state', 'run_state.run_id', 'run.id')
-      .join('computation', 'computation.id', 'run_state.computation_id')
+  it('lets the run stand that a sounding is interpreted by, or else the automatic choice', async () => {
+    const lead = await server.signIn(await db('app_user').where({ email: PEOPLE[0].email }).first());
+    const { id } = await db('survey').first('id');
+    const { items } = soundingPageSchema.parse((await lead.get(`/surveys/${id}/soundings`)).body);
+    const standing = new Map(items.map(({ name, latestRun }) => [name, latestRun]));
+    for (const { sounding, layers } of INTERPRETATIONS)
+      expect([sounding, standing.get(sounding)?.layers]).toEqual([sounding, layers]);
+    const newest = await db('run')
       .join('sounding', 'sounding.id', 'run.sounding_id')
-      .where('sounding.name', 'S-07')
-      .orderByRaw('run_note.pinned DESC, run.number DESC')
-      .select(db.raw(`jsonb_array_length(computation.result -> 'earth' -> 'resistivity') AS beds`));
-    expect(standing.beds).toBe(4);
+      .where({ 'sounding.name': 'S-10' })
+      .orderBy('run.number', 'desc')
+      .first('run.id', 'run.number', db.raw("run.input -> 'settings' ->> 'layers' AS layers"));
+    expect(newest).toMatchObject({ number: 2, layers: 'auto' });
+    expect(standing.get('S-10')?.id).toBe(newest.id);
   });
 
   it('leaves no job for the queue', async () => {
