@@ -3,7 +3,7 @@ import multer from 'multer';
 import type { z } from 'zod';
 import { authenticate } from '../access/authenticate';
 import type { Fault } from '../contract/common';
-import { AppError, faultsOfZod } from '../errors';
+import { AppError, faultsOfZod, IN_PLAIN_WORDS } from '../errors';
 import type { Context, Services } from './context';
 import { Reply, type Endpoint, type EndpointInput } from './endpoint';
 import { requestIdOf } from './request-id';
@@ -71,7 +71,7 @@ function parse(definition: Endpoint, request: Request): EndpointInput<undefined,
   const faults: Fault[] = [];
   const read = (schema: z.ZodType | undefined, value: unknown, where: string): unknown => {
     if (!schema) return undefined;
-    const result = schema.safeParse(value);
+    const result = schema.safeParse(value, IN_PLAIN_WORDS);
     if (result.success) return result.data;
     faults.push(...faultsOfZod(result.error, where));
     return undefined;

@@ -7,7 +7,7 @@ import { hashToken } from '../access/secret-token';
 import { findUserByEmail, insertUser, type UserRow } from '../access/user-store';
 import type { Fault } from '../contract/common';
 import { passwordSchema, type acceptInvitationSchema, type Me } from '../contract/session';
-import { AppError } from '../errors';
+import { AppError, IN_PLAIN_WORDS } from '../errors';
 import type { PublicContext } from '../http/context';
 import { presentOffer } from './invitation-presenter';
 import { findOffer, insertMember, spendInvitation, type OfferRow } from './invitation-store';
@@ -63,7 +63,7 @@ const spentLink = (): AppError =>
 async function newAccount(email: string, answer: Answer) {
   const faults: Fault[] = [];
   if (!answer.name) faults.push({ path: ['body', 'name'], message: 'is needed for a new account' });
-  const password = passwordSchema.safeParse(answer.password);
+  const password = passwordSchema.safeParse(answer.password, IN_PLAIN_WORDS);
   for (const issue of password.error?.issues ?? [])
     faults.push({ path: ['body', 'password'], message: issue.message });
   if (!answer.name || faults.length > 0)

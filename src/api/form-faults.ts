@@ -12,8 +12,10 @@ export function formFaults(error: unknown, labels: Readonly<Record<string, strin
     const field = path
       .map((part) => (typeof part === 'number' ? String(part + 1) : (labels[part] ?? part)))
       .join(' ');
-    const allowed = fault.allowed === undefined ? '' : ` Allowed: ${fault.allowed}.`;
-    const message = `${fault.message}${allowed}`;
+    const message =
+      fault.allowed === undefined
+        ? fault.message
+        : `${fault.message.replace(/\.$/, '')}. Allowed: ${fault.allowed}.`;
     return field === '' ? { message } : { field, message };
   });
 }
