@@ -65,6 +65,12 @@ export interface BoreholeLog {
   waterLevel?: number | null;
 }
 
+/** A value of a layered earth that a fit does not move; `index` counts beds from 0 at the surface. */
+export interface HeldValue {
+  on: 'resistivity' | 'thickness';
+  index: number;
+}
+
 /** One ground to draw as a column. */
 export interface GroundColumn {
   id: string;
@@ -77,8 +83,8 @@ export interface GroundColumn {
   depthOfInvestigation?: number | null | undefined;
   /** A word for each bed, as the ground unit. */
   bedNotes?: readonly (string | null)[] | undefined;
-  /** Beds held in a fit, by index. */
-  lockedBeds?: readonly number[] | undefined;
+  /** Values held in a fit; the thickness of a bed stands at its base. */
+  held?: readonly HeldValue[] | undefined;
 }
 
 /** Depths of the boundaries of a layered earth, m. */

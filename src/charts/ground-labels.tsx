@@ -97,12 +97,16 @@ export function labelRoom(column: GroundColumn, scale: DepthScale): number {
 
 /** What stands beside the bar: for each bed its interval (and its number where the bed is too thin), then its base. */
 export function groundLabels(column: GroundColumn, scale: DepthScale): GroundLabel[] {
-  const beds = groundBeds(column).flatMap((bed): GroundLabel[] => {
+  const groundOf = groundBeds(column);
+  const isThicknessHeld = groundOf.map((bed) => bed.held.thickness);
+  const beds = groundOf.flatMap((bed): GroundLabel[] => {
     const top = scale.yOf(bed.top);
     const base = bed.base === null ? scale.height : scale.yOf(bed.base);
     const number = base - top < LEAST_NUMBER_HEIGHT ? formatResistivity(bed.resistivity) : '';
     const words = [number, bed.rangeText].filter((text) => text !== '').join(' · ');
-    const note = [bed.locked ? 'held' : null, bed.note].filter((word) => word !== null).join(', ');
+    const note = [bed.held.resistivity ? 'ρ held' : null, bed.note]
+      .filter((word) => word !== null)
+      .join(', ');
     if (words === '' && note === '') return [];
     return [
       {
@@ -118,8 +122,13 @@ export function groundLabels(column: GroundColumn, scale: DepthScale): GroundLab
     key: `base ${boundary.index}`,
     y: scale.yOf(boundary.depth),
     strong: boundary.rangeText === '' ? `${Number(boundary.depth.toPrecision(3))} m` : boundary.rangeText,
-    note: boundary.unresolved ? 'unresolved' : null,
+    note: boundaryNote(boundary.unresolved, isThicknessHeld[boundary.index] ?? false),
     kind: 'boundary',
   }));
   return [...beds, ...bases].toSorted((first, second) => first.y - second.y);
+}
+
+function boundaryNote(isUnresolved: boolean, isThicknessHeld: boolean): string | null {
+  const words = [isThicknessHeld ? 'h held' : null, isUnresolved ? 'unresolved' : null];
+  return words.filter((word) => word !== null).join(', ') || null;
 }

@@ -1,5 +1,11 @@
 import { formatLength, formatRange, formatResistivity, NOT_BOUNDED, withUnit } from '../ui/format';
-import { boundaryDepths, type BoreholeLog, type Bounds, type GroundColumn } from './chart-data';
+import {
+  boundaryDepths,
+  type BoreholeLog,
+  type Bounds,
+  type GroundColumn,
+  type HeldValue,
+} from './chart-data';
 import type { DepthScale } from './depth-scale';
 import { rampColor } from './resistivity-ramp';
 
@@ -26,7 +32,8 @@ export interface GroundBed {
   color: string;
   rangeText: string;
   note: string | null;
-  locked: boolean;
+  /** Which of its two values a fit holds. */
+  held: Record<HeldValue['on'], boolean>;
 }
 
 export function groundBoundaries(column: GroundColumn): GroundBoundary[] {
@@ -58,10 +65,20 @@ export function groundBeds(column: GroundColumn): GroundBed[] {
       color: rampColor(resistivity),
       rangeText: bounds ? formatRange(bounds) : '',
       note: column.bedNotes?.[index] ?? null,
-      locked: column.lockedBeds?.includes(index) ?? false,
+      held: {
+        resistivity: isHeld(column, 'resistivity', index),
+        thickness: isHeld(column, 'thickness', index),
+      },
     };
   });
 }
+
+const isHeld = ({ held = [] }: GroundColumn, on: HeldValue['on'], index: number): boolean =>
+  held.some((value) => value.on === on && value.index === index);
+
+/** Names of the held values of a bed, as the place wants them. */
+export const heldNames = ({ held }: GroundBed, names: Record<HeldValue['on'], string>): string[] =>
+  (['resistivity', 'thickness'] as const).filter((on) => held[on]).map((on) => names[on]);
 
 /** "Bed 2, 12.4 ohm metres, 3.1 to 9.0 m", with its interval and what holds it. */
 export function bedSentence(bed: GroundBed): string {
@@ -71,7 +88,8 @@ export function bedSentence(bed: GroundBed): string {
       : `${formatLength(bed.top)} to ${formatLength(bed.base)} m`;
   const interval = bed.rangeText === '' ? '' : `, 95 % ${bed.rangeText.replace('–', ' to ')} ohm metres`;
   const note = bed.note ? `, ${bed.note}` : '';
-  return `Bed ${bed.index + 1}, ${formatResistivity(bed.resistivity)} ohm metres, ${place}${interval}${note}${bed.locked ? ', held' : ''}`;
+  const held = heldNames(bed, { resistivity: ', resistivity held', thickness: ', thickness held' }).join('');
+  return `Bed ${bed.index + 1}, ${formatResistivity(bed.resistivity)} ohm metres, ${place}${interval}${note}${held}`;
 }
 
 export interface ProfileStop {

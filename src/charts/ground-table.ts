@@ -1,7 +1,7 @@
 import { formatLength, formatResistivity } from '../ui/format';
 import type { ChartColumn, ChartTable } from './chart-table';
 import type { GroundColumn } from './chart-data';
-import { groundBeds, groundBoundaries } from './ground-profile';
+import { groundBeds, groundBoundaries, heldNames } from './ground-profile';
 
 /** Beds of one or several grounds with their 95 % intervals, for the table and the CSV. */
 export function groundTable(columns: readonly GroundColumn[]): ChartTable {
@@ -23,7 +23,8 @@ export function groundTable(columns: readonly GroundColumn[]): ChartTable {
     return groundBeds(column).map((bed) => {
       const [low = null, high = null] = column.intervals?.resistivity[bed.index] ?? [];
       const boundary = column.intervals ? boundaries[bed.index] : undefined;
-      const note = [bed.note, bed.locked ? 'held' : null].filter((word) => word !== null).join(', ');
+      const held = heldNames(bed, { resistivity: 'ρ held', thickness: 'h held' });
+      const note = [...(bed.note === null ? [] : [bed.note]), ...held].join(', ');
       return [
         ...(several ? [column.letter || column.name] : []),
         bed.index + 1,

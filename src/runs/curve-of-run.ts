@@ -1,7 +1,7 @@
 import type { FitReading, LayeredEarthModel } from '../../server/contract/fit';
 import type { Revision } from '../../server/contract/readings';
 import type { Run } from '../../server/contract/runs';
-import type { CurveLine, CurvePoint, CurveReading, GroundColumn } from '../charts/chart-data';
+import type { CurveLine, CurvePoint, CurveReading, GroundColumn, HeldValue } from '../charts/chart-data';
 import { curvePlaces, type CurvePlace } from './curve-places';
 import { letterOfRun, titleOfRun } from './run-title';
 import { spacingLabel } from '../soundings/spread-words';
@@ -134,11 +134,6 @@ export function beyondOf({ excluded, places }: CurveRequest, predicted: readonly
   return { excluded: predicted.slice(0, excluded.length), points: points.length > 0 ? points : null };
 }
 
-/** Beds of which any value was held in the fit. */
-export function heldBeds(run: Pick<Run, 'settings'>): number[] {
-  return [...new Set(run.settings.fixed.map((held) => held.index))].toSorted((a, b) => a - b);
-}
-
 export function columnOfRun(run: Run, bedNotes?: readonly (string | null)[]): GroundColumn | null {
   if (!run.result) return null;
   return {
@@ -147,7 +142,7 @@ export function columnOfRun(run: Run, bedNotes?: readonly (string | null)[]): Gr
     name: titleOfRun(run),
     earth: run.result.earth,
     intervals: run.result.intervals,
-    lockedBeds: heldBeds(run),
+    held: run.settings.fixed,
     bedNotes,
   };
 }
@@ -156,7 +151,7 @@ export function columnOfRun(run: Run, bedNotes?: readonly (string | null)[]): Gr
 export function columnOfHand(
   earth: LayeredEarthModel,
   name: string,
-  lockedBeds: readonly number[],
+  held: readonly HeldValue[],
 ): GroundColumn {
-  return { id: 'hand', letter: '', name, earth, lockedBeds };
+  return { id: 'hand', letter: '', name, earth, held };
 }

@@ -6,6 +6,7 @@ import { columnOfHand, columnOfRun } from '../../runs/curve-of-run';
 import { letterOfRun } from '../../runs/run-title';
 import { Button } from '../../ui/button';
 import { BedTable } from './bed-table';
+import { valuesOfModel } from './fit-form';
 import { HandBar } from './hand-bar';
 import { withBoundary, withResistivityScaled } from './hand-model';
 import { heldKey } from './hand-model-store';
@@ -22,24 +23,22 @@ export interface BenchGroundProps {
   onSelectBed: (bed: number | null) => void;
 }
 
-const bedsHeld = (held: readonly string[]): number[] => [
-  ...new Set(held.map((key) => Number(key.split(' ')[1]))),
-];
-
 export function BenchGround({ part, ...props }: BenchGroundProps) {
   const { model } = props;
-  if (!model.earth) return part === 'column' ? <NoGround model={model} /> : null;
+  if (!model.earth)
+    return part === 'column' ? <NoGround model={model} mayFit={props.sounding.can.run} /> : null;
   return part === 'column' ? <Column {...props} /> : <Numbers {...props} />;
 }
 
-function NoGround({ model }: { model: ModelHandle }) {
+function NoGround({ model, mayFit }: { model: ModelHandle; mayFit: boolean }) {
   return (
     <div>
       <h2 className="font-semibold">Ground</h2>
       <p className="mt-1 text-muted">
-        No model yet. Fit the readings, or begin with a model by hand and see its curve at once.
+        No model yet.
+        {mayFit ? ' Fit the readings, or begin with a model by hand and see its curve at once.' : null}
       </p>
-      {model.begin ? (
+      {mayFit && model.begin ? (
         <Button size="small" className="mt-3" onClick={model.begin}>
           Begin by hand
         </Button>
@@ -50,14 +49,16 @@ function NoGround({ model }: { model: ModelHandle }) {
 
 function Column({ sounding, run, model, selectedBed, onSelectBed }: Omit<BenchGroundProps, 'part'>) {
   const { earth } = model;
+  if (!earth) return null;
+  const held = valuesOfModel(earth).filter((value) => model.held.includes(heldKey(value)));
   const column: GroundColumn | null = model.hand
-    ? columnOfHand(model.hand, model.handName, bedsHeld(model.held))
+    ? columnOfHand(model.hand, model.handName, held)
     : run && columnOfRun(run);
-  if (!column || !earth) return null;
+  if (!column) return null;
   return (
     <DepthColumn
       // One id for run and hand, so that the drawing keeps its focus and its drag when the first edit is made.
-      column={{ ...column, id: 'ground', letter: '', lockedBeds: bedsHeld(model.held) }}
+      column={{ ...column, id: 'ground', letter: '', held }}
       title="Ground"
       subject={sounding.name}
       height={520}
@@ -83,7 +84,7 @@ function Numbers({ sounding, run, model, selectedBed, onSelectBed }: Omit<BenchG
         result={shownRun?.result ?? null}
         heldInRun={shownRun ? shownRun.settings.fixed.map(heldKey) : []}
         held={model.held}
-        onEdit={(next) => model.edit(next)}
+        onEdit={sounding.can.run ? (next) => model.edit(next) : null}
         onHold={sounding.can.run ? model.setHeld : null}
         selectedBed={selectedBed}
         onSelectBed={onSelectBed}

@@ -30,7 +30,10 @@ const column: GroundColumn = {
     ],
   },
   bedNotes: ['dry cover', null, null],
-  lockedBeds: [1],
+  held: [
+    { on: 'resistivity', index: 1 },
+    { on: 'thickness', index: 0 },
+  ],
 };
 
 describe('shareBelow', () => {
@@ -97,9 +100,11 @@ test('a model without intervals has sharp boundaries', () => {
 
 test('beds are said in words', () => {
   const sentences = groundBeds(column).map(bedSentence);
-  expect(sentences[0]).toBe('Bed 1, 139 ohm metres, 0 to 2.6 m, 95 % 134 to 145 ohm metres, dry cover');
+  expect(sentences[0]).toBe(
+    'Bed 1, 139 ohm metres, 0 to 2.6 m, 95 % 134 to 145 ohm metres, dry cover, thickness held',
+  );
   expect(sentences[1]).toContain('Bed 2, 17.0 ohm metres, 2.6 to 6.2 m');
-  expect(sentences[1]).toContain(', held');
+  expect(sentences[1]).toMatch(/, resistivity held$/);
   expect(sentences[2]).toContain('below 6.2 m');
 });
 
@@ -107,7 +112,8 @@ test('labels beside the bar run down with the ground; a thin bed carries its num
   const labels = groundLabels(column, depthScale('linear', { minDepth: 1, maxDepth: 100 }, 300));
   expect(labels.map((label) => label.key)).toEqual(['bed 0', 'base 0', 'bed 1', 'base 1', 'bed 2']);
   expect(labels[0]).toMatchObject({ strong: '139 · 134–145', note: 'dry cover' });
-  expect(labels[2]).toMatchObject({ strong: '17.0 · 3.9–36', note: 'held' });
+  expect(labels[2]).toMatchObject({ strong: '17.0 · 3.9–36', note: 'ρ held' });
+  expect(labels[1]).toMatchObject({ strong: '2.2–3.1\u00a0m', note: 'h held' });
   expect(labels[3]).toMatchObject({ strong: 'not bounded', note: 'unresolved' });
 });
 
@@ -123,7 +129,7 @@ test('depths reach past every boundary, the depth of investigation and the boreh
 test('the table gives every bed with its interval', () => {
   const { columns, rows } = groundTable([column]);
   expect(columns.map((head) => head.label)).toContain('Base, high');
-  expect(rows[0]).toEqual([1, 139, 134, 145, 0, 2.6, 2.2, 3.1, 'dry cover']);
+  expect(rows[0]).toEqual([1, 139, 134, 145, 0, 2.6, 2.2, 3.1, 'dry cover, h held']);
   expect(rows[2]).toEqual([3, 119, null, null, 6.2, null, null, null, '']);
   expect(groundTable([column, { ...column, id: 'b', letter: 'B' }]).rows[3]![0]).toBe('B');
 });
