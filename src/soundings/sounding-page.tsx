@@ -11,10 +11,12 @@ import type { Sounding } from '../../server/contract/soundings';
 import type { Crumb } from '../ui/breadcrumb';
 import { ErrorState, LoadingState, NoPermissionState } from '../ui/view-states';
 
-export interface SoundingPageProps extends Pick<PageFrameProps, 'layout' | 'keys'> {
+export interface SoundingPageProps extends Pick<PageFrameProps, 'layout'> {
   /** What the page is, as "Bench". */
   section: string;
   status?: (sounding: Sounding) => ReactNode;
+  /** Keys of this page that the reader can use. */
+  keys?: (sounding: Sounding) => ReactNode;
   children: (sounding: Sounding) => ReactNode;
 }
 
@@ -30,7 +32,7 @@ function crumbsOf(sounding: Sounding): Crumb[] {
 }
 
 /** The frame of every page of one sounding, with the states before the sounding is there. */
-export function SoundingPage({ section, status, children, ...frame }: SoundingPageProps) {
+export function SoundingPage({ section, status, keys, children, ...frame }: SoundingPageProps) {
   const { soundingId = '' } = useParams();
   const sounding = useQuery(soundingQuery(soundingId));
   if (hasCode(sounding.error, 'not-found') || hasCode(sounding.error, 'bad-request')) return <NotFoundPage />;
@@ -52,6 +54,7 @@ export function SoundingPage({ section, status, children, ...frame }: SoundingPa
       nav={soundingSections(soundingId)}
       navLabel="Sections of the sounding"
       status={status?.(sounding.data)}
+      keys={keys?.(sounding.data)}
     >
       {children(sounding.data)}
     </PageFrame>

@@ -1,12 +1,15 @@
 import { Minus, Plus } from 'lucide-react';
 import type { FitResult, LayeredEarthModel } from '../../../server/contract/fit';
-import { determinationOf, DETERMINATION_SOURCE, DETERMINATION_WORDS } from '../../runs/determination';
+import { DETERMINATION_SOURCE } from '../../runs/determination';
 import { BedSwatch } from '../../runs/bed-swatch';
+import { isRejected, REJECTED_RANGES_NOTE } from '../../runs/rejected-fit';
 import { boundaryDepths } from '../../charts/chart-data';
 import { Checkbox } from '../../ui/checkbox';
-import { formatLength, formatRange, formatResistivity, formatSignificant } from '../../ui/format';
+import { classNames } from '../../ui/class-names';
+import { formatLength, formatSignificant } from '../../ui/format';
 import { IconButton } from '../../ui/icon-button';
 import { Cell, HeaderCell, Table, TableBody, TableHead, TableRow } from '../../ui/table';
+import { BedRange } from './bed-range';
 import { MAX_BEDS, withBedSplit, withoutBed, withValue, type ModelValue } from './hand-model';
 import { heldKey } from './hand-model-store';
 import { ValueCell } from './value-cell';
@@ -18,7 +21,8 @@ export interface BedTableProps {
   /** Values held in the run that is shown, and those to be held in the next. */
   heldInRun: readonly string[];
   held: readonly string[];
-  onEdit: (earth: LayeredEarthModel) => void;
+  /** Null for one who may read but not fit. */
+  onEdit: ((earth: LayeredEarthModel) => void) | null;
   onHold: ((value: ModelValue, held: boolean) => void) | null;
   selectedBed: number | null;
   onSelectBed: (bed: number | null) => void;
@@ -37,9 +41,11 @@ export function BedTable(props: BedTableProps) {
           <HeaderCell numeric unit="m" className="hidden sm:table-cell">
             Base
           </HeaderCell>
-          <HeaderCell>
-            <span className="sr-only">Change</span>
-          </HeaderCell>
+          {props.onEdit ? (
+            <HeaderCell>
+              <span className="sr-only">Change</span>
+            </HeaderCell>
+          ) : null}
         </TableHead>
         <TableBody>
           {earth.resistivity.map((_, index) => (
@@ -47,13 +53,20 @@ export function BedTable(props: BedTableProps) {
           ))}
         </TableBody>
       </Table>
-      <p className="mt-1.5 text-sm text-muted">
-        {props.result
-          ? `Under each value its 95 % range. ${DETERMINATION_SOURCE}. A ticked value is held in the next fit.`
-          : 'A model by hand has no ranges; fit it to see what the readings tell of it.'}
-      </p>
+      <p className="mt-1.5 max-w-prose text-sm text-muted">{noteOf(props)}</p>
     </div>
   );
+}
+
+function noteOf({ result, onEdit, onHold }: BedTableProps): string {
+  if (!result)
+    return onEdit
+      ? 'This model has no ranges; fit it to see what the readings tell of it.'
+      : 'This model has no ranges of its own.';
+  const ranges = isRejected(result)
+    ? REJECTED_RANGES_NOTE
+    : `Under each value its 95 % range, then how well it is known. ${DETERMINATION_SOURCE}.`;
+  return onHold ? `${ranges} A ticked value is held in the next fit.` : ranges;
 }
 
 function BedRow(props: BedTableProps & { index: number }) {
@@ -82,7 +95,21 @@ function BedRow(props: BedTableProps & { index: number }) {
           </Cell>
         </>
       )}
-      <Cell className="text-right align-top whitespace-nowrap">
+      {onEdit ? <ChangeCell earth={earth} index={index} onEdit={onEdit} /> : null}
+    </TableRow>
+  );
+}
+
+interface ChangeCellProps {
+  earth: LayeredEarthModel;
+  index: number;
+  onEdit: (earth: LayeredEarthModel) => void;
+}
+
+function ChangeCell({ earth, index, onEdit }: ChangeCellProps) {
+  return (
+    <Cell className="text-right align-top whitespace-nowrap">
+      <span className="inline-flex flex-col sm:flex-row">
         <IconButton
           label={`Split bed ${index + 1} in two`}
           icon={<Plus aria-hidden size={15} />}
@@ -95,8 +122,8 @@ function BedRow(props: BedTableProps & { index: number }) {
           disabled={earth.resistivity.length < 2}
           onClick={() => onEdit(withoutBed(earth, index))}
         />
-      </Cell>
-    </TableRow>
+      </span>
+    </Cell>
   );
 }
 
@@ -118,45 +145,27 @@ function ValueCells(props: BedTableProps & { value: ModelValue }) {
             onChange={(event) => onHold(value, event.target.checked)}
           />
         ) : null}
-        <ValueCell
-          key={formatSignificant(number, 6)}
-          label={`${on === 'resistivity' ? 'Resistivity' : 'Thickness'} of bed ${index + 1}`}
-          value={number}
-          onCommit={(next) => onEdit(withValue(earth, value, next))}
-        />
+        {onEdit ? (
+          <ValueCell
+            key={formatSignificant(number, 6)}
+            label={`${on === 'resistivity' ? 'Resistivity' : 'Thickness'} of bed ${index + 1}`}
+            value={number}
+            onCommit={(next) => onEdit(withValue(earth, value, next))}
+          />
+        ) : (
+          <span className="figure px-1.5">{formatSignificant(number, 4)}</span>
+        )}
       </span>
       {result ? (
         <div className={onHold ? 'pl-6.5' : 'pl-1.5'}>
-          <RangeText result={result} value={value} heldInRun={heldInRun} />
+          <BedRange result={result} value={value} heldInRun={heldInRun} />
         </div>
       ) : null}
-    </Cell>
-  );
-}
-
-interface RangeTextProps {
-  result: FitResult;
-  value: ModelValue;
-  heldInRun: readonly string[];
-}
-
-function RangeText({ result, value, heldInRun }: RangeTextProps) {
-  const { on, index } = value;
-  const isHeld = heldInRun.includes(heldKey(value));
-  const factor = result.factors[on][index] ?? null;
-  const grade = determinationOf(factor, isHeld);
-  const format = on === 'resistivity' ? formatResistivity : formatLength;
-  return (
-    <span className="block pb-1 leading-tight">
-      {isHeld ? null : (
-        <span className="figure block text-sm">
-          {formatRange(result.intervals[on][index] ?? [null, null], format)}
+      {on === 'thickness' ? (
+        <span className={classNames('figure block text-sm sm:hidden', onHold ? 'pl-6.5' : 'pl-1.5')}>
+          <span className="font-sans text-muted">base</span> {formatLength(boundaryDepths(earth)[index] ?? 0)}
         </span>
-      )}
-      <span className="block text-xs text-muted">
-        {DETERMINATION_WORDS[grade]}
-        {isHeld || factor === null ? null : <span className="figure"> ×÷{formatSignificant(factor, 3)}</span>}
-      </span>
-    </span>
+      ) : null}
+    </Cell>
   );
 }

@@ -1,17 +1,19 @@
 import { Kbd } from '../../ui/kbd';
 
 /** Keys of the Bench, in the footer; they count while the focus is in the drawing. */
-export function BenchKeys() {
+export function BenchKeys({ mayFit }: { mayFit: boolean }) {
   return (
-    <p className="hidden flex-wrap items-center gap-x-6 gap-y-1 md:flex">
-      <span>
+    <p className="flex flex-wrap items-center gap-x-6 gap-y-1.5">
+      <span className="whitespace-nowrap">
         <Kbd>drag</Kbd> a boundary, or <Kbd>↑</Kbd> <Kbd>↓</Kbd> on it
       </span>
-      <span>
+      <span className="whitespace-nowrap">
         <Kbd>←</Kbd> <Kbd>→</Kbd> on a bed: its ρ
       </span>
-      <span>
-        in the drawing: <Kbd>F</Kbd> fit, <Kbd>Z</Kbd> undo
+      <span className="whitespace-nowrap">
+        in the drawing: {mayFit ? <Kbd>F</Kbd> : null}
+        {mayFit ? ' fit, ' : null}
+        <Kbd>Z</Kbd> undo
       </span>
     </p>
   );

@@ -18,7 +18,7 @@ export function BenchPage() {
     <SoundingPage
       section="Bench"
       layout="fill"
-      keys={<BenchKeys />}
+      keys={(sounding) => <BenchKeys mayFit={sounding.can.run} />}
       status={(sounding) => <BenchStatus soundingId={sounding.id} />}
     >
       {(sounding) => (

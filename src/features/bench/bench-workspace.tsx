@@ -114,7 +114,7 @@ export function BenchWorkspace({ sounding, revision, runs, run }: BenchWorkspace
         </div>
       </DrawingRegion>
       <div className="flex min-w-0 flex-col gap-6 border-t border-rule px-4 py-5 sm:px-7 lg:order-3 lg:col-span-2 xl:col-span-1 xl:border-t-0 xl:border-l">
-        {model.earth ? <FiguresOfModel earth={model.earth} misfit={curve.misfit} /> : null}
+        {model.earth ? <FiguresOfModel earth={model.earth} misfit={curve.misfit} fit={result} /> : null}
         {result && run ? (
           <section aria-labelledby="doubt-title">
             <h2 id="doubt-title" className="mb-2 font-semibold">

@@ -1,19 +1,27 @@
 import { darZarrouk } from '../../../inversion';
 import type { LayeredEarthModel } from '../../../server/contract/fit';
+import { isRejected } from '../../runs/rejected-fit';
+import { RejectedLine } from '../../runs/rejected-mark';
 import { FigureStrip, type FigureItem } from '../../ui/figure-strip';
 import { formatMisfit, formatPercent, formatSignificant, withUnit } from '../../ui/format';
 
 export interface FiguresProps {
   earth: LayeredEarthModel;
   misfit: { chi2PerReading: number; rmsPercent: number } | null;
+  /** The run whose model it is; null for a model by hand, which nobody has tested. */
+  fit: { misfitProbability: number | null } | null;
 }
 
 /** The few numbers a model is judged by: how it fits, and what it conducts along and across. */
-export function FiguresOfModel({ earth, misfit }: FiguresProps) {
+export function FiguresOfModel({ earth, misfit, fit }: FiguresProps) {
   const sums = darZarrouk(earth);
   const last = earth.resistivity.length;
-  const fit: FigureItem[] = [
-    { value: misfit ? formatMisfit(misfit.chi2PerReading) : '–', label: 'χ² per reading' },
+  const chi2 = misfit ? formatMisfit(misfit.chi2PerReading) : '–';
+  const closeness: FigureItem[] = [
+    {
+      value: isRejected(fit) ? <span className="text-rust">{chi2}</span> : chi2,
+      label: 'χ² per reading',
+    },
     { value: misfit ? formatPercent(misfit.rmsPercent) : '–', label: 'rms misfit' },
   ];
   const along: FigureItem[] = [
@@ -25,7 +33,8 @@ export function FiguresOfModel({ earth, misfit }: FiguresProps) {
   ];
   return (
     <div>
-      <FigureStrip items={fit} />
+      <FigureStrip items={closeness} />
+      <RejectedLine fit={fit} />
       {last > 1 ? (
         <div className="-mt-px">
           <FigureStrip items={along} />

@@ -4,6 +4,7 @@ import type { Sounding } from '../../../server/contract/soundings';
 import { runListQuery } from '../../api/run-queries';
 import { addressOf } from '../../app/addresses';
 import { PageWait, SoundingPage } from '../../soundings/sounding-page';
+import { isShowable } from '../../runs/run-standing';
 import { Button, ButtonLink } from '../../ui/button';
 import { PageHeader } from '../../ui/page-header';
 import { EmptyState } from '../../ui/view-states';
@@ -31,7 +32,7 @@ function Interpretations({ sounding }: { sounding: Sounding }) {
         onRetry={() => void Promise.all([list.refetch(), runs.refetch()])}
       />
     );
-  const finished = runs.data.items.filter((run) => run.state === 'finished' && run.outcome !== null);
+  const finished = runs.data.items.filter(isShowable);
   const start = search.get('start');
   const mayStart = sounding.can.interpret && finished.length > 0;
   const begin = mayStart ? (

@@ -6,6 +6,8 @@ import type { RunSummary } from '../../../server/contract/runs';
 import type { Sounding } from '../../../server/contract/soundings';
 import { formFaults } from '../../api/form-faults';
 import { addressOf } from '../../app/addresses';
+import { isRejected, REJECTED_WORDS } from '../../runs/rejected-fit';
+import { byStanding } from '../../runs/run-standing';
 import { letterOfRun, titleOfRun } from '../../runs/run-title';
 import { Button } from '../../ui/button';
 import { Dialog } from '../../ui/dialog';
@@ -26,16 +28,26 @@ export interface StartInterpretationDialogProps {
   onClose: () => void;
 }
 
-const optionOf = (run: RunSummary) => ({
-  value: run.id,
-  label: `${letterOfRun(run)}: ${titleOfRun(run)}, χ²/N ${run.outcome ? formatMisfit(run.outcome.chi2PerReading) : '–'}`,
-});
+function optionOf(run: RunSummary): { value: string; label: string } {
+  const words = [
+    `${letterOfRun(run)}: ${titleOfRun(run)}`,
+    run.outcome ? `χ²/N ${formatMisfit(run.outcome.chi2PerReading)}` : null,
+    isRejected(run.outcome) ? REJECTED_WORDS : null,
+  ];
+  return { value: run.id, label: words.filter((word) => word !== null).join(', ') };
+}
+
+/** Runs that explain the readings first, and of these the one that stands for the sounding. */
+const likeliest = (runs: readonly RunSummary[]): RunSummary | undefined =>
+  runs.toSorted(
+    (a, b) => Number(isRejected(a.outcome)) - Number(isRejected(b.outcome)) || byStanding(a, b),
+  )[0];
 
 export function StartInterpretationDialog(props: StartInterpretationDialogProps) {
   const { sounding, runs, runId, onClose } = props;
   const navigate = useNavigate();
   const create = useCreateInterpretation(sounding.id);
-  const first = runs.find((run) => run.id === runId) ?? runs.find((run) => run.note.pinned) ?? runs[0];
+  const first = runs.find((run) => run.id === runId) ?? likeliest(runs);
   const form = useForm<z.input<typeof createInterpretationSchema>>({
     resolver: formResolver(createInterpretationSchema),
     defaultValues: { runId: first?.id ?? '', title: `Ground at ${sounding.name}` },

@@ -23,7 +23,7 @@ function SheetPage({ soundingId }: { soundingId: string }) {
       section="Field sheet"
       layout="fill"
       status={(sounding) => <DraftStatus keeper={keeper} sounding={sounding} />}
-      keys={<SheetKeys />}
+      keys={() => <SheetKeys />}
     >
       {(sounding) => (
         <div className="w-full px-4 py-5 sm:px-7">

@@ -1,10 +1,13 @@
 import type { Run } from '../../../server/contract/runs';
 import { boundaryDepths } from '../../charts/chart-data';
 import { BedSwatch } from '../../runs/bed-swatch';
+import { isRejected } from '../../runs/rejected-fit';
 import { formatLength, formatRange, formatResistivity, withUnit } from '../../ui/format';
 import { Cell, Table, TableBody, TableRow } from '../../ui/table';
 import { RunHeads } from './run-heads';
 import { tableWidth } from './table-width';
+
+const RANGES_ASSUME = ', which assumes that the run explains the readings';
 
 /** Bed by bed from the surface: value and 95 % range of each run. */
 export function BedComparison({ runs }: { runs: readonly Run[] }) {
@@ -12,7 +15,10 @@ export function BedComparison({ runs }: { runs: readonly Run[] }) {
   return (
     <section aria-labelledby="beds-title">
       <h2 id="beds-title" className="mb-1 font-semibold">
-        Beds <span className="ml-2 text-sm font-normal text-muted">value, and its 95 % range below</span>
+        Beds{' '}
+        <span className="ml-2 text-sm font-normal text-muted">
+          value, and its 95 % range below{runs.some((run) => isRejected(run.result)) ? RANGES_ASSUME : ''}
+        </span>
       </h2>
       <Table caption="Beds of each run" className="table-fixed" style={tableWidth(runs.length)}>
         <RunHeads runs={runs} first="Bed" />

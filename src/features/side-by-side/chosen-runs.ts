@@ -1,10 +1,14 @@
+import type { RunSummary } from '../../../server/contract/runs';
+import { isRejected } from '../../runs/rejected-fit';
+import { weightOfInterpretation } from '../../runs/run-standing';
+
 export const FEWEST_RUNS = 2;
 export const MOST_RUNS = 6;
 
 export interface ChosenRuns {
   /** In the order they were chosen. */
   runIds: string[];
-  /** The run the others are held against. */
+  /** The run the reader wants the others held against; null leaves it to `baseOf`. */
   baseId: string | null;
 }
 
@@ -13,20 +17,37 @@ export function chosenRuns(search: URLSearchParams, known: ReadonlySet<string>):
   const asked = (search.get('runs') ?? '').split(',').filter((id) => known.has(id));
   const runIds = [...new Set(asked)].slice(0, MOST_RUNS);
   const base = search.get('base');
-  return { runIds, baseId: base !== null && runIds.includes(base) ? base : (runIds[0] ?? null) };
+  return { runIds, baseId: base !== null && runIds.includes(base) ? base : null };
 }
 
-/** The address of a choice; the base is left out where it is the first run anyway. */
+/**
+ * The run the others are held against: the one asked for; else, of those that explain the readings, the one under the
+ * weightiest interpretation, then the pinned one, then the closest fit.
+ */
+export function baseOf({ runIds, baseId }: ChosenRuns, runs: readonly RunSummary[]): string | null {
+  if (baseId !== null) return baseId;
+  const chosen = runs.filter((run) => runIds.includes(run.id));
+  const misfit = (run: RunSummary) => run.outcome?.chi2PerReading ?? Infinity;
+  const best = chosen.toSorted(
+    (a, b) =>
+      Number(isRejected(a.outcome)) - Number(isRejected(b.outcome)) ||
+      weightOfInterpretation(a) - weightOfInterpretation(b) ||
+      Number(b.note.pinned) - Number(a.note.pinned) ||
+      misfit(a) - misfit(b),
+  )[0];
+  return best?.id ?? null;
+}
+
+/** The address of a choice. */
 export function searchOf({ runIds, baseId }: ChosenRuns): Record<string, string> {
   return {
     ...(runIds.length > 0 ? { runs: runIds.join(',') } : {}),
-    ...(baseId !== null && baseId !== runIds[0] && runIds.includes(baseId) ? { base: baseId } : {}),
+    ...(baseId !== null && runIds.includes(baseId) ? { base: baseId } : {}),
   };
 }
 
 export function withRun(chosen: ChosenRuns, runId: string, isChosen: boolean): ChosenRuns {
   const others = chosen.runIds.filter((id) => id !== runId);
-  if (!isChosen)
-    return { runIds: others, baseId: chosen.baseId === runId ? (others[0] ?? null) : chosen.baseId };
+  if (!isChosen) return { runIds: others, baseId: chosen.baseId === runId ? null : chosen.baseId };
   return others.length >= MOST_RUNS ? chosen : { ...chosen, runIds: [...others, runId] };
 }

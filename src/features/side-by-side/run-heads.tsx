@@ -1,6 +1,7 @@
 import { useChartPalette } from '../../charts/chart-palette';
 import { runStyle } from '../../charts/run-style';
 import type { Run } from '../../../server/contract/runs';
+import { RejectedMark } from '../../runs/rejected-mark';
 import { letterOfRun, titleOfRun } from '../../runs/run-title';
 import { HeaderCell, TableHead } from '../../ui/table';
 
@@ -9,13 +10,16 @@ export function RunHeads({ runs, first }: { runs: readonly Run[]; first: string 
   const palette = useChartPalette();
   return (
     <TableHead>
-      <HeaderCell className="w-36">{first}</HeaderCell>
+      <HeaderCell className="w-36 align-top">{first}</HeaderCell>
       {runs.map((run) => (
-        <HeaderCell key={run.id} className="truncate">
+        <HeaderCell key={run.id} className="align-top whitespace-normal">
           <span className="figure" style={{ color: runStyle(letterOfRun(run), palette).color }}>
             {letterOfRun(run)}
           </span>{' '}
           <span className="font-normal">{titleOfRun(run)}</span>
+          <span className="block font-normal">
+            <RejectedMark fit={run.result} />
+          </span>
         </HeaderCell>
       ))}
     </TableHead>

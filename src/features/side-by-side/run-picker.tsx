@@ -1,6 +1,7 @@
 import { useChartPalette } from '../../charts/chart-palette';
 import { runStyle } from '../../charts/run-style';
 import type { RunSummary } from '../../../server/contract/runs';
+import { RejectedMark } from '../../runs/rejected-mark';
 import { letterOfRun, titleOfRun } from '../../runs/run-title';
 import { Checkbox } from '../../ui/checkbox';
 import { formatMisfit, formatMoment } from '../../ui/format';
@@ -52,6 +53,9 @@ export function RunPicker({ runs, chosen, onChoose }: RunPickerProps) {
                     {run.outcome ? formatMisfit(run.outcome.chi2PerReading) : '–'}
                   </span>
                   , {formatMoment(run.requestedAt)}
+                  <span className="block">
+                    <RejectedMark fit={run.outcome} />
+                  </span>
                 </>
               }
             />

@@ -4,10 +4,11 @@ import type { Sounding } from '../../../server/contract/soundings';
 import { runListQuery, runQuery } from '../../api/run-queries';
 import { addressOf } from '../../app/addresses';
 import { PageWait, SoundingPage } from '../../soundings/sounding-page';
+import { isShowable } from '../../runs/run-standing';
 import { ButtonLink } from '../../ui/button';
 import { PageHeader } from '../../ui/page-header';
 import { EmptyState } from '../../ui/view-states';
-import { chosenRuns, FEWEST_RUNS, searchOf, type ChosenRuns } from './chosen-runs';
+import { baseOf, chosenRuns, FEWEST_RUNS, searchOf, type ChosenRuns } from './chosen-runs';
 import { Comparison } from './comparison';
 import { isFinished } from './run-facts-table';
 import { RunPicker } from './run-picker';
@@ -23,7 +24,7 @@ export function SideBySidePage() {
 function SideBySide({ sounding }: { sounding: Sounding }) {
   const [search, setSearch] = useSearchParams();
   const list = useQuery(runListQuery(sounding.id));
-  const finished = (list.data?.items ?? []).filter((run) => run.state === 'finished' && run.outcome !== null);
+  const finished = (list.data?.items ?? []).filter(isShowable);
   const chosen = chosenRuns(search, new Set(finished.map((run) => run.id)));
   const runs = useQueries({ queries: chosen.runIds.map((id) => runQuery(id)) });
   const choose = (next: ChosenRuns) => setSearch(searchOf(next), { replace: true });
@@ -51,7 +52,7 @@ function SideBySide({ sounding }: { sounding: Sounding }) {
         <Comparison
           sounding={sounding}
           runs={loaded}
-          baseId={chosen.baseId}
+          baseId={baseOf(chosen, finished)}
           onBase={(baseId) => choose({ ...chosen, baseId })}
         />
       )}
