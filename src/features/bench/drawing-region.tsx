@@ -1,4 +1,5 @@
 import { useEffect, useEffectEvent, useRef, type ReactNode } from 'react';
+import { classNames } from '../../ui/class-names';
 
 export interface DrawingRegionProps {
   onFit: (() => void) | null;
@@ -61,7 +62,7 @@ export function DrawingRegion({ onFit, onUndo, onRedo, className, children }: Dr
       aria-label="Ground and curve"
       aria-keyshortcuts={onFit ? 'F Z Shift+Z' : 'Z Shift+Z'}
       tabIndex={-1}
-      className={className}
+      className={classNames('outline-none', className)}
     >
       {children}
     </section>
