@@ -1,4 +1,6 @@
+import { NOISE_TAIL } from '../fit/layer-count';
 import { threeDigits } from '../three-digits';
+import { TOLERANCES } from '../tolerances';
 import type { FitResult, Interval } from '../types';
 
 export type BedQuantity = 'resistivity' | 'thickness' | 'depth' | 'conductance' | 'resistance';
@@ -29,7 +31,7 @@ export interface FitPairComparison {
   /** second / first; null where a half-space has none */
   totalConductanceRatio: number | null;
   totalResistanceRatio: number | null;
-  /** which differences the data support, in words */
+  /** which values differ beyond their intervals, and which model fits closer, in words */
   text: string;
 }
 
@@ -87,7 +89,6 @@ function bedDifferences(a: FitResult, b: FitResult): BedDifference[] {
   return COLUMNS.flatMap(({ quantity, unit, values, intervals }) => {
     const first = values(a);
     const second = values(b);
-    // the half-space of the shorter model has no counterpart of its own kind in a longer one
     const shared = Math.min(first.length, second.length);
     return Array.from({ length: shared }, (_, bed) => ({
       bed,
@@ -118,46 +119,93 @@ function ratio(first: number, second: number): number | null {
   return first > 0 && second > 0 ? second / first : null;
 }
 
-function totalsSentence(a: FitResult, b: FitResult): string {
-  const pair = ([x, y]: [number, number], unit: string) => {
-    const change = ratio(x, y);
-    return change === null
-      ? ''
-      : `${threeDigits(x)} against ${threeDigits(y)} ${unit} (× ${change.toFixed(2)})`;
-  };
-  const s = pair([a.darZarrouk.totalConductanceS, b.darZarrouk.totalConductanceS], 'S');
-  const t = pair([a.darZarrouk.totalResistanceOhmM2, b.darZarrouk.totalResistanceOhmM2], 'Ω·m²');
-  return s === '' || t === '' ? '' : ` Total conductance ${s}; total transverse resistance ${t}.`;
+type Names = readonly [string, string];
+
+const bedCount = (result: FitResult): number => result.earth.resistivity.length;
+
+function countsSentence(a: FitResult, b: FitResult): string {
+  const [first, second] = [bedCount(a), bedCount(b)];
+  return first === second
+    ? `Both models have ${first} ${first === 1 ? 'bed' : 'beds'}.`
+    : `The models have ${first} and ${second} beds; beds are matched from the surface, so only the shallow ones compare like with like.`;
 }
 
-function describePair(
-  a: FitResult,
-  b: FitResult,
-  beds: readonly BedDifference[],
-  [nameA, nameB]: readonly [string, string],
-): string {
-  const counts = [a, b].map((result) => result.earth.resistivity.length);
-  const supported = beds.filter((bed) => bed.intervalsOverlap === false);
-  const head =
-    counts[0] === counts[1]
-      ? `Both models have ${counts[0]} ${counts[0] === 1 ? 'bed' : 'beds'}.`
-      : `The models have ${counts[0]} and ${counts[1]} beds; beds are matched from the surface, so only the shallow ones compare like with like.`;
-  const change = b.chi2PerReading - a.chi2PerReading;
-  const fitAlike = Math.abs(change) < Math.max(0.02, 0.05 * Math.max(a.chi2PerReading, b.chi2PerReading));
-  const middle =
-    supported.length === 0
-      ? ` No bed differs beyond the 95 % intervals${fitAlike ? ': the data do not tell these models apart' : ''}.`
-      : ` The data support ${supported.length === 1 ? 'one difference' : `${supported.length} differences`} beyond the 95 % intervals: ${supported.map(phrase).join('; ')}.`;
-  const tail = fitAlike
-    ? ` They fit alike (χ²/N ${threeDigits(a.chi2PerReading)} and ${threeDigits(b.chi2PerReading)}).`
-    : ` ${change < 0 ? nameB : nameA} fits closer (χ²/N ${threeDigits(a.chi2PerReading)} and ${threeDigits(b.chi2PerReading)}).`;
-  return head + middle + tail + totalsSentence(a, b);
+/**
+ * Differences worth a word: intervals apart, the base of bed 1 not told twice (it is its thickness), and the half-space of
+ * a shorter model not set against a bounded bed.
+ */
+function told(a: FitResult, b: FitResult, beds: readonly BedDifference[]): BedDifference[] {
+  const halfSpace = bedCount(a) === bedCount(b) ? Infinity : Math.min(bedCount(a), bedCount(b)) - 1;
+  return beds.filter(
+    ({ bed, quantity, intervalsOverlap }) =>
+      intervalsOverlap === false &&
+      !(bed === 0 && quantity === 'depth') &&
+      !(bed === halfSpace && quantity === 'resistivity'),
+  );
+}
+
+function alike(a: FitResult, b: FitResult): boolean {
+  const [first, second] = [a.chi2PerReading, b.chi2PerReading];
+  return Math.abs(second - first) < Math.max(0.02, 0.05 * Math.max(first, second));
+}
+
+function differencesSentence(a: FitResult, b: FitResult, beds: readonly BedDifference[]): string {
+  const differences = told(a, b, beds);
+  if (differences.length === 0)
+    return `No bed differs beyond the 95 % intervals${alike(a, b) ? ': the data do not tell these models apart' : ''}.`;
+  return `${differences.length === 1 ? 'One value differs' : `${differences.length} values differ`} beyond the 95 % intervals: ${differences.map(phrase).join('; ')}.`;
+}
+
+function misfitSentence(a: FitResult, b: FitResult, beds: readonly BedDifference[], names: Names): string {
+  const misfits = `(χ²/N ${threeDigits(a.chi2PerReading)} and ${threeDigits(b.chi2PerReading)})`;
+  if (alike(a, b))
+    return told(a, b, beds).length === 0
+      ? `They fit alike ${misfits}.`
+      : `They fit alike ${misfits}: the same readings do not choose between them.`;
+  const closer = b.chi2PerReading < a.chi2PerReading ? names[1] : names[0];
+  const bothEnough = [a, b].every(({ misfitProbability }) => (misfitProbability ?? 0) > NOISE_TAIL);
+  return `${closer} fits closer ${misfits}${bothEnough ? ', but both fit within the errors' : ''}.`;
+}
+
+/** Intervals come from the stated errors, so they say too little where these do not explain the misfit. */
+function narrowSentence(a: FitResult, b: FitResult, names: Names): string | null {
+  const narrow = [a, b].map(
+    ({ misfitProbability }) => (misfitProbability ?? 1) < TOLERANCES.misfitProbability,
+  );
+  if (!narrow.includes(true)) return null;
+  return narrow[0] && narrow[1]
+    ? 'The stated errors explain neither misfit, so the intervals are too narrow.'
+    : `${narrow[0] ? names[0] : names[1]} misfits beyond its errors, so its intervals are too narrow.`;
+}
+
+function totalsSentence(a: FitResult, b: FitResult): string | null {
+  const pair = (x: number, y: number, unit: string) => {
+    const change = ratio(x, y);
+    return change === null
+      ? null
+      : `${threeDigits(x)} against ${threeDigits(y)} ${unit} (× ${change.toFixed(2)})`;
+  };
+  const s = pair(a.darZarrouk.totalConductanceS, b.darZarrouk.totalConductanceS, 'S');
+  const t = pair(a.darZarrouk.totalResistanceOhmM2, b.darZarrouk.totalResistanceOhmM2, 'Ω·m²');
+  return s && t && `Above the deepest boundary: conductance ${s}; transverse resistance ${t}.`;
+}
+
+function describePair(a: FitResult, b: FitResult, beds: readonly BedDifference[], names: Names): string {
+  return [
+    countsSentence(a, b),
+    differencesSentence(a, b, beds),
+    misfitSentence(a, b, beds, names),
+    narrowSentence(a, b, names),
+    totalsSentence(a, b),
+  ]
+    .filter((sentence) => sentence !== null)
+    .join(' ');
 }
 
 const DEFAULT_NAMES = ['The first', 'The second'] as const;
 
 /**
- * Every pair of two or more results: bed by bed differences, misfit, S and T, and which differences the data support.
+ * Every pair of two or more results: bed by bed differences, misfit, S and T, and what the readings make of it in words.
  * `names` begin a sentence in the words, one a result, as "Run A"; without them the words say the first and the second.
  */
 export function compareFits(results: readonly FitResult[], names?: readonly string[]): FitComparison {

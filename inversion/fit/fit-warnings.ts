@@ -1,5 +1,6 @@
 import { threeDigits } from '../three-digits';
 import { TOLERANCES } from '../tolerances';
+import { chiSquaredSurvival } from '../uncertainty/chi-squared';
 import type { AllowedModel } from '../uncertainty/parameter-doubt';
 import type { EarthModel, FitSettings, Reading } from '../types';
 
@@ -41,8 +42,17 @@ function anotherGround({ apart, chi2, readings, freeParameters }: FitWarningInpu
   ];
 }
 
+/** With too few readings to spare no chance can be told; a χ² improbable even for as many degrees as readings still can. */
+function untestableMisfit(chi2: number, readings: number, freeParameters: number): string[] {
+  if (chiSquaredSurvival(chi2, readings) >= TOLERANCES.misfitProbability) return [];
+  return [
+    `The misfit is larger than the stated errors explain (χ²/N ${threeDigits(chi2 / readings)}), though ${readings} ${readings === 1 ? 'reading' : 'readings'} for ${freeParameters} unknowns are too few to tell its chance. The intervals are not rescaled.`,
+  ];
+}
+
 function improbableMisfit({ chi2, readings, freeParameters, probability }: FitWarningInput): string[] {
-  if (probability === null || probability >= TOLERANCES.misfitProbability) return [];
+  if (probability === null) return untestableMisfit(chi2, readings.length, freeParameters);
+  if (probability >= TOLERANCES.misfitProbability) return [];
   const scale = Math.sqrt(chi2 / (readings.length - freeParameters));
   const chance = probability < 1e-4 ? 'less than 0.01 %' : `${(100 * probability).toPrecision(2)} %`;
   return [

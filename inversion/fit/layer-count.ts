@@ -3,7 +3,8 @@ import type { LayerCountFit } from '../types';
 
 /** Fewest degrees of freedom at which a χ² can be tested. */
 const TESTABLE = 2;
-const NOISE_TAIL = 0.05;
+/** A misfit with at least this chance is within the noise. */
+export const NOISE_TAIL = 0.05;
 
 /** χ² + p ln N. */
 export function bic(chi2: number, parameters: number, readings: number): number {

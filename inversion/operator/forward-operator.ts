@@ -32,7 +32,8 @@ export interface ForwardOperator {
 /**
  * ρa = W·T₁(λ) for a list of spreads. W depends on the spreads alone; make it once a sounding.
  * Against direct integration over random earths of 1–8 layers to contrasts of 10⁴, every kind of spread: worst relative
- * error 3e-9, median 1e-13 (`tests/inversion/operator`). Throws `InversionError` with the path of a refused spread.
+ * error 3e-9, median 1e-13 (`tests/inversion/operator`). Rounding grows with the contrast: within 1e-6 up to 10⁷ for a thin
+ * resistive cover (gradient limit worst), up to 10⁹ for a resistive base. Throws `InversionError` with the path of a refused spread.
  */
 export function createForwardOperator(spreads: readonly Spread[]): ForwardOperator {
   spreads.forEach((spread, i) => requireSpread(spread, ['spreads', i]));

@@ -15,9 +15,15 @@ export interface DoubtItem {
   factor: number | null;
 }
 
-function percent(factor: number): string {
-  const value = 100 * (factor - 1);
-  return value < 10 ? value.toPrecision(2) : String(Math.round(value));
+/** A quantity with a 68 % factor from here on is not known by the readings (Auken & Christiansen 2004; from memory). */
+const UNKNOWN_FACTOR = 2;
+/** Up to here a factor reads as a percentage either way. */
+const NARROW_FACTOR = 1.2;
+
+function range(factor: number): string {
+  return factor <= NARROW_FACTOR
+    ? ` ± ${(100 * (factor - 1)).toPrecision(2)} %`
+    : `, times or divided by ${factor.toPrecision(3)}`;
 }
 
 function equivalenceOf({ earth, correlation, darZarrouk }: FitResult, bed: number): DoubtItem | null {
@@ -29,13 +35,14 @@ function equivalenceOf({ earth, correlation, darZarrouk }: FitResult, bed: numbe
   const factor = (conductive ? darZarrouk.conductanceFactor : darZarrouk.resistanceFactor)[bed]!;
   const unit = conductive ? 'S' : 'Ω·m²';
   const symbol = conductive ? 'S = h/ρ' : 'T = hρ';
-  const range = factor === null ? '' : ` ± ${percent(factor)} %`;
+  const trade = `thicker at a proportionally ${conductive ? 'higher' : 'lower'} resistivity, it gives nearly the same curve`;
+  const known = factor !== null && factor < UNKNOWN_FACTOR;
   return {
     bed,
     kind: conductive ? 'conductance' : 'resistance',
-    text: `Bed ${bed + 1} is known by ${symbol} = ${threeDigits(value)} ${unit}${range}, not by its thickness and resistivity apart: twice as thick at ${
-      conductive ? 'twice' : 'half'
-    } the resistivity gives nearly the same curve.`,
+    text: known
+      ? `Bed ${bed + 1} is known by ${symbol} = ${threeDigits(value)} ${unit}${range(factor)} (68 %), better than by its thickness and resistivity apart: ${trade}.`
+      : `The thickness and resistivity of bed ${bed + 1} cannot be told apart: ${trade}. ${symbol} is not known within a factor of 2 either: ${threeDigits(value)} ${unit} is one of many values that fit.`,
     value,
     unit,
     factor,

@@ -14,15 +14,27 @@ function valueAt(line: unknown, path: Path): unknown {
 
 function show(value: unknown): string {
   if (value === undefined) return 'nothing';
+  if (typeof value === 'number') return String(value);
   const text = JSON.stringify(value);
   return text.length > 60 ? `${text.slice(0, 57)}…` : text;
 }
 
+/** What was found is told apart, so the words "Invalid input" and "received …" go. */
+function plain(message: string): string {
+  return message.replace(/^Invalid input: /, '').replace(/, received .*$/, '');
+}
+
 /** What an issue allows; a union's own words say nothing, so its branches are named. */
 function allowed(issue: z.core.$ZodIssue): string {
-  if (issue.code !== 'invalid_union') return issue.message;
+  if (issue.code === 'unrecognized_keys') return 'no such field is known here';
+  if (issue.code !== 'invalid_union') return plain(issue.message);
   if (issue.errors.length === 0) return `expected one of ${spreadTypeSchema.options.join(', ')}`;
-  return issue.errors.map((branch) => branch[0]?.message ?? '').join(' or ');
+  return issue.errors.map((branch) => plain(branch[0]?.message ?? '')).join(' or ');
+}
+
+/** Where the fault is: an unknown field itself, not what holds it. */
+function placeOf(issue: z.core.$ZodIssue): Path {
+  return issue.code === 'unrecognized_keys' ? [...issue.path, issue.keys[0]!] : issue.path;
 }
 
 function spell(path: Path): string {
@@ -38,10 +50,11 @@ export function parseLine<T extends z.ZodType>(schema: T, line: unknown): z.infe
   const parsed = schema.safeParse(line);
   if (parsed.success) return parsed.data;
   const issue = parsed.error.issues[0]!;
-  const where = issue.path.length === 0 ? 'the line' : spell(issue.path);
+  const path = placeOf(issue);
+  const where = path.length === 0 ? 'the line' : spell(path);
   throw new LineRefusal(
     'invalid-line',
-    `${where}: ${allowed(issue)}; found ${show(valueAt(line, issue.path))}`,
-    issue.path.map((key) => (typeof key === 'symbol' ? String(key) : key)),
+    `${where}: ${allowed(issue)}; found ${show(valueAt(line, path))}`,
+    path.map((key) => (typeof key === 'symbol' ? String(key) : key)),
   );
 }

@@ -106,7 +106,21 @@ describe('forward', () => {
     [
       'a key that is not known',
       { id: 1, earth: EARTH, spreads: [WENNER], colour: 'red' },
-      { code: 'invalid-line', path: [], message: expect.stringContaining('colour') },
+      {
+        code: 'invalid-line',
+        path: ['colour'],
+        message: 'colour: no such field is known here; found "red"',
+      },
+    ],
+    [
+      'an unknown key of a spread',
+      { id: 1, earth: EARTH, spreads: [{ ...WENNER, n: 2 }] },
+      { path: ['spreads', 0, 'n'], message: 'spreads[0].n: no such field is known here; found 2' },
+    ],
+    [
+      'a number written as words',
+      { id: 1, earth: { resistivity: ['NaN'], thickness: [] }, spreads: [WENNER] },
+      { path: ['earth', 'resistivity', 0], message: 'earth.resistivity[0]: expected number; found "NaN"' },
     ],
   ])('refuses %s with its place', async (_, request, error) => {
     const { status, answers } = await run(['forward'], line(request));
@@ -117,6 +131,21 @@ describe('forward', () => {
   it('refuses a line that is JSON but not an object, and an id of the wrong kind', async () => {
     const { answers } = await run(['forward'], `[1]\n${line({ id: [1], earth: EARTH, spreads: [WENNER] })}`);
     expect(answers.map((answer) => answer.id)).toEqual([null, null]);
+    expect(answers[0]!.error).toMatchObject({ message: 'the line: expected object; found [1]', path: [] });
+    expect(answers[1]!.error).toMatchObject({
+      message: 'id: expected string or expected number; found [1]',
+      path: ['id'],
+    });
+  });
+
+  it('calls a number too large for a double by its name', async () => {
+    const { answers } = await run(
+      ['forward'],
+      '{"id":1,"earth":{"resistivity":[1e999],"thickness":[]},"spreads":[{"type":"wenner","spacing":5}]}\n',
+    );
+    expect(answers[0]!.error).toMatchObject({
+      message: 'earth.resistivity[0]: expected number; found Infinity',
+    });
   });
 
   it('answers ten thousand lines, waiting for a slow reader', { timeout: 60_000 }, async () => {
@@ -164,6 +193,17 @@ describe('fit', () => {
       ['settings', 'bounds', 'resistivity'],
     ],
     [{ layers: 2, fixed: [{ on: 'thickness', index: 1, value: 3 }] }, ['settings', 'fixed', 0, 'index']],
+    [
+      {
+        layers: 2,
+        fixed: [
+          { on: 'thickness', index: 0, value: 3 },
+          { on: 'thickness', index: 0, value: 4 },
+        ],
+      },
+      ['settings', 'fixed', 1],
+    ],
+    [{ layers: 1, fixed: [{ on: 'thickness', index: 0, value: 3 }] }, ['settings', 'fixed', 0, 'index']],
     [{ layers: 2, seed: -1 }, ['settings', 'seed']],
   ])('refuses the settings %j', async (settings, path) => {
     const { status, answers } = await run(

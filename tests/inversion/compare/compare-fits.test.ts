@@ -24,8 +24,52 @@ describe('compareFits', () => {
     expect(supported.map((bed) => [bed.bed, bed.quantity])).toEqual([[1, 'resistivity']]);
     expect(supported[0]!.ratio).toBeCloseTo(1.5, 3);
     expect(pairs[0]!.text).toContain(
-      'The data support one difference beyond the 95 % intervals: resistivity of bed 2 (20.0 against 30.0 Ω·m).',
+      'One value differs beyond the 95 % intervals: resistivity of bed 2 (20.0 against 30.0 Ω·m). They fit alike',
     );
+  });
+
+  it('says that the same readings do not choose between models that differ and fit alike', () => {
+    const [pair] = compareFits([BASE, fitOf({ resistivity: [100, 30], thickness: [5] })]).pairs;
+    expect(pair!.text).toContain('the same readings do not choose between them.');
+  });
+
+  it('tells the base of bed 1 once, as its thickness', () => {
+    const [pair] = compareFits([BASE, fitOf({ resistivity: [100, 20], thickness: [10] })]).pairs;
+    expect(pair!.beds.filter((bed) => bed.intervalsOverlap === false).map((bed) => bed.quantity)).toEqual([
+      'thickness',
+      'depth',
+    ]);
+    expect(pair!.text).toContain(
+      'One value differs beyond the 95 % intervals: thickness of bed 1 (5.00 against 10.0 m).',
+    );
+  });
+
+  it('does not set a half-space against a bounded bed', () => {
+    const three = fitOf({ resistivity: [100, 200, 20], thickness: [5, 20] });
+    const [pair] = compareFits([BASE, three]).pairs;
+    const second = pair!.beds.find((bed) => bed.bed === 1 && bed.quantity === 'resistivity')!;
+    expect(second.intervalsOverlap).toBe(false);
+    expect(pair!.text).not.toContain('resistivity of bed 2');
+  });
+
+  it('says when both fit within the errors, and when intervals are too narrow for the misfit', () => {
+    const told = (first: number | null, second: number | null) =>
+      compareFits(
+        [
+          { ...BASE, chi2PerReading: 1, misfitProbability: first },
+          { ...BASE, chi2PerReading: 0.7, misfitProbability: second },
+        ],
+        ['Run A', 'Run B'],
+      ).pairs[0]!.text;
+    expect(told(0.4, 0.8)).toContain(
+      'Run B fits closer (χ²/N 1.00 and 0.700), but both fit within the errors.',
+    );
+    expect(told(0.03, 0.8)).toContain('Run B fits closer (χ²/N 1.00 and 0.700).');
+    expect(told(null, 0.8)).toContain('Run B fits closer (χ²/N 1.00 and 0.700).');
+    expect(told(0.03, 0.8)).not.toContain('too narrow');
+    expect(told(0.001, 0.8)).toContain('Run A misfits beyond its errors, so its intervals are too narrow.');
+    expect(told(0.8, 0.001)).toContain('Run B misfits beyond its errors');
+    expect(told(0.001, 0.001)).toContain('The stated errors explain neither misfit');
   });
 
   it('says that the data do not tell near models apart', () => {

@@ -238,6 +238,19 @@ describe('fitLayered with few readings', () => {
     ]);
   });
 
+  it('warns of a misfit that no number of unknowns excuses, though its chance cannot be told', () => {
+    const three = sounding(H_TYPE, WENNER.slice(0, 3)).map((reading, i) => ({
+      ...reading,
+      apparentResistivity: [10, 1000, 10][i]!,
+    }));
+    const fit = fitLayered(three, layered(2));
+    expect(fit.misfitProbability).toBeNull();
+    expect(fit.warnings[0]).toMatch(
+      /^The misfit is larger than the stated errors explain \(χ²\/N \d+\), though 3 readings for 3 unknowns/,
+    );
+    expect(fitLayered(one, layered(1)).warnings).toEqual([]);
+  });
+
   it('tries only the layer counts that the readings can carry', () => {
     expect(fitLayered(one, layered('auto')).layerCounts!.map((c) => c.layers)).toEqual([1]);
     const five = sounding(H_TYPE, WENNER.slice(0, 5));

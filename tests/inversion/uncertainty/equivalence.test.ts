@@ -29,7 +29,7 @@ describe('describeDoubt', () => {
     const item = describeDoubt(fit).find((doubt) => doubt.kind === 'conductance')!;
     expect(item).toMatchObject({ bed: 1, unit: 'S' });
     expect(item.value).toBeCloseTo(0.3, 2);
-    expect(item.text).toContain('Bed 2 is known by S = h/ρ = 0.300 S ±');
+    expect(item.text).toContain('Bed 2 is known by S = h/ρ = 0.300 S');
     expect(item.factor!).toBeGreaterThan(1);
     expect(item.factor!).toBeLessThan(fit.factors.thickness[1] ?? Infinity);
   });
@@ -54,6 +54,21 @@ describe('describeDoubt', () => {
     expect(kinds(-0.96)).toContain('resistance');
     expect(kinds(0.94)).not.toContain('conductance');
     expect(kinds(-0.94)).not.toContain('resistance');
+  });
+
+  it('calls S known only where its own factor is below 2, and gives a wide one as a factor', () => {
+    const fit = fitOf({ resistivity: [100, 5, 500], thickness: [10, 1.5] });
+    const words = (factor: number | null) =>
+      describeDoubt({ ...fit, darZarrouk: { ...fit.darZarrouk, conductanceFactor: [1.1, factor] } }).find(
+        (item) => item.kind === 'conductance',
+      )!.text;
+    expect(words(1.041)).toContain('is known by S = h/ρ = 0.300 S ± 4.1 % (68 %), better than');
+    expect(words(1.7)).toContain('is known by S = h/ρ = 0.300 S, times or divided by 1.70 (68 %)');
+    for (const factor of [2, null])
+      expect(words(factor)).toBe(
+        'The thickness and resistivity of bed 2 cannot be told apart: thicker at a proportionally higher resistivity, ' +
+          'it gives nearly the same curve. S = h/ρ is not known within a factor of 2 either: 0.300 S is one of many values that fit.',
+      );
   });
 
   it('names a middle bed that fewer beds explain away', () => {
