@@ -10,6 +10,8 @@ export interface CurveReading {
   spacing: number;
   /** The spacing in words, as "AB/2 6.8 m". */
   label: string;
+  /** MN/2 where the spread has one, m; readings of one MN are a branch of the curve. */
+  halfMN?: number | undefined;
   /** Ω·m */
   apparentResistivity: number;
   /** Standard error of ln ρa; 0.03 = 3 %. */

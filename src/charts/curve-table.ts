@@ -13,8 +13,10 @@ export function curveTable(
     .filter((line) => line.kind !== 'ghost' && (line.predicted ?? line.residuals) !== undefined)
     .toSorted((first, second) => first.letter.localeCompare(second.letter, 'en'));
   const nameOf = (line: CurveLine) => (line.letter === '' ? line.name : `run ${line.letter}`);
+  const hasMN = readings.some((reading) => reading.halfMN !== undefined);
   const columns: ChartColumn[] = [
     { label, unit, format: (value) => formatSignificant(value) },
+    ...(hasMN ? [{ label: 'MN/2', unit: 'm', format: (value: number) => formatSignificant(value) }] : []),
     { label: 'Measured', unit: 'Ω·m', format: formatResistivity },
     { label: 'Standard error', unit: 'relative', format: formatRelativeError },
     { label: 'Used' },
@@ -25,6 +27,7 @@ export function curveTable(
   ];
   const rows = readings.map((reading, index) => [
     reading.spacing,
+    ...(hasMN ? [reading.halfMN ?? null] : []),
     reading.apparentResistivity,
     reading.relativeError,
     reading.excluded ? `left out${reading.reason ? `: ${reading.reason}` : ''}` : 'yes',

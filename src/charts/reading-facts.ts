@@ -1,5 +1,6 @@
 import { formatFixed, formatRelativeError, formatResistivity, withUnit } from '../ui/format';
 import type { CurveLine, CurveReading } from './chart-data';
+import { branchName } from './curve-branches';
 
 export interface Fact {
   label: string;
@@ -9,7 +10,12 @@ export interface Fact {
 /** What is known of one reading, for its tip, its readout and its place in speech. */
 export function readingFacts(reading: CurveReading, index: number, line: CurveLine | null): Fact[] {
   const facts: Fact[] = [
-    { label: 'Spacing', value: reading.label },
+    {
+      label: 'Spacing',
+      value: [reading.label, ...(reading.halfMN === undefined ? [] : [branchName(reading.halfMN)])].join(
+        ', ',
+      ),
+    },
     { label: 'Measured', value: withUnit(formatResistivity(reading.apparentResistivity), 'Ω·m') },
   ];
   if (reading.relativeError > 0)

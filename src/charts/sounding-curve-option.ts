@@ -1,6 +1,7 @@
 import type { EChartsOption, XAXisComponentOption, YAXisComponentOption } from 'echarts';
 import type { CurveLine, CurvePoint, CurveReading } from './chart-data';
 import { MONO, SANS, type ChartPalette } from './chart-palette';
+import { branchSeries } from './curve-branches';
 import { curveSeries } from './curve-lines';
 import { curveTooltip } from './curve-tooltip';
 import { gridSeries, readingSeries } from './curve-marks';
@@ -115,6 +116,7 @@ export function soundingCurveOption(input: SoundingCurveInput): EChartsOption {
           residualSeries(residualPoints(readings, shown.residuals), palette, focusedReading),
         ]
       : [];
+  const branches = branchSeries(readings, palette);
   return {
     animation: false,
     textStyle: { fontFamily: SANS, color: palette.muted },
@@ -124,6 +126,7 @@ export function soundingCurveOption(input: SoundingCurveInput): EChartsOption {
     tooltip: curveTooltip(readings, shown, palette),
     series: [
       gridSeries(axes, palette),
+      ...(branches ? [branches] : []),
       ...curveSeries(lines, axes, layout.plot.height, palette, input.chosenLine),
       readingSeries(readings, palette, focusedReading),
       ...strip,

@@ -4,7 +4,7 @@ import type { Run } from '../../server/contract/runs';
 import type { CurveLine, CurvePoint, CurveReading, GroundColumn, HeldValue } from '../charts/chart-data';
 import { curvePlaces, type CurvePlace } from './curve-places';
 import { letterOfRun, titleOfRun } from './run-title';
-import { spacingLabel } from '../soundings/spread-words';
+import { halfMNOf, spacingLabel } from '../soundings/spread-words';
 
 /** A kept reading as the fit takes it, with its place in the revision. */
 export type KeptReading = Pick<
@@ -50,6 +50,7 @@ export function chartReadings({ kept, excluded }: CurveData): CurveReading[] {
       id: `row ${reading.row}`,
       spacing: reading.plottingSpacingM,
       label: spacingLabel(reading.spread),
+      halfMN: halfMNOf(reading.spread),
       apparentResistivity: reading.apparentResistivity,
       relativeError: reading.relativeError,
       excluded: reasons.has(reading.row),

@@ -32,6 +32,10 @@ export function spacingLabel(spread: FitReading['spread']): string {
   }
 }
 
+/** MN/2 where it was written down, m: readings of one MN form a branch of the curve. */
+export const halfMNOf = (spread: FitReading['spread']): number | undefined =>
+  'halfMN' in spread ? (spread.halfMN ?? undefined) : undefined;
+
 /** Name of a curve's x axis: AB/2 itself where the spread has one, else the AB/2 that reaches as deep. */
 export const SPACING_AXIS: Record<SpreadType, string> = {
   schlumberger: 'AB/2, m',

@@ -2,7 +2,7 @@ import { useMemo } from 'react';
 import type { Sounding } from '../../../server/contract/soundings';
 import type { CurveReading } from '../../charts/chart-data';
 import { SoundingCurve } from '../../charts/sounding-curve';
-import { SPACING_AXIS, SPREAD_NAMES, spacingLabel } from '../../soundings/spread-words';
+import { SPACING_AXIS, SPREAD_NAMES, halfMNOf, spacingLabel } from '../../soundings/spread-words';
 import { formatCount } from '../../ui/format';
 import type { SheetReading } from './sheet-reader';
 import { thinReadings } from './thin-readings';
@@ -49,6 +49,7 @@ const curveReading = ({ row, reading, derived }: SheetReading): CurveReading => 
   id: String(row),
   spacing: derived.plottingSpacingM,
   label: `Row ${row}, ${spacingLabel(reading.spread)}`,
+  halfMN: halfMNOf(reading.spread),
   apparentResistivity: derived.apparentResistivityOhmM,
   relativeError: derived.relativeError,
   excluded: reading.excluded !== null,

@@ -5,6 +5,7 @@ import { SVGRenderer } from 'echarts/renderers';
 import { describe, expect, test } from 'vitest';
 import type { CurveLine, CurveReading } from '../../../src/charts/chart-data';
 import { chartPalette } from '../../../src/charts/chart-palette';
+import { curveBranches } from '../../../src/charts/curve-branches';
 import { curveTable } from '../../../src/charts/curve-table';
 import { readingFacts, readingSentence } from '../../../src/charts/reading-facts';
 import { residualPoints } from '../../../src/charts/residual-strip';
@@ -225,4 +226,32 @@ test('the table has every reading and each run in order of letters', () => {
   ]);
   expect(rows[1]!.slice(0, 4)).toEqual([6.8, 78, 0.03, 'left out: wet cable']);
   expect(rows[3]!.slice(4, 6)).toEqual([13, 7]);
+});
+
+describe('branches of MN', () => {
+  const halfMNs = [0.5, 0.5, 0.5, 10];
+  const branched = readings.map((reading, i) => ({ ...reading, halfMN: halfMNs[i] }));
+
+  test('hold the kept readings of each MN in order of spacing', () => {
+    const branches = curveBranches(branched.toReversed());
+    expect(branches.map(({ halfMN, readings: own }) => [halfMN, own.map(({ id }) => id)])).toEqual([
+      [0.5, ['r0', 'r2']],
+      [10, ['r3']],
+    ]);
+  });
+
+  test('are named in the drawing where there is more than one', () => {
+    const names = (text: string) => text.match(/MN\/2 [\d.]+\u00a0m/g) ?? [];
+    expect(names(drawn({ readings: branched }))).toEqual(['MN/2 0.5\u00a0m', 'MN/2 10\u00a0m']);
+    expect(names(drawn({ readings: branched.map((reading) => ({ ...reading, halfMN: 0.5 })) }))).toEqual([]);
+    expect(names(drawn())).toEqual([]);
+  });
+
+  test('stand in the table and in the words of a reading', () => {
+    const table = curveTable(branched, [], 'AB/2, m');
+    expect(table.columns.map((column) => column.label).slice(0, 3)).toEqual(['AB/2', 'MN/2', 'Measured']);
+    expect(table.rows.map((row) => row[1])).toEqual(halfMNs);
+    expect(curveTable(readings, [], 'AB/2, m').columns.map((column) => column.label)).not.toContain('MN/2');
+    expect(readingFacts(branched[3]!, 3, null)[0]?.value).toBe('AB/2 300 m, MN/2 10\u00a0m');
+  });
 });
