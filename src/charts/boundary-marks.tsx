@@ -16,6 +16,8 @@ export interface BoundaryMarksProps {
   /** Left edge of the bar. */
   barX: number;
   palette: ChartPalette;
+  /** Draws the intervals faintly. */
+  isFaint?: boolean | undefined;
   onMove?: MoveBoundary | undefined;
 }
 
@@ -34,19 +36,15 @@ function Whisker({
   scale,
   x,
   palette,
-}: {
-  boundary: GroundBoundary;
-  scale: DepthScale;
-  x: number;
-  palette: ChartPalette;
-}) {
+  isFaint = false,
+}: Omit<BoundaryMarksProps, 'boundaries'> & { boundary: GroundBoundary }) {
   if (boundary.rangeText === '') return null;
   const top = boundary.low === null ? 0 : scale.yOf(boundary.low);
   const base = boundary.high === null ? scale.height : scale.yOf(boundary.high);
   const dash = boundary.low === null || boundary.high === null ? '2 3' : undefined;
   const reach = 2 + (boundary.index % 2) * 4;
   return (
-    <g aria-hidden stroke={palette.copper} strokeWidth={1.4}>
+    <g aria-hidden stroke={isFaint ? palette.muted : palette.copper} strokeWidth={isFaint ? 1 : 1.4}>
       <line x1={x + reach} x2={x + reach} y1={top} y2={base} strokeDasharray={dash} />
       {boundary.low === null ? null : <line x1={x + reach - 2} x2={x + reach + 2} y1={top} y2={top} />}
       {boundary.high === null ? null : <line x1={x + reach - 2} x2={x + reach + 2} y1={base} y2={base} />}

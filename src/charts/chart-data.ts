@@ -83,6 +83,8 @@ export interface GroundColumn {
   intervals?: EarthIntervals | null | undefined;
   /** Depth below which the data no longer move the model, m. */
   depthOfInvestigation?: number | null | undefined;
+  /** The readings reject the model, so its intervals mean little. */
+  isRejected?: boolean | undefined;
   /** A word for each bed, as the ground unit. */
   bedNotes?: readonly (string | null)[] | undefined;
   /** Values held in a fit; the thickness of a bed stands at its base. */

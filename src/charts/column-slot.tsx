@@ -52,6 +52,7 @@ export function ColumnSlot(props: ColumnSlotProps): ReactNode {
         x={barEnd}
         barX={x}
         palette={palette}
+        isFaint={column.isRejected}
         onMove={onMoveBoundary}
       />
       <GroundLabels

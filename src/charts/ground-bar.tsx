@@ -3,12 +3,16 @@ import { formatResistivity } from '../ui/format';
 import type { GroundColumn } from './chart-data';
 import { MONO, type ChartPalette } from './chart-palette';
 import type { DepthScale } from './depth-scale';
-import { bedSentence, groundBeds, profileStops, type GroundBed } from './ground-profile';
+import { bedSentence, groundBeds, type GroundBed } from './ground-profile';
+import { colorBehind, profileStops } from './ground-softness';
 import { textColorOn } from './resistivity-ramp';
 import { svgRole } from './svg-roles';
 
 /** A bed lower than this has its number beside it, px. */
 export const LEAST_NUMBER_HEIGHT = 17;
+
+/** A bed is never drawn lower than this, px. */
+const LEAST_DRAWN_HEIGHT = 4;
 
 export interface GroundBarProps {
   column: GroundColumn;
@@ -41,11 +45,43 @@ export function GroundBar(props: GroundBarProps): ReactNode {
         const y = scale.yOf(beds[index]?.base ?? 0);
         return <line key={index} x1={x} x2={x + width} y1={y} y2={y} stroke="#ffffff" strokeOpacity={0.75} />;
       })}
+      {beds
+        .filter((bed) => isThin(bed, scale))
+        .map((bed) => (
+          <ThinBed key={bed.index} bed={bed} scale={scale} x={x} width={width} />
+        ))}
       <rect x={x} y={0} width={width} height={scale.height} fill="none" stroke={palette.ruleStrong} />
       {beds.map((bed) => (
         <Bed key={bed.index} {...props} bed={bed} isSelected={bed.index === selectedBed} />
       ))}
     </g>
+  );
+}
+
+const heightOf = (bed: GroundBed, scale: DepthScale): number =>
+  (bed.base === null ? scale.height : scale.yOf(bed.base)) - scale.yOf(bed.top);
+
+const isThin = (bed: GroundBed, scale: DepthScale): boolean => heightOf(bed, scale) < LEAST_DRAWN_HEIGHT;
+
+/** A bed too thin for the scale, at the least height that is seen, in its own colour. */
+function ThinBed({
+  bed,
+  scale,
+  x,
+  width,
+}: Pick<GroundBarProps, 'scale' | 'x' | 'width'> & { bed: GroundBed }) {
+  const middle = scale.yOf(bed.top) + heightOf(bed, scale) / 2;
+  const top = Math.min(Math.max(0, middle - LEAST_DRAWN_HEIGHT / 2), scale.height - LEAST_DRAWN_HEIGHT);
+  return (
+    <rect
+      x={x}
+      y={top}
+      width={width}
+      height={LEAST_DRAWN_HEIGHT}
+      fill={bed.color}
+      stroke="#ffffff"
+      strokeOpacity={0.75}
+    />
   );
 }
 
@@ -96,29 +132,31 @@ function Bed({ bed, isSelected, ...props }: GroundBarProps & { bed: GroundBed; i
   );
 }
 
-/** In the part of the bed that is still opaque, on the bed's own colour. */
+/** In the part of the bed that is still opaque, to be read on the colour that is there. */
 function BedNumber({
   bed,
   column,
   scale,
   x,
   width,
+  palette,
   top,
   base,
 }: GroundBarProps & { bed: GroundBed; top: number; base: number }) {
   const opaqueEnd = column.depthOfInvestigation ? scale.yOf(column.depthOfInvestigation) : scale.height;
   const visibleBase = opaqueEnd - top >= LEAST_NUMBER_HEIGHT ? Math.min(base, opaqueEnd) : base;
+  const y = (top + visibleBase) / 2;
   return (
     <text
       aria-hidden
       x={x + width / 2}
-      y={(top + visibleBase) / 2}
+      y={y}
       dy="0.35em"
       textAnchor="middle"
       fontSize={13}
       fontWeight={600}
       fontFamily={MONO}
-      fill={textColorOn(bed.color)}
+      fill={textColorOn(colorBehind(column, scale, y, palette.paper))}
       pointerEvents="none"
     >
       {formatResistivity(bed.resistivity)}

@@ -11,7 +11,10 @@ import { placeLabels } from './place-labels';
 interface GroundLabel {
   key: string;
   y: number;
-  strong: string;
+  /** Numbers, one or two lines of them. */
+  strong: readonly string[];
+  /** The bed is so thin that only a line leads to its words. */
+  isThin: boolean;
   note: string | null;
   kind: 'bed' | 'boundary';
 }
@@ -32,44 +35,52 @@ export interface GroundLabelsProps {
 
 /** Intervals of beds and boundaries beside the bar, kept apart, each tied to its place by a thin line. */
 export function GroundLabels({ column, scale, x, barEnd, width, palette }: GroundLabelsProps): ReactNode {
-  const labels = groundLabels(column, scale);
-  const heights = labels.map((label) => (label.note ? 2 : 1) * LINE + GAP);
+  const labels = groundLabels(column, scale, width);
+  const linesOf = (label: GroundLabel) => label.strong.length + (label.note ? 1 : 0);
+  const heights = labels.map((label) => linesOf(label) * LINE + GAP);
   const middles = placeLabels(
     labels.map((label, index) => ({ y: label.y, height: heights[index] ?? LINE })),
     -8,
     scale.height + 12,
   );
+  // A range that means little is muted; the number of a thin bed is its value and stays.
+  const lookOf = (label: GroundLabel, line: number) => {
+    const isValue = label.isThin && line === 0;
+    if (column.isRejected && !isValue) return { fill: palette.muted, fontWeight: 400 };
+    return { fill: label.kind === 'boundary' ? palette.copper : palette.ink, fontWeight: 600 };
+  };
   return (
     <g aria-hidden>
       {labels.map((label, index) => {
         const middle = middles[index] ?? label.y;
-        const first = middle - (label.note ? LINE / 2 : 0);
-        const color = label.kind === 'boundary' ? palette.copper : palette.ink;
+        const first = middle - ((linesOf(label) - 1) * LINE) / 2;
         return (
           <g key={label.key}>
-            {Math.abs(middle - label.y) > 6 ? (
+            {label.isThin || Math.abs(middle - label.y) > 6 ? (
               <polyline
-                points={`${barEnd + 9},${label.y} ${x - 9},${first} ${x - 4},${first}`}
+                points={`${label.isThin ? barEnd : barEnd + 9},${label.y} ${x - 9},${first} ${x - 4},${first}`}
                 fill="none"
-                stroke={palette.ruleStrong}
+                stroke={label.isThin ? palette.muted : palette.ruleStrong}
               />
             ) : null}
-            <text
-              x={x}
-              y={first}
-              dy="0.35em"
-              fontSize={12}
-              fontWeight={600}
-              fontFamily={MONO}
-              fill={color}
-              {...haloOf(palette)}
-            >
-              {label.strong}
-            </text>
+            {label.strong.map((words, line) => (
+              <text
+                key={words}
+                x={x}
+                y={first + line * LINE}
+                dy="0.35em"
+                fontSize={12}
+                fontFamily={MONO}
+                {...lookOf(label, line)}
+                {...haloOf(palette)}
+              >
+                {words}
+              </text>
+            ))}
             {label.note ? (
               <text
                 x={x}
-                y={first + LINE}
+                y={first + label.strong.length * LINE}
                 dy="0.35em"
                 fontSize={12}
                 fontFamily={SANS}
@@ -89,30 +100,41 @@ export function GroundLabels({ column, scale, x, barEnd, width, palette }: Groun
 
 /** Least room for the words of a ground, px: its numbers whole, and of its notes a dozen letters. */
 export function labelRoom(column: GroundColumn, scale: DepthScale): number {
-  const widths = groundLabels(column, scale).map(({ strong, note }) =>
-    Math.max(textWidth(strong, 'mono'), textWidth((note ?? '').slice(0, 12), 'sans')),
+  const widths = groundLabels(column, scale, 0).map(({ strong, note }) =>
+    Math.max(
+      ...strong.map((words) => textWidth(words, 'mono')),
+      textWidth((note ?? '').slice(0, 12), 'sans'),
+    ),
   );
   return Math.max(0, ...widths);
 }
 
-/** What stands beside the bar: for each bed its interval (and its number where the bed is too thin), then its base. */
-export function groundLabels(column: GroundColumn, scale: DepthScale): GroundLabel[] {
+/**
+ * What stands beside the bar: for each bed its interval (and its number where the bed is too thin), then its base.
+ * Number and interval stand in one line where `room`, px, lets them.
+ */
+export function groundLabels(column: GroundColumn, scale: DepthScale, room: number): GroundLabel[] {
   const groundOf = groundBeds(column);
   const isThicknessHeld = groundOf.map((bed) => bed.held.thickness);
   const beds = groundOf.flatMap((bed): GroundLabel[] => {
     const top = scale.yOf(bed.top);
     const base = bed.base === null ? scale.height : scale.yOf(bed.base);
-    const number = base - top < LEAST_NUMBER_HEIGHT ? formatResistivity(bed.resistivity) : '';
-    const words = [number, bed.rangeText].filter((text) => text !== '').join(' · ');
+    const isThin = base - top < LEAST_NUMBER_HEIGHT;
+    const words = [isThin ? formatResistivity(bed.resistivity) : '', bed.rangeText].filter(
+      (text) => text !== '',
+    );
+    const joined = words.join(' · ');
+    const fits = !column.isRejected && textWidth(joined, 'mono') <= room;
     const note = [bed.held.resistivity ? 'ρ held' : null, bed.note]
       .filter((word) => word !== null)
       .join(', ');
-    if (words === '' && note === '') return [];
+    if (words.length === 0 && note === '') return [];
     return [
       {
         key: `bed ${bed.index}`,
         y: (top + base) / 2,
-        strong: words,
+        strong: fits && words.length > 0 ? [joined] : words,
+        isThin,
         note: note === '' ? null : note,
         kind: 'bed',
       },
@@ -121,7 +143,8 @@ export function groundLabels(column: GroundColumn, scale: DepthScale): GroundLab
   const bases = groundBoundaries(column).map((boundary): GroundLabel => ({
     key: `base ${boundary.index}`,
     y: scale.yOf(boundary.depth),
-    strong: boundary.rangeText === '' ? `${Number(boundary.depth.toPrecision(3))} m` : boundary.rangeText,
+    strong: [boundary.rangeText === '' ? `${Number(boundary.depth.toPrecision(3))} m` : boundary.rangeText],
+    isThin: false,
     note: boundaryNote(boundary.unresolved, isThicknessHeld[boundary.index] ?? false),
     kind: 'boundary',
   }));

@@ -6,7 +6,6 @@ import {
   type GroundColumn,
   type HeldValue,
 } from './chart-data';
-import type { DepthScale } from './depth-scale';
 import { rampColor } from './resistivity-ramp';
 
 /** A boundary whose 95 % interval spans more than this factor is called unresolved. */
@@ -90,59 +89,6 @@ export function bedSentence(bed: GroundBed): string {
   const note = bed.note ? `, ${bed.note}` : '';
   const held = heldNames(bed, { resistivity: ', resistivity held', thickness: ', thickness held' }).join('');
   return `Bed ${bed.index + 1}, ${formatResistivity(bed.resistivity)} ohm metres, ${place}${interval}${note}${held}`;
-}
-
-export interface ProfileStop {
-  /** 0 at the top of the drawing, 1 at its foot. */
-  offset: number;
-  color: string;
-  opacity: number;
-}
-
-/** Opacity left where the data say nothing any more. */
-const FAINTEST = 0.16;
-
-/**
- * Colours down a column. At a boundary the resistivity turns from one bed to the next over the whole of its 95 %
- * interval, half way at the best value; below the depth of investigation the colour fades to the paper.
- */
-export function profileStops(column: GroundColumn, scale: DepthScale, count = 240): ProfileStop[] {
-  const boundaries = groundBoundaries(column).map((boundary) => ({
-    ...boundary,
-    low: boundary.low ?? 0,
-    high: boundary.high ?? Math.max(scale.maxDepth, boundary.depth),
-  }));
-  const logs = column.earth.resistivity.map(Math.log);
-  const logResistivityAt = (depth: number) =>
-    boundaries.reduce((log, { index, ...boundary }) => {
-      const step = (logs[index + 1] ?? 0) - (logs[index] ?? 0);
-      return log + step * shareBelow(depth, boundary);
-    }, logs[0] ?? 0);
-  return Array.from({ length: count + 1 }, (_, index) => {
-    const depth = scale.depthAt((index / count) * scale.height);
-    return {
-      offset: index / count,
-      color: rampColor(Math.exp(logResistivityAt(depth))),
-      opacity: opacityAt(depth, column.depthOfInvestigation ?? null, scale.maxDepth),
-    };
-  });
-}
-
-/** How far the ground has turned into the lower bed at a depth: 0 above the interval, ½ at the boundary, 1 below. */
-export function shareBelow(depth: number, boundary: { depth: number; low: number; high: number }): number {
-  if (depth <= boundary.depth) {
-    const length = boundary.depth - boundary.low;
-    const t = length <= 0 ? (depth < boundary.depth ? 0 : 1) : Math.max(0, (depth - boundary.low) / length);
-    return length <= 0 ? t : t / 2;
-  }
-  const length = boundary.high - boundary.depth;
-  return length <= 0 ? 1 : 0.5 + Math.min(1, (depth - boundary.depth) / length) / 2;
-}
-
-function opacityAt(depth: number, depthOfInvestigation: number | null, maxDepth: number): number {
-  if (depthOfInvestigation === null || depth <= depthOfInvestigation) return 1;
-  const fadeLength = Math.max(maxDepth - depthOfInvestigation, depthOfInvestigation * 0.1);
-  return 1 - (1 - FAINTEST) * Math.min(1, (depth - depthOfInvestigation) / fadeLength);
 }
 
 /** Depths that show every boundary with its interval, the depth of investigation and the boreholes. */

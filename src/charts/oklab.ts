@@ -61,6 +61,17 @@ export function hexToOklab(hex: string): Oklab {
   return linearRgbToOklab(hexToLinearRgb(hex));
 }
 
+/** A colour laid over a ground as a browser does it, channel by channel. */
+export function overlaid(hex: string, opacity: number, groundHex: string): string {
+  const channel = (at: number) => {
+    const [top, ground] = [hex, groundHex].map((color) => Number.parseInt(color.slice(at, at + 2), 16));
+    return Math.round((top ?? 0) * opacity + (ground ?? 0) * (1 - opacity))
+      .toString(16)
+      .padStart(2, '0');
+  };
+  return `#${[1, 3, 5].map(channel).join('')}`;
+}
+
 /** Contrast of two colours, 1…21 (WCAG 2.2). */
 export function contrastRatio(firstHex: string, secondHex: string): number {
   const luminance = (hex: string) => {

@@ -3,6 +3,7 @@ import type { Revision } from '../../server/contract/readings';
 import type { Run } from '../../server/contract/runs';
 import type { CurveLine, CurvePoint, CurveReading, GroundColumn, HeldValue } from '../charts/chart-data';
 import { curvePlaces, type CurvePlace } from './curve-places';
+import { isRejected } from './rejected-fit';
 import { letterOfRun, titleOfRun } from './run-title';
 import { halfMNOf, spacingLabel } from '../soundings/spread-words';
 
@@ -143,6 +144,7 @@ export function columnOfRun(run: Run, bedNotes?: readonly (string | null)[]): Gr
     name: titleOfRun(run),
     earth: run.result.earth,
     intervals: run.result.intervals,
+    isRejected: isRejected(run.result),
     held: run.settings.fixed,
     bedNotes,
   };

@@ -1,17 +1,9 @@
-import { describe, expect, test } from 'vitest';
+import { expect, test } from 'vitest';
 import type { GroundColumn } from '../../../src/charts/chart-data';
 import { depthScale } from '../../../src/charts/depth-scale';
-import { groundLabels } from '../../../src/charts/ground-labels';
-import {
-  bedSentence,
-  depthExtent,
-  groundBeds,
-  groundBoundaries,
-  profileStops,
-  shareBelow,
-} from '../../../src/charts/ground-profile';
+import { groundLabels, labelRoom } from '../../../src/charts/ground-labels';
+import { bedSentence, depthExtent, groundBeds, groundBoundaries } from '../../../src/charts/ground-profile';
 import { groundTable } from '../../../src/charts/ground-table';
-import { rampColor } from '../../../src/charts/resistivity-ramp';
 
 const column: GroundColumn = {
   id: 'a',
@@ -35,52 +27,6 @@ const column: GroundColumn = {
     { on: 'thickness', index: 0 },
   ],
 };
-
-describe('shareBelow', () => {
-  const boundary = { depth: 10, low: 5, high: 20 };
-  test.each([
-    [4, 0],
-    [5, 0],
-    [7.5, 0.25],
-    [10, 0.5],
-    [15, 0.75],
-    [20, 1],
-    [30, 1],
-  ])('at %d m the ground has turned by %d', (depth, share) => {
-    expect(shareBelow(depth, boundary)).toBeCloseTo(share, 12);
-  });
-
-  test('a boundary without doubt is a step', () => {
-    const sharp = { depth: 10, low: 10, high: 10 };
-    expect([9.99, 10, 10.01].map((depth) => shareBelow(depth, sharp))).toEqual([0, 1, 1]);
-  });
-});
-
-describe('profileStops', () => {
-  const soft: GroundColumn = { ...column, earth: { resistivity: [100, 1], thickness: [10] } };
-  const softAt = (depthOfInvestigation: number | null) =>
-    profileStops(
-      { ...soft, intervals: { resistivity: [], depth: [[5, 20]] }, depthOfInvestigation },
-      depthScale('linear', { minDepth: 1, maxDepth: 40 }, 400),
-      40,
-    );
-
-  test('the colour turns over the whole interval, half way at the boundary', () => {
-    const stops = softAt(null);
-    expect(stops[5]!.color).toBe(rampColor(100));
-    expect(stops[10]!.color).toBe(rampColor(10));
-    expect(stops[20]!.color).toBe(rampColor(1));
-    expect(new Set(stops.slice(5, 21).map((stop) => stop.color)).size).toBe(16);
-  });
-
-  test('below the depth of investigation it fades to the paper', () => {
-    const stops = softAt(30);
-    expect(stops[30]!.opacity).toBe(1);
-    expect(stops[35]!.opacity).toBeLessThan(0.7);
-    expect(stops[40]!.opacity).toBeLessThan(0.2);
-    expect(softAt(null)[40]!.opacity).toBe(1);
-  });
-});
 
 test('boundaries say their interval, and what is not bounded', () => {
   const [first, second] = groundBoundaries(column);
@@ -108,13 +54,21 @@ test('beds are said in words', () => {
   expect(sentences[2]).toContain('below 6.2 m');
 });
 
+const hundred = depthScale('linear', { minDepth: 1, maxDepth: 100 }, 300);
+
 test('labels beside the bar run down with the ground; a thin bed carries its number', () => {
-  const labels = groundLabels(column, depthScale('linear', { minDepth: 1, maxDepth: 100 }, 300));
+  const labels = groundLabels(column, hundred, 200);
   expect(labels.map((label) => label.key)).toEqual(['bed 0', 'base 0', 'bed 1', 'base 1', 'bed 2']);
-  expect(labels[0]).toMatchObject({ strong: '139 · 134–145', note: 'dry cover' });
-  expect(labels[2]).toMatchObject({ strong: '17.0 · 3.9–36', note: 'ρ held' });
-  expect(labels[1]).toMatchObject({ strong: '2.2–3.1\u00a0m', note: 'h held' });
-  expect(labels[3]).toMatchObject({ strong: 'not bounded', note: 'unresolved' });
+  expect(labels[0]).toMatchObject({ strong: ['139 · 134–145'], note: 'dry cover' });
+  expect(labels[2]).toMatchObject({ strong: ['17.0 · 3.9–36'], note: 'ρ held' });
+  expect(labels[1]).toMatchObject({ strong: ['2.2–3.1\u00a0m'], note: 'h held' });
+  expect(labels[3]).toMatchObject({ strong: ['not bounded'], note: 'unresolved' });
+});
+
+test('number and interval part where one line is too long, and where the readings reject the model', () => {
+  expect(groundLabels(column, hundred, 80)[2]!.strong).toEqual(['17.0', '3.9–36']);
+  expect(groundLabels({ ...column, isRejected: true }, hundred, 200)[2]!.strong).toEqual(['17.0', '3.9–36']);
+  expect(labelRoom(column, hundred)).toBe('not bounded'.length * 7.2);
 });
 
 test('depths reach past every boundary, the depth of investigation and the borehole', () => {
