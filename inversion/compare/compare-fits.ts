@@ -125,20 +125,35 @@ const bedCount = (result: FitResult): number => result.earth.resistivity.length;
 
 function countsSentence(a: FitResult, b: FitResult): string {
   const [first, second] = [bedCount(a), bedCount(b)];
-  return first === second
-    ? `Both models have ${first} ${first === 1 ? 'bed' : 'beds'}.`
-    : `The models have ${first} and ${second} beds; beds are matched from the surface, so only the shallow ones compare like with like.`;
+  const counts =
+    first === second
+      ? `Both models have ${first} ${first === 1 ? 'bed' : 'beds'}`
+      : `The models have ${first} and ${second} beds`;
+  const like = likeBeds(a, b);
+  return like === Math.max(first, second)
+    ? `${counts}.`
+    : `${counts}; only ${like === 1 ? 'bed 1 is' : `beds 1 to ${like} are`} compared: below, the boundaries are not the same.`;
+}
+
+/** How many beds from the surface have tops that agree within their 95 % ranges in both models. */
+function likeBeds(a: FitResult, b: FitResult): number {
+  const boundaries = Math.min(a.earth.thickness.length, b.earth.thickness.length);
+  for (let base = 0; base < boundaries; base += 1)
+    if (overlap(a.intervals.depth[base]!, b.intervals.depth[base]!) === false) return base + 1;
+  return boundaries + 1;
 }
 
 /**
- * Differences worth a word: intervals apart, the base of bed 1 not told twice (it is its thickness), and the half-space of
- * a shorter model not set against a bounded bed.
+ * Differences worth a word: intervals apart, of beds that are the same in both models; the base of bed 1 is not told twice (it
+ * is its thickness), and the half-space of a shorter model is not set against a bounded bed.
  */
 function told(a: FitResult, b: FitResult, beds: readonly BedDifference[]): BedDifference[] {
   const halfSpace = bedCount(a) === bedCount(b) ? Infinity : Math.min(bedCount(a), bedCount(b)) - 1;
+  const like = likeBeds(a, b);
   return beds.filter(
     ({ bed, quantity, intervalsOverlap }) =>
       intervalsOverlap === false &&
+      bed < like &&
       !(bed === 0 && quantity === 'depth') &&
       !(bed === halfSpace && quantity === 'resistivity'),
   );

@@ -22,27 +22,33 @@ const NARROW_FACTOR = 1.2;
 
 function range(factor: number): string {
   return factor <= NARROW_FACTOR
-    ? ` ± ${(100 * (factor - 1)).toPrecision(2)} %`
+    ? `\u00a0±\u00a0${(100 * (factor - 1)).toPrecision(2)}\u00a0%`
     : `, times or divided by ${factor.toPrecision(3)}`;
 }
 
-function equivalenceOf({ earth, correlation, darZarrouk }: FitResult, bed: number): DoubtItem | null {
-  const layers = earth.resistivity.length;
-  const r = correlation[bed]?.[layers + bed] ?? null;
+/** Where neither value of a bed is looser than this, nothing is left to say of their product or ratio. */
+const SETTLED_FACTOR = 1.2;
+
+const looseness = (factor: number | null): number => factor ?? Infinity;
+
+function equivalenceOf(result: FitResult, bed: number): DoubtItem | null {
+  const { earth, correlation, darZarrouk, factors } = result;
+  const r = correlation[bed]?.[earth.resistivity.length + bed] ?? null;
   if (r === null || Math.abs(r) < TOLERANCES.equivalence) return null;
+  const loosest = Math.max(looseness(factors.resistivity[bed]!), looseness(factors.thickness[bed]!));
+  if (loosest < SETTLED_FACTOR) return null;
   const conductive = r > 0;
   const value = (conductive ? darZarrouk.conductanceS : darZarrouk.resistanceOhmM2)[bed]!;
   const factor = (conductive ? darZarrouk.conductanceFactor : darZarrouk.resistanceFactor)[bed]!;
   const unit = conductive ? 'S' : 'Ω·m²';
   const symbol = conductive ? 'S = h/ρ' : 'T = hρ';
-  const trade = `thicker at a proportionally ${conductive ? 'higher' : 'lower'} resistivity, it gives nearly the same curve`;
-  const known = factor !== null && factor < UNKNOWN_FACTOR;
+  const known = factor !== null && factor < UNKNOWN_FACTOR && factor < loosest;
   return {
     bed,
     kind: conductive ? 'conductance' : 'resistance',
     text: known
-      ? `Bed ${bed + 1} is known by ${symbol} = ${threeDigits(value)} ${unit}${range(factor)} (68 %), better than by its thickness and resistivity apart: ${trade}.`
-      : `The thickness and resistivity of bed ${bed + 1} cannot be told apart: ${trade}. ${symbol} is not known within a factor of 2 either: ${threeDigits(value)} ${unit} is one of many values that fit.`,
+      ? `Bed ${bed + 1} is better known by ${symbol} = ${threeDigits(value)} ${unit}${range(factor)} (68 %) than by its thickness or its resistivity: a thicker bed goes with a ${conductive ? 'higher' : 'lower'} resistivity. Their 95 % ranges tell only roughly how far.`
+      : `Of bed ${bed + 1} the readings tell neither the thickness nor the resistivity, and ${symbol} not within a factor of 2: ${threeDigits(value)} ${unit} is one of many values that fit.`,
     value,
     unit,
     factor,
@@ -76,24 +82,24 @@ function suppressionOf(result: FitResult, bed: number): DoubtItem | null {
 function undetermined(result: FitResult, bed: number): DoubtItem[] {
   return (['resistivity', 'thickness'] as const).flatMap((kind) => {
     const value = result.earth[kind][bed];
-    if (value === undefined || result.factors[kind][bed] !== null) return [];
+    if (value === undefined) return [];
+    const factor = result.factors[kind][bed]!;
+    if (looseness(factor) < UNKNOWN_FACTOR) return [];
     const unit = kind === 'resistivity' ? 'Ω·m' : 'm';
-    return [
-      {
-        bed,
-        kind,
-        text: `The ${kind} of bed ${bed + 1} is not determined: ${threeDigits(value)} ${unit} is one of many values that fit.`,
-        value,
-        unit,
-        factor: null,
-      } satisfies DoubtItem,
-    ];
+    const [low, high] = result.intervals[kind][bed]!;
+    const told =
+      factor === null || low === null || high === null
+        ? `${threeDigits(value)} ${unit} is one of many values that fit`
+        : `anything from ${threeDigits(low)} to ${threeDigits(high)} ${unit} fits (95 %)`;
+    const text = `The ${kind} of bed ${bed + 1} is not determined: ${told}.`;
+    return [{ bed, kind, text, value, unit, factor } satisfies DoubtItem];
   });
 }
 
 /**
  * What the data cannot tell, bed by bed, in plain sentences: equivalence where |correlation of ln h and ln ρ| passes 0.95
- * (S = h/ρ when it is positive, T = hρ when negative), suppression where a middle bed can go, values not determined.
+ * (S = h/ρ when it is positive, T = hρ when negative) and the bed's own values are not settled, suppression where a middle bed
+ * can go, values with a 68 % factor of 2 or more.
  */
 export function describeDoubt(result: FitResult): DoubtItem[] {
   return result.earth.resistivity.flatMap((_, bed) => {

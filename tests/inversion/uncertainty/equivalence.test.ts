@@ -4,6 +4,7 @@ import {
   describeDoubt,
   fitLayered,
   type FitResult,
+  type Interval,
   type LayeredEarth,
 } from '../../../inversion';
 import { layered } from '../support/fit-settings';
@@ -29,7 +30,7 @@ describe('describeDoubt', () => {
     const item = describeDoubt(fit).find((doubt) => doubt.kind === 'conductance')!;
     expect(item).toMatchObject({ bed: 1, unit: 'S' });
     expect(item.value).toBeCloseTo(0.3, 2);
-    expect(item.text).toContain('Bed 2 is known by S = h/ρ = 0.300 S');
+    expect(item.text).toContain('Bed 2 is better known by S = h/ρ = 0.300 S');
     expect(item.factor!).toBeGreaterThan(1);
     expect(item.factor!).toBeLessThan(fit.factors.thickness[1] ?? Infinity);
   });
@@ -39,7 +40,7 @@ describe('describeDoubt', () => {
     const item = describeDoubt(fit).find((doubt) => doubt.kind === 'resistance')!;
     expect(item).toMatchObject({ bed: 1, unit: 'Ω·m²' });
     expect(item.value! / 2250).toBeCloseTo(1, 1);
-    expect(item.text).toContain('Bed 2 is known by T = hρ');
+    expect(item.text).toContain('Bed 2 is better known by T = hρ');
   });
 
   it('takes S from a positive correlation, T from a negative one, and neither below 0.95', () => {
@@ -62,13 +63,21 @@ describe('describeDoubt', () => {
       describeDoubt({ ...fit, darZarrouk: { ...fit.darZarrouk, conductanceFactor: [1.1, factor] } }).find(
         (item) => item.kind === 'conductance',
       )!.text;
-    expect(words(1.041)).toContain('is known by S = h/ρ = 0.300 S ± 4.1 % (68 %), better than');
-    expect(words(1.7)).toContain('is known by S = h/ρ = 0.300 S, times or divided by 1.70 (68 %)');
+    expect(words(1.041)).toContain(
+      'is better known by S = h/ρ = 0.300 S\u00a0±\u00a04.1\u00a0% (68 %) than by its thickness',
+    );
+    expect(words(1.7)).toContain('is better known by S = h/ρ = 0.300 S, times or divided by 1.70 (68 %)');
     for (const factor of [2, null])
       expect(words(factor)).toBe(
-        'The thickness and resistivity of bed 2 cannot be told apart: thicker at a proportionally higher resistivity, ' +
-          'it gives nearly the same curve. S = h/ρ is not known within a factor of 2 either: 0.300 S is one of many values that fit.',
+        'Of bed 2 the readings tell neither the thickness nor the resistivity, and S = h/ρ not within a factor of 2: ' +
+          '0.300 S is one of many values that fit.',
       );
+  });
+
+  it('says nothing of a bed whose values are both settled, however tied they are', () => {
+    const fit = fitOf({ resistivity: [100, 5, 500], thickness: [10, 1.5] });
+    const settled = { resistivity: [1.1, 1.1, 1.1], thickness: [1.1, 1.1], depth: [1.1, 1.1] };
+    expect(describeDoubt({ ...fit, factors: settled })).toEqual([]);
   });
 
   it('names a middle bed that fewer beds explain away', () => {
@@ -98,5 +107,11 @@ describe('describeDoubt', () => {
     expect(describeDoubt({ ...fit, factors })).toEqual([
       expect.objectContaining({ bed: 1, kind: 'resistivity', unit: 'Ω·m', factor: null }),
     ]);
+    const wide = { ...fit.factors, resistivity: [fit.factors.resistivity[0]!, 2.7] };
+    const resistivity: Interval[] = [fit.intervals.resistivity[0]!, [3, 140]];
+    const intervals = { ...fit.intervals, resistivity };
+    expect(describeDoubt({ ...fit, factors: wide, intervals })[0]!.text).toBe(
+      'The resistivity of bed 2 is not determined: anything from 3.00 to 140 Ω·m fits (95 %).',
+    );
   });
 });
