@@ -1,7 +1,8 @@
 import type { CustomSeriesOption } from 'echarts';
 import { withUnit } from '../ui/format';
 import type { CurveReading } from './chart-data';
-import { SANS, type ChartPalette } from './chart-palette';
+import { MONO, SANS, type ChartPalette } from './chart-palette';
+import { textWidth } from './fit-text';
 
 /** Kept readings of one MN, in order of spacing. */
 export interface CurveBranch {
@@ -10,8 +11,11 @@ export interface CurveBranch {
   readings: readonly CurveReading[];
 }
 
+/** As written on the sheet: 0.5, 10. */
+const lengthText = (length: number): string => String(Number(length.toPrecision(3)));
+
 /** "MN/2 0.5 m" */
-export const branchName = (halfMN: number): string => withUnit(`MN/2 ${Number(halfMN.toPrecision(3))}`, 'm');
+export const branchName = (halfMN: number): string => withUnit(`MN/2 ${lengthText(halfMN)}`, 'm');
 
 /** The branches of a curve by growing MN; none where all readings are of one. */
 export function curveBranches(readings: readonly CurveReading[]): CurveBranch[] {
@@ -26,12 +30,20 @@ export function curveBranches(readings: readonly CurveReading[]): CurveBranch[] 
 }
 
 type RenderItem = NonNullable<CustomSeriesOption['renderItem']>;
+type Api = Parameters<RenderItem>[1];
 type Point = [number, number];
 
-/** From a reading to the words of its branch, px. */
-const LABEL_GAP = 20;
+/** Room above the plot for the brackets of the branches and their MN, px. */
+export const BRANCH_ROOM = 20;
+/** Brackets and numbers above the upper edge of the plot, px; brackets by turns, for neighbours share a spacing. */
+const BRACKET_RISES = [5, 8] as const;
+const NUMBER_RISE = 17;
+const NUMBER_GAP = 6;
 
-/** Joins the readings of each MN by a thin line of its own and names it, by turns above and below. */
+/**
+ * Joins the readings of each MN by a thin line of its own, and tells over which spacings it reaches by a bracket with its MN
+ * above the plot.
+ */
 export function branchSeries(
   readings: readonly CurveReading[],
   palette: ChartPalette,
@@ -39,40 +51,21 @@ export function branchSeries(
   const branches = curveBranches(readings);
   if (branches.length === 0) return null;
   const render: RenderItem = (params, api) => {
-    const branch = branches[params.dataIndex];
+    const { dataIndex } = params;
+    const branch = branches[dataIndex];
     if (!branch) return null;
-    const points = branch.readings.map((reading): Point => {
-      const [x = 0, y = 0] = api.coord([
-        Math.log10(reading.spacing),
-        Math.log10(reading.apparentResistivity),
-      ]);
-      return [x, y];
-    });
-    const [x, y] = points[Math.floor(points.length / 2)] ?? [0, 0];
-    const side = params.dataIndex % 2 === 0 ? 1 : -1;
+    const box = params.coordSys as unknown as { x: number; y: number };
+    const points = branch.readings.map((reading) => pointOf(reading, api));
+    const number = branchNumbers(branches, api)[dataIndex];
+    const rise = BRACKET_RISES[dataIndex % 2] ?? BRACKET_RISES[0];
+    const name = words('MN/2, m', box.x - 8, box.y - NUMBER_RISE, 'right', SANS, palette);
     return {
       type: 'group',
       children: [
-        {
-          type: 'polyline' as const,
-          shape: { points },
-          style: { stroke: palette.muted, fill: 'none', lineWidth: 1, opacity: 0.7 },
-        },
-        {
-          type: 'text' as const,
-          style: {
-            text: branchName(branch.halfMN),
-            x,
-            y: y + side * LABEL_GAP,
-            align: 'center' as const,
-            verticalAlign: 'middle' as const,
-            fill: palette.muted,
-            stroke: palette.paper,
-            lineWidth: 3,
-            fontSize: 12,
-            fontFamily: SANS,
-          },
-        },
+        polyline(points, palette, 0.7),
+        polyline(bracket(points, box.y, rise), palette, 1),
+        ...(number ? [words(number.text, number.x, box.y - NUMBER_RISE, 'center', MONO, palette)] : []),
+        ...(dataIndex === 0 ? [name] : []),
       ],
     };
   };
@@ -89,4 +82,53 @@ export function branchSeries(
     ]),
     renderItem: render,
   };
+}
+
+function pointOf(reading: CurveReading, api: Api): Point {
+  const [x = 0, y = 0] = api.coord([Math.log10(reading.spacing), Math.log10(reading.apparentResistivity)]);
+  return [x, y];
+}
+
+/** The MN of each branch over the middle of its bracket; null where it would run into the one before it. */
+function branchNumbers(branches: readonly CurveBranch[], api: Api): ({ text: string; x: number } | null)[] {
+  let end = Number.NEGATIVE_INFINITY;
+  return branches.map(({ halfMN, readings }) => {
+    const ends = [readings[0], readings.at(-1)].flatMap((reading) =>
+      reading ? pointOf(reading, api)[0] : [],
+    );
+    const x = ends.reduce((sum, one) => sum + one / ends.length, 0);
+    const text = lengthText(halfMN);
+    const half = textWidth(text, 'mono') / 2;
+    if (x - half < end + NUMBER_GAP) return null;
+    end = x + half;
+    return { text, x };
+  });
+}
+
+function bracket(points: readonly Point[], top: number, rise: number): Point[] {
+  const [from, to] = [points[0]?.[0] ?? 0, points.at(-1)?.[0] ?? 0];
+  return [
+    [from, top - rise + 3],
+    [from, top - rise],
+    [to, top - rise],
+    [to, top - rise + 3],
+  ];
+}
+
+const polyline = (points: Point[], palette: ChartPalette, opacity: number) => ({
+  type: 'polyline' as const,
+  shape: { points },
+  style: { stroke: palette.muted, fill: 'none', lineWidth: 1, opacity },
+});
+
+function words(
+  text: string,
+  x: number,
+  y: number,
+  align: 'center' | 'right',
+  fontFamily: string,
+  palette: ChartPalette,
+) {
+  const style = { text, x, y, align, verticalAlign: 'middle' as const, fill: palette.muted, fontSize: 12 };
+  return { type: 'text' as const, style: { ...style, fontFamily } };
 }

@@ -1,7 +1,8 @@
 import type { EChartsOption, XAXisComponentOption, YAXisComponentOption } from 'echarts';
 import type { CurveLine, CurvePoint, CurveReading } from './chart-data';
 import { MONO, SANS, type ChartPalette } from './chart-palette';
-import { branchSeries } from './curve-branches';
+import { branchSeries, curveBranches } from './curve-branches';
+import { curveLayout, type CurveLayout, type CurveParts } from './curve-layout';
 import { curveSeries } from './curve-lines';
 import { curveTooltip } from './curve-tooltip';
 import { gridSeries, readingSeries } from './curve-marks';
@@ -29,41 +30,18 @@ export interface SoundingCurveInput extends CurveContent {
   palette: ChartPalette;
 }
 
-const LEFT = 58;
-const RIGHT = 30;
-const TOP = 12;
-const AXIS_ROOM = 26;
-const STRIP_HEIGHT = 76;
-const FOOT = 42;
-const STRIP_FOOT = 24;
 /** Empty room that a curve may have on both sides together, decades. */
 const SPARE_DECADES_DOWN = 0.5;
 const SPARE_DECADES_ACROSS = 0.3;
 /** A drawing is not made smaller than this to save room, px. */
 const LEAST_SIDE = 260;
 
-export interface CurveLayout {
-  plot: { left: number; top: number; width: number; height: number };
-  strip: { left: number; top: number; width: number; height: number } | null;
-}
-
-/** Boxes of the curve and of the residual strip under it; both share left edge and width. */
-export function curveLayout(width: number, height: number, hasStrip: boolean): CurveLayout {
-  const plotWidth = Math.max(60, width - LEFT - RIGHT);
-  const below = hasStrip ? AXIS_ROOM + STRIP_HEIGHT + STRIP_FOOT : FOOT;
-  const plotHeight = Math.max(60, height - TOP - below);
-  const plot = { left: LEFT, top: TOP, width: plotWidth, height: plotHeight };
-  const strip = { left: LEFT, top: TOP + plotHeight + AXIS_ROOM, width: plotWidth, height: STRIP_HEIGHT };
-  return { plot, strip: hasStrip ? strip : null };
-}
-
 /**
  * Size of a drawing within a width and a height, px: square decades tie the two, so it is made lower or narrower rather
  * than left half empty. At least 260 either way where there is that much room.
  */
 export function curveSize(content: CurveContent, width: number, maxHeight: number): BoxSize {
-  const hasStrip = residualLine(content.lines, null) !== null;
-  const layout = curveLayout(width, maxHeight, hasStrip);
+  const layout = curveLayout(width, maxHeight, partsOf(content));
   const { x, y, pixelsPerDecade } = soundingAxes(content, layout);
   const points = pointsOf(content);
   const trimmed = (whole: number, range: LogRange, values: number[], spareDecades: number) => {
@@ -87,6 +65,11 @@ export function curveSize(content: CurveContent, width: number, maxHeight: numbe
   };
 }
 
+const partsOf = ({ readings, lines }: CurveContent): CurveParts => ({
+  hasStrip: residualLine(lines, null) !== null,
+  hasBranches: curveBranches(readings).length > 0,
+});
+
 const pointsOf = ({ readings, lines }: CurveContent): CurvePoint[] => [
   ...readings,
   ...lines.filter((line) => line.kind !== 'ghost').flatMap((line) => line.points),
@@ -107,7 +90,7 @@ export function residualLine(lines: readonly CurveLine[], chosenLine: string | n
 export function soundingCurveOption(input: SoundingCurveInput): EChartsOption {
   const { readings, lines, palette, focusedReading, width, height } = input;
   const shown = residualLine(lines, input.chosenLine);
-  const layout = curveLayout(width, height, shown !== null);
+  const layout = curveLayout(width, height, partsOf(input));
   const axes = soundingAxes(input.axesOf ?? input, layout);
   const strip =
     shown?.residuals && layout.strip

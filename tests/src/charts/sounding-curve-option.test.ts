@@ -6,11 +6,11 @@ import { describe, expect, test } from 'vitest';
 import type { CurveLine, CurveReading } from '../../../src/charts/chart-data';
 import { chartPalette } from '../../../src/charts/chart-palette';
 import { curveBranches } from '../../../src/charts/curve-branches';
+import { curveLayout } from '../../../src/charts/curve-layout';
 import { curveTable } from '../../../src/charts/curve-table';
 import { readingFacts, readingSentence } from '../../../src/charts/reading-facts';
 import { residualPoints } from '../../../src/charts/residual-strip';
 import {
-  curveLayout,
   curveSize,
   residualLine,
   soundingAxes,
@@ -68,7 +68,7 @@ const count = (svg: string, text: string) => svg.split(text).length - 1;
 describe('axes', () => {
   test('decades are square in the drawing itself', () => {
     const option = soundingCurveOption(input);
-    const { plot } = curveLayout(800, 480, true);
+    const { plot } = curveLayout(800, 480, { hasStrip: true });
     const [x] = listOf(option.xAxis) as { min: number; max: number }[];
     const [y] = listOf(option.yAxis) as { min: number; max: number }[];
     expect(plot.width / (x!.max - x!.min)).toBeCloseTo(plot.height / (y!.max - y!.min), 6);
@@ -77,13 +77,13 @@ describe('axes', () => {
   test('curve and strip share the x axis', () => {
     const [first, second] = listOf(soundingCurveOption(input).xAxis) as { min: number; max: number }[];
     expect([second!.min, second!.max]).toEqual([first!.min, first!.max]);
-    const { plot, strip } = curveLayout(800, 480, true);
+    const { plot, strip } = curveLayout(800, 480, { hasStrip: true });
     expect([strip!.left, strip!.width]).toEqual([plot.left, plot.width]);
     expect(strip!.top + strip!.height).toBeLessThan(480);
   });
 
   test('whiskers and curves lie inside the range, a ghost does not stretch it', () => {
-    const layout = curveLayout(800, 480, true);
+    const layout = curveLayout(800, 480, { hasStrip: true });
     const plain = soundingAxes({ readings, lines }, layout);
     const ghost: CurveLine = {
       ...lines[0]!,
@@ -103,7 +103,7 @@ describe('axes', () => {
     expect(narrow.height).toBeGreaterThanOrEqual(260);
     const low = curveSize({ readings, lines }, 1600, 480);
     expect(low.height).toBe(480);
-    const axes = soundingAxes({ readings, lines }, curveLayout(low.width, low.height, true));
+    const axes = soundingAxes({ readings, lines }, curveLayout(low.width, low.height, { hasStrip: true }));
     expect(axes.x.max - axes.x.min).toBeLessThan(Math.log10(300 / 1.5) + 0.31);
   });
 
@@ -228,6 +228,12 @@ test('the table has every reading and each run in order of letters', () => {
   expect(rows[3]!.slice(4, 6)).toEqual([13, 7]);
 });
 
+/** The texts of a drawing that stand above its plot. */
+const aboveThePlot = (svg: string): string =>
+  (svg.match(/<text[^>]* x="[\d.]+" y="[\d.]+"[^>]*>[^<]*<\/text>/g) ?? [])
+    .filter((text) => Number(/ y="([\d.]+)"/.exec(text)?.[1]) < 30)
+    .join('');
+
 describe('branches of MN', () => {
   const halfMNs = [0.5, 0.5, 0.5, 10];
   const branched = readings.map((reading, i) => ({ ...reading, halfMN: halfMNs[i] }));
@@ -240,11 +246,26 @@ describe('branches of MN', () => {
     ]);
   });
 
-  test('are named in the drawing where there is more than one', () => {
-    const names = (text: string) => text.match(/MN\/2 [\d.]+\u00a0m/g) ?? [];
-    expect(names(drawn({ readings: branched }))).toEqual(['MN/2 0.5\u00a0m', 'MN/2 10\u00a0m']);
-    expect(names(drawn({ readings: branched.map((reading) => ({ ...reading, halfMN: 0.5 })) }))).toEqual([]);
-    expect(names(drawn())).toEqual([]);
+  test('have their MN above the plot where there is more than one', () => {
+    const numbers = (changes: CurveReading[]) =>
+      ['MN/2, m', '>0.5<', '>10<'].filter((text) =>
+        aboveThePlot(drawn({ readings: changes })).includes(text),
+      );
+    expect(numbers(branched)).toEqual(['MN/2, m', '>0.5<', '>10<']);
+    expect(numbers(branched.map((reading) => ({ ...reading, halfMN: 0.5 })))).toEqual([]);
+    const top = (hasBranches: boolean) => curveLayout(800, 480, { hasStrip: true, hasBranches }).plot.top;
+    expect(top(true)).toBeGreaterThan(top(false));
+  });
+
+  test('leave out a number that would run into the one before it', () => {
+    const close = branched.map((reading, i) => ({
+      ...reading,
+      halfMN: i < 2 ? 0.25 : i + 0.25,
+      spacing: 10 + i / 10,
+    }));
+    const above = aboveThePlot(drawn({ readings: close }));
+    expect(above).toContain('>0.25<');
+    expect(above).not.toContain('>2.25<');
   });
 
   test('stand in the table and in the words of a reading', () => {
