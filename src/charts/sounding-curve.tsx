@@ -1,4 +1,4 @@
-import { useMemo, useState } from 'react';
+import { useEffect, useMemo, useRef, useState } from 'react';
 import { ChartFrame } from './chart-frame';
 import type { CurveLine, CurveReading } from './chart-data';
 import { useChartPalette } from './chart-palette';
@@ -65,6 +65,9 @@ export function SoundingCurve(props: SoundingCurveProps) {
       }),
     [readings, lines, axesOf, chosenLine, focusedReading, spacingName, width, height, palette],
   );
+  const chart = useRef<InstanceType<typeof ReactECharts>>(null);
+  // The component lets the first change of size pass, so the drawing is told by itself.
+  useEffect(() => chart.current?.getEchartsInstance()?.resize({ width, height }), [width, height]);
   const table = useMemo(() => curveTable(readings, lines, spacingName), [readings, lines, spacingName]);
   const shown = residualLine(lines, chosenLine);
   return (
@@ -84,6 +87,7 @@ export function SoundingCurve(props: SoundingCurveProps) {
       >
         {size.width > 0 ? (
           <ReactECharts
+            ref={chart}
             echarts={echarts}
             option={option}
             notMerge
