@@ -5,7 +5,7 @@ import type { FitProgress, FitResult, FitSettings, LayerCountFit, Reading } from
 import { earthOf, type FittedModel } from './allowed-models';
 import { MOST_LAYERS, requireFitInput } from './check-fit-input';
 import { buildFitResult } from './fit-result';
-import { aicc, bic, chooseLayerCount, withinNoise } from './layer-count';
+import { aicc, bic, chooseLayerCount, countDoubt, withinNoise } from './layer-count';
 import { createLayeredProblem } from './layered-problem';
 import { multiStart, scoutFit, type MultiStartOutcome } from './multi-start';
 import { createResidualSystem, type ResidualSystem } from './residual-system';
@@ -70,7 +70,7 @@ export function fitLayered(
   const rows = fits.map((fit) => describeCount(fit, readings.length));
   const index = settings.layers === 'auto' ? chooseLayerCount(rows) : 0;
   const chosen = fits[index]!;
-  return buildFitResult({
+  const result = buildFitResult({
     readings,
     settings,
     system,
@@ -80,6 +80,9 @@ export function fitLayered(
     starts: fits.reduce((sum, fit) => sum + fit.outcome.starts, 0),
     iterations: fits.reduce((sum, fit) => sum + fit.outcome.iterations, 0),
   });
+  return settings.layers === 'auto'
+    ? { ...result, warnings: [...result.warnings, ...countDoubt(rows, index)] }
+    : result;
 }
 
 /** ln parameters of quick fits with 1 … `most` layers, each grown from the one before; they start the shown fits. */

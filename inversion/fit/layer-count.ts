@@ -35,3 +35,13 @@ export function chooseLayerCount(counts: readonly Pick<LayerCountFit, 'bic' | 'w
   if (enough >= 0) return enough;
   return counts.reduce((best, count, i) => (count.bic < counts[best]!.bic ? i : best), 0);
 }
+
+/** A sentence where the least BIC asks for another count than the chosen one: then the count hangs on the stated errors. */
+export function countDoubt(counts: readonly LayerCountFit[], chosen: number): string[] {
+  const least = counts.reduce((best, count, i) => (count.bic < counts[best]!.bic ? i : best), 0);
+  if (least === chosen || counts[chosen]!.withinNoise !== true) return [];
+  const beds = (i: number): string => `${counts[i]!.layers} ${counts[i]!.layers === 1 ? 'bed' : 'beds'}`;
+  return [
+    `The count rests on the stated errors: ${beds(chosen)} ${counts[chosen]!.layers === 1 ? 'is' : 'are'} the fewest within them, while the least BIC is that of ${beds(least)}.`,
+  ];
+}

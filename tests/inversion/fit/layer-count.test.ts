@@ -3,6 +3,7 @@ import {
   aicc,
   bic,
   chooseLayerCount,
+  countDoubt,
   misfitProbability,
   withinNoise,
 } from '../../../inversion/fit/layer-count';
@@ -46,5 +47,29 @@ describe('chooseLayerCount', () => {
         { bic: 41, withinNoise: null },
       ]),
     ).toBe(1);
+  });
+});
+
+describe('countDoubt', () => {
+  const rows = [
+    { layers: 1, bic: 20, withinNoise: false },
+    { layers: 2, bic: 25, withinNoise: true },
+  ].map((row) => ({
+    ...row,
+    status: 'converged-gradient' as const,
+    chi2PerReading: 1,
+    aicc: null,
+    chosen: false,
+    earth: { resistivity: [1], thickness: [] },
+  }));
+
+  it('speaks where the least BIC asks for another count than the noise does', () => {
+    expect(countDoubt(rows, 1)).toEqual([
+      'The count rests on the stated errors: 2 beds are the fewest within them, while the least BIC is that of 1 bed.',
+    ]);
+  });
+
+  it('is silent where both agree', () => {
+    expect(countDoubt([{ ...rows[0]!, bic: 30 }, rows[1]!], 1)).toEqual([]);
   });
 });
