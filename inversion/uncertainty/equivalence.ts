@@ -89,9 +89,10 @@ function undetermined(result: FitResult, bed: number): DoubtItem[] {
     const [low, high] = result.intervals[kind][bed]!;
     const told =
       factor === null || low === null || high === null
-        ? `${threeDigits(value)} ${unit} is one of many values that fit`
-        : `anything from ${threeDigits(low)} to ${threeDigits(high)} ${unit} fits (95 %)`;
-    const text = `The ${kind} of bed ${bed + 1} is not determined: ${told}.`;
+        ? `is not determined: ${threeDigits(value)} ${unit} is one of many values that fit`
+        : // the range is a straight line drawn from this model; on a long curved valley its ends need not fit
+          `is not held within a factor of 2 by this estimate, whose 95 % range is ${threeDigits(low)} to ${threeDigits(high)} ${unit}`;
+    const text = `The ${kind} of bed ${bed + 1} ${told}.`;
     return [{ bed, kind, text, value, unit, factor } satisfies DoubtItem];
   });
 }

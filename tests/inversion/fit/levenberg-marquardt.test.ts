@@ -81,6 +81,18 @@ describe('minimise', () => {
     expect(minimise(liar, [0])).toMatchObject({ status: 'no-descent', chi2: 1 });
   });
 
+  it('stops where three steps in a row gain next to nothing, long before the slope is gone', () => {
+    const flattening = problem(
+      (p) => [10, p[0]! ** 3],
+      (p) => [0, 3 * p[0]! ** 2],
+      [-1],
+      [1],
+    );
+    const outcome = minimise(flattening, [0.3]);
+    expect(outcome.status).toBe('converged-decrease');
+    expect(outcome.parameters[0]).toBeGreaterThan(0.03);
+  });
+
   it('solves a problem of one residual', () => {
     const one = problem(
       (p) => [p[0]! - 0.3],

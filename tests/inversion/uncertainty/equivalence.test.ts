@@ -111,7 +111,7 @@ describe('describeDoubt', () => {
     const resistivity: Interval[] = [fit.intervals.resistivity[0]!, [3, 140]];
     const intervals = { ...fit.intervals, resistivity };
     expect(describeDoubt({ ...fit, factors: wide, intervals })[0]!.text).toBe(
-      'The resistivity of bed 2 is not determined: anything from 3.00 to 140 Ω·m fits (95 %).',
+      'The resistivity of bed 2 is not held within a factor of 2 by this estimate, whose 95 % range is 3.00 to 140 Ω·m.',
     );
   });
 });
