@@ -1,5 +1,5 @@
 import { DEFAULT_BOUNDS, type FitSettings, type LayeredEarthModel } from '../../server/contract/fit';
-import { formatLength, formatResistivity, formatSignificant, withUnit } from '../ui/format';
+import { formatGiven, formatLength, formatResistivity, formatSignificant, withUnit } from '../ui/format';
 import { bedCount } from './run-title';
 
 const UNIT = { resistivity: 'Ω·m', thickness: 'm' } as const;
@@ -9,7 +9,7 @@ export function settingsWords(settings: FitSettings): { label: string; value: st
   const bounds = (['resistivity', 'thickness'] as const).flatMap((key) => {
     const [low, high] = settings.bounds[key];
     const isUsual = low === DEFAULT_BOUNDS[key][0] && high === DEFAULT_BOUNDS[key][1];
-    const value = `${formatSignificant(low)} to ${withUnit(formatSignificant(high), UNIT[key])}`;
+    const value = `${formatGiven(low)} to ${withUnit(formatGiven(high), UNIT[key])}`;
     return isUsual
       ? []
       : [{ label: key === 'resistivity' ? 'Resistivity within' : 'Thickness within', value }];

@@ -24,6 +24,11 @@ export function formatSignificant(value: number, digits = 3): string {
   return withMinus(value, groupDigits(rounded.toFixed(decimals)));
 }
 
+/** A number as a person gave it, groups apart: 0.1, 7000, 12 400. */
+export function formatGiven(value: number): string {
+  return Number.isFinite(value) ? withMinus(value, groupDigits(String(Math.abs(value)))) : DASH;
+}
+
 /** A fixed number of decimals, for columns that line up on the point. */
 export function formatFixed(value: number, decimals: number): string {
   if (!Number.isFinite(value)) return DASH;

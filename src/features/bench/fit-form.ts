@@ -6,13 +6,17 @@ import {
   type FitSettingsInput,
   type LayeredEarthModel,
 } from '../../../server/contract/fit';
+import { formatGiven } from '../../ui/format';
 import type { ModelValue } from './hand-model';
 import { heldKey } from './hand-model-store';
 
 export const LAYER_CHOICES = ['auto', '1', '2', '3', '4', '5', '6', '7', '8'] as const;
 
 const bound = (max: number) =>
-  z.number({ error: 'write a number' }).gt(0, 'must be above 0').max(max, `must be at most ${max}`);
+  z
+    .number({ error: 'write a number' })
+    .gt(0, 'must be above 0')
+    .max(max, `must be at most ${formatGiven(max)}`);
 
 /** The controls of a fit as filled in; the contract's settings are made from it by `settingsOf`. */
 export const fitFormSchema = z
@@ -133,6 +137,6 @@ export function faultsOfSettings(settings: FitSettingsInput): string[] {
     const fixed = field === 'fixed' && typeof position === 'number' ? settings.fixed?.[position] : undefined;
     if (!fixed) return `${issue.path.join(' ')}: ${issue.message}`;
     const quantity = fixed.on === 'resistivity' ? 'resistivity' : 'thickness';
-    return `Held ${quantity} of bed ${fixed.index + 1}, found ${fixed.value}: ${issue.message}`;
+    return `Held ${quantity} of bed ${fixed.index + 1}, found ${formatGiven(fixed.value)}: ${issue.message}`;
   });
 }

@@ -23,7 +23,7 @@ export function rowParts(row: SheetRow | null, before: SheetRow | null | undefin
     const [now, then] = [row.cells[column], before?.cells[column]];
     const change = before && now !== then ? wasText(then) : null;
     if (now === undefined && change === null) return [];
-    return [{ text: [name, now ?? 'empty'].filter((word) => word !== '').join(' '), change }];
+    return [{ text: [name, now ?? 'empty'].filter((word) => word !== '').join('\u00a0'), change }];
   });
   const added: RowPart[] = before === null ? [{ text: '', change: 'added' }] : [];
   return [...values, ...leftOut(row.excluded, before), ...added];

@@ -6,7 +6,7 @@ import { Button } from '../../ui/button';
 import { Dialog } from '../../ui/dialog';
 import { formatCount, formatMoment } from '../../ui/format';
 import { Cell, HeaderCell, Table, TableBody, TableHead, TableRow } from '../../ui/table';
-import { compareSheets } from './compare-sheets';
+import { compareSheets, type SheetDifference } from './compare-sheets';
 import { rowParts, type RowPart } from './row-parts';
 import type { Sheet } from './use-sheet';
 
@@ -73,29 +73,42 @@ export function SheetConflictDialog(props: SheetConflictDialogProps) {
             <HeaderCell numeric>Spacing, m</HeaderCell>
             <HeaderCell>Yours</HeaderCell>
             <HeaderCell>Revision {theirs.number}</HeaderCell>
-            {base ? <HeaderCell>Changed in</HeaderCell> : null}
+            {base ? <HeaderCell className="hidden sm:table-cell">Changed in</HeaderCell> : null}
           </TableHead>
           <TableBody>
             {differences.map((difference, i) => (
-              <TableRow key={i}>
-                <Cell numeric>{difference.spacing}</Cell>
-                <Cell>
-                  <RowWords parts={rowParts(difference.mine, difference.base)} />
-                </Cell>
-                <Cell>
-                  <RowWords parts={rowParts(difference.theirs, difference.base)} />
-                </Cell>
-                {difference.changedBy ? (
-                  <Cell className="whitespace-nowrap">
-                    {{ me: 'yours', them: `revision ${theirs.number}`, both: 'both' }[difference.changedBy]}
-                  </Cell>
-                ) : null}
-              </TableRow>
+              <DifferenceRow key={i} difference={difference} revisionNumber={theirs.number} />
             ))}
           </TableBody>
         </Table>
       )}
     </Dialog>
+  );
+}
+
+interface DifferenceRowProps {
+  difference: SheetDifference;
+  revisionNumber: number;
+}
+
+/** On a telephone the word of who changed it stands under the spacing. */
+function DifferenceRow({ difference, revisionNumber }: DifferenceRowProps) {
+  const { spacing, mine, theirs, base, changedBy } = difference;
+  const changed = changedBy && { me: 'yours', them: `revision ${revisionNumber}`, both: 'both' }[changedBy];
+  return (
+    <TableRow>
+      <Cell numeric className="align-top">
+        {spacing}
+        {changed ? <span className="block font-sans text-sm text-muted sm:hidden">{changed}</span> : null}
+      </Cell>
+      <Cell className="align-top">
+        <RowWords parts={rowParts(mine, base)} />
+      </Cell>
+      <Cell className="align-top">
+        <RowWords parts={rowParts(theirs, base)} />
+      </Cell>
+      {changed ? <Cell className="hidden align-top whitespace-nowrap sm:table-cell">{changed}</Cell> : null}
+    </TableRow>
   );
 }
 

@@ -28,3 +28,14 @@ it('tells the model that a fit started from, by depth', () => {
   );
   expect(start([80], [])).toBe('a model beside the curve: 80.0 Ω·m throughout');
 });
+
+it('tells bounds that are not the usual ones as they were given', () => {
+  const settings = fitSettingsSchema.parse({
+    kind: 'layered',
+    layers: 3,
+    bounds: { resistivity: [0.1, 25000], thickness: [0.02, 1000] },
+  });
+  const facts = settingsWords(settings).map(({ label, value }) => `${label} ${value}`);
+  expect(facts).toContain('Resistivity within 0.1 to 25\u202f000\u00a0Ω·m');
+  expect(facts.some((fact) => fact.startsWith('Thickness'))).toBe(false);
+});

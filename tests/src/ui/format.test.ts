@@ -4,6 +4,7 @@ import {
   formatDay,
   formatDuration,
   formatFixed,
+  formatGiven,
   formatLength,
   formatMoment,
   formatPercent,
@@ -16,6 +17,15 @@ import {
 
 const THIN = '\u202f';
 const NBSP = '\u00a0';
+
+test.each([
+  [0.1, '0.1'],
+  [7000, '7000'],
+  [12_400.5, `12${THIN}400.5`],
+  [1e9, `1${THIN}000${THIN}000${THIN}000`],
+  [-0.25, '\u22120.25'],
+  [Number.NaN, '–'],
+])('%d is told as it was given', (value, text) => expect(formatGiven(value)).toBe(text));
 
 describe('resistivity', () => {
   test.each([

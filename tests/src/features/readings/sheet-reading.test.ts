@@ -78,7 +78,7 @@ describe('two people on one sheet', () => {
     const words = (row: SheetRow | null, base: SheetRow | null | undefined) =>
       rowParts(row, base)
         .filter(({ change }) => change !== null)
-        .map(({ text, change }) => `${text} ${change}`.trim());
+        .map(({ text, change }) => `${text} ${change}`.replace('\u00a0', ' ').trim());
     expect(
       differences.map((found) => [
         found.spacing.split(' ')[0],
