@@ -108,7 +108,7 @@ function SaveMenu({ title, table, findDrawing }: SaveMenuProps) {
   const saveCsv = () =>
     saveFile(`${name}.csv`, new Blob(['\ufeff', tableToCsv(table)], { type: 'text/csv;charset=utf-8' }));
   return (
-    <Menu trigger={<IconButton label="Save" icon={<Download aria-hidden size={16} />} />}>
+    <Menu trigger={<IconButton label={`Save ${title}`} icon={<Download aria-hidden size={16} />} />}>
       <MenuItem onSelect={() => trySave('png')}>Picture (PNG)</MenuItem>
       <MenuItem onSelect={() => trySave('svg')}>Drawing (SVG)</MenuItem>
       <MenuItem onSelect={saveCsv}>Numbers (CSV)</MenuItem>

@@ -3,6 +3,8 @@ import type { LayeredEarthModel } from '../../server/contract/fit';
 
 const WIDTH = 18;
 const HEIGHT = 44;
+/** A thin bed is still seen. */
+const LEAST_BAND = 1.5;
 
 /** Depths on a square-root scale, so that thin upper beds keep a visible share. */
 function bands(earth: LayeredEarthModel): { top: number; base: number; resistivity: number }[] {
@@ -22,7 +24,13 @@ export function MiniColumn({ earth }: { earth: LayeredEarthModel | null }) {
     <svg aria-hidden viewBox={`0 0 ${WIDTH} ${HEIGHT}`} width={WIDTH} height={HEIGHT} className="shrink-0">
       {earth ? (
         bands(earth).map(({ top, base, resistivity }) => (
-          <rect key={top} y={top} width={WIDTH} height={base - top} fill={rampColor(resistivity)} />
+          <rect
+            key={top}
+            y={top}
+            width={WIDTH}
+            height={Math.max(LEAST_BAND, base - top)}
+            fill={rampColor(resistivity)}
+          />
         ))
       ) : (
         <rect

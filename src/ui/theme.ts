@@ -36,14 +36,15 @@ function readStored(): string | null {
 }
 
 const darkQuery = () => window.matchMedia('(prefers-color-scheme: dark)');
+const printQuery = () => window.matchMedia('print');
 
 function subscribe(listener: () => void): () => void {
-  const query = darkQuery();
+  const queries = [darkQuery(), printQuery()];
   listeners.add(listener);
-  query.addEventListener('change', listener);
+  queries.forEach((query) => query.addEventListener('change', listener));
   return () => {
     listeners.delete(listener);
-    query.removeEventListener('change', listener);
+    queries.forEach((query) => query.removeEventListener('change', listener));
   };
 }
 
@@ -51,9 +52,10 @@ export function useThemeChoice(): ThemeChoice {
   return useSyncExternalStore(subscribe, currentChoice);
 }
 
-/** The theme as seen, for drawings that cannot follow CSS variables by themselves. */
+/** The theme as seen, for drawings that cannot follow CSS variables by themselves; paper is light. */
 export function useIsDark(): boolean {
   return useSyncExternalStore(subscribe, () => {
+    if (printQuery().matches) return false;
     const choice = currentChoice();
     return choice === 'system' ? darkQuery().matches : choice === 'dark';
   });

@@ -21,7 +21,9 @@ import {
   type InterpretationForm,
 } from './interpretation-form';
 import { InterpretationFields } from './interpretation-fields';
+import { DISCARDED } from './discard-draft';
 import { InterpretationGround } from './interpretation-ground';
+import { InterpretationText } from './interpretation-text';
 import { useSaveInterpretation } from './interpretation-mutations';
 
 export interface InterpretationEditorProps {
@@ -71,13 +73,18 @@ export function InterpretationEditor(props: InterpretationEditorProps) {
   const theirs = currentOf(save.error, interpretationSchema);
   return (
     <form onSubmit={submit} className="flex flex-col gap-5" aria-label="Interpretation">
-      <h1 className="sr-only">{base.title}</h1>
+      <h1 className="sr-only text-xl font-semibold print:not-sr-only">{base.title}</h1>
       {interpretation.version > base.version && !theirs ? (
         <NewerVersion isDirty={isDirty} onTakeUp={() => takeUp(interpretation)} />
       ) : null}
       <div className="grid gap-x-8 gap-y-6 lg:grid-cols-[minmax(16rem,20rem)_minmax(0,1fr)]">
         <LiveGround control={form.control} run={run} soundingName={sounding.name} />
-        <InterpretationFields form={form} run={run} />
+        <div className="min-w-0 print:hidden">
+          <InterpretationFields form={form} run={run} />
+        </div>
+        <div className="hidden min-w-0 flex-col gap-6 print:flex">
+          <PrintedText control={form.control} run={run} />
+        </div>
       </div>
       <FormErrors faults={theirs ? [] : formFaults(save.error, FIELD_LABELS)} />
       <div className="sticky bottom-0 flex flex-wrap items-center gap-3 border-t border-rule bg-paper py-3 print:hidden">
@@ -108,15 +115,13 @@ export function InterpretationEditor(props: InterpretationEditorProps) {
   );
 }
 
-function LiveGround({
-  control,
-  run,
-  soundingName,
-}: {
+interface LiveProps {
   control: ReturnType<typeof useForm<InterpretationForm>>['control'];
   run: Run;
   soundingName: string;
-}) {
+}
+
+function LiveGround({ control, run, soundingName }: LiveProps) {
   const [beds, waterLevel] = useWatch({ control, name: ['beds', 'waterLevelDepthM'] });
   return (
     <InterpretationGround
@@ -126,6 +131,15 @@ function LiveGround({
       waterLevelDepthM={waterLevel !== null && Number.isFinite(waterLevel) ? waterLevel : null}
     />
   );
+}
+
+/** Inputs cut long words off on paper; what stands in them is printed as text. */
+function PrintedText({ control, run }: Pick<LiveProps, 'control' | 'run'>) {
+  const [beds, waterLevelDepthM, narrative] = useWatch({
+    control,
+    name: ['beds', 'waterLevelDepthM', 'narrative'],
+  });
+  return <InterpretationText content={{ beds, waterLevelDepthM, narrative }} run={run} />;
 }
 
 function NewerVersion({ isDirty, onTakeUp }: { isDirty: boolean; onTakeUp: () => void }) {
@@ -151,7 +165,8 @@ function NewerVersion({ isDirty, onTakeUp }: { isDirty: boolean; onTakeUp: () =>
 /** Leaving with unsaved words is asked about, inside the product and out of it. */
 function LeaveGuard({ isDirty }: { isDirty: boolean }) {
   const blocker = useBlocker(
-    ({ currentLocation, nextLocation }) => isDirty && currentLocation.pathname !== nextLocation.pathname,
+    ({ currentLocation, nextLocation }) =>
+      isDirty && nextLocation.state !== DISCARDED && currentLocation.pathname !== nextLocation.pathname,
   );
   useEffect(() => {
     if (!isDirty) return undefined;

@@ -1,4 +1,4 @@
-import { useMutation, useQueryClient } from '@tanstack/react-query';
+import { useMutation, useQueryClient, type QueryClient } from '@tanstack/react-query';
 import type { z } from 'zod';
 import { sendJson } from '../../api/http';
 import { soundingKeys } from '../../api/sounding-queries';
@@ -14,14 +14,19 @@ import { interpretationKeys } from './interpretation-queries';
 
 export type ReviewEventInput = z.input<typeof createReviewEventSchema>;
 
-/** An interpretation came or changed: itself, the lists it stands in, and the state of its sounding and survey. */
+/** The lists an interpretation stands in, and the state of its sounding and survey. */
+async function refreshAround(client: QueryClient, soundingId: string): Promise<void> {
+  await client.invalidateQueries({ queryKey: soundingKeys.detail(soundingId) });
+  await client.invalidateQueries({ queryKey: soundingKeys.lists(), refetchType: 'none' });
+  await client.invalidateQueries({ queryKey: surveyKeys.all, refetchType: 'none' });
+}
+
+/** An interpretation came or changed. */
 function useInterpretationArrival() {
   const client = useQueryClient();
   return async (interpretation: Interpretation) => {
     client.setQueryData(interpretationKeys.detail(interpretation.id), interpretation);
-    await client.invalidateQueries({ queryKey: soundingKeys.detail(interpretation.soundingId) });
-    await client.invalidateQueries({ queryKey: soundingKeys.lists(), refetchType: 'none' });
-    await client.invalidateQueries({ queryKey: surveyKeys.all, refetchType: 'none' });
+    await refreshAround(client, interpretation.soundingId);
     // An acceptance supersedes another interpretation of the sounding.
     await client.invalidateQueries({ queryKey: ['interpretations'], refetchType: 'none' });
   };
@@ -53,5 +58,16 @@ export function useReviewEvent(interpretationId: string) {
     mutationFn: (event: ReviewEventInput) =>
       sendJson('POST', `/interpretations/${interpretationId}/review-events`, event, interpretationSchema),
     onSuccess: arrive,
+  });
+}
+
+export function useDiscardInterpretation({ id, soundingId }: Pick<Interpretation, 'id' | 'soundingId'>) {
+  const client = useQueryClient();
+  return useMutation({
+    mutationFn: () => sendJson('DELETE', `/interpretations/${id}`, undefined, null),
+    onSuccess: () => refreshAround(client, soundingId),
+    onSettled: (_, error) => {
+      if (!error) client.removeQueries({ queryKey: interpretationKeys.detail(id) });
+    },
   });
 }

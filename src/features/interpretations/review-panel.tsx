@@ -2,6 +2,7 @@ import { useState } from 'react';
 import type { Interpretation } from '../../../server/contract/interpretations';
 import { Button } from '../../ui/button';
 import { Notice } from '../../ui/notice';
+import { DiscardDraft } from './discard-draft';
 import { ReviewDialog, type ReviewMove } from './review-dialog';
 
 export interface ReviewPanelProps {
@@ -43,7 +44,13 @@ export function ReviewPanel({ interpretation, isDirty }: ReviewPanelProps) {
           </Button>
         ) : null}
         {can.withdraw ? <Button onClick={() => setMove('withdrawn')}>Withdraw</Button> : null}
+        {can.discard ? <DiscardDraft interpretation={interpretation} /> : null}
       </div>
+      {can.edit && !can.submit ? (
+        <p className="text-sm text-muted print:hidden">
+          A geophysicist or the lead of the survey submits it for review.
+        </p>
+      ) : null}
       {can.submit && isDirty ? (
         <p className="text-sm text-muted">Save your changes before you submit.</p>
       ) : null}

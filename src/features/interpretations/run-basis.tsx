@@ -2,6 +2,8 @@ import { Link } from 'react-router-dom';
 import type { Run } from '../../../server/contract/runs';
 import { addressOf } from '../../app/addresses';
 import { DoubtList } from '../../runs/doubt-list';
+import { isRejected } from '../../runs/rejected-fit';
+import { RejectedLine } from '../../runs/rejected-mark';
 import { letterOfRun, titleOfRun } from '../../runs/run-title';
 import { FigureStrip } from '../../ui/figure-strip';
 import { formatMisfit, formatPercent } from '../../ui/format';
@@ -20,10 +22,18 @@ export function RunBasis({ run }: { run: Run }) {
         <>
           <FigureStrip
             items={[
-              { value: formatMisfit(result.chi2PerReading), label: 'χ² per reading' },
+              {
+                value: (
+                  <span className={isRejected(result) ? 'text-rust' : undefined}>
+                    {formatMisfit(result.chi2PerReading)}
+                  </span>
+                ),
+                label: 'χ² per reading',
+              },
               { value: formatPercent(result.rmsPercent), label: 'rms misfit' },
             ]}
           />
+          <RejectedLine fit={result} />
           <h3 className="font-semibold">What the data cannot tell</h3>
           <DoubtList result={result} excluded={run.excluded} />
         </>

@@ -10,7 +10,7 @@ export function RunHeads({ runs, first }: { runs: readonly Run[]; first: string 
   const palette = useChartPalette();
   return (
     <TableHead>
-      <HeaderCell className="w-36 align-top">{first}</HeaderCell>
+      <HeaderCell className="w-20 align-top whitespace-normal sm:w-36">{first}</HeaderCell>
       {runs.map((run) => (
         <HeaderCell key={run.id} className="align-top whitespace-normal">
           <span className="figure" style={{ color: runStyle(letterOfRun(run), palette).color }}>

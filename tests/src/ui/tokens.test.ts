@@ -54,3 +54,11 @@ test.each([false, true])('hues of runs stand out on paper (dark: %s)', (isDark) 
   const palette = chartPalette(isDark);
   for (const hue of palette.runs) expect(contrastRatio(hue, palette.paper)).toBeGreaterThanOrEqual(4.5);
 });
+
+test('paper has every colour of the light theme, whatever theme is shown', () => {
+  const printed = tokensOf(':root:not([data-theme])');
+  const onWhite = ['paper', 'sheet', 'sunken', 'ink', 'muted', 'rule'];
+  const light = Object.entries(themes.light).filter(([name]) => !onWhite.includes(name));
+  expect(printed).toMatchObject(Object.fromEntries(light));
+  for (const name of onWhite) expect(printed).toHaveProperty(name);
+});
