@@ -19,7 +19,7 @@ const SIZE: Record<ButtonSize, string> = {
 
 export function buttonClass(kind: ButtonKind, size: ButtonSize, extra?: string): string {
   return classNames(
-    'inline-flex items-center justify-center gap-1.5 rounded border text-center leading-tight no-underline select-none',
+    'inline-flex items-center justify-center gap-1.5 rounded border text-center leading-tight no-underline select-none print:hidden',
     'disabled:cursor-not-allowed disabled:opacity-55 aria-disabled:cursor-not-allowed aria-disabled:opacity-55',
     KIND[kind],
     SIZE[size],

@@ -15,7 +15,7 @@ export function IconButton({ label, icon, className, ...rest }: IconButtonProps)
       {...rest}
       aria-label={label}
       className={classNames(
-        'inline-flex size-8 shrink-0 items-center justify-center rounded text-muted hover:bg-sunken hover:text-ink touch:size-11',
+        'inline-flex size-8 shrink-0 items-center justify-center rounded text-muted hover:bg-sunken hover:text-ink touch:size-11 print:hidden',
         'disabled:cursor-not-allowed disabled:opacity-55 aria-disabled:cursor-not-allowed aria-disabled:opacity-55',
         className,
       )}

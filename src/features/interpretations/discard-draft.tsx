@@ -28,7 +28,6 @@ export function DiscardDraft({ interpretation }: { interpretation: Interpretatio
   return (
     <>
       <Button
-        kind="quiet"
         onClick={() => {
           discard.reset();
           setIsAsking(true);
