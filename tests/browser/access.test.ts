@@ -66,7 +66,7 @@ it('two people on one Field sheet: the second sees both versions, and both stay'
   await second.page.getByRole('button', { name: 'Save the readings' }).click();
   const dialog = second.page.getByRole('dialog', { name: 'Someone else saved these readings' });
   await dialog.getByText(`Revision 2 by ${nameOf('geophysicist')}`).waitFor();
-  const rows = await dialog.getByRole('row').allInnerTexts();
+  const rows = (await dialog.getByRole('row').allInnerTexts()).map((text) => text.replaceAll('\u00a0', ' '));
   expect(rows).toHaveLength(3);
   expect(rows[1]).toContain('V 123.4');
   expect(rows[2]).toContain('V 234.5');

@@ -12,7 +12,8 @@ export type RunNoteChange = z.input<typeof updateRunNoteSchema>;
 function useRunArrival(soundingId: string) {
   const client = useQueryClient();
   return async (run: Run) => {
-    client.setQueryData(runKeys.detail(run.id), run);
+    // Kept without its result, a run would be shown empty at the moment it is opened.
+    if (run.result !== null) client.setQueryData(runKeys.detail(run.id), run);
     await client.invalidateQueries({ queryKey: runListQuery(soundingId).queryKey });
     await client.invalidateQueries({ queryKey: soundingKeys.lists(), refetchType: 'none' });
   };

@@ -40,7 +40,11 @@ export function LayerLadder({ counts, onTakeUp, onAdopt }: LayerLadderProps) {
                   <span className="text-sm font-semibold">chosen</span>
                 ) : (
                   <>
-                    <Button kind="quiet" size="small" onClick={() => onTakeUp(count.earth, `${bedCount(count.layers)}, from the ladder`)}>
+                    <Button
+                      kind="quiet"
+                      size="small"
+                      onClick={() => onTakeUp(count.earth, `${bedCount(count.layers)}, from the ladder`)}
+                    >
                       Look
                       <span className="sr-only"> at the model of {bedCount(count.layers)}</span>
                     </Button>
