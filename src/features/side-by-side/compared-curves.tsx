@@ -4,10 +4,12 @@ import type { Run } from '../../../server/contract/runs';
 import type { Sounding } from '../../../server/contract/soundings';
 import { SoundingCurve } from '../../charts/sounding-curve';
 import { chartReadings, curveDataOfRun } from '../../runs/curve-of-run';
-import { isRejected, REJECTED_WORDS } from '../../runs/rejected-fit';
+import { isRejected } from '../../runs/rejected-fit';
+import { RejectedMark } from '../../runs/rejected-mark';
 import { letterOfRun, titleOfRun } from '../../runs/run-title';
 import { useRunLines } from '../../runs/use-run-lines';
 import { SPACING_AXIS } from '../../soundings/spread-words';
+import { classNames } from '../../ui/class-names';
 import { Segmented } from '../../ui/segmented';
 
 export interface ComparedCurvesProps {
@@ -77,22 +79,30 @@ function OverlaidCurves({ sounding, runs, base }: ComparedCurvesProps) {
 function CurvesApart({ sounding, runs }: Omit<ComparedCurvesProps, 'base'>) {
   const lines = useRunLines(runs);
   const readings = useMemo(() => runs.map((run) => chartReadings(curveDataOfRun(run))), [runs]);
+  // Where one run has the line, all have its room, so that the drawings stay level.
+  const hasRejected = runs.some((run) => isRejected(run.result));
   const axesOf = useMemo(() => ({ readings: readings.flat(), lines }), [readings, lines]);
   return (
-    <div className="grid gap-x-8 gap-y-8 md:grid-cols-2 2xl:grid-cols-3">
+    <div className={classNames('grid gap-x-8 gap-y-8 md:grid-cols-2', runs.length > 2 && '2xl:grid-cols-3')}>
       {runs.map((run, i) => (
-        <SoundingCurve
-          key={run.id}
-          readings={readings[i] ?? []}
-          lines={lines.filter((line) => line.id === run.id)}
-          axesOf={axesOf}
-          chosenLine={run.id}
-          spacingName={SPACING_AXIS[sounding.spreadType]}
-          title={`Run ${letterOfRun(run)}`}
-          note={isRejected(run.result) ? `${titleOfRun(run)}, ${REJECTED_WORDS}` : titleOfRun(run)}
-          subject={sounding.name}
-          maxHeight={380}
-        />
+        <div key={run.id} className="min-w-0">
+          {hasRejected ? (
+            <p className="min-h-5">
+              <RejectedMark fit={run.result} />
+            </p>
+          ) : null}
+          <SoundingCurve
+            readings={readings[i] ?? []}
+            lines={lines.filter((line) => line.id === run.id)}
+            axesOf={axesOf}
+            chosenLine={run.id}
+            spacingName={SPACING_AXIS[sounding.spreadType]}
+            title={`Run ${letterOfRun(run)}`}
+            note={titleOfRun(run)}
+            subject={sounding.name}
+            maxHeight={380}
+          />
+        </div>
       ))}
     </div>
   );

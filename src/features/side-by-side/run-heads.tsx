@@ -10,15 +10,17 @@ export function RunHeads({ runs, first }: { runs: readonly Run[]; first: string 
   const palette = useChartPalette();
   return (
     <TableHead>
-      <HeaderCell className="w-20 align-top whitespace-normal sm:w-36">{first}</HeaderCell>
+      <HeaderCell className="w-20 align-top sm:w-36">{first}</HeaderCell>
       {runs.map((run) => (
-        <HeaderCell key={run.id} className="align-top whitespace-normal">
-          <span className="figure" style={{ color: runStyle(letterOfRun(run), palette).color }}>
-            {letterOfRun(run)}
-          </span>{' '}
-          <span className="font-normal">{titleOfRun(run)}</span>
-          <span className="block font-normal">
-            <RejectedMark fit={run.result} />
+        <HeaderCell key={run.id} className="align-top">
+          <span className="block whitespace-normal">
+            <span className="figure" style={{ color: runStyle(letterOfRun(run), palette).color }}>
+              {letterOfRun(run)}
+            </span>{' '}
+            <span className="font-normal">{titleOfRun(run)}</span>
+            <span className="block font-normal">
+              <RejectedMark fit={run.result} />
+            </span>
           </span>
         </HeaderCell>
       ))}
