@@ -1,15 +1,14 @@
-import { hostname } from 'node:os';
 import type { Knex } from 'knex';
 import { RUN_TASK, runJobKey, WORKER_SILENCE_S, type JobQueue } from './job-queue';
+import { PROCESS_PLACE } from './process-place';
 import type { RunEvents } from './run-events';
 
-const HOST = hostname();
 const KEEP_HEARTBEATS = '10 minutes';
 
-/** Says that this worker lives. `host` names the machine and the process on it. */
+/** Says that this worker lives. `host` names where its process runs, and the process there. */
 export async function beat(db: Knex, workerId: string): Promise<void> {
   await db('worker_heartbeat')
-    .insert({ worker_id: workerId, host: `${HOST}/${process.pid}` })
+    .insert({ worker_id: workerId, host: `${PROCESS_PLACE}/${process.pid}` })
     .onConflict('worker_id')
     .merge({ seen_at: db.fn.now() });
 }
@@ -18,13 +17,13 @@ export async function endBeat(db: Knex, workerId: string): Promise<void> {
   await db('worker_heartbeat').where({ worker_id: workerId }).delete();
 }
 
-/** Frees at once what workers on this machine held whose process is gone. */
+/** Frees at once what workers here held whose process is gone; of those elsewhere, only silence tells. */
 export async function freeOwnEarlierLives(db: Knex): Promise<string[]> {
   const rows = await db('worker_heartbeat')
-    .whereLike('host', `${HOST.replace(/[\\%_]/g, '\\$&')}/%`)
+    .whereRaw('starts_with(host, ?)', [`${PROCESS_PLACE}/`])
     .select<{ worker_id: string; host: string }[]>('worker_id', 'host');
   const gone = rows
-    .filter(({ host }) => !isAlive(Number(host.slice(HOST.length + 1))))
+    .filter(({ host }) => !isAlive(Number(host.slice(PROCESS_PLACE.length + 1))))
     .map((row) => row.worker_id);
   await freeWorkers(db, gone);
   return gone;

@@ -8,6 +8,7 @@ import {
   rescueStrandedRuns,
 } from '../../server/jobs/dead-workers';
 import { RUN_MAX_ATTEMPTS, runJobKey } from '../../server/jobs/job-queue';
+import { PROCESS_PLACE } from '../../server/jobs/process-place';
 import { createRun } from '../setup/run-factory';
 import { createTestServer } from '../setup/server';
 
@@ -70,12 +71,12 @@ describe('workers that fell silent', () => {
     expect(await jobs.health()).toMatchObject({ liveWorkers: 1 });
   });
 
-  it('frees at once what processes of this machine held that are gone', async () => {
+  it('frees at once what processes held here that are gone, and not those of a namesake machine', async () => {
     const [ofGone, ofOther] = [await queuedRun(), await queuedRun()];
     await db('worker_heartbeat').insert([
       // no process has this id: it is above the kernel's largest
-      { worker_id: 'gone', host: `${hostname()}/4194305` },
-      { worker_id: 'other', host: `${hostname()}-2/4194305` },
+      { worker_id: 'gone', host: `${PROCESS_PLACE}/4194305` },
+      { worker_id: 'other', host: `${hostname()}/another-boot/pid:[1]/4194305` },
     ]);
     await beat(db, 'self');
     await lock(ofGone, 'gone', 0);
