@@ -47,3 +47,8 @@ export function referenceRows(name: string): Record<string, string>[] {
   const names = head!.split(',');
   return lines.map((line) => Object.fromEntries(line.split(',').map((cell, i) => [names[i]!, cell])));
 }
+
+/** Function name → [x, its value, what that double leaves of the value]; `tests/reference/generate_elementary.py`. */
+export function elementaryValues(): Record<string, [number, number, number][]> {
+  return JSON.parse(reference('elementary.json'));
+}
