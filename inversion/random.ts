@@ -1,6 +1,8 @@
 import { uniformFloat64 } from 'pure-rand/distribution/uniformFloat64';
 import { xoroshiro128plus } from 'pure-rand/generator/xoroshiro128plus';
 import { skipN } from 'pure-rand/utils/skipN';
+import { cos } from './math/circular';
+import { log } from './math/logarithm';
 
 /** A seeded stream of numbers; it advances with each call. */
 export interface RandomStream {
@@ -21,8 +23,8 @@ export function createRandomStream(seed: number): RandomStream {
   skipN(generator, DISCARDED);
   const uniform = () => uniformFloat64(generator);
   const normal = () => {
-    const radius = Math.sqrt(-2 * Math.log(1 - uniform()));
-    return radius * Math.cos(2 * Math.PI * uniform());
+    const radius = Math.sqrt(-2 * log(1 - uniform()));
+    return radius * cos(2 * Math.PI * uniform());
   };
   return { uniform, normal, below: (count) => Math.floor(uniform() * count) };
 }

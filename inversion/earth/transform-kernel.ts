@@ -1,3 +1,5 @@
+import { expm1 } from '../math/exponential';
+
 /** Nodes of the wavenumber lattice to a factor of two: λ_g = 2^(g/5) in 1/m, 16.6 a decade. */
 export const NODES_PER_OCTAVE = 5;
 
@@ -27,7 +29,7 @@ export function createKernelScratch(nodes: number): KernelScratch {
 function fillDecay(decay: Float64Array, lambda: Float64Array, thickness: number): void {
   const nodes = lambda.length;
   const seeds = Math.min(NODES_PER_OCTAVE, nodes);
-  for (let g = 0; g < seeds; g++) decay[g] = Math.expm1(-2 * lambda[g]! * thickness);
+  for (let g = 0; g < seeds; g++) decay[g] = expm1(-2 * lambda[g]! * thickness);
   for (let g = seeds; g < nodes; g++) {
     const half = decay[g - NODES_PER_OCTAVE]!;
     decay[g] = half * (2 + half);

@@ -1,4 +1,5 @@
 import type { LayeredEarth } from '../types';
+import { expm1 } from '../math/exponential';
 
 /**
  * Resistivity transform T₁(λ) in Ω·m at one wavenumber λ in 1/m, from below:
@@ -9,7 +10,7 @@ export function resistivityTransform(earth: LayeredEarth, lambda: number): numbe
   const { resistivity, thickness } = earth;
   let t = resistivity[resistivity.length - 1]!;
   for (let i = thickness.length - 1; i >= 0; i--) {
-    const em = Math.expm1(-2 * lambda * thickness[i]!);
+    const em = expm1(-2 * lambda * thickness[i]!);
     const th = -em / (2 + em);
     const rho = resistivity[i]!;
     t = (t + rho * th) / (1 + (t * th) / rho);

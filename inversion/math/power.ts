@@ -1,4 +1,5 @@
 import { exp } from './exponential';
+import { log } from './logarithm';
 import { powerOfTwo } from './power-of-two';
 
 /** 2ˣ for −1022 ≤ x ≤ 1023, exact at whole x, else within 1 ulp: 2^x = 2^k exp((x − k) ln2), |x − k| ≤ ½. */
@@ -19,3 +20,6 @@ export function pow10(x: number): number {
   const part = x === k ? 1 : exp((x - k) * Math.LN10);
   return k < 0 ? part / TENS[-k]! : part * TENS[k]!;
 }
+
+/** baseˣ for base > 0, as exp(x ln base): relative error below (1 + |x ln base|) × 2⁻⁵². */
+export const pow = (base: number, x: number): number => exp(x * log(base));

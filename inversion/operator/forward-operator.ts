@@ -10,6 +10,7 @@ import type { LayeredEarth, Spread } from '../types';
 import { requireSpread } from '../spread/require-spread';
 import { dot } from './dot-product';
 import { designWeights } from './weight-design';
+import { pow2 } from '../math/power';
 
 /** The linear map from an earth to the apparent resistivities of one list of spreads. */
 export interface ForwardOperator {
@@ -26,6 +27,8 @@ export interface ForwardOperator {
     layers: number,
     predicted: Float64Array,
     jacobian: Float64Array,
+    /** entries of a row of `jacobian`, where it holds more columns than the 2N − 1 that are written */
+    width?: number,
   ) => void;
 }
 
@@ -42,7 +45,7 @@ export function createForwardOperator(spreads: readonly Spread[]): ForwardOperat
   const end = rows.reduce((high, row) => Math.max(high, row.first + row.values.length), -Infinity);
   const readings = rows.length;
   const nodes = readings === 0 ? 0 : end - first;
-  const lambda = Float64Array.from({ length: nodes }, (_, j) => 2 ** ((first + j) / NODES_PER_OCTAVE));
+  const lambda = Float64Array.from({ length: nodes }, (_, j) => pow2((first + j) / NODES_PER_OCTAVE));
   const weights = new Float64Array(readings * nodes);
   rows.forEach((row, i) => weights.set(row.values, i * nodes + row.first - first));
   const from = Int32Array.from(rows, (row) => row.first - first);
@@ -60,12 +63,13 @@ export function createForwardOperator(spreads: readonly Spread[]): ForwardOperat
     layers,
     predicted,
     jacobian,
+    width = 2 * layers - 1,
   ) => {
     transformAndDerivatives(parameters, layers, lambda, scratch);
     const count = 2 * layers - 1;
     for (let i = 0; i < readings; i++) {
       predicted[i] = apply(scratch.transform, 0, i);
-      for (let j = 0; j < count; j++) jacobian[i * count + j] = apply(scratch.derivative, j * nodes, i);
+      for (let j = 0; j < count; j++) jacobian[i * width + j] = apply(scratch.derivative, j * nodes, i);
     }
   };
   return {

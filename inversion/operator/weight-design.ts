@@ -2,6 +2,9 @@ import { NODES_PER_OCTAVE } from '../earth/transform-kernel';
 import type { ImageResponse } from '../spread/image-response';
 import { TOLERANCES } from '../tolerances';
 import { solveQr, thinQr, type ThinQr } from './householder';
+import { exp } from '../math/exponential';
+import { log2 } from '../math/logarithm';
+import { pow10, pow2 } from '../math/power';
 
 /** Nodes above 1/nearest: 2^(33/5) ≈ 97. */
 const HIGHEST = 33;
@@ -34,13 +37,13 @@ function factorise(first: number, highestDepth: number): Design {
   const nodes = HIGHEST - first + 1;
   const depthCount = Math.ceil((highestDepth + 4) * DEPTHS_PER_DECADE) + 1;
   const depths = Float64Array.from({ length: depthCount }, (_, i) =>
-    i === 0 ? 0 : 10 ** (-4 + (i - 1) / DEPTHS_PER_DECADE),
+    i === 0 ? 0 : pow10(-4 + (i - 1) / DEPTHS_PER_DECADE),
   );
   const rows = depthCount + nodes;
   const matrix = new Float64Array(rows * nodes);
   for (let j = 0; j < nodes; j++) {
-    const lambda = 2 ** ((first + j) / NODES_PER_OCTAVE);
-    for (let i = 0; i < depthCount; i++) matrix[j * rows + i] = Math.exp(-depths[i]! * lambda);
+    const lambda = pow2((first + j) / NODES_PER_OCTAVE);
+    for (let i = 0; i < depthCount; i++) matrix[j * rows + i] = exp(-depths[i]! * lambda);
     matrix[j * rows + depthCount + j] = TOLERANCES.designRidge;
   }
   return { first, depths, qr: thinQr(matrix, rows, nodes, depthCount) };
@@ -53,7 +56,7 @@ function factorise(first: number, highestDepth: number): Design {
 const designs = new Map<string, Design>();
 
 function designFor(response: ImageResponse, anchor: number): Design {
-  const octaves = Math.log2(response.farthest / anchor);
+  const octaves = log2(response.farthest / anchor);
   const widening = Math.max(1, Math.ceil(octaves / OCTAVES_PER_CLASS - 1e-9));
   const key = `${response.neutral ? 'neutral' : 'charged'}:${widening}`;
   let design = designs.get(key);
@@ -75,8 +78,8 @@ function designFor(response: ImageResponse, anchor: number): Design {
  * snapped to the lattice, so its matrix is the same for every sounding. Worst residual of the design: 1e-13.
  */
 export function designWeights(response: ImageResponse): LatticeWeights {
-  const offset = Math.floor(NODES_PER_OCTAVE * Math.log2(response.nearest));
-  const anchor = 2 ** (offset / NODES_PER_OCTAVE);
+  const offset = Math.floor(NODES_PER_OCTAVE * log2(response.nearest));
+  const anchor = pow2(offset / NODES_PER_OCTAVE);
   const { first, depths, qr } = designFor(response, anchor);
   const target = depths.map((c) => response.at(c * anchor));
   return { first: first - offset, values: solveQr(qr, target) };

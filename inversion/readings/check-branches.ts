@@ -1,6 +1,8 @@
 import { rowsOf, type CurveBranch, type CurvePoint } from './curve-branches';
 import { nameOf, say, type ReadingCheck } from './reading-check';
 import { READING_TOLERANCES } from './reading-tolerances';
+import { exp } from '../math/exponential';
+import { hypot, norm } from '../math/hypot';
 
 interface Join {
   readonly points: readonly CurvePoint[];
@@ -14,7 +16,7 @@ interface Join {
 }
 
 const placeOf = ({ readings, x }: CurvePoint): string =>
-  readings[0] ? nameOf(readings[0]) : `${say(Math.exp(x))} m`;
+  readings[0] ? nameOf(readings[0]) : `${say(exp(x))} m`;
 
 /** ln ρa of a branch at x by a straight line between its neighbours, with its error; null outside of the branch. */
 function valueAt(branch: CurveBranch, x: number): { y: number; error: number; points: CurvePoint[] } | null {
@@ -26,7 +28,7 @@ function valueAt(branch: CurveBranch, x: number): { y: number; error: number; po
   const share = (x - from.x) / (to.x - from.x);
   return {
     y: from.y + share * (to.y - from.y),
-    error: Math.hypot((1 - share) * from.error, share * to.error),
+    error: hypot((1 - share) * from.error, share * to.error),
     points: [from, to],
   };
 }
@@ -41,8 +43,7 @@ function overlap(narrow: CurveBranch, wide: CurveBranch): Join | null {
   const equal = pairs.filter(({ other }) => other.points.length === 1);
   const used = equal.length > 0 ? equal : pairs;
   const shift = used.reduce((sum, { point, other }) => sum + point.y - other.y, 0) / used.length;
-  const error =
-    Math.hypot(...used.map(({ point, other }) => Math.hypot(point.error, other.error))) / used.length;
+  const error = norm(used.map(({ point, other }) => hypot(point.error, other.error))) / used.length;
   return {
     points: used.flatMap(({ point, other }) => [...other.points, point]),
     shift,
@@ -64,7 +65,7 @@ function gap(narrow: CurveBranch, wide: CurveBranch): Join | null {
   return {
     points: [last, first],
     shift: first.y - last.y - slope * run,
-    error: Math.hypot(a * before.error, (1 + a) * last.error, (1 + b) * first.error, b * after.error),
+    error: norm([a * before.error, (1 + a) * last.error, (1 + b) * first.error, b * after.error]),
     bend: READING_TOLERANCES.gapBend * run * run,
     where: `between ${placeOf(last)} and ${placeOf(first)}`,
   };
@@ -80,7 +81,7 @@ function checkJoin(narrow: CurveBranch, wide: CurveBranch): ReadingCheck[] {
   if (!join || narrow.halfMN === null || wide.halfMN === null) return [];
   const limit = limitOf(join);
   if (Math.abs(join.shift) <= limit) return [];
-  const percent = 100 * (Math.exp(join.shift) - 1);
+  const percent = 100 * (exp(join.shift) - 1);
   return [
     {
       rows: [...new Set(rowsOf(...join.points))],
@@ -88,7 +89,7 @@ function checkJoin(narrow: CurveBranch, wide: CurveBranch): ReadingCheck[] {
       message:
         `The branch of MN/2 ${say(wide.halfMN, 6)} m lies ${say(Math.abs(percent), 2)} % ${percent > 0 ? 'above' : 'below'} ` +
         `that of MN/2 ${say(narrow.halfMN, 6)} m at ${join.where}; the errors${join.bend > 0 ? ' and the bend of the curve' : ''} explain up to ` +
-        `${say(100 * (Math.exp(limit) - 1), 2)} %. Ground that changes beside M and N does this; no reading is moved.`,
+        `${say(100 * (exp(limit) - 1), 2)} %. Ground that changes beside M and N does this; no reading is moved.`,
       rule: 'branches of different MN join within twice the errors of their readings',
       source: 'on flat beds the exact K leaves next to no step at a change of MN',
     },

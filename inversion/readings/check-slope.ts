@@ -1,6 +1,8 @@
 import { rowsOf, type CurveBranch, type CurvePoint } from './curve-branches';
 import { nameOf, say, type ReadingCheck } from './reading-check';
 import { READING_TOLERANCES } from './reading-tolerances';
+import { exp } from '../math/exponential';
+import { hypot } from '../math/hypot';
 
 const LIMITED = new Set(['schlumberger', 'half-schlumberger', 'wenner', 'pole-pole']);
 
@@ -9,7 +11,7 @@ function checkPair(from: CurvePoint, to: CurvePoint): ReadingCheck[] {
   if (!first || !second || !LIMITED.has(first.reading.spread.type)) return [];
   const run = to.x - from.x;
   const slope = (to.y - from.y) / run;
-  const slopeError = Math.hypot(from.error, to.error) / run;
+  const slopeError = hypot(from.error, to.error) / run;
   const { steepestRise, standardErrors } = READING_TOLERANCES;
   if (!(slope - standardErrors * slopeError > steepestRise)) return [];
   return [
@@ -17,7 +19,7 @@ function checkPair(from: CurvePoint, to: CurvePoint): ReadingCheck[] {
       rows: rowsOf(from, to),
       kind: 'steep-rise',
       message:
-        `ρa rises from ${say(Math.exp(from.y))} Ω·m at ${nameOf(first)} to ${say(Math.exp(to.y))} Ω·m at ${nameOf(second)}: ` +
+        `ρa rises from ${say(exp(from.y))} Ω·m at ${nameOf(first)} to ${say(exp(to.y))} Ω·m at ${nameOf(second)}: ` +
         `slope ${slope.toFixed(2)} on log–log axes, ±${slopeError.toFixed(2)} from the two errors. ` +
         'No ground of flat beds does this: look for a misread value, a bad electrode or a change sideways.',
       rule: 'slope at most +1 within one MN branch, beyond twice its standard error',

@@ -1,6 +1,9 @@
 import { sameSpread } from './curve-branches';
 import { nameOf, say, type CheckedReading, type ReadingCheck } from './reading-check';
 import { READING_TOLERANCES } from './reading-tolerances';
+import { exp } from '../math/exponential';
+import { hypot } from '../math/hypot';
+import { log } from '../math/logarithm';
 
 /** Schlumberger readings with a wide MN. K is exact all the same, so this is a word about the field, not about the number. */
 export function checkWideMn(readings: readonly CheckedReading[]): ReadingCheck[] {
@@ -32,8 +35,8 @@ export function checkRepeats(readings: readonly CheckedReading[]): ReadingCheck[
     );
     const [low, high] = [sorted[0], sorted.at(-1)];
     if (!low || !high || low === high) return [];
-    const difference = Math.log(high.derived.apparentResistivityOhmM / low.derived.apparentResistivityOhmM);
-    const error = Math.hypot(low.derived.relativeError, high.derived.relativeError);
+    const difference = log(high.derived.apparentResistivityOhmM / low.derived.apparentResistivityOhmM);
+    const error = hypot(low.derived.relativeError, high.derived.relativeError);
     if (difference <= READING_TOLERANCES.standardErrors * error) return [];
     return [
       {
@@ -41,8 +44,8 @@ export function checkRepeats(readings: readonly CheckedReading[]): ReadingCheck[
         kind: 'repeat-disagrees' as const,
         message:
           `${nameOf(low)} was read ${group.length} times, from ${say(low.derived.apparentResistivityOhmM, 4)} to ` +
-          `${say(high.derived.apparentResistivityOhmM, 4)} Ω·m: ${say(100 * (Math.exp(difference) - 1), 2)} % apart, ` +
-          `where the errors explain ${say(100 * (Math.exp(READING_TOLERANCES.standardErrors * error) - 1), 2)} %.`,
+          `${say(high.derived.apparentResistivityOhmM, 4)} Ω·m: ${say(100 * (exp(difference) - 1), 2)} % apart, ` +
+          `where the errors explain ${say(100 * (exp(READING_TOLERANCES.standardErrors * error) - 1), 2)} %.`,
         rule: 'repeats agree within twice the error of their difference',
         source: 'errors of the readings, with the survey’s floor in quadrature',
       },

@@ -1,6 +1,8 @@
 import { rowsOf, type CurveBranch, type CurvePoint } from './curve-branches';
 import { nameOf, say, type ReadingCheck } from './reading-check';
 import { READING_TOLERANCES } from './reading-tolerances';
+import { exp } from '../math/exponential';
+import { norm } from '../math/hypot';
 
 interface Departure {
   readonly point: CurvePoint;
@@ -24,7 +26,7 @@ function departureOf(points: readonly CurvePoint[], i: number): Departure | null
     point.x,
   );
   const expected = beside.reduce((sum, { y }, k) => sum + (weights[k] ?? 0) * y, 0);
-  const error = Math.hypot(point.error, ...beside.map((p, k) => (weights[k] ?? 0) * p.error));
+  const error = norm([point.error, ...beside.map((p, k) => (weights[k] ?? 0) * p.error)]);
   const { trendStandardErrors, cubicBend, quadraticBend } = READING_TOLERANCES;
   const bend = beside.length === 4 ? cubicBend : quadraticBend;
   return {
@@ -63,8 +65,8 @@ export function checkTrend(branches: readonly CurveBranch[]): ReadingCheck[] {
         rows: rowsOf(worst.point),
         kind: 'far-from-trend',
         message:
-          `${nameOf(first)}: ρa ${say(Math.exp(worst.point.y))} Ω·m, where the readings beside it suggest ` +
-          `${say(Math.exp(worst.point.y - worst.residual))} Ω·m (${say(100 * (Math.exp(worst.residual) - 1), 2)} %). Measure again, or look at the sheet.`,
+          `${nameOf(first)}: ρa ${say(exp(worst.point.y))} Ω·m, where the readings beside it suggest ` +
+          `${say(exp(worst.point.y - worst.residual))} Ω·m (${say(100 * (exp(worst.residual) - 1), 2)} %). Measure again, or look at the sheet.`,
         rule: 'within four standard errors, and the bend of a layered earth, of the curve through its neighbours',
         source: 'bend allowed as measured on random layered earths',
       });

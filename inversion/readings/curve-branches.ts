@@ -1,4 +1,5 @@
 import type { CheckedReading } from './reading-check';
+import { log } from '../math/logarithm';
 
 /** One spacing of one branch; repeats are one point. */
 export interface CurvePoint {
@@ -45,8 +46,8 @@ export const sameSpread = (readings: readonly CheckedReading[]): CheckedReading[
 function pointOf(readings: readonly CheckedReading[]): CurvePoint {
   return {
     readings,
-    x: Math.log(readings[0]?.derived.plottingSpacingM ?? 1),
-    y: mean(readings.map(({ derived }) => Math.log(derived.apparentResistivityOhmM))),
+    x: log(readings[0]?.derived.plottingSpacingM ?? 1),
+    y: mean(readings.map(({ derived }) => log(derived.apparentResistivityOhmM))),
     error: mean(readings.map(({ derived }) => derived.relativeError)),
   };
 }

@@ -4,6 +4,7 @@ import { geometricFactor } from '../spread/geometric-factor';
 import { plottingSpacing } from '../spread/plotting-spacing';
 import type { Spread } from '../types';
 import type { DerivedFieldReading, FieldReading } from './field-reading';
+import { hypot } from '../math/hypot';
 
 /** Why no ρa follows from a reading; `field` names the value to look at. */
 export interface ReadingFault {
@@ -36,7 +37,7 @@ export function signedGeometricFactor(spread: Spread, resistanceOhm: number | nu
 }
 
 /** Own error and floor added in quadrature, both relative. */
-export const totalRelativeError = (own: number | null, floor: number): number => Math.hypot(own ?? 0, floor);
+export const totalRelativeError = (own: number | null, floor: number): number => hypot(own ?? 0, floor);
 
 const failed = (field: string, message: string, allowed: string): DerivationOutcome => ({
   derived: null,

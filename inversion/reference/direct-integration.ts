@@ -2,6 +2,8 @@ import { resistivityTransform } from '../earth/transform';
 import { electrodeDistances, inverseDistanceBracket } from '../spread/electrode-distances';
 import type { LayeredEarth, Spread } from '../types';
 import { besselJ0 } from './bessel-j0';
+import { cos } from '../math/circular';
+import { pow10 } from '../math/power';
 
 const GAUSS_POINTS = 24;
 /** T₁ − ρ₁ has fallen by exp(−2 × 20) at λ = 20/h₁. */
@@ -19,7 +21,7 @@ function gaussLegendre(points: number): Rule {
   const nodes = new Float64Array(points);
   const weights = new Float64Array(points);
   for (let i = 0; i < points; i++) {
-    let x = Math.cos((Math.PI * (i + 0.75)) / (points + 0.5));
+    let x = cos((Math.PI * (i + 0.75)) / (points + 0.5));
     let slope = 1;
     for (let pass = 0; pass < 100; pass++) {
       let before = 1;
@@ -45,7 +47,7 @@ function panelEdges(r: number, end: number): number[] {
   const first = zeros[0]!;
   const rising = Array.from(
     { length: LOG_PANELS },
-    (_, k) => first * 10 ** (LOG_DECADES * (k / (LOG_PANELS - 1) - 1)),
+    (_, k) => first * pow10(LOG_DECADES * (k / (LOG_PANELS - 1) - 1)),
   );
   return [0, ...rising, ...zeros.slice(1)].map((x) => x / r);
 }

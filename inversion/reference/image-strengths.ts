@@ -1,3 +1,5 @@
+import { hypot } from '../math/hypot';
+
 /**
  * Strengths q_n of the images of any number of layers whose thicknesses are whole multiples of one unit d:
  * T₁(λ) = ρ₁ + Σ_{n ≥ 1} q_n exp(−2nλd), by dividing polynomials in x = exp(−2λd). Exact arithmetic on the coefficients,
@@ -42,6 +44,6 @@ export function imageStrengths(
 /** 2πV/I in Ω at distance r from image strengths (`quotient[0]` = ρ₁) and their unit d in m. */
 export function potentialFromImages(r: number, strengths: Float64Array, unit: number): number {
   let sum = 0;
-  for (let n = strengths.length - 1; n >= 0; n--) sum += strengths[n]! / Math.hypot(r, 2 * n * unit);
+  for (let n = strengths.length - 1; n >= 0; n--) sum += strengths[n]! / hypot(r, 2 * n * unit);
   return sum;
 }

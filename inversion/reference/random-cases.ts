@@ -1,6 +1,8 @@
 import type { RandomStream } from '../random';
 import { checkSpread } from '../spread/check-spread';
 import type { EarthModel, Spread } from '../types';
+import { hypot } from '../math/hypot';
+import { pow10 } from '../math/power';
 
 /** 2–8 layers, thicknesses 0.2–60 m, resistivities over a contrast of 10 to 10⁴. */
 export function randomEarth(random: RandomStream): EarthModel {
@@ -8,8 +10,8 @@ export function randomEarth(random: RandomStream): EarthModel {
   const contrast = 1 + 3 * random.uniform();
   const lowest = 3 * random.uniform() - 0.5;
   return {
-    resistivity: Array.from({ length: layers }, () => 10 ** (lowest + contrast * random.uniform())),
-    thickness: Array.from({ length: layers - 1 }, () => 10 ** (-0.7 + 2.5 * random.uniform())),
+    resistivity: Array.from({ length: layers }, () => pow10(lowest + contrast * random.uniform())),
+    thickness: Array.from({ length: layers - 1 }, () => pow10(-0.7 + 2.5 * random.uniform())),
   };
 }
 
@@ -28,7 +30,7 @@ function randomElectrodes(random: RandomStream, size: number): Spread {
     const point = () => [size * (2 * random.uniform() - 1), size * (2 * random.uniform() - 1)] as const;
     const [a, b, m, n] = [point(), point(), point(), point()];
     const between = (p: readonly [number, number], q: readonly [number, number]) =>
-      Math.hypot(p[0] - q[0], p[1] - q[1]);
+      hypot(p[0] - q[0], p[1] - q[1]);
     const spread: Spread = {
       type: 'electrodes',
       am: between(a, m),
@@ -43,7 +45,7 @@ function randomElectrodes(random: RandomStream, size: number): Spread {
 
 /** A spread of the kind that `turn` comes to, of a spacing from 0.5 to 500 m. */
 export function randomSpread(random: RandomStream, turn: number): Spread {
-  const size = 10 ** (-0.3 + 3 * random.uniform());
+  const size = pow10(-0.3 + 3 * random.uniform());
   switch (KINDS[turn % KINDS.length]!) {
     case 'schlumberger':
       return { type: 'schlumberger', halfAB: size, halfMN: size / (2 + 98 * random.uniform()) };

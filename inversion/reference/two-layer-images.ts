@@ -1,3 +1,5 @@
+import { hypot } from '../math/hypot';
+
 /** Terms of the series; 1e6 leave less than 1e-12 at |k| ≤ 0.999 and far less below. */
 const MOST_TERMS = 1_000_000;
 const SMALLEST_TERM = 1e-18;
@@ -13,7 +15,7 @@ export function twoLayerPotential(r: number, rho1: number, rho2: number, thickne
   let power = 1;
   for (let n = 1; n <= MOST_TERMS; n++) {
     power *= k;
-    const term = power / Math.hypot(r, 2 * n * thickness);
+    const term = power / hypot(r, 2 * n * thickness);
     sum += term;
     if (Math.abs(term) < SMALLEST_TERM * Math.abs(1 / r)) break;
   }

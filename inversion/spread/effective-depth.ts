@@ -1,5 +1,6 @@
 import type { Spread } from '../types';
 import { imageResponse } from './image-response';
+import { pow2 } from '../math/power';
 
 const STEPS_PER_DOUBLING = 8;
 const BISECTIONS = 60;
@@ -11,7 +12,7 @@ const BISECTIONS = 60;
  */
 export function effectiveDepth(spread: Spread): number {
   const response = imageResponse(spread);
-  const ratio = 2 ** (1 / STEPS_PER_DOUBLING);
+  const ratio = pow2(1 / STEPS_PER_DOUBLING);
   let low = response.nearest / 1024;
   let high = low;
   while (response.at(2 * high) > 0.5) {

@@ -1,6 +1,7 @@
 import type { Spread } from '../types';
 import { electrodeDistances, inverseDistanceBracket } from './electrode-distances';
 import { requireSpread } from './require-spread';
+import { hypot } from '../math/hypot';
 
 /** What a spread sees of one image pole at depth c, and the distances that set its scale. */
 export interface ImageResponse {
@@ -15,8 +16,8 @@ export interface ImageResponse {
 
 /** 1/√(p² + c²) − 1/√(q² + c²) without cancellation; a null distance adds nothing. */
 function inverseDifference(p: number | null, q: number | null, c: number): number {
-  if (p === null) return q === null ? 0 : -1 / Math.hypot(q, c);
-  if (q === null) return 1 / Math.hypot(p, c);
+  if (p === null) return q === null ? 0 : -1 / hypot(q, c);
+  if (q === null) return 1 / hypot(p, c);
   const near = Math.sqrt(p * p + c * c);
   const far = Math.sqrt(q * q + c * c);
   return ((q - p) * (q + p)) / (near * far * (near + far));
@@ -36,7 +37,10 @@ export function imageResponse(spread: Spread): ImageResponse {
       nearest: length,
       farthest: length,
       neutral: true,
-      at: (c) => (1 + (c / length) ** 2) ** -1.5,
+      at: (c) => {
+        const square = 1 + (c / length) * (c / length);
+        return 1 / (square * Math.sqrt(square));
+      },
     };
   }
   const bracket = inverseDistanceBracket(d);

@@ -1,8 +1,9 @@
 import type { Spread } from '../types';
 import { effectiveDepth } from './effective-depth';
+import { pow2 } from '../math/power';
 
 /** z½ of the ideal Schlumberger spread over AB/2: (1 + 4z²)^(−3/2) = 1/2, so z = ½√(2^(2/3) − 1) ≈ 0.383. */
-export const IDEAL_SCHLUMBERGER_DEPTH = 0.5 * Math.sqrt(2 ** (2 / 3) - 1);
+export const IDEAL_SCHLUMBERGER_DEPTH = 0.5 * Math.sqrt(pow2(2 / 3) - 1);
 
 /**
  * Where a reading stands on the one spacing axis that all spreads share, m.

@@ -1,3 +1,7 @@
+import { sin } from '../math/circular';
+import { exp } from '../math/exponential';
+import { log } from '../math/logarithm';
+
 /** Lanczos coefficients, g = 7, n = 9 (Godfrey 2001): ln Γ to 1e-14. */
 const LANCZOS = [
   0.99999999999980993, 676.5203681218851, -1259.1392167224028, 771.32342877765313, -176.61502916214059,
@@ -7,11 +11,11 @@ const SERIES_LIMIT = 1000;
 
 /** ln Γ(x) for x > 0. */
 export function logGamma(x: number): number {
-  if (x < 0.5) return Math.log(Math.PI / Math.sin(Math.PI * x)) - logGamma(1 - x);
+  if (x < 0.5) return log(Math.PI / sin(Math.PI * x)) - logGamma(1 - x);
   const z = x - 1;
   const t = z + 7.5;
   const sum = LANCZOS.reduce((total, c, i) => (i === 0 ? c : total + c / (z + i)), 0);
-  return 0.5 * Math.log(2 * Math.PI) + (z + 0.5) * Math.log(t) - t + Math.log(sum);
+  return 0.5 * log(2 * Math.PI) + (z + 0.5) * log(t) - t + log(sum);
 }
 
 /** P(a, x) by its power series, for x < a + 1. */
@@ -23,7 +27,7 @@ function lowerSeries(a: number, x: number): number {
     sum += term;
     if (term < sum * 1e-16) break;
   }
-  return sum * Math.exp(-x + a * Math.log(x) - logGamma(a));
+  return sum * exp(-x + a * log(x) - logGamma(a));
 }
 
 /** Q(a, x) by Lentz's continued fraction, for x ≥ a + 1. */
@@ -41,7 +45,7 @@ function upperFraction(a: number, x: number): number {
     h *= delta;
     if (Math.abs(delta - 1) < 1e-16) break;
   }
-  return Math.exp(-x + a * Math.log(x) - logGamma(a)) * h;
+  return exp(-x + a * log(x) - logGamma(a)) * h;
 }
 
 /**

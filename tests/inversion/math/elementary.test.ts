@@ -3,7 +3,7 @@ import { cos, sin } from '../../../inversion/math/circular';
 import { exp, expm1 } from '../../../inversion/math/exponential';
 import { hypot, norm } from '../../../inversion/math/hypot';
 import { log, log1p, log2 } from '../../../inversion/math/logarithm';
-import { pow10, pow2 } from '../../../inversion/math/power';
+import { pow, pow10, pow2 } from '../../../inversion/math/power';
 import { tanh } from '../../../inversion/math/tanh';
 import { elementaryValues } from '../support/read-reference';
 
@@ -60,6 +60,12 @@ describe('their ends', () => {
     expect([pow10(-3), pow10(0), pow10(5), pow10(22)]).toEqual([1e-3, 1, 1e5, 1e22]);
     expect([log2(8), log2(2 ** -40)]).toEqual([3, -40]);
   });
+});
+
+test('a power of any base', () => {
+  // 0.2^1.5 and 3^-2.5 to 17 digits, from Python's decimal module
+  expect(Math.abs(pow(0.2, 1.5) / 0.089442719099991588 - 1)).toBeLessThan(7e-16);
+  expect(Math.abs(pow(3, -2.5) / 0.064150029909958418 - 1)).toBeLessThan(8e-16);
 });
 
 describe('lengths', () => {
