@@ -1,3 +1,4 @@
+import { log } from '../math/logarithm';
 import { chiSquaredSurvival } from '../uncertainty/chi-squared';
 import type { LayerCountFit } from '../types';
 
@@ -8,7 +9,7 @@ export const NOISE_TAIL = 0.05;
 
 /** χ² + p ln N. */
 export function bic(chi2: number, parameters: number, readings: number): number {
-  return chi2 + parameters * Math.log(readings);
+  return chi2 + parameters * log(readings);
 }
 
 /** χ² + 2p + 2p(p + 1)/(N − p − 1); null where N − p − 1 < 1. Source: Hurvich & Tsai 1989. */

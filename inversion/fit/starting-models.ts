@@ -1,3 +1,5 @@
+import { exp } from '../math/exponential';
+import { log } from '../math/logarithm';
 import { plottingSpacing } from '../spread/plotting-spacing';
 import type { RandomStream } from '../random';
 import type { Reading } from '../types';
@@ -14,8 +16,8 @@ const DEPTH_SHARE = 0.4;
 export function soundingCurve(readings: readonly Reading[]): SoundingCurve {
   const points = readings
     .map((reading) => ({
-      x: Math.log(plottingSpacing(reading.spread)),
-      y: Math.log(reading.apparentResistivity),
+      x: log(plottingSpacing(reading.spread)),
+      y: log(reading.apparentResistivity),
     }))
     .sort((a, b) => a.x - b.x);
   return {
@@ -48,13 +50,13 @@ function modelFromDepths(
   for (let i = 0; i < layers; i++) {
     const top = i === 0 ? (logDepths[0] ?? curve.logSpacing[0]!) - 1.4 : logDepths[i - 1]!;
     const bottom = i === layers - 1 ? top + 1.4 : logDepths[i]!;
-    const spacing = (top + bottom) / 2 - Math.log(DEPTH_SHARE);
+    const spacing = (top + bottom) / 2 - log(DEPTH_SHARE);
     parameters[i] = curveAt(curve, spacing) + shift(i);
   }
   for (let i = 0; i < layers - 1; i++) {
-    const depth = Math.exp(logDepths[i]!);
-    const above = i === 0 ? 0 : Math.exp(logDepths[i - 1]!);
-    parameters[layers + i] = Math.log(Math.max(depth - above, 0.05 * depth));
+    const depth = exp(logDepths[i]!);
+    const above = i === 0 ? 0 : exp(logDepths[i - 1]!);
+    parameters[layers + i] = log(Math.max(depth - above, 0.05 * depth));
   }
   return parameters;
 }
@@ -67,7 +69,7 @@ export function evenStart(curve: SoundingCurve, layers: number): Float64Array {
 }
 
 function depthRange({ logSpacing }: SoundingCurve): { low: number; high: number } {
-  const share = Math.log(DEPTH_SHARE);
+  const share = log(DEPTH_SHARE);
   return { low: logSpacing[0]! + share - 0.4, high: logSpacing[logSpacing.length - 1]! + share + 0.4 };
 }
 
@@ -91,8 +93,8 @@ export function splitStarts(parameters: Float64Array, curve: SoundingCurve): Flo
   const layers = (parameters.length + 1) / 2;
   const rho = Array.from(parameters.subarray(0, layers));
   const thickness = Array.from(parameters.subarray(layers));
-  const depth = thickness.reduce((sum, h) => sum + Math.exp(h), 0);
-  const below = depth > 0 ? Math.log(depth) : (depthRange(curve).low + depthRange(curve).high) / 2;
+  const depth = thickness.reduce((sum, h) => sum + exp(h), 0);
+  const below = depth > 0 ? log(depth) : (depthRange(curve).low + depthRange(curve).high) / 2;
   return rho.flatMap((value, i) =>
     SPLIT_CONTRASTS.map((contrast) => {
       const halves = i < layers - 1 ? [thickness[i]! - Math.LN2, thickness[i]! - Math.LN2] : [below];
