@@ -4,6 +4,8 @@ import { readConfig } from '../server/read-config';
 import { emailSchema, nameSchema } from '../server/contract/common';
 import { createDatabase } from '../server/db/knex';
 import { migrateToLatest } from '../server/db/migrate';
+import { describeError } from './lib/plain-error';
+import { reachDatabase } from './lib/reach-database';
 
 const USAGE = 'Usage: DATABASE_URL=postgres://… npm run add-admin -- person@example.org "Full Name"';
 
@@ -18,6 +20,7 @@ async function addAdmin(): Promise<void> {
     return;
   }
   const config = readConfig();
+  await reachDatabase(config.databaseUrl);
   const db = createDatabase(config);
   try {
     await migrateToLatest(db);
@@ -30,4 +33,7 @@ async function addAdmin(): Promise<void> {
   }
 }
 
-await addAdmin();
+await addAdmin().catch((error: unknown) => {
+  console.error(`\n✗ ${describeError(error)}`);
+  process.exitCode = 1;
+});

@@ -5,6 +5,7 @@ import { nextFreePort } from './lib/port';
 import { PlainError } from './lib/plain-error';
 import { describePrepared, prepareDatabase, printAccounts } from './lib/prepare';
 import { localAddress, waitForAnswer } from './lib/ready';
+import { reachDatabase } from './lib/reach-database';
 import { choosePort, readSettings } from './lib/settings';
 import { runWith, Shutdown } from './lib/shutdown';
 import { claimCheckout } from './lib/single';
@@ -28,6 +29,7 @@ function startPart(name: string, args: string[], env: NodeJS.ProcessEnv, shutdow
 
 async function dev(shutdown: Shutdown): Promise<void> {
   const settings = readSettings();
+  if (settings.databaseUrl !== null) await reachDatabase(settings.databaseUrl);
   claimCheckout(root, 'dev', shutdown);
   const port = await choosePort(settings, say);
   const clientPort = await nextFreePort('127.0.0.1', 5173);

@@ -5,6 +5,7 @@ import { Child, tailOf } from './lib/child';
 import { PlainError } from './lib/plain-error';
 import { describePrepared, prepareDatabase, printAccounts } from './lib/prepare';
 import { localAddress, waitForAnswer } from './lib/ready';
+import { reachDatabase } from './lib/reach-database';
 import { choosePort, readSettings } from './lib/settings';
 import { runWith, Shutdown } from './lib/shutdown';
 import { claimCheckout } from './lib/single';
@@ -39,6 +40,7 @@ function startPart(name: string, env: NodeJS.ProcessEnv, shutdown: Shutdown): Ch
 
 async function start(shutdown: Shutdown): Promise<void> {
   const settings = readSettings();
+  if (settings.databaseUrl !== null) await reachDatabase(settings.databaseUrl);
   const lock = claimCheckout(root, 'start', shutdown);
   console.log('Layerwell');
   const port = await choosePort(settings, say);

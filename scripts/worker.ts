@@ -3,6 +3,7 @@ import { fileURLToPath } from 'node:url';
 import { buildIfStale } from './lib/build';
 import { Child } from './lib/child';
 import { PlainError } from './lib/plain-error';
+import { reachDatabase } from './lib/reach-database';
 import { readSettings } from './lib/settings';
 import { runWith, Shutdown } from './lib/shutdown';
 import { say, step } from './lib/step';
@@ -18,6 +19,7 @@ async function work(shutdown: Shutdown): Promise<void> {
         '"npm start" brings its own worker; it needs no second one on the same machine.',
     );
   }
+  await step('Database', () => reachDatabase(databaseUrl));
   await step(
     'Build',
     () => buildIfStale(root),

@@ -10,12 +10,14 @@ interface Connection {
   on(event: 'error', listener: (error: Error) => void): void;
 }
 
-/** `onError` hears of connections lost while idle, which would otherwise end the process, and of failures to connect. */
+/** `onError` hears of connections lost while idle, which would otherwise end the process. */
 export function createDatabase(
   config: DatabaseConfig,
   onError: (error: Error) => void = () => undefined,
 ): Knex {
   const tell = (message: unknown) => onError(message instanceof Error ? message : new Error(String(message)));
+  // thrown to the caller as well, who knows how often it tries
+  const isThrown = (message: unknown) => String(message).startsWith('Acquire connection error');
   return knex({
     client: 'pg',
     connection: { connectionString: config.databaseUrl, application_name: 'layerwell' },
@@ -29,6 +31,11 @@ export function createDatabase(
     },
     acquireConnectionTimeout: 15_000,
     // Knex writes to the console by itself, past the log
-    log: { warn: tell, error: tell, deprecate: tell, debug: () => undefined },
+    log: {
+      warn: (message) => isThrown(message) || tell(message),
+      error: tell,
+      deprecate: tell,
+      debug: () => undefined,
+    },
   });
 }
