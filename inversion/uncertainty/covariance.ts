@@ -57,7 +57,8 @@ export function deviationAlong(
 ): number {
   let sum = 0;
   for (const { vector, variance } of c.directions) {
-    const share = vector.reduce((total, value, j) => total + value * gradient(j), 0) ** 2;
+    const along = vector.reduce((total, value, j) => total + value * gradient(j), 0);
+    const share = along * along;
     if (variance !== Infinity) sum += share * variance;
     else if (share > LOST_SHARE) return Infinity;
   }
