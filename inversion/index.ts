@@ -36,3 +36,39 @@ export {
 export { describeDoubt, type DoubtItem } from './uncertainty/equivalence';
 export { chiSquaredPoint, chiSquaredSurvival } from './uncertainty/chi-squared';
 export { darZarrouk, type DarZarrouk, type DarZarroukPart } from './hydro/dar-zarrouk';
+export { mailletQuantity, type MailletQuantity } from './hydro/maillet-quantities';
+export { deriveWithRange, type DerivedQuantity, type DerivedValue } from './hydro/derived-quantity';
+export { rangeOf, type ValueRange } from './hydro/range-of';
+export {
+  ARCHIE_SETS,
+  archieBulk,
+  archieCautions,
+  archiePorosity,
+  archieWater,
+  bulkFormationFactor,
+  formationFactor,
+  porosityOf,
+  type ArchieParameters,
+} from './hydro/archie';
+export {
+  aquiferWaterResistivity,
+  conductivityAt,
+  conductivityAt25,
+  dissolvedSolids,
+  waterConductivity,
+  waterResistivity,
+} from './hydro/water-conductivity';
+export {
+  PROTECTIVE_CLASSES,
+  PROTECTIVE_CLASSES_NOTE,
+  protectiveCapacity,
+  protectiveClass,
+  type ProtectiveClass,
+} from './hydro/protective-capacity';
+export {
+  calibrateTransmissivity,
+  transmissivity,
+  type PumpedWell,
+  type TransmissivityCalibration,
+  type TransmissivityEstimate,
+} from './hydro/transmissivity';

@@ -8,7 +8,11 @@ export type InversionErrorCode =
   | 'no-readings'
   | 'layer-count'
   | 'fixed-parameter'
-  | 'bounds';
+  | 'prior'
+  | 'branch-shift'
+  | 'bounds'
+  | 'hydro-value'
+  | 'calibration';
 
 /** A refused input. `path` points into the argument that was refused, outermost key first. */
 export class InversionError extends Error {

@@ -1,10 +1,17 @@
 import { requireEarth } from '../earth/check-earth';
 import { InversionError } from '../inversion-error';
 import type { LayeredEarth } from '../types';
+import { requireValue } from './require-value';
 
-/** Which part of the earth to sum: the bounded layers (default), everything above a depth, or a run of layers. */
+/**
+ * Which part of the earth to sum: the bounded layers (default), all ground between two depths or above one (the half-space
+ * counted down to it), or a run of bounded layers.
+ */
 export type DarZarroukPart =
-  { readonly aboveDepth: number } | { readonly fromLayer: number; readonly toLayer: number } | undefined;
+  | { readonly aboveDepth: number }
+  | { readonly fromDepth: number; readonly toDepth: number }
+  | { readonly fromLayer: number; readonly toLayer: number }
+  | undefined;
 
 /** Maillet's quantities of a stack of flat layers. */
 export interface DarZarrouk {
@@ -23,23 +30,31 @@ export interface DarZarrouk {
   anisotropy: number | null;
 }
 
-function stack(earth: LayeredEarth, part: DarZarroukPart): { rho: number; h: number }[] {
+type PartLayers = { rho: number; h: number }[];
+
+function betweenDepths(earth: LayeredEarth, fromDepth: number, toDepth: number): PartLayers {
+  if (!(fromDepth >= 0 && toDepth > fromDepth && Number.isFinite(toDepth)))
+    throw new InversionError(
+      'hydro-value',
+      `depths ${fromDepth} to ${toDepth} m were asked for; they must be two depths from 0 m down, the upper one first`,
+    );
+  let top = 0;
+  return earth.resistivity.flatMap((rho, i) => {
+    const base = top + (earth.thickness[i] ?? Infinity);
+    const kept = Math.min(base, toDepth) - Math.max(top, fromDepth);
+    top = base;
+    return kept > 0 ? [{ rho, h: kept }] : [];
+  });
+}
+
+function stack(earth: LayeredEarth, part: DarZarroukPart): PartLayers {
+  if (part && 'aboveDepth' in part) {
+    requireValue(part.aboveDepth, 'aboveDepth', 'm');
+    return betweenDepths(earth, 0, part.aboveDepth);
+  }
+  if (part && 'toDepth' in part) return betweenDepths(earth, part.fromDepth, part.toDepth);
   const bounded = earth.thickness.map((h, i) => ({ rho: earth.resistivity[i]!, h }));
   if (!part) return bounded;
-  if ('aboveDepth' in part) {
-    if (!(part.aboveDepth > 0 && Number.isFinite(part.aboveDepth)))
-      throw new InversionError(
-        'earth-value',
-        `aboveDepth is ${part.aboveDepth}; it must be a depth above 0 m`,
-      );
-    let top = 0;
-    const all = [...bounded, { rho: earth.resistivity.at(-1)!, h: Infinity }];
-    return all.flatMap(({ rho, h }) => {
-      const kept = Math.min(h, part.aboveDepth - top);
-      top += h;
-      return kept > 0 ? [{ rho, h: kept }] : [];
-    });
-  }
   const { fromLayer, toLayer } = part;
   if (!(fromLayer >= 0 && fromLayer <= toLayer && toLayer < bounded.length))
     throw new InversionError(
@@ -50,8 +65,8 @@ function stack(earth: LayeredEarth, part: DarZarroukPart): { rho: number; h: num
 }
 
 /**
- * S = Σh/ρ (S), T = Σhρ (Ω·m²), ρ_L = H/S, ρ_T = T/H, anisotropy √(ρ_T/ρ_L) of the bounded layers, of all ground above a
- * depth (the half-space counted down to it), or of a run of bounded layers. Source: Maillet 1947, Geophysics 12, 529–556.
+ * S = Σh/ρ (S), T = Σhρ (Ω·m²), ρ_L = H/S, ρ_T = T/H, anisotropy √(ρ_T/ρ_L) of the bounded layers or of the part
+ * asked for. Source: Maillet 1947, Geophysics 12, 529–556.
  */
 export function darZarrouk(earth: LayeredEarth, part?: DarZarroukPart): DarZarrouk {
   requireEarth(earth);
@@ -71,6 +86,6 @@ export function darZarrouk(earth: LayeredEarth, part?: DarZarroukPart): DarZarro
     totalResistanceOhmM2,
     longitudinalOhmM: empty ? null : totalThicknessM / totalConductanceS,
     transverseOhmM: empty ? null : totalResistanceOhmM2 / totalThicknessM,
-    anisotropy: empty ? null : Math.sqrt((totalResistanceOhmM2 * totalConductanceS) / totalThicknessM ** 2),
+    anisotropy: empty ? null : Math.sqrt(totalResistanceOhmM2 * totalConductanceS) / totalThicknessM,
   };
 }
