@@ -96,11 +96,19 @@ function limitWords({ origin }: Limit, text: string, entries: string, number: st
 
 const SHOWN_CHARACTERS = 60;
 
-function shown(value: unknown): string {
+const isOfNumbers = (list: unknown[]): list is number[] =>
+  list.length > 0 && list.every((entry) => typeof entry === 'number');
+
+function textOf(value: unknown): string {
   if (value === null) return 'nothing';
-  if (typeof value === 'object') return Array.isArray(value) ? 'a list' : 'an object';
-  const text =
-    typeof value === 'number' ? String(value) : typeof value === 'string' ? value : JSON.stringify(value);
+  if (typeof value === 'string') return value;
+  if (Array.isArray(value)) return isOfNumbers(value) ? `[${value.join(', ')}]` : 'a list';
+  return typeof value === 'object' ? 'an object' : String(value as number | boolean);
+}
+
+/** A value, short; of lists only those of numbers are told entry by entry. */
+export function shown(value: unknown): string {
+  const text = textOf(value);
   return text.length > SHOWN_CHARACTERS ? `${text.slice(0, SHOWN_CHARACTERS - 1)}…` : text;
 }
 

@@ -3,7 +3,8 @@ import { MulterError } from 'multer';
 import type { Logger } from 'pino';
 import { z } from 'zod';
 import type { Problem } from '../contract/common';
-import { AppError, ERROR_STATUS, ERROR_TITLE, errorOfPostgres, faultsOfZod } from '../errors';
+import { AppError, ERROR_STATUS, ERROR_TITLE, errorOfPostgres } from '../errors';
+import { faultsOfZod } from '../plain-faults';
 import { maskTokens } from './mask-tokens';
 import { requestIdOf } from './request-id';
 

@@ -7,8 +7,9 @@ import { hashToken } from '../access/secret-token';
 import { findUserByEmail, insertUser, type UserRow } from '../access/user-store';
 import type { Fault } from '../contract/common';
 import { passwordSchema, type acceptInvitationSchema, type Me } from '../contract/session';
-import { AppError, IN_PLAIN_WORDS } from '../errors';
+import { AppError } from '../errors';
 import type { PublicContext } from '../http/context';
+import { IN_PLAIN_WORDS } from '../plain-faults';
 import { presentOffer } from './invitation-presenter';
 import { findOffer, insertMember, spendInvitation, type OfferRow } from './invitation-store';
 

@@ -73,7 +73,7 @@ describe('forward', () => {
       { id: 1, earth: EARTH, spreads: [{ type: 'wenner', spacing: -5 }] },
       {
         path: ['spreads', 0, 'spacing'],
-        message: 'spreads[0].spacing: Too small: expected number to be >0; found -5',
+        message: 'spreads[0].spacing is too small; found -5; allowed: above 0',
       },
     ],
     [
@@ -82,7 +82,7 @@ describe('forward', () => {
       {
         path: ['spreads', 1, 'type'],
         message:
-          'spreads[1].type: expected one of schlumberger, half-schlumberger, wenner, pole-pole, dipole-dipole, electrodes; found "wennr"',
+          'spreads[1].type is none of what can be chosen; found "wennr"; allowed: schlumberger, half-schlumberger, wenner, pole-pole, dipole-dipole, electrodes',
       },
     ],
     [
@@ -90,7 +90,7 @@ describe('forward', () => {
       { id: 1, earth: { resistivity: [1], thickness: [2] }, spreads: [WENNER] },
       {
         path: ['earth', 'thickness'],
-        message: 'earth.thickness: must have one entry fewer than resistivity; found [2]',
+        message: 'earth.thickness must have one entry fewer than resistivity; found [2]',
       },
     ],
     [
@@ -109,18 +109,26 @@ describe('forward', () => {
       {
         code: 'invalid-line',
         path: ['colour'],
-        message: 'colour: no such field is known here; found "red"',
+        message: 'colour is no known field; found "red"',
       },
     ],
     [
       'an unknown key of a spread',
       { id: 1, earth: EARTH, spreads: [{ ...WENNER, n: 2 }] },
-      { path: ['spreads', 0, 'n'], message: 'spreads[0].n: no such field is known here; found 2' },
+      { path: ['spreads', 0, 'n'], message: 'spreads[0].n is no known field; found 2' },
     ],
     [
       'a number written as words',
       { id: 1, earth: { resistivity: ['NaN'], thickness: [] }, spreads: [WENNER] },
-      { path: ['earth', 'resistivity', 0], message: 'earth.resistivity[0]: expected number; found "NaN"' },
+      { path: ['earth', 'resistivity', 0], message: 'earth.resistivity[0] is not a number; found "NaN"' },
+    ],
+    [
+      'MN that is neither given nor said to be unrecorded',
+      { id: 1, earth: EARTH, spreads: [{ type: 'schlumberger', halfAB: 10 }] },
+      {
+        path: ['spreads', 0, 'halfMN'],
+        message: 'spreads[0].halfMN is missing; it must be a number, or null where MN was not recorded',
+      },
     ],
   ])('refuses %s with its place', async (_, request, error) => {
     const { status, answers } = await run(['forward'], line(request));
@@ -131,9 +139,12 @@ describe('forward', () => {
   it('refuses a line that is JSON but not an object, and an id of the wrong kind', async () => {
     const { answers } = await run(['forward'], `[1]\n${line({ id: [1], earth: EARTH, spreads: [WENNER] })}`);
     expect(answers.map((answer) => answer.id)).toEqual([null, null]);
-    expect(answers[0]!.error).toMatchObject({ message: 'the line: expected object; found [1]', path: [] });
+    expect(answers[0]!.error).toMatchObject({
+      message: 'the line is not an object with named fields; found [1]',
+      path: [],
+    });
     expect(answers[1]!.error).toMatchObject({
-      message: 'id: expected string or expected number; found [1]',
+      message: 'id is none of what can be chosen; found [1]; allowed: text or a number',
       path: ['id'],
     });
   });
@@ -144,7 +155,7 @@ describe('forward', () => {
       '{"id":1,"earth":{"resistivity":[1e999],"thickness":[]},"spreads":[{"type":"wenner","spacing":5}]}\n',
     );
     expect(answers[0]!.error).toMatchObject({
-      message: 'earth.resistivity[0]: expected number; found Infinity',
+      message: 'earth.resistivity[0] is not a number; found Infinity',
     });
   });
 

@@ -1,7 +1,7 @@
 import { describe, expect, it } from 'vitest';
 import { z } from 'zod';
 import { spreadSchema } from '../../../server/contract/spread';
-import { faultsOfZod, IN_PLAIN_WORDS } from '../../../server/errors';
+import { faultsOfZod, IN_PLAIN_WORDS } from '../../../server/plain-faults';
 
 const faults = (schema: z.ZodType, value: unknown) => {
   const { error } = schema.safeParse(value, IN_PLAIN_WORDS);
@@ -24,9 +24,11 @@ describe('what is not allowed, in plain words', () => {
     [z.array(z.number()), { a: 1 }, ['is not a list', 'an object', 'a list']],
     [
       z.strictObject({}),
-      [1],
+      ['1'],
       ['is not an object with named fields', 'a list', 'an object with named fields'],
     ],
+    [z.number(), [10, 1], ['is not a number', '[10, 1]', 'a number']],
+    [z.number(), [], ['is not a number', 'a list', 'a number']],
     [z.string().min(1), '', ['is empty', '0 characters', 'at least 1 character']],
     [z.string().min(12), 'secret', ['is too short', '6 characters', 'at least 12 characters']],
     [z.string().max(3), 'long', ['is too long', '4 characters', 'at most 3 characters']],
@@ -85,5 +87,23 @@ describe('what is not allowed, in plain words', () => {
     const [message, found, allowed] = told(spreadSchema, { type: 'round' });
     expect([message, found]).toEqual(['is none of what can be chosen', 'round']);
     expect(allowed).toContain('schlumberger, ');
+  });
+
+  it('say what null stands for where it may stand for a length', () => {
+    const recorded = { type: 'schlumberger', halfAB: 10 };
+    expect(told(spreadSchema, recorded)).toEqual([
+      'is missing; it must be a number, or null where MN was not recorded',
+      undefined,
+      undefined,
+    ]);
+    expect(told(spreadSchema, { ...recorded, halfMN: 'none' })).toEqual([
+      'must be a number, or null where MN was not recorded',
+      'none',
+      undefined,
+    ]);
+    expect(told(spreadSchema, { ...recorded, halfMN: 0 })).toEqual(['is too small', '0', 'above 0']);
+    expect(told(spreadSchema, { type: 'electrodes', an: null, bm: null, bn: null })[0]).toContain(
+      'or null for an electrode at infinity',
+    );
   });
 });
