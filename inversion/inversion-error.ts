@@ -11,8 +11,15 @@ export type InversionErrorCode =
   | 'prior'
   | 'branch-shift'
   | 'bounds'
+  | 'line-place'
+  | 'lateral'
+  | 'borehole'
   | 'hydro-value'
-  | 'calibration';
+  | 'calibration'
+  | 'target-misfit'
+  | 'sample-draws'
+  | 'target-bed'
+  | 'stopped';
 
 /** A refused input. `path` points into the argument that was refused, outermost key first. */
 export class InversionError extends Error {
