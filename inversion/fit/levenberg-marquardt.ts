@@ -1,6 +1,7 @@
-import { levenbergMarquardt } from 'ml-levenberg-marquardt';
 import { TOLERANCES } from '../tolerances';
 import type { FitStatus } from '../types';
+import { dampedStep } from './damped-step';
+import { createReduction, reduceProblem, type ReducedProblem } from './reduced-problem';
 
 /** A least-squares problem in n free parameters between `low` and `high`, m whitened residuals. */
 export interface LeastSquaresProblem {
@@ -39,64 +40,39 @@ const LOWEST_DAMPING = 1e-9;
 /** A parameter is damped as if its sensitivity were at least this share of the strongest one's. */
 const SCALE_FLOOR = 0.1;
 
-interface Trial {
+interface Point {
   readonly parameters: Float64Array;
   readonly residual: Float64Array;
-  readonly chi2: number;
+  chi2: number;
 }
 
-/**
- * One damped step from `current` by the packaged solver: `maxIterations: 1`, whitened residuals, only the parameters in
- * `free`, each scaled by `scale` so that damping is relative to its own sensitivity.
- */
-function oneStep(
+const createPoint = (n: number, m: number): Point => ({
+  parameters: new Float64Array(n),
+  residual: new Float64Array(m),
+  chi2: Infinity,
+});
+
+/** Writes into `trial` where one damped step from `current` leads, each parameter scaled by its own sensitivity. */
+function stepInto(
+  trial: Point,
+  current: Point,
   problem: LeastSquaresProblem,
-  current: Trial,
-  jacobian: Float64Array,
+  reduced: ReducedProblem,
   free: readonly number[],
   scale: Float64Array,
   damping: number,
-  data: { x: Float64Array; y: Float64Array },
-): Trial {
-  const m = problem.residuals;
-  const n = problem.low.length;
-  const row = free.map(() => 0);
-  const origin = free.map((j) => current.parameters[j]! * scale[j]!);
-  let last: Trial = current;
-  const at = (scaled: readonly number[]): Trial => {
-    if (scaled.every((value, k) => value === origin[k])) return current;
-    const parameters = Float64Array.from(current.parameters);
-    free.forEach((j, k) => {
-      parameters[j] = Math.min(problem.high[j]!, Math.max(problem.low[j]!, scaled[k]! / scale[j]!));
-    });
-    if (last !== current && parameters.every((value, j) => value === last.parameters[j])) return last;
-    const residual = new Float64Array(m);
-    last = { parameters, residual, chi2: problem.evaluate(parameters, residual) };
-    return last;
-  };
-  levenbergMarquardt(
-    data,
-    (scaled) => {
-      const { residual } = at(scaled);
-      return (i) => (i < m ? residual[i]! : 0);
-    },
-    {
-      initialValues: origin,
-      minValues: free.map((j) => problem.low[j]! * scale[j]!),
-      maxValues: free.map((j) => problem.high[j]! * scale[j]!),
-      damping,
-      maxIterations: 1,
-      errorTolerance: 0,
-      jacobianFunction: () => (i) => {
-        for (let k = 0; k < free.length; k++) {
-          const j = free[k]!;
-          row[k] = i < m ? jacobian[i * n + j]! / scale[j]! : 0;
-        }
-        return row;
-      },
-    },
-  );
-  return last;
+): void {
+  const low = free.map((j) => (problem.low[j]! - current.parameters[j]!) * scale[j]!);
+  const high = free.map((j) => (problem.high[j]! - current.parameters[j]!) * scale[j]!);
+  const delta = dampedStep(reduced, low, high, damping);
+  trial.parameters.set(current.parameters);
+  free.forEach((j, k) => {
+    const moved = current.parameters[j]! + delta[k]! / scale[j]!;
+    // a clipped step ends on the bound itself, not a rounding beside it
+    trial.parameters[j] =
+      delta[k]! <= low[k]! ? problem.low[j]! : delta[k]! >= high[k]! ? problem.high[j]! : moved;
+  });
+  trial.chi2 = problem.evaluate(trial.parameters, trial.residual);
 }
 
 /** Gradient Jᵀr and the column norms of J. */
@@ -135,9 +111,16 @@ function freeParameters(
   return { free, steepest };
 }
 
+function farthestMove(from: Float64Array, to: Float64Array): number {
+  let far = 0;
+  for (let j = 0; j < from.length; j++) far = Math.max(far, Math.abs(to[j]! - from[j]!));
+  return far;
+}
+
 /**
- * Bounded Levenberg–Marquardt from `start`: the packaged solver driven one step at a time, a step kept only if χ² falls,
- * damping ÷4 on success and ×5 on failure. A parameter that sits on a bound and would leave it is held for that step.
+ * Bounded Levenberg–Marquardt from `start`: the packaged solver driven one step at a time on the reduced problem, a step kept
+ * only if χ² falls, damping ÷4 on success and ×5 on failure; one run of the forward model a step, one Jacobian a kept step.
+ * A parameter that sits on a bound and would leave it is held for that step.
  * Source: Marquardt 1963; scaled damping after Moré 1978.
  */
 export function minimise(
@@ -148,50 +131,47 @@ export function minimise(
   const n = problem.low.length;
   const m = problem.residuals;
   const limit = options.iterations ?? TOLERANCES.iterations;
-  // x is the index of a residual, y the zero that it aims at; the packaged solver refuses a single point, and a second,
-  // always zero residual changes nothing
-  const points = Math.max(2, m);
-  const data = { x: Float64Array.from({ length: points }, (_, i) => i), y: new Float64Array(points) };
   const jacobian = new Float64Array(m * n);
-  const parameters = Float64Array.from({ length: n }, (_, j) =>
-    Math.min(problem.high[j]!, Math.max(problem.low[j]!, start[j]!)),
-  );
-  const residual = new Float64Array(m);
-  let current: Trial = { parameters, residual, chi2: problem.linearise(parameters, residual, jacobian) };
+  const work = createReduction(m, n);
+  let current = createPoint(n, m);
+  let trial = createPoint(n, m);
+  for (let j = 0; j < n; j++)
+    current.parameters[j] = Math.min(problem.high[j]!, Math.max(problem.low[j]!, start[j]!));
+  current.chi2 = problem.linearise(current.parameters, current.residual, jacobian);
   let damping = options.initialDamping ?? INITIAL_DAMPING;
   let slow = 0;
-  const done = (status: FitStatus, iterations: number): LeastSquaresOutcome => ({
+  let iteration = 0;
+  const done = (status: FitStatus): LeastSquaresOutcome => ({
     status,
     parameters: current.parameters,
     chi2: current.chi2,
-    iterations,
+    iterations: iteration,
     damping,
   });
-  let { gradient, norms } = slopes(jacobian, current.residual, n);
-  for (let iteration = 0; iteration < limit; iteration++) {
+  while (iteration < limit) {
+    const { gradient, norms } = slopes(jacobian, current.residual, n);
     const { free, steepest } = freeParameters(problem, current.parameters, gradient, norms);
     const level = Math.sqrt(Math.max(current.chi2, TOLERANCES.exactFit));
-    if (steepest <= TOLERANCES.gradient * level) return done('converged-gradient', iteration);
-    const strongest = Math.max(...norms);
+    if (steepest <= TOLERANCES.gradient * level) return done('converged-gradient');
+    const strongest = norms.reduce((most, norm) => Math.max(most, norm), 0);
     const scale = norms.map((norm) => Math.max(norm, SCALE_FLOOR * strongest, 1e-300));
-    const trial = oneStep(problem, current, jacobian, free, scale, damping, data);
-    if (!(trial.chi2 < current.chi2)) {
+    const reduced = reduceProblem(jacobian, current.residual, n, free, scale, work);
+    for (;;) {
+      stepInto(trial, current, problem, reduced, free, scale, damping);
+      iteration++;
+      if (trial.chi2 < current.chi2) break;
       damping *= SLOWER;
-      if (damping > TOLERANCES.damping) return done('no-descent', iteration + 1);
-      continue;
+      if (damping > TOLERANCES.damping) return done('no-descent');
+      if (iteration >= limit) return done('iteration-limit');
     }
-    const move = trial.parameters.reduce(
-      (far, p, j) => Math.max(far, Math.abs(p - current.parameters[j]!)),
-      0,
-    );
+    const move = farthestMove(current.parameters, trial.parameters);
     slow = current.chi2 - trial.chi2 < TOLERANCES.decrease * current.chi2 ? slow + 1 : 0;
     damping = Math.max(LOWEST_DAMPING, damping / FASTER);
-    current = trial;
-    options.onIteration?.(iteration + 1, current.chi2);
-    if (move <= TOLERANCES.step) return done('converged-step', iteration + 1);
-    if (slow >= 3) return done('converged-decrease', iteration + 1);
-    problem.linearise(current.parameters, current.residual, jacobian);
-    ({ gradient, norms } = slopes(jacobian, current.residual, n));
+    [current, trial] = [trial, current];
+    options.onIteration?.(iteration, current.chi2);
+    if (move <= TOLERANCES.step) return done('converged-step');
+    if (slow >= 3) return done('converged-decrease');
+    if (iteration < limit) problem.linearise(current.parameters, current.residual, jacobian);
   }
-  return done('iteration-limit', limit);
+  return done('iteration-limit');
 }
