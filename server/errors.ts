@@ -56,6 +56,10 @@ export class AppError extends Error {
 
 export const notFound = (what: string): AppError => new AppError('not-found', `${what} was not found.`);
 
+/** A write that named an older version; `current` is the row as it now stands. */
+export const changedMeanwhile = (what: string, current: unknown): AppError =>
+  new AppError('conflict', `Someone else changed ${what} meanwhile.`, { current });
+
 const CONSTRAINT_MESSAGES: Record<string, string> = {
   app_user_email_unique: 'An account with this e-mail address is there already.',
   sounding_name_unique: 'A sounding of this name is in the survey already.',

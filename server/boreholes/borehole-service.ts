@@ -2,7 +2,7 @@ import type { z } from 'zod';
 import { recordAudit } from '../access/audit';
 import { getSurveyAccess, requireCan } from '../access/survey-access';
 import type { Borehole, writeBoreholeSchema } from '../contract/surveys';
-import { AppError } from '../errors';
+import { changedMeanwhile } from '../errors';
 import type { Work } from '../http/context';
 import { presentBorehole } from './borehole-presenter';
 import { requireDaysUpTo, tomorrow } from './require-days-up-to';
@@ -56,9 +56,7 @@ export async function replaceBorehole(
   requireDaysUpTo(tomorrow(), fields);
   return db.transaction(async (trx) => {
     if (!(await updateBoreholeRow(trx, id, version, fields)))
-      throw new AppError('conflict', 'Someone else changed this borehole meanwhile.', {
-        current: presentBorehole(await getBoreholeRow(trx, actor, id)),
-      });
+      throw changedMeanwhile('this borehole', presentBorehole(await getBoreholeRow(trx, actor, id)));
     await replaceParts(trx, id, fields);
     await recordAudit(trx, {
       actorId: actor.userId,

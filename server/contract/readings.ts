@@ -29,6 +29,16 @@ export const readingSchema = z
   .meta({ id: 'Reading' });
 export type Reading = z.infer<typeof readingSchema>;
 
+/** Columns that a Field sheet of any spread has, in the order in which a crew writes them. */
+export const VALUE_COLUMNS = [
+  'voltage',
+  'current',
+  'resistance',
+  'apparentResistivity',
+  'standardError',
+  'remark',
+] as const;
+
 /** Columns a Field sheet may have; which of the lengths apply follows from the spread type. */
 export const sheetColumnSchema = z.enum([
   'halfAB',
@@ -40,12 +50,7 @@ export const sheetColumnSchema = z.enum([
   'an',
   'bm',
   'bn',
-  'voltage',
-  'current',
-  'resistance',
-  'apparentResistivity',
-  'standardError',
-  'remark',
+  ...VALUE_COLUMNS,
 ]);
 export type SheetColumn = z.infer<typeof sheetColumnSchema>;
 

@@ -1,5 +1,5 @@
 import type { SheetColumn, SheetUnits } from './readings';
-import { SPACING_COLUMNS } from './readings';
+import { SPACING_COLUMNS, VALUE_COLUMNS } from './readings';
 import type { SpreadType } from './spread';
 
 /** How a column is called, and which of the units it is written in; '' = a plain number or text. */
@@ -20,15 +20,6 @@ export const SHEET_COLUMN_NAMES: Record<SheetColumn, string> = {
   standardError: 'error',
   remark: 'remark',
 };
-
-const VALUE_COLUMNS = [
-  'voltage',
-  'current',
-  'resistance',
-  'apparentResistivity',
-  'standardError',
-  'remark',
-] as const satisfies readonly SheetColumn[];
 
 /** The columns of a Field sheet of this spread, in the order in which a crew writes them. */
 export const sheetColumnsOf = (spreadType: SpreadType): readonly SheetColumn[] => [

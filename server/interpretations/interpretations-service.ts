@@ -9,7 +9,7 @@ import type {
   InterpretationBed,
   updateInterpretationSchema,
 } from '../contract/interpretations';
-import { AppError } from '../errors';
+import { AppError, changedMeanwhile } from '../errors';
 import type { Work } from '../http/context';
 import { announceRun } from './announce-run';
 import { discardRefusal, editRefusal, EDITABLE, STATE_WORDS } from './interpretation-rules';
@@ -93,9 +93,10 @@ export async function changeInterpretation(
     requireBedsOf(before, change.beds ?? []);
     // the version guards against a submission meanwhile too, which counts it up
     if (!(await updateStatement(trx, interpretationId, version, change)))
-      throw new AppError('conflict', 'Someone else changed this interpretation meanwhile.', {
-        current: presentInterpretation(actor, await getInterpretation(trx, actor, interpretationId)),
-      });
+      throw changedMeanwhile(
+        'this interpretation',
+        presentInterpretation(actor, await getInterpretation(trx, actor, interpretationId)),
+      );
     await addContributor(trx, interpretationId, actor.userId);
     if (beginsStretch(actor, before))
       await insertEvent(trx, { interpretationId, kind: 'edited', actorId: actor.userId, comment: '' });

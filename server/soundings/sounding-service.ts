@@ -1,7 +1,7 @@
 import { recordAudit } from '../access/audit';
 import { getSoundingAccess, getSurveyAccess, requireCan } from '../access/survey-access';
 import type { Sounding } from '../contract/soundings';
-import { AppError } from '../errors';
+import { AppError, changedMeanwhile } from '../errors';
 import type { Work } from '../http/context';
 import type { Knex } from 'knex';
 import type { Actor } from '../access/actor';
@@ -59,10 +59,7 @@ export async function updateSounding(
     await requireSpreadTypeFree(trx, actor, soundingId, change);
     const changed = await updateSoundingRow(trx, soundingId, version, change);
     const row = await getSoundingRow(trx, actor, soundingId);
-    if (!changed)
-      throw new AppError('conflict', 'Someone else changed this sounding meanwhile.', {
-        current: presentSounding(row),
-      });
+    if (!changed) throw changedMeanwhile('this sounding', presentSounding(row));
     await recordAudit(trx, {
       actorId: actor.userId,
       surveyId: access.surveyId,

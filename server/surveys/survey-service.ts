@@ -2,7 +2,7 @@ import type { z } from 'zod';
 import { recordAudit } from '../access/audit';
 import { getSurveyAccess, requireCan } from '../access/survey-access';
 import type { createSurveySchema, Survey, updateSurveySchema } from '../contract/surveys';
-import { AppError } from '../errors';
+import { changedMeanwhile } from '../errors';
 import type { Work } from '../http/context';
 import { presentSurvey } from './survey-presenter';
 import { getSurveyRow, insertSurvey, listSurveyRows, updateSurveyRow } from './survey-store';
@@ -39,8 +39,7 @@ export async function updateSurvey(
   return db.transaction(async (trx) => {
     const updated = await updateSurveyRow(trx, surveyId, version, fields);
     const survey = presentSurvey(await getSurveyRow(trx, actor, surveyId));
-    if (!updated)
-      throw new AppError('conflict', 'Someone else changed this survey meanwhile.', { current: survey });
+    if (!updated) throw changedMeanwhile('this survey', survey);
     await recordAudit(trx, {
       actorId: actor.userId,
       surveyId,
