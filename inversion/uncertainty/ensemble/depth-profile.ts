@@ -2,7 +2,7 @@ import { exp } from '../../math/exponential';
 import { log } from '../../math/logarithm';
 import type { EnsembleResult } from './ensemble-types';
 import type { GroundSpace } from './ground-space';
-import { quantilesOf } from './sample-quantiles';
+import { quantilesOfAscending } from './sample-quantiles';
 import type { SampledEarths } from './sampled-earths';
 
 const DEPTH_CELLS = 64;
@@ -56,16 +56,15 @@ function fillCells(
   return { resistivity, boundaries, touched };
 }
 
-/** Share of the values in each of the cells even in ln that `edges` bound. */
-function histogram(values: Float64Array, edges: readonly number[]): number[] {
-  const low = log(edges[0]!);
-  const perWidth = RESISTIVITY_CELLS / (log(edges.at(-1)!) - low);
-  const counts = Array.from<number>({ length: RESISTIVITY_CELLS }).fill(0);
-  for (const value of values) {
-    const cell = Math.min(RESISTIVITY_CELLS - 1, Math.max(0, Math.floor((log(value) - low) * perWidth)));
-    counts[cell]!++;
-  }
-  return counts.map((count) => count / values.length);
+/** Share of the ascending values in each of the cells that `edges` bound; what lies on an edge counts to the cell above. */
+function histogram(ascending: Float64Array, edges: readonly number[]): number[] {
+  let value = 0;
+  return edges.slice(1).map((edge, cell) => {
+    const before = value;
+    const last = cell === edges.length - 2;
+    while (value < ascending.length && (last || ascending[value]! < edge)) value++;
+    return (value - before) / ascending.length;
+  });
 }
 
 /** The samples against depth, over the range of the prior's thicknesses or depths: quantiles, boundaries, density. */
@@ -78,10 +77,12 @@ export function depthProfile(space: GroundSpace, earths: SampledEarths): DepthPr
     exp(rhoLow + (cell / RESISTIVITY_CELLS) * (rhoHigh - rhoLow)),
   );
   const { resistivity, boundaries, touched } = fillCells(earths, depths, low, width);
-  const rows = depths.map((_, cell) => resistivity.subarray(cell * earths.size, (cell + 1) * earths.size));
+  const rows = depths.map((_, cell) =>
+    resistivity.subarray(cell * earths.size, (cell + 1) * earths.size).sort(),
+  );
   return {
     depths,
-    resistivityAtDepth: rows.map(quantilesOf),
+    resistivityAtDepth: rows.map(quantilesOfAscending),
     interfaceDensity: Array.from(boundaries, (count) => count / earths.size / width),
     interfaceChance: Array.from(touched, (count) => count / earths.size),
     density: { depths, resistivityEdges: edges, share: rows.map((row) => histogram(row, edges)) },

@@ -77,9 +77,10 @@ export function drawPosterior(model: Model, { draws, seed, report }: DrawOptions
       report({ stage: 'tempering', share: (c + beta) / CHAINS }),
     ),
   );
+  const tempered = joinPopulations(starts.map((start) => start.tempered));
   const run = (from: readonly Population[], length: number, thinning: number): ChainRun[] => {
     const pool = thinnedMembers(joinPopulations(from));
-    const moves = samplingMoves(space, pool, streams[0]!);
+    const moves = samplingMoves(space, pool, tempered, streams[0]!);
     return streams.map((random, c) =>
       runChain(model, moves, from[c]!, from[c]!.size - 1, length, thinning, random, (draw) => {
         if (draw % REPORT_EVERY === 0) report({ stage: 'sampling', share: (c + draw / length) / CHAINS });
@@ -88,7 +89,11 @@ export function drawPosterior(model: Model, { draws, seed, report }: DrawOptions
   };
   const length = Math.max(2, Math.ceil(draws / CHAINS));
   let thinning = stated ? THINNING.stated : THINNING.unknown;
-  let runs = run(starts, Math.min(WARM_UP, length), thinning);
+  let runs = run(
+    starts.map((start) => start.posterior),
+    Math.min(WARM_UP, length),
+    thinning,
+  );
   for (let attempt = 0; ; attempt++, thinning *= 2) {
     const before = runs.map(({ samples }) => samples);
     runs = run(before, length, thinning);

@@ -1,70 +1,77 @@
-import { exp } from '../../math/exponential';
 import type { RandomStream } from '../../random';
-import { createMixture, logComponent, type GaussianMixture } from './gaussian-mixture';
+import {
+  componentDensity,
+  createMixture,
+  DEGREES,
+  squaredDistance,
+  type MixtureParts,
+  type StudentMixture,
+} from './student-mixture';
 
-const MOST_COMPONENTS = 10;
 /** Points that a component needs, times its dimensions. */
 const POINTS_PER_DIMENSION = 10;
 const ROUNDS = 20;
-/** Added to each variance, against the variance of all points. */
-const RIDGE = 1e-3;
-/** Covariances are widened by this: a proposal with thin tails gets stuck outside them. */
-const WIDENING = 1.2;
-/** One wide Gaussian over everything. */
-const WIDE_SHARE = 0.1;
-const WIDE_WIDENING = 3;
-
-interface Points {
+/** Added to each variance, against the variance of all points: well below the width of the narrowest ridge. */
+const RIDGE = 1e-5;
+/** Scale matrices are widened by this: a chain gets stuck where a proposal falls short. */
+const WIDENING = 1.1;
+/** `count` points of `d` values, row-major. */
+export interface Points {
   readonly values: Float64Array;
   readonly count: number;
   readonly d: number;
 }
 
-/** Weighted mean into `means[c]` and covariance into `covariances[c]`; `shares[i * stride + c]` are the weights. Returns their sum. */
-function weightedMoments(
+/** Weighted mean and covariance of the points into place `c`; returns the sum of the weights. */
+function fillMoments(
   { values, count, d }: Points,
-  share: (i: number) => number,
+  weights: Float64Array,
   c: number,
-  means: Float64Array,
-  covariances: Float64Array,
+  into: Pick<MixtureParts, 'means' | 'scales'>,
 ): number {
-  const mean = c * d;
-  const matrix = c * d * d;
+  const mean = into.means.subarray(c * d, (c + 1) * d).fill(0);
+  const scale = into.scales.subarray(c * d * d, (c + 1) * d * d).fill(0);
   let total = 0;
-  means.fill(0, mean, mean + d);
-  covariances.fill(0, matrix, matrix + d * d);
   for (let i = 0; i < count; i++) {
-    const w = share(i);
-    total += w;
-    for (let j = 0; j < d; j++) means[mean + j]! += w * values[i * d + j]!;
+    total += weights[i]!;
+    for (let j = 0; j < d; j++) mean[j]! += weights[i]! * values[i * d + j]!;
   }
-  if (!(total > 0)) return 0;
-  for (let j = 0; j < d; j++) means[mean + j]! /= total;
+  for (let j = 0; j < d; j++) mean[j]! /= total;
   for (let i = 0; i < count; i++) {
-    const w = share(i) / total;
+    const w = weights[i]! / total;
     if (w < 1e-12) continue;
     for (let j = 0; j < d; j++) {
-      const off = w * (values[i * d + j]! - means[mean + j]!);
-      for (let k = 0; k <= j; k++)
-        covariances[matrix + j * d + k]! += off * (values[i * d + k]! - means[mean + k]!);
+      const off = w * (values[i * d + j]! - mean[j]!);
+      for (let k = 0; k <= j; k++) scale[j * d + k]! += off * (values[i * d + k]! - mean[k]!);
     }
   }
-  for (let j = 0; j < d; j++)
-    for (let k = 0; k < j; k++) covariances[matrix + k * d + j] = covariances[matrix + j * d + k]!;
+  for (let j = 0; j < d; j++) for (let k = 0; k < j; k++) scale[k * d + j] = scale[j * d + k]!;
   return total;
 }
 
-/** Centres far from one another: each with chance ∝ squared distance, in standard deviations, to the nearest before (Arthur & Vassilvitskii 2007). */
-function spreadCentres(
+function stretchScale(
+  { scales }: Pick<MixtureParts, 'scales'>,
+  c: number,
+  d: number,
+  factor: number,
+  variance: Float64Array,
+): void {
+  const at = c * d * d;
+  for (let j = 0; j < d * d; j++) scales[at + j]! *= factor;
+  for (let j = 0; j < d; j++) scales[at + j * d + j]! += RIDGE * variance[j]!;
+}
+
+/** Points far from one another: each with chance ∝ squared distance, in standard deviations, to the nearest before (Arthur & Vassilvitskii 2007). */
+function farPoints(
   { values, count, d }: Points,
   variance: Float64Array,
   most: number,
   random: RandomStream,
 ): number[] {
-  const centres = [random.below(count)];
+  const found = [random.below(count)];
   const nearest = new Float64Array(count).fill(Infinity);
-  while (centres.length < most) {
-    const last = centres.at(-1)! * d;
+  while (found.length < most) {
+    const last = found.at(-1)! * d;
     let total = 0;
     for (let i = 0; i < count; i++) {
       let square = 0;
@@ -78,79 +85,65 @@ function spreadCentres(
     let left = random.uniform() * total;
     let next = 0;
     while (next < count - 1 && (left -= nearest[next]!) >= 0) next++;
-    centres.push(next);
+    found.push(next);
   }
-  return centres;
+  return found;
 }
 
-/** Share of each component in each point, `[i * components + c]`. */
-function responsibilities(
-  mixture: GaussianMixture,
+/** Shares of every component in every point, times the weight (ν + d)/(ν + square) that makes far points count for less. */
+function shareOut(
+  mixture: StudentMixture,
   { values, count, d }: Points,
-  shares: Float64Array,
+  shares: readonly Float64Array[],
+  weights: Float64Array,
 ): void {
-  const components = mixture.weights.length;
+  weights.fill(0);
+  const squares = new Float64Array(shares.length);
+  const densities = new Float64Array(shares.length);
   for (let i = 0; i < count; i++) {
-    const at = i * components;
-    let top = -Infinity;
-    for (let c = 0; c < components; c++) {
-      shares[at + c] = logComponent(mixture, c, values, i * d);
-      top = Math.max(top, shares[at + c]!);
-    }
     let sum = 0;
-    for (let c = 0; c < components; c++) sum += shares[at + c] = exp(shares[at + c]! - top);
-    for (let c = 0; c < components; c++) shares[at + c]! /= sum;
+    for (let c = 0; c < shares.length; c++) {
+      squares[c] = squaredDistance(mixture, c, values, i * d);
+      densities[c] = componentDensity(mixture, c, squares[c]!);
+      sum += densities[c]!;
+    }
+    for (let c = 0; c < shares.length; c++) {
+      const share = densities[c]! / sum;
+      weights[c]! += share;
+      shares[c]![i] = (share * (DEGREES + d)) / (DEGREES + squares[c]!);
+    }
   }
 }
 
 /**
- * A Gaussian mixture to `count` points of `d` values (row-major) by expectation–maximisation, then widened, with one wide
- * Gaussian over all points beside it: a proposal, not an estimate of the density. Null where the points are too few.
- * Source: Dempster, Laird & Rubin 1977 (from memory).
+ * Components of Student-t densities fitted to points by expectation–maximisation, then widened: for a proposal, not an estimate.
+ * None where the points are too few.
+ * Source: Peel & McLachlan 2000, Statistics and Computing 10, 339–348, with the scales of Kent, Tyler & Vardi 1994 (from memory).
  */
-export function fitMixture(
-  values: Float64Array,
-  count: number,
-  d: number,
-  random: RandomStream,
-): GaussianMixture | null {
-  const components = Math.min(MOST_COMPONENTS, Math.floor(count / (POINTS_PER_DIMENSION * d)));
-  if (components < 1) return null;
-  const points = { values, count, d };
-  const size = d * d;
-  // one place more than components: the last is the Gaussian over everything
-  const means = new Float64Array((components + 1) * d);
-  const covariances = new Float64Array((components + 1) * size);
-  weightedMoments(points, () => 1, components, means, covariances);
-  const all = covariances.slice(components * size);
-  const variance = Float64Array.from({ length: d }, (_, j) => all[j * d + j]! + 1e-12);
-  spreadCentres(points, variance, components, random).forEach((centre, c) => {
-    means.set(values.subarray(centre * d, (centre + 1) * d), c * d);
-    for (let j = 0; j < size; j++) covariances[c * size + j] = all[j]! / components;
-    for (let j = 0; j < d; j++) covariances[c * size + j * d + j]! += RIDGE * variance[j]!;
-  });
+export function fitComponents(points: Points, most: number, random: RandomStream): MixtureParts {
+  const { values, count, d } = points;
+  const components = Math.min(most, Math.floor(count / (POINTS_PER_DIMENSION * d)));
+  const moments = { means: new Float64Array(components * d), scales: new Float64Array(components * d * d) };
   const weights = new Float64Array(components).fill(1);
-  const shares = new Float64Array(count * components);
+  if (components === 0) return { weights, ...moments };
+  const all = { means: new Float64Array(d), scales: new Float64Array(d * d) };
+  fillMoments(points, new Float64Array(count).fill(1), 0, all);
+  const variance = Float64Array.from({ length: d }, (_, j) => all.scales[j * d + j]! + 1e-12);
+  farPoints(points, variance, components, random).forEach((point, c) => {
+    moments.means.set(values.subarray(point * d, (point + 1) * d), c * d);
+    moments.scales.set(all.scales, c * d * d);
+    stretchScale(moments, c, d, 1 / components, variance);
+  });
+  const shares = Array.from({ length: components }, () => new Float64Array(count));
   for (let round = 0; round < ROUNDS; round++) {
-    responsibilities(
-      createMixture(
-        d,
-        weights,
-        means.subarray(0, components * d),
-        covariances.subarray(0, components * size),
-      ),
-      points,
-      shares,
-    );
-    for (let c = 0; c < components; c++) {
-      const total = weightedMoments(points, (i) => shares[i * components + c]!, c, means, covariances);
-      weights[c] = Math.max(total, 1e-3);
-      for (let j = 0; j < d; j++) covariances[c * size + j * d + j]! += RIDGE * variance[j]!;
-    }
+    shareOut(createMixture({ weights, ...moments }), points, shares, weights);
+    shares.forEach((share, c) => {
+      // a component that lost its points stays where it was
+      if (weights[c]! < 1) return;
+      fillMoments(points, share, c, moments);
+      stretchScale(moments, c, d, 1, variance);
+    });
   }
-  for (let j = 0; j < components * size; j++) covariances[j]! *= WIDENING;
-  for (let j = 0; j < size; j++) covariances[components * size + j]! *= WIDE_WIDENING;
-  for (let j = 0; j < d; j++) covariances[components * size + j * d + j]! += RIDGE * variance[j]!;
-  const sum = weights.reduce((total, weight) => total + weight, 0);
-  return createMixture(d, [...weights, (sum * WIDE_SHARE) / (1 - WIDE_SHARE)], means, covariances);
+  for (let c = 0; c < components; c++) stretchScale(moments, c, d, WIDENING, variance);
+  return { weights: weights.map((weight) => weight / count), ...moments };
 }

@@ -1,38 +1,70 @@
 import { log } from '../../math/logarithm';
 import type { RandomStream } from '../../random';
-import { fitMixture } from './fit-mixture';
-import { drawMixture, logDensity, type GaussianMixture } from './gaussian-mixture';
+import { fitComponents, type Points } from './fit-mixture';
+import {
+  createMixture,
+  drawMixture,
+  logDensity,
+  type MixtureParts,
+  type StudentMixture,
+} from './student-mixture';
 import type { Ground } from './ground';
 import type { Move } from './metropolis';
 import { membersByCount, type Population } from './population';
 
+/** Most components, and share of the proposal, of the mixture fitted to the posterior and of that fitted to the tempered population. */
+const POSTERIOR = { components: 10, share: 0.8 };
+const TEMPERED = { components: 5, share: 0.2 };
+
 interface CountMixture {
   readonly layers: number;
   readonly chance: number;
-  readonly mixture: GaussianMixture;
+  readonly mixture: StudentMixture;
 }
 
-/** A mixture for each layer count that the population holds often enough, with the chance of the count. */
-function mixturesByCount(population: Population, random: RandomStream): CountMixture[] {
-  const { stride, values } = population;
-  const found = membersByCount(population).flatMap((members, layers) => {
-    if (members.length === 0) return [];
-    const d = 2 * layers - 1;
-    const points = new Float64Array(members.length * d);
-    members.forEach((member, i) => points.set(values.subarray(member * stride, member * stride + d), i * d));
-    const mixture = fitMixture(points, members.length, d, random);
-    return mixture ? [{ layers, chance: members.length, mixture }] : [];
+function pointsOf({ stride, values }: Population, members: readonly number[], layers: number): Points {
+  const d = 2 * layers - 1;
+  const points = new Float64Array(members.length * d);
+  members.forEach((member, i) => points.set(values.subarray(member * stride, member * stride + d), i * d));
+  return { values: points, count: members.length, d };
+}
+
+function joinParts(parts: readonly MixtureParts[]): MixtureParts {
+  const join = (key: keyof MixtureParts) => Float64Array.from(parts.flatMap((part) => [...part[key]]));
+  return { weights: join('weights'), means: join('means'), scales: join('scales') };
+}
+
+/** A mixture for each layer count that the populations hold often enough, with the chance of the count. */
+function mixturesByCount(posterior: Population, tempered: Population, random: RandomStream): CountMixture[] {
+  const temperedMembers = membersByCount(tempered);
+  const found = membersByCount(posterior).flatMap((members, layers): CountMixture[] => {
+    const parts = [
+      { ...POSTERIOR, points: pointsOf(posterior, members, layers) },
+      { ...TEMPERED, points: pointsOf(tempered, temperedMembers[layers]!, layers) },
+    ].map(({ points, components, share }) => {
+      const fitted = fitComponents(points, components, random);
+      return { ...fitted, weights: fitted.weights.map((weight) => weight * share) };
+    });
+    const joined = joinParts(parts);
+    if (joined.weights.length === 0) return [];
+    return [{ layers, chance: members.length + 1, mixture: createMixture(joined) }];
   });
   const total = found.reduce((sum, { chance }) => sum + chance, 0);
   return found.map((one) => ({ ...one, chance: one.chance / total }));
 }
 
 /**
- * A draw from Gaussian mixtures that were fitted to a population beforehand, whatever the present ground: it carries
- * the chain from mode to mode and from count to count at once. Null where the population is too small for any.
+ * A draw from mixtures of Student-t densities that were fitted beforehand, whatever the present ground: it carries the chain from
+ * mode to mode and from count to count at once. A part is fitted to a tempered population, which reaches into the tails.
+ * Null where the populations are too small for any.
  */
-export function mixtureMove(population: Population, weight: number, random: RandomStream): Move | null {
-  const byCount = mixturesByCount(population, random);
+export function mixtureMove(
+  posterior: Population,
+  tempered: Population,
+  weight: number,
+  random: RandomStream,
+): Move | null {
+  const byCount = mixturesByCount(posterior, tempered, random);
   if (byCount.length === 0) return null;
   const logDensityOf = (ground: Ground): number => {
     const one = byCount.find(({ layers }) => layers === ground.layers);

@@ -23,8 +23,13 @@ export function temperingMoves(space: GroundSpace, population: Population): Move
   return [...countMoves(space), differenceMove(population, 0.3)];
 }
 
-/** For the chains whose samples are kept: the population stands still, so every move keeps its detailed balance. */
-export function samplingMoves(space: GroundSpace, population: Population, random: RandomStream): Move[] {
-  const mixture = mixtureMove(population, 0.45, random);
-  return [...temperingMoves(space, population), ...(mixture ? [mixture] : [])];
+/** For the chains whose samples are kept: the populations stand still, so every move keeps its detailed balance. */
+export function samplingMoves(
+  space: GroundSpace,
+  posterior: Population,
+  tempered: Population,
+  random: RandomStream,
+): Move[] {
+  const mixture = mixtureMove(posterior, tempered, 0.45, random);
+  return [...temperingMoves(space, posterior), ...(mixture ? [mixture] : [])];
 }

@@ -13,6 +13,15 @@ const LAST_SWEEPS = 12;
 /** The next temperature leaves this share of the members' weight as effective size. */
 const KEPT_SHARE = 0.5;
 
+/** The inverse temperature whose population is given back too: wider than the posterior, but about where it is. */
+const HALF_WAY = 0.4;
+
+export interface TemperedPopulations {
+  readonly posterior: Population;
+  /** the same at an inverse temperature of 0.4 */
+  readonly tempered: Population;
+}
+
 /** Exact draws of the prior with their likelihoods. */
 function priorPopulation({ space, logLikelihood }: Model, size: number, random: RandomStream): Population {
   const ground = createGround(space.most);
@@ -95,19 +104,22 @@ export function temperedPopulation(
   size: number,
   random: RandomStream,
   onStep: (beta: number) => void,
-): Population {
+): TemperedPopulations {
   let population = priorPopulation(model, SCREENED * size, random);
+  let halfWay = population;
   let beta = 0;
   while (beta < 1) {
     const weights = new Float64Array(population.size);
     const wanted = KEPT_SHARE * size;
-    const step = nextStep(population.logLikelihood, 1 - beta, wanted, weights);
-    beta = step >= 1 - beta ? 1 : beta + step;
+    const next = beta < HALF_WAY ? HALF_WAY : 1;
+    const step = nextStep(population.logLikelihood, next - beta, wanted, weights);
+    beta = step >= next - beta ? next : beta + step;
     population = chosenMembers(population, resample(weights, size, random));
     for (let turn = 0; turn < (beta === 1 ? LAST_SWEEPS : SWEEPS); turn++) {
       sweep(model, population, beta, random);
     }
+    if (beta === HALF_WAY) halfWay = population;
     onStep(beta);
   }
-  return population;
+  return { posterior: population, tempered: halfWay };
 }
