@@ -7,8 +7,8 @@ export const NODES_PER_OCTAVE = 5;
 export interface KernelScratch {
   /** T₁ at the nodes, Ω·m */
   readonly transform: Float64Array;
-  /** dT₁/dparameter, parameter-major: [parameter * nodes + node], Ω·m; grows with the layer count */
-  derivative: Float64Array;
+  /** dT₁/dparameter, then T₁ again, each `nodes` long: [parameter * nodes + node], Ω·m; grows with the layer count */
+  columns: Float64Array;
   decay: Float64Array;
   pass: Float64Array;
 }
@@ -16,7 +16,7 @@ export interface KernelScratch {
 export function createKernelScratch(nodes: number): KernelScratch {
   return {
     transform: new Float64Array(nodes),
-    derivative: new Float64Array(0),
+    columns: new Float64Array(0),
     decay: new Float64Array(nodes),
     pass: new Float64Array(0),
   };
@@ -66,7 +66,7 @@ export function transformAtNodes(
 }
 
 /**
- * T₁ and its derivatives dT₁/dlnρ_i and dT₁/dlnh_i at the nodes, in `scratch.transform` and `scratch.derivative`.
+ * T₁ and its derivatives dT₁/dlnρ_i and dT₁/dlnh_i at the nodes, in `scratch.transform` and `scratch.columns`.
  *
  * Symbols: u = tanh(λh), T from below, D = 1 + Tu/ρ. For one layer
  * ∂T_i/∂T_{i+1} = (1 − u²)/D²,  ∂T_i/∂lnρ_i = u(ρ + 2Tu + T²/ρ)/D²,  ∂T_i/∂lnh_i = λh(1 − u²)(ρ − T²/ρ)/D²,
@@ -80,9 +80,9 @@ export function transformAndDerivatives(
 ): void {
   const nodes = lambda.length;
   const count = 2 * layers - 1;
-  if (scratch.derivative.length < count * nodes) scratch.derivative = new Float64Array(count * nodes);
+  if (scratch.columns.length < (count + 1) * nodes) scratch.columns = new Float64Array((count + 1) * nodes);
   if (scratch.pass.length < layers * nodes) scratch.pass = new Float64Array(layers * nodes);
-  const { transform, derivative, decay, pass } = scratch;
+  const { transform, columns, decay, pass } = scratch;
   const halfSpace = parameters[layers - 1]!;
   transform.fill(halfSpace);
   for (let i = layers - 2; i >= 0; i--) {
@@ -101,16 +101,17 @@ export function transformAndDerivatives(
       const perD2 = perD * perD;
       const sech = 4 * (1 + e) * perD2;
       pass[atPass + g] = sech;
-      derivative[atRho + g] = -e * (over * (rho + t * t * perRho) - 2 * t * e) * perD2;
-      derivative[atThickness + g] = lambda[g]! * thickness * sech * (rho - t * t * perRho);
+      columns[atRho + g] = -e * (over * (rho + t * t * perRho) - 2 * t * e) * perD2;
+      columns[atThickness + g] = lambda[g]! * thickness * sech * (rho - t * t * perRho);
       transform[g] = (t * over - rho * e) * perD;
     }
   }
-  chainFromSurface(derivative, pass, layers, nodes, halfSpace);
+  chainFromSurface(columns, pass, layers, nodes, halfSpace);
+  columns.set(transform, count * nodes);
 }
 
 function chainFromSurface(
-  derivative: Float64Array,
+  columns: Float64Array,
   pass: Float64Array,
   layers: number,
   nodes: number,
@@ -118,16 +119,16 @@ function chainFromSurface(
 ): void {
   const last = (layers - 1) * nodes;
   if (layers === 1) {
-    derivative.fill(halfSpace, 0, nodes);
+    columns.fill(halfSpace, 0, nodes);
     return;
   }
   for (let g = 0; g < nodes; g++) {
     let chain = pass[g]!;
     for (let i = 1; i < layers - 1; i++) {
-      derivative[i * nodes + g]! *= chain;
-      derivative[(layers + i) * nodes + g]! *= chain;
+      columns[i * nodes + g]! *= chain;
+      columns[(layers + i) * nodes + g]! *= chain;
       chain *= pass[i * nodes + g]!;
     }
-    derivative[last + g] = chain * halfSpace;
+    columns[last + g] = chain * halfSpace;
   }
 }

@@ -15,7 +15,7 @@ export function dampedStep(
   damping: number,
 ): readonly number[] {
   const points = Math.max(FEWEST_POINTS, size);
-  const row = new Array<number>(size).fill(0);
+  const row = low.map(() => 0);
   const rowOf = (i: number): number[] => {
     for (let k = 0; k < size; k++) row[k] = i < size ? triangle[i * size + k]! : 0;
     return row;
@@ -30,7 +30,7 @@ export function dampedStep(
     { x: Float64Array.from({ length: points }, (_, i) => i), y: new Float64Array(points) },
     (delta) => (i) => valueAt(delta, i),
     {
-      initialValues: new Array<number>(size).fill(0),
+      initialValues: low.map(() => 0),
       minValues: low,
       maxValues: high,
       damping,

@@ -8,7 +8,7 @@ import {
 import { imageResponse } from '../spread/image-response';
 import type { LayeredEarth, Spread } from '../types';
 import { requireSpread } from '../spread/require-spread';
-import { dot } from './dot-product';
+import { latticeColumn, latticeProduct, type LatticeRows } from './lattice-product';
 import { designWeights } from './weight-design';
 import { pow2 } from '../math/power';
 
@@ -46,17 +46,20 @@ export function createForwardOperator(spreads: readonly Spread[]): ForwardOperat
   const readings = rows.length;
   const nodes = readings === 0 ? 0 : end - first;
   const lambda = Float64Array.from({ length: nodes }, (_, j) => pow2((first + j) / NODES_PER_OCTAVE));
-  const weights = new Float64Array(readings * nodes);
-  rows.forEach((row, i) => weights.set(row.values, i * nodes + row.first - first));
-  const from = Int32Array.from(rows, (row) => row.first - first);
-  const to = Int32Array.from(rows, (row) => row.first - first + row.values.length);
+  const lattice: LatticeRows = {
+    rows: readings,
+    nodes,
+    weights: new Float64Array(readings * nodes),
+    from: Int32Array.from(rows, (row) => row.first - first),
+    to: Int32Array.from(rows, (row) => row.first - first + row.values.length),
+  };
+  rows.forEach((row, i) => lattice.weights.set(row.values, i * nodes + row.first - first));
   const scratch = createKernelScratch(nodes);
+  let product = new Float64Array(0);
 
-  const apply = (values: Float64Array, at: number, i: number): number =>
-    dot(weights, i * nodes + from[i]!, values, at + from[i]!, to[i]! - from[i]!);
   const predictInto: ForwardOperator['predictInto'] = (parameters, layers, predicted) => {
     transformAtNodes(parameters, layers, lambda, scratch);
-    for (let i = 0; i < readings; i++) predicted[i] = apply(scratch.transform, 0, i);
+    latticeColumn(lattice, scratch.transform, predicted);
   };
   const predictWithJacobianInto: ForwardOperator['predictWithJacobianInto'] = (
     parameters,
@@ -65,11 +68,14 @@ export function createForwardOperator(spreads: readonly Spread[]): ForwardOperat
     jacobian,
     width = 2 * layers - 1,
   ) => {
-    transformAndDerivatives(parameters, layers, lambda, scratch);
     const count = 2 * layers - 1;
+    if (product.length < readings * (count + 1)) product = new Float64Array(readings * (count + 1));
+    transformAndDerivatives(parameters, layers, lambda, scratch);
+    latticeProduct(lattice, scratch.columns, count + 1, product);
     for (let i = 0; i < readings; i++) {
-      predicted[i] = apply(scratch.transform, 0, i);
-      for (let j = 0; j < count; j++) jacobian[i * width + j] = apply(scratch.derivative, j * nodes, i);
+      const at = i * (count + 1);
+      for (let j = 0; j < count; j++) jacobian[i * width + j] = product[at + j]!;
+      predicted[i] = product[at + count]!;
     }
   };
   return {

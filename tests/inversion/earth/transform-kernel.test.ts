@@ -54,7 +54,7 @@ describe('transformAndDerivatives', () => {
     const scratch = createKernelScratch(LAMBDA.length);
     transformAndDerivatives(parameters, 3, LAMBDA, scratch);
     LAMBDA.forEach((_, g) => {
-      const sum = [0, 1, 2].reduce((total, i) => total + scratch.derivative[i * LAMBDA.length + g]!, 0);
+      const sum = [0, 1, 2].reduce((total, i) => total + scratch.columns[i * LAMBDA.length + g]!, 0);
       expect(relativeError(sum, scratch.transform[g]!)).toBeLessThan(1e-12);
     });
   });
@@ -77,7 +77,7 @@ function worstGap(
   const down = at(-1);
   const gaps = Array.from(LAMBDA, (_, g) => {
     const difference = (up[g]! - down[g]!) / (2 * step);
-    return Math.abs(difference - analytic.derivative[j * LAMBDA.length + g]!) / analytic.transform[g]!;
+    return Math.abs(difference - analytic.columns[j * LAMBDA.length + g]!) / analytic.transform[g]!;
   });
   return Math.max(...gaps);
 }
