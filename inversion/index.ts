@@ -24,6 +24,17 @@ export { IDEAL_SCHLUMBERGER_DEPTH, plottingSpacing } from './spread/plotting-spa
 export { createForwardOperator, type ForwardOperator } from './operator/forward-operator';
 export { createOperatorCache, type OperatorCache } from './operator/operator-cache';
 export { fitLayered, type FitOptions } from './fit/fit-layered';
+export { fitLine } from './line/fit-line';
+export type {
+  LateralScales,
+  LineBorehole,
+  LineContact,
+  LineCountFit,
+  LineFitResult,
+  LineSettings,
+  LineSounding,
+} from './line/line-types';
+export { fitSmooth } from './fit/smooth/fit-smooth';
 export { FIT_STATUS_MESSAGES, fitStatusMessage } from './fit/fit-status';
 export { createRandomStream, type RandomStream } from './random';
 export { compareResults, type ResultComparison, type ResultDifference } from './compare/compare-results';

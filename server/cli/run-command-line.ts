@@ -25,6 +25,10 @@ export async function runCommandLine(
       const { answerFit } = await import('./answer-fit');
       return answerLines(input, output, answerFit());
     }
+    case 'fit-line': {
+      const { answerFitLine } = await import('./answer-fit-line');
+      return answerLines(input, output, answerFitLine());
+    }
     case 'schema':
       return printSchema(rest[0], output, errors);
     case 'help':

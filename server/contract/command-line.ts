@@ -6,11 +6,9 @@ import {
   fitStatusSchema,
   layeredEarthSchema,
 } from './fit';
+import { fitLineAnswerSchema, fitLineRequestSchema, fitLineSettingsSchema } from './fit-line';
+import { lineId } from './line-id';
 import { spreadSchema } from './spread';
-
-const lineId = z
-  .union([z.string().max(200), z.number()])
-  .describe('name of the line, given back with its answer');
 
 export const forwardRequestSchema = z.strictObject({
   id: lineId,
@@ -62,6 +60,10 @@ export const COMMAND_LINE_SCHEMAS = {
   fit: z.strictObject({ request: fitRequestSchema, answer: fitAnswerSchema }),
   'fit-request': fitRequestSchema,
   'fit-answer': fitAnswerSchema,
+  'fit-line': z.strictObject({ request: fitLineRequestSchema, answer: fitLineAnswerSchema }),
+  'fit-line-settings': fitLineSettingsSchema,
+  'fit-line-request': fitLineRequestSchema,
+  'fit-line-answer': fitLineAnswerSchema,
   error: lineErrorSchema,
 } as const;
 

@@ -1,7 +1,7 @@
 import { spawn } from 'node:child_process';
 import { once } from 'node:events';
 import { readFileSync } from 'node:fs';
-import { PassThrough, Readable, Writable } from 'node:stream';
+import { PassThrough, Readable } from 'node:stream';
 import { text } from 'node:stream/consumers';
 import { setTimeout as delay } from 'node:timers/promises';
 import { describe, expect, it } from 'vitest';
@@ -13,32 +13,10 @@ import {
   forwardAnswerSchema,
 } from '../../../server/contract/command-line';
 import { layered } from '../support/fit-settings';
-
-function sink(): { stream: Writable; text: () => string } {
-  const chunks: string[] = [];
-  const stream = new Writable({
-    write: (chunk: Buffer, _encoding, done) => {
-      chunks.push(chunk.toString());
-      done();
-    },
-  });
-  return { stream, text: () => chunks.join('') };
-}
-
-async function run(args: string[], input = '') {
-  const [out, err] = [sink(), sink()];
-  const status = await runCommandLine(args, Readable.from([input]), out.stream, err.stream);
-  const answers: Record<string, unknown>[] = out
-    .text()
-    .split('\n')
-    .filter((line) => line.startsWith('{"'))
-    .map((line) => JSON.parse(line));
-  return { status, answers, output: out.text(), errors: err.text() };
-}
+import { line, runCommand as run, sink } from '../support/run-command';
 
 const EARTH = { resistivity: [100, 20], thickness: [3] };
 const WENNER = { type: 'wenner', spacing: 5 } as const;
-const line = (value: object) => `${JSON.stringify(value)}\n`;
 
 /** Resolves when a count has begun and stood still for a while. */
 async function standstill(count: () => number): Promise<void> {
