@@ -20,11 +20,12 @@ const LEAST_SPAN = 10;
  *
  * They run from 0.2 of the shortest to once the longest spacing (as AB/2), half and two and a half times its median depth:
  * what is shallower or deeper than that shares one value, since the readings could hardly tell its parts apart.
+ * `deepest` sets another last boundary, as a share of the longest spacing.
  */
-export function cellGrid(readings: readonly Reading[], cells: number): number[] {
+export function cellGrid(readings: readonly Reading[], cells: number, deepest = DEEPEST): number[] {
   const spacings = readings.map((reading) => plottingSpacing(reading.spread));
   const shallow = SHALLOWEST * Math.min(...spacings);
-  const deep = Math.max(DEEPEST * Math.max(...spacings), LEAST_SPAN * shallow);
+  const deep = Math.max(deepest * Math.max(...spacings), LEAST_SPAN * shallow);
   const step = log(deep / shallow) / (cells - 2);
   const depths = Array.from({ length: cells - 1 }, (_, i) => shallow * exp(i * step));
   return depths.map((depth, i) => depth - (depths[i - 1] ?? 0));

@@ -1,14 +1,12 @@
 import { InversionError } from '../../inversion-error';
-import { log } from '../../math/logarithm';
-import { createForwardOperator } from '../../operator/forward-operator';
 import type { FitResult, FitSettings, Reading } from '../../types';
 import type { FitOptions } from '../fit-layered';
-import { createResidualSystem } from '../residual-system';
 import { cellGrid, USUAL_CELLS } from './cell-grid';
-import { createCellProblem, type CellProblem } from './cell-problem';
+import type { CellProblem } from './cell-problem';
 import { requireSmoothInput } from './check-smooth-input';
 import { fewestSteps } from './few-steps';
 import { buildSmoothResult, type SmoothResultParts } from './smooth-result';
+import { soundingCells } from './sounding-cells';
 import { balanceAt, lambdaRange, smoothestWithin, type TradeOffOptions } from './trade-off';
 
 /**
@@ -17,7 +15,7 @@ import { balanceAt, lambdaRange, smoothestWithin, type TradeOffOptions } from '.
  */
 export const USUAL_TARGET = 1;
 /** Where the target is out of reach, the smoothest ground within this share above the least χ² stands for it. */
-const SPARE = 0.05;
+export const SPARE = 0.05;
 
 /**
  * The smoothest ground of many cells that brings χ²/N down to the target (`kind: 'smooth'`), or one with few steps
@@ -37,31 +35,18 @@ export function fitSmooth(
   if (kind === 'layered')
     throw new InversionError('layer-count', 'a layered fit has beds, not cells', ['settings', 'kind']);
   requireSmoothInput(readings, settings);
-  const spreads = readings.map((reading) => reading.spread);
-  const operator = options.operators?.operatorFor(spreads) ?? createForwardOperator(spreads);
-  const system = createResidualSystem(operator, readings, settings);
   const cells = settings.layers === 'auto' ? USUAL_CELLS[kind] : settings.layers;
-  const cell = createCellProblem(
-    system,
-    cellGrid(readings, cells),
-    settings.bounds,
-    settings.branchShiftSigma,
-  );
+  const grid = cellGrid(readings, cells);
+  const { system, cell, uniform } = soundingCells(readings, settings, grid, options.operators);
   let iterations = 0;
   const target = settings.targetMisfit ?? USUAL_TARGET;
-  const found = search(
-    kind,
-    cell,
-    target * readings.length,
-    uniformStart(readings, settings, system.shifts, cells),
-    {
-      onBalance: (balance, steps) => {
-        iterations += steps;
-        const chi2PerReading = balance.chi2 / readings.length;
-        options.onProgress?.({ layers: cells, start: 1, starts: 1, iteration: iterations, chi2PerReading });
-      },
+  const found = search(kind, cell, target * readings.length, uniform, {
+    onBalance: (balance, steps) => {
+      iterations += steps;
+      const chi2PerReading = balance.chi2 / readings.length;
+      options.onProgress?.({ layers: cells, start: 1, starts: 1, iteration: iterations, chi2PerReading });
     },
-  );
+  });
   return buildSmoothResult({ kind, readings, settings, system, cell, target, iterations, ...found });
 }
 
@@ -88,17 +73,4 @@ function search(
     reached,
     uniform: reached && first.chi2 <= target,
   };
-}
-
-/** lnρ of every cell at the mean ln ρa, within the bounds; shifts 0. */
-function uniformStart(
-  readings: readonly Reading[],
-  { bounds }: FitSettings,
-  shifts: number,
-  cells: number,
-): Float64Array {
-  const mean = readings.reduce((sum, reading) => sum + log(reading.apparentResistivity), 0) / readings.length;
-  const [low, high] = bounds.resistivity;
-  const value = Math.min(log(high), Math.max(log(low), mean));
-  return new Float64Array(cells + shifts).fill(value, 0, cells);
 }

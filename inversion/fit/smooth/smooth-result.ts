@@ -76,6 +76,7 @@ export function buildSmoothResult(parts: SmoothResultParts): FitResult {
       ...general,
     ],
     layerCounts: null,
+    oneFewer: null,
     reachedTarget: reached,
     shifts: describeShifts(system.branches, balance.free, covariance.deviation),
     downWeighted: settings.outlierTolerant ? downWeighted(residuals) : [],
