@@ -83,3 +83,15 @@ export {
   type TransmissivityCalibration,
   type TransmissivityEstimate,
 } from './hydro/transmissivity';
+export { depthOfInvestigation, type DepthOfInvestigation } from './uncertainty/depth-of-investigation';
+export {
+  layeredDepthOfInvestigation,
+  type LayeredDepthOfInvestigation,
+} from './uncertainty/layered-depth-of-investigation';
+export {
+  detectability,
+  type Detectability,
+  type DetectabilityInput,
+  type PlannedReading,
+  type TellingApart,
+} from './uncertainty/detectability';

@@ -65,7 +65,8 @@ function predictorOf(planned: readonly PlannedReading[]): Predictor {
         return (value * perSigma[i]!) / predicted[i]!;
       });
     },
-    difference: (a, b) => a.map((value, i) => (value > 0 && b[i]! > 0 ? log(value / b[i]!) * perSigma[i]! : 0)),
+    difference: (a, b) =>
+      a.map((value, i) => (value > 0 && b[i]! > 0 ? log(value / b[i]!) * perSigma[i]! : 0)),
   };
 }
 
