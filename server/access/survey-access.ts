@@ -12,6 +12,7 @@ export interface SurveyAccess {
 
 export interface SoundingAccess extends SurveyAccess {
   readonly soundingId: string;
+  readonly soundingName: string;
 }
 
 interface MembershipRow {
@@ -37,9 +38,13 @@ export async function getSoundingAccess(
   const row = await knex('sounding')
     .join('survey_member', 'survey_member.survey_id', 'sounding.survey_id')
     .where({ 'sounding.id': soundingId, 'survey_member.user_id': actor.userId })
-    .first<MembershipRow | undefined>('survey_member.survey_id', 'survey_member.role');
+    .first<(MembershipRow & { name: string }) | undefined>(
+      'survey_member.survey_id',
+      'survey_member.role',
+      'sounding.name',
+    );
   if (!row) throw notFound('The sounding');
-  return { ...accessOf(row), soundingId };
+  return { ...accessOf(row), soundingId, soundingName: row.name };
 }
 
 const accessOf = (row: MembershipRow): SurveyAccess => ({

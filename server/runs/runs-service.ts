@@ -3,6 +3,7 @@ import type { z } from 'zod';
 import { ENGINE_VERSION } from '../../inversion/index';
 import { recordAudit } from '../access/audit';
 import { getSoundingAccess, requireCan, type SoundingAccess } from '../access/survey-access';
+import { runLetter } from '../contract/run-letter';
 import type { createRunSchema, Run, RunInput, RunSummary, updateRunNoteSchema } from '../contract/runs';
 import { AppError } from '../errors';
 import type { Work } from '../http/context';
@@ -95,7 +96,7 @@ interface Request {
 async function addRun(
   { actor, jobs, runEvents }: Work,
   trx: Knex.Transaction,
-  { surveyId, soundingId }: SoundingAccess,
+  { surveyId, soundingId, soundingName }: SoundingAccess,
   request: Request,
 ): Promise<string> {
   const run = await insertRun(trx, {
@@ -113,7 +114,7 @@ async function addRun(
     actorId: actor.userId,
     surveyId,
     action: request.recomputes ? 'run.recomputed' : 'run.requested',
-    subject: `run ${run.number}`,
+    subject: `run ${runLetter(run.number)} of ${soundingName}`,
     details: { soundingId, runId: run.id },
   });
   await runEvents.publish(trx, {
@@ -153,7 +154,7 @@ export async function requestCancellation(context: Work, runId: string): Promise
       actorId: actor.userId,
       surveyId: access.surveyId,
       action: 'run.cancelled',
-      subject: `run ${run.number}`,
+      subject: `run ${runLetter(run.number)} of ${access.soundingName}`,
       details: { soundingId: run.sounding_id, runId },
     });
     await runEvents.publish(trx, { soundingId: run.sounding_id, runId, state: 'cancelled' });

@@ -1,8 +1,8 @@
+import { runLetter } from '../../server/contract/run-letter';
 import type { RunSummary } from '../../server/contract/runs';
-import { formatCount, runLetter } from '../ui/format';
+import { formatCount } from '../ui/format';
 
-/** Runs are numbered from 1 within their sounding and shown by letter. */
-export const letterOfRun = (run: Pick<RunSummary, 'number'>): string => runLetter(run.number - 1);
+export const letterOfRun = (run: Pick<RunSummary, 'number'>): string => runLetter(run.number);
 
 export function bedCount(count: number): string {
   return formatCount(count, 'bed');

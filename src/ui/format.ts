@@ -80,19 +80,6 @@ export function formatRelativeError(relative: number): string {
   return `${formatSignificant(relative * 100, 2)}\u00a0%`;
 }
 
-/** Runs are named A, B, … Z, AA, AB, … from index 0. */
-export function runLetter(index: number): string {
-  if (!Number.isInteger(index) || index < 0)
-    throw new RangeError(`run index ${index}: must be a whole number from 0`);
-  let rest = index;
-  let letters = '';
-  do {
-    letters = String.fromCharCode(65 + (rest % 26)) + letters;
-    rest = Math.floor(rest / 26) - 1;
-  } while (rest >= 0);
-  return letters;
-}
-
 /** "today 09:12", "yesterday 17:40", "3 Mar 14:05", "3 Mar 2024". Local time of the reader. */
 export function formatMoment(moment: string | Date, now: Date = new Date()): string {
   const date = new Date(moment);

@@ -2,9 +2,10 @@ import { Link } from 'react-router-dom';
 import type { SoundingRow } from '../../../server/contract/soundings';
 import { addressOf } from '../../app/addresses';
 import { CurveSparkline } from '../../charts/curve-sparkline';
+import { letterOfRun } from '../../runs/run-title';
 import { SoundingStateMark } from '../../soundings/sounding-state-mark';
 import { SPREAD_LABELS } from '../../soundings/spread-words';
-import { formatDay, formatMisfit, formatPercent, runLetter } from '../../ui/format';
+import { formatDay, formatMisfit, formatPercent } from '../../ui/format';
 import { Cell, HeaderCell, Table, TableBody, TableHead, TableRow } from '../../ui/table';
 import type { SoundingListParams, SortKey } from './sounding-list-params';
 
@@ -100,7 +101,7 @@ function Misfit({ run }: { run: NonNullable<SoundingRow['latestRun']> }) {
   return (
     <span className="inline-flex flex-col items-end leading-tight">
       <span>
-        <span className="text-muted">{runLetter(run.number - 1)}</span> {formatMisfit(run.chi2PerReading)}
+        <span className="text-muted">{letterOfRun(run)}</span> {formatMisfit(run.chi2PerReading)}
       </span>
       {run.ofOlderReadings ? <span className="font-sans text-xs text-copper">older readings</span> : null}
     </span>

@@ -12,7 +12,6 @@ import {
   formatRelativeError,
   formatResistivity,
   formatSignificant,
-  runLetter,
 } from '../../../src/ui/format';
 
 const THIN = '\u202f';
@@ -90,18 +89,6 @@ test('percentages', () => {
   expect(formatRelativeError(0.03)).toBe(`3.0${NBSP}%`);
   expect(formatRelativeError(0.124)).toBe(`12${NBSP}%`);
 });
-
-test.each([
-  [0, 'A'],
-  [25, 'Z'],
-  [26, 'AA'],
-  [51, 'AZ'],
-  [52, 'BA'],
-  [701, 'ZZ'],
-  [702, 'AAA'],
-])('run %d is %s', (index, letter) => expect(runLetter(index)).toBe(letter));
-
-test('a run index below zero is refused', () => expect(() => runLetter(-1)).toThrow(RangeError));
 
 describe('moments', () => {
   const now = new Date(2026, 2, 10, 10, 0);
