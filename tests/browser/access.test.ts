@@ -68,10 +68,10 @@ it('two people on one Field sheet: the second sees both versions, and both stay'
   await dialog.getByText(`Revision 2 by ${nameOf('geophysicist')}`).waitFor();
   const rows = (await dialog.getByRole('row').allInnerTexts()).map((text) => text.replaceAll('\u00a0', ' '));
   expect(rows).toHaveLength(3);
-  expect(rows[1]).toContain('V 123.4');
-  expect(rows[2]).toContain('V 234.5');
-  expect(rows[1]).toMatch(/V 123\.4 was [\d.]+[\s\S]*revision 2/);
-  expect(rows[2]).toMatch(/V 234\.5 was [\d.]+[\s\S]*yours/);
+  expect(rows[1]).toContain('V 123.4 mV');
+  expect(rows[2]).toContain('V 234.5 mV');
+  expect(rows[1]).toMatch(/V 123\.4 mV was [\d.]+ mV[\s\S]*revision 2/);
+  expect(rows[2]).toMatch(/V 234\.5 mV was [\d.]+ mV[\s\S]*yours/);
   await dialog.getByRole('button', { name: 'Save mine as the newest' }).click();
   await draftIs(second.page, /^readings revision 3$/);
   const kept = await app

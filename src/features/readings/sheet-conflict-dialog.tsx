@@ -1,6 +1,6 @@
 import { useQuery } from '@tanstack/react-query';
 import { useMemo } from 'react';
-import type { Revision } from '../../../server/contract/readings';
+import type { Revision, SheetUnits } from '../../../server/contract/readings';
 import { revisionQuery } from '../../api/sounding-queries';
 import { Button } from '../../ui/button';
 import { Dialog } from '../../ui/dialog';
@@ -77,7 +77,12 @@ export function SheetConflictDialog(props: SheetConflictDialogProps) {
           </TableHead>
           <TableBody>
             {differences.map((difference, i) => (
-              <DifferenceRow key={i} difference={difference} revisionNumber={theirs.number} />
+              <DifferenceRow
+                key={i}
+                difference={difference}
+                units={sheet.content.units}
+                revisionNumber={theirs.number}
+              />
             ))}
           </TableBody>
         </Table>
@@ -88,11 +93,12 @@ export function SheetConflictDialog(props: SheetConflictDialogProps) {
 
 interface DifferenceRowProps {
   difference: SheetDifference;
+  units: SheetUnits;
   revisionNumber: number;
 }
 
 /** On a telephone the word of who changed it stands under the spacing. */
-function DifferenceRow({ difference, revisionNumber }: DifferenceRowProps) {
+function DifferenceRow({ difference, units, revisionNumber }: DifferenceRowProps) {
   const { spacing, mine, theirs, base, changedBy } = difference;
   const changed = changedBy && { me: 'yours', them: `revision ${revisionNumber}`, both: 'both' }[changedBy];
   return (
@@ -102,10 +108,10 @@ function DifferenceRow({ difference, revisionNumber }: DifferenceRowProps) {
         {changed ? <span className="block font-sans text-sm text-muted sm:hidden">{changed}</span> : null}
       </Cell>
       <Cell className="align-top">
-        <RowWords parts={rowParts(mine, base)} />
+        <RowWords parts={rowParts(mine, base, units)} />
       </Cell>
       <Cell className="align-top">
-        <RowWords parts={rowParts(theirs, base)} />
+        <RowWords parts={rowParts(theirs, base, units)} />
       </Cell>
       {changed ? <Cell className="hidden align-top whitespace-nowrap sm:table-cell">{changed}</Cell> : null}
     </TableRow>

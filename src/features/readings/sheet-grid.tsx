@@ -61,7 +61,10 @@ export function SheetGrid({ ref, ...props }: SheetGridProps) {
     if (props.onPaste({ row, column }, event.clipboardData.getData('text'))) event.preventDefault();
   };
   return (
-    <div ref={frame} className="max-h-[70vh] min-h-64 overflow-auto border border-rule bg-sheet">
+    <div
+      ref={frame}
+      className="max-h-[70vh] min-h-64 scroll-pt-12 scroll-pr-18 scroll-pl-11 overflow-auto border border-rule bg-sheet"
+    >
       <table aria-label="Readings" aria-rowcount={rows.length + 1} className="w-full border-collapse">
         <GridHead columns={columns} spreadType={spreadType} units={units} />
         <Spacer height={start * rowHeight} />
@@ -105,11 +108,11 @@ const Spacer = ({ height }: { height: number }) =>
     </tbody>
   ) : null;
 
-/** What the sheet computes stands after what is written, on another ground. */
+/** What the sheet computes stands after what is written, on another ground; where there is no room ρa stays at the edge. */
 const DerivedHeads = () => (
   <>
     <HeadCell name="K" unit="m" className="min-w-17 bg-sunken text-right" />
-    <HeadCell name="ρa" unit="Ω·m" className="min-w-17 bg-sunken text-right" />
+    <HeadCell name="ρa" unit="Ω·m" className="sticky right-0 z-10 min-w-17 bg-sunken text-right" />
     <HeadCell name="total" unit="error" className="min-w-15 bg-sunken text-right" />
   </>
 );

@@ -114,13 +114,13 @@ function ExcludedCell(props: SheetRowViewProps & { fault: SheetFault | undefined
 
 function DerivedCells({ line }: { line: SheetLine }) {
   const derived = line.parsed?.derived;
-  const cell = 'figure border-l border-rule bg-sunken/60 px-2 text-right whitespace-nowrap';
+  const cell = 'figure border-l border-rule bg-sunken px-2 text-right whitespace-nowrap';
   return (
     <>
       <td className={cell}>
         {line.geometricFactorM === null ? '' : formatSignificant(line.geometricFactorM, 4)}
       </td>
-      <td className={classNames(cell, 'font-semibold')}>
+      <td className={classNames(cell, 'sticky right-0 z-10 font-semibold')}>
         {derived ? formatSignificant(derived.apparentResistivityOhmM, 4) : ''}
       </td>
       <td className={cell}>{derived ? formatRelativeError(derived.relativeError) : ''}</td>

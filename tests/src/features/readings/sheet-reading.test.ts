@@ -76,9 +76,9 @@ describe('two people on one sheet', () => {
       [reading(1, 10), reading(2, 20), reading(3, 30), reading(4, 40), reading(6, 60)],
     );
     const words = (row: SheetRow | null, base: SheetRow | null | undefined) =>
-      rowParts(row, base)
+      rowParts(row, base, DEFAULT_SHEET_UNITS)
         .filter(({ change }) => change !== null)
-        .map(({ text, change }) => `${text} ${change}`.replace('\u00a0', ' ').trim());
+        .map(({ text, change }) => `${text} ${change}`.replaceAll('\u00a0', ' ').trim());
     expect(
       differences.map((found) => [
         found.spacing.split(' ')[0],
@@ -87,9 +87,9 @@ describe('two people on one sheet', () => {
         words(found.theirs, found.base),
       ]),
     ).toEqual([
-      ['1', 'me', ['V 11 was 10'], []],
-      ['2', 'them', [], ['V 21 was 20']],
-      ['3', 'both', ['V 31 was 30'], ['V 32 was 30']],
+      ['1', 'me', ['V 11 mV was 10 mV'], []],
+      ['2', 'them', [], ['V 21 mV was 20 mV']],
+      ['3', 'both', ['V 31 mV was 30 mV'], ['V 32 mV was 30 mV']],
       ['4', 'them', [], ['not there taken out']],
       ['6', 'them', [], ['left out: wet was kept']],
       ['5', 'them', [], ['added']],
@@ -99,7 +99,9 @@ describe('two people on one sheet', () => {
   it('tell of no change where the revision before is not known', () => {
     const { differences } = compareSheets([reading(1, 11)], [reading(1, 10)], DEFAULT_SHEET_UNITS);
     expect(differences[0]).toMatchObject({ base: undefined, changedBy: null });
-    expect(rowParts(differences[0]!.mine, undefined).map(({ change }) => change)).toEqual([null, null]);
+    expect(
+      rowParts(differences[0]!.mine, undefined, DEFAULT_SHEET_UNITS).map(({ change }) => change),
+    ).toEqual([null, null]);
   });
 
   it('pair repeats of one spacing in their order', () => {
