@@ -2,17 +2,21 @@ import type { ReadingCheck } from '../../../server/contract/readings';
 import { formatCount } from '../../ui/format';
 
 interface CheckListProps {
+  /** How many readings were looked at. */
+  readings: number;
   checks: readonly Pick<ReadingCheck, 'rows' | 'message' | 'rule' | 'source'>[];
   onJump?: (row: number) => void;
 }
 
 /** Doubts that alter nothing: each with the rule it follows and where the rule comes from. */
-export function CheckList({ checks, onJump }: CheckListProps) {
+export function CheckList({ readings, checks, onJump }: CheckListProps) {
   return (
     <section aria-label="Checks">
       <h2 className="mb-2 font-semibold">Checks</h2>
       {checks.length === 0 ? (
-        <p className="text-muted">No check has anything to say about these readings.</p>
+        <p className="text-muted">
+          {readings === 0 ? 'No reading to check yet.' : 'No check has anything to say about these readings.'}
+        </p>
       ) : (
         <>
           <p className="text-sm text-muted">

@@ -108,7 +108,7 @@ export function FieldSheetView({ sounding, fieldSheet, keeper }: FieldSheetViewP
         </div>
         <div className="flex min-w-0 flex-col gap-6">
           <SheetCurve sounding={sounding} readings={settled} onFocusRow={setCurrentRow} />
-          <CheckList checks={checks} onJump={jumpToRow} />
+          <CheckList readings={settled.length} checks={checks} onJump={jumpToRow} />
           <RevisionList sounding={sounding} sheet={sheet} />
         </div>
       </div>

@@ -58,7 +58,7 @@ export function ImportPreviewView(props: ImportPreviewViewProps) {
       ) : null}
       <ImportFaults faults={faults} />
       <ImportTable preview={preview} spreadType={spreadType} onMapping={onMapping} />
-      {checks.length > 0 ? <CheckList checks={checks} /> : null}
+      {checks.length > 0 ? <CheckList readings={preview.readings.length} checks={checks} /> : null}
     </div>
   );
 }

@@ -60,7 +60,7 @@ export function RevisionDialog({ revisionId, sounding, sheet, onClose }: Revisio
         {(loaded) => (
           <div className="flex flex-col gap-5">
             <RevisionTable revision={loaded} sounding={sounding} />
-            <CheckList checks={loaded.checks} />
+            <CheckList readings={loaded.readings.length} checks={loaded.checks} />
           </div>
         )}
       </QueryView>
