@@ -5,7 +5,7 @@ import { MarkGlyph } from '../../ui/mark-glyph';
 import { TONE_TEXT } from '../../ui/state-mark';
 import { classNames } from '../../ui/class-names';
 import type { PlanItem } from './plan-items';
-import type { LabelPlace } from './plan-layout';
+import type { LabelPlace } from './plan-labels';
 
 interface PlanMarkProps {
   item: PlanItem;
@@ -50,9 +50,10 @@ export function PlanMark({ item, x, y, isTabStop, onFocus, onKeyDown, label }: P
           </g>
         )}
       </g>
+      {label?.isFar ? <path d={leaderPath(x, y, label.dy)} className="fill-none stroke-edge" /> : null}
       <text
         x={x + (label?.dx ?? 0)}
-        y={y + (label?.dy ?? -12)}
+        y={y + (label?.dy ?? -14)}
         textAnchor={label?.anchor ?? 'middle'}
         strokeWidth="3"
         paintOrder="stroke"
@@ -66,3 +67,9 @@ export function PlanMark({ item, x, y, isTabStop, onFocus, onKeyDown, label }: P
     </Link>
   );
 }
+
+/** From the rim of the mark to the name above or below it. */
+const leaderPath = (x: number, y: number, dy: number): string =>
+  dy < 0
+    ? `M${x.toFixed(1)} ${(y - 7).toFixed(1)}V${(y + dy + 4).toFixed(1)}`
+    : `M${x.toFixed(1)} ${(y + 7).toFixed(1)}V${(y + dy - 12).toFixed(1)}`;

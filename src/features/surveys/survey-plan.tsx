@@ -1,7 +1,8 @@
 import { useMemo, useRef, useState, type KeyboardEvent } from 'react';
 import { useBoxSize } from '../../charts/use-box-size';
 import { withUnit } from '../../ui/format';
-import { alongLine, placeLabels, planLayout } from './plan-layout';
+import { placeLabels } from './plan-labels';
+import { alongLine, planLayout } from './plan-layout';
 import { PlanMark } from './plan-mark';
 import type { PlanItem } from './plan-items';
 

@@ -1,5 +1,6 @@
 import { describe, expect, it } from 'vitest';
-import { alongLine, placeLabels, planLayout, roundDown } from '../../../../src/features/surveys/plan-layout';
+import { placeLabels } from '../../../../src/features/surveys/plan-labels';
+import { alongLine, planLayout, roundDown } from '../../../../src/features/surveys/plan-layout';
 import { progressSteps } from '../../../../src/features/surveys/progress-steps';
 import { waitingQuestions } from '../../../../src/features/surveys/waiting-questions';
 
@@ -70,6 +71,25 @@ describe('the plan', () => {
       name: `S-${i}`,
     }));
     expect(placeLabels(crowd)[12]).toBeNull();
+  });
+
+  it('names a sounding, the borehole at its place and its neighbours on both sides', () => {
+    const line = [0, 27, 54, 81, 108].map((x, i) => ({ x, y: 100, name: `S-0${i}` }));
+    const places = placeLabels([...line, { x: 54, y: 98, name: 'BH-1' }]);
+    expect(places.every((found) => found !== null)).toBe(true);
+    expect([places[2], places[5]].map((found) => found?.isFar)).toEqual([false, false]);
+  });
+
+  it('leads to no far name through a nearer one', () => {
+    const around = [
+      { x: 75, y: 100, name: '' },
+      { x: 125, y: 100, name: '' },
+      { x: 100, y: 124, name: '' },
+    ];
+    const mark = { x: 100, y: 100, name: 'S-01' };
+    const beside = { x: 60, y: 82, name: 'S-23456' };
+    expect(placeLabels([mark, ...around])[0]).toMatchObject({ dx: 0, dy: -14 });
+    expect(placeLabels([beside, mark, ...around])[1]).toBeNull();
   });
 });
 
