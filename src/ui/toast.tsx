@@ -25,6 +25,9 @@ function ToastList() {
     <Primitive.Root
       key={toast.id}
       toast={toast}
+      // it tells and asks nothing, so it is no dialog
+      role={toast.priority === 'high' ? 'alert' : 'status'}
+      aria-modal={undefined}
       swipeDirection="right"
       className={classNames(
         'rounded border border-l-4 border-rule bg-sheet text-ink shadow-lift transition-opacity',
