@@ -45,8 +45,9 @@ export function InvitationForm({ token, offer }: InvitationFormProps) {
       <div className="flex flex-col gap-2">
         <p>
           {offer.invitedBy} invites you to <b>{offer.surveyName}</b> as{' '}
-          <b>{ROLE_LABELS[offer.role].toLowerCase()}</b>: {ROLE_NOTES[offer.role]}.
+          <b>{ROLE_LABELS[offer.role].toLowerCase()}</b>.
         </p>
+        <p className="text-muted">What this role does: {ROLE_NOTES[offer.role]}.</p>
         <p className="text-muted">
           For {offer.email}, open until {formatDay(offer.expiresAt)}.{' '}
           {isNew

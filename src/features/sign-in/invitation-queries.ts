@@ -8,4 +8,5 @@ export const invitationOfferQuery = (token: string) =>
     queryFn: ({ signal }) =>
       getJson(`/invitations/${encodeURIComponent(token)}`, invitationOfferSchema, { signal }),
     staleTime: Infinity,
+    gcTime: 0,
   });

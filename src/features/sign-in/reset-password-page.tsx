@@ -38,12 +38,7 @@ export function ResetPasswordPage() {
         onSubmit={(event) => void form.handleSubmit((values) => reset.mutate(values))(event)}
       >
         <FormErrors faults={formFaults(reset.error, { newPassword: 'New password' })} />
-        {isSpent ? (
-          <p>
-            This link was used already or is older than one hour.{' '}
-            <Link to={addressOf('forgotPassword')}>Ask for a new letter</Link>
-          </p>
-        ) : null}
+        {isSpent ? <Link to={addressOf('forgotPassword')}>Ask for a new letter</Link> : null}
         <Field
           label="New password"
           hint="At least 12 characters"

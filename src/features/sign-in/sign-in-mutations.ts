@@ -37,12 +37,12 @@ export const useResetPassword = (token: string) =>
 
 export function useAcceptInvitation(token: string) {
   const client = useQueryClient();
-  const forget = useForgetSession();
   return useMutation({
     mutationFn: (body: z.output<typeof acceptInvitationSchema>) =>
       sendJson('POST', `/invitations/${encodeURIComponent(token)}/acceptance`, body, meSchema),
     onSuccess: (me) => {
-      forget();
+      // the offer on screen stays until the page is left: asked for again it would be found spent
+      client.removeQueries({ type: 'inactive' });
       client.setQueryData(meKey, me);
     },
   });
