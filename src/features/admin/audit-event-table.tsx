@@ -23,7 +23,7 @@ export function AuditEventTable() {
                 <HeaderCell>When</HeaderCell>
                 <HeaderCell>Who</HeaderCell>
                 <HeaderCell>What</HeaderCell>
-                <HeaderCell>On</HeaderCell>
+                <HeaderCell className="hidden sm:table-cell">On</HeaderCell>
                 <HeaderCell className="hidden md:table-cell">Details</HeaderCell>
               </TableHead>
               <TableBody>
@@ -31,8 +31,11 @@ export function AuditEventTable() {
                   <TableRow key={event.id}>
                     <Cell className="figure whitespace-nowrap">{formatMoment(event.at)}</Cell>
                     <Cell className="whitespace-nowrap">{event.actorName ?? 'the system'}</Cell>
-                    <Cell className="figure">{event.action}</Cell>
-                    <Cell className="min-w-48 wrap-anywhere">{event.subject}</Cell>
+                    <Cell className="wrap-anywhere sm:whitespace-nowrap">
+                      <span className="figure">{event.action}</span>
+                      <span className="block text-muted sm:hidden">{event.subject}</span>
+                    </Cell>
+                    <Cell className="hidden min-w-48 wrap-anywhere sm:table-cell">{event.subject}</Cell>
                     <Cell className="hidden min-w-64 wrap-anywhere text-muted md:table-cell">
                       {detailsInWords(event.details)}
                     </Cell>
@@ -40,7 +43,7 @@ export function AuditEventTable() {
                 ))}
               </TableBody>
             </Table>
-            <Pager page={page} pageSize={pageSize} total={total} what="events" onPage={setPage} />
+            <Pager page={page} pageSize={pageSize} total={total} what="event" onPage={setPage} />
           </>
         )
       }

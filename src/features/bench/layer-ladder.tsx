@@ -22,7 +22,9 @@ export function LayerLadder({ counts, onTakeUp, onAdopt }: LayerLadderProps) {
         <TableHead>
           <HeaderCell numeric>Beds</HeaderCell>
           <HeaderCell numeric>χ²/N</HeaderCell>
-          <HeaderCell numeric>BIC</HeaderCell>
+          <HeaderCell numeric className="hidden sm:table-cell">
+            BIC
+          </HeaderCell>
           <HeaderCell>Within noise</HeaderCell>
           <HeaderCell>
             <span className="sr-only">Take up</span>
@@ -33,7 +35,9 @@ export function LayerLadder({ counts, onTakeUp, onAdopt }: LayerLadderProps) {
             <TableRow key={count.layers} selected={count.chosen}>
               <Cell numeric>{count.layers}</Cell>
               <Cell numeric>{formatMisfit(count.chi2PerReading)}</Cell>
-              <Cell numeric>{formatFixed(count.bic, 1)}</Cell>
+              <Cell numeric className="hidden sm:table-cell">
+                {formatFixed(count.bic, 1)}
+              </Cell>
               <Cell>{NOISE_WORDS[`${count.withinNoise}`]}</Cell>
               <Cell className="text-right whitespace-nowrap">
                 {count.chosen ? (

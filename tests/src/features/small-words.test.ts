@@ -22,6 +22,8 @@ it('tells the details of an event in words', () => {
     'role guest; fields name, note',
   );
   expect(detailsInWords({ runId: '55b9ee2e-1e86-404e-a67f-aca37524c81a' })).toBe('run 55b9ee2e');
+  expect(detailsInWords({ to: 'lead', from: 'guest' })).toBe('from guest; to lead');
+  expect(detailsInWords({ newAccount: true })).toBe('new account yes');
 });
 
 it('takes the water level that was measured last, in whatever order they were written', () => {
