@@ -51,17 +51,22 @@ const DOCS_PAGE = page(
 );
 
 // a file of its own, because the content security policy allows no script inside a page
-const DOCS_SCRIPT = `SwaggerUIBundle({ url: '/api/openapi.json', dom_id: '#docs', deepLinking: true });
+const DOCS_SCRIPT = `const dark = matchMedia('(prefers-color-scheme: dark)');
+const show = () => document.documentElement.classList.toggle('dark-mode', dark.matches);
+dark.addEventListener('change', show);
+show();
+SwaggerUIBundle({ url: '/api/openapi.json', dom_id: '#docs', deepLinking: true });
 `;
 
 const WHAT_TO_DO: Record<ErrorCode, string> = {
   'bad-request': 'Correct the form of the request: its JSON, its file part or its headers.',
-  invalid: 'Correct the values that `faults` names; each tells where, what was found and what is allowed.',
+  invalid:
+    'Correct the values that <code>faults</code> names; each tells where, what was found and what is allowed.',
   unauthenticated: 'Sign in; a session ends after its time or when it is signed out.',
   forbidden: 'Ask a lead of the survey for another role, or send the change from a page of this server.',
   'not-found': 'Check the address. What you are no member of is not found either.',
   conflict:
-    'Compare your change with `current`, the row as it now stands, and send it again with that version.',
+    'Compare your change with <code>current</code>, the row as it now stands, and send it again with that version.',
   'already-exists': 'Choose another name or address.',
   'wrong-state': 'Look at the state of the thing; the sentence says what would have to come first.',
   'version-required': 'Send the ETag of the row you edited in If-Match.',
@@ -79,7 +84,10 @@ function problemsPage(): string {
   );
   return page(
     'Layerwell: problem codes',
-    '<style>body{font:16px/1.5 "IBM Plex Sans",sans-serif;max-width:44rem;margin:2rem auto;padding:0 1rem}</style>',
+    `<style>
+:root{color-scheme:light dark;background:light-dark(#f7f5f0,#141a1e);color:light-dark(#1d2a33,#ebe6db)}
+body{font:16px/1.5 "IBM Plex Sans",sans-serif;max-width:44rem;margin:2rem auto;padding:0 1rem}
+</style>`,
     `<h1>Problem codes</h1>
 <p>Every failure is a problem detail (RFC 9457); its <code>code</code> is one of these.</p>
 ${items.join('\n')}`,
