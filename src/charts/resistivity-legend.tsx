@@ -33,7 +33,7 @@ export function ResistivityLegend({ className }: { className?: string }) {
               className={classNames(
                 'flex w-0 whitespace-nowrap',
                 PLACE[index] ?? 'justify-center',
-                index === 3 && 'invisible @2xs:visible',
+                index === 3 && 'invisible @3xs:visible',
               )}
             >
               {mark}

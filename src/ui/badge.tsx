@@ -14,7 +14,7 @@ export function Badge({ tone = 'neutral', children }: { tone?: Tone; children: R
   return (
     <span
       className={classNames(
-        'inline-flex items-center rounded-sm border px-1.5 text-xs leading-5 whitespace-nowrap',
+        'inline-flex items-center align-middle rounded-sm border px-1.5 text-xs leading-5 whitespace-nowrap',
         TONE[tone],
       )}
     >

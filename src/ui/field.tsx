@@ -59,7 +59,7 @@ export function Field({
           </p>
         ) : null}
         {invalid ? (
-          <p id={`${id}-error`} role="alert" className="text-sm text-rust">
+          <p id={`${id}-error`} role="alert" className="text-sm text-rust first-letter:uppercase">
             {error}
           </p>
         ) : null}

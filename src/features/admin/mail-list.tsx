@@ -45,7 +45,7 @@ export function MailList() {
                   </li>
                 ))}
               </ul>
-              <Pager page={page} pageSize={pageSize} total={total} what="letters" onPage={setPage} />
+              <Pager page={page} pageSize={pageSize} total={total} what="letter" onPage={setPage} />
             </>
           )}
         </div>

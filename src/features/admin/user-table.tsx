@@ -7,6 +7,7 @@ import { useMe } from '../../api/use-me';
 import { QueryView } from '../../app/query-view';
 import { Badge } from '../../ui/badge';
 import { Button } from '../../ui/button';
+import { classNames } from '../../ui/class-names';
 import { ConfirmDialog } from '../../ui/confirm-dialog';
 import { formatDay } from '../../ui/format';
 import { Notice } from '../../ui/notice';
@@ -45,7 +46,7 @@ export function UserTable() {
             </TableHead>
             <TableBody>
               {items.map((user) => (
-                <TableRow key={user.id} className={user.disabledAt ? 'text-muted' : undefined}>
+                <TableRow key={user.id} className={classNames('h-9.25', user.disabledAt && 'text-muted')}>
                   <Cell>
                     <span className="font-semibold">{user.name}</span>{' '}
                     {user.isAdmin ? <Badge>admin</Badge> : null}

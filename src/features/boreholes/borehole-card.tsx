@@ -24,7 +24,13 @@ export function BoreholeCard({ borehole, maxDepthM, onEdit }: BoreholeCardProps)
       <div className="flex items-start justify-between gap-3">
         <div className="min-w-0">
           <h2 className="text-lg font-semibold">{name}</h2>
-          <p className="text-sm text-muted">{facts(borehole)}</p>
+          <ul className="flex flex-wrap gap-x-4 text-sm text-muted">
+            {facts(borehole).map((fact) => (
+              <li key={fact} className="whitespace-nowrap">
+                {fact}
+              </li>
+            ))}
+          </ul>
         </div>
         {onEdit ? (
           <Button size="small" aria-label={`Edit ${name}`} onClick={onEdit}>
@@ -43,12 +49,12 @@ export function BoreholeCard({ borehole, maxDepthM, onEdit }: BoreholeCardProps)
   );
 }
 
-function facts({ depthM, drilledOn, xM, yM, elevationM }: Borehole): string {
+function facts({ depthM, drilledOn, xM, yM, elevationM }: Borehole): string[] {
   const parts = [`${metres(depthM)} deep`];
   if (drilledOn !== null) parts.push(`drilled ${formatDay(drilledOn)}`);
-  if (xM !== null && yM !== null) parts.push(`x ${coordinate(xM)}, y ${coordinate(yM)} m`);
-  if (elevationM !== null) parts.push(`elevation ${coordinate(elevationM)} m`);
-  return parts.join(' · ');
+  if (xM !== null && yM !== null) parts.push(`x ${coordinate(xM)}, y ${withUnit(coordinate(yM), 'm')}`);
+  if (elevationM !== null) parts.push(`elevation ${withUnit(coordinate(elevationM), 'm')}`);
+  return parts;
 }
 
 function WaterLevels({ borehole }: { borehole: Borehole }) {
@@ -56,7 +62,9 @@ function WaterLevels({ borehole }: { borehole: Borehole }) {
   if (levels.length === 0) return <p className="text-muted">No water level.</p>;
   return (
     <table className="w-full max-w-xs text-left">
-      <caption className="mb-1 text-left font-semibold">Water levels</caption>
+      <caption className="mb-1 text-left font-semibold">
+        Water levels <span className="font-normal text-muted">depth below ground</span>
+      </caption>
       <tbody>
         {levels.map(({ measuredOn, depthM }, i) => (
           <tr key={i} className="border-t border-rule">

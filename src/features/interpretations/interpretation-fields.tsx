@@ -20,7 +20,7 @@ export interface InterpretationFieldsProps {
 export function InterpretationFields({ form, run }: InterpretationFieldsProps) {
   const { errors } = form.formState;
   return (
-    <div className="flex min-w-0 flex-col gap-5">
+    <div className="flex max-w-4xl min-w-0 flex-col gap-5">
       <Field label="Title" required error={errors.title?.message}>
         <Input {...form.register('title')} />
       </Field>

@@ -56,7 +56,7 @@ function Soundings({ survey }: { survey: Survey }) {
                 page={page}
                 pageSize={pageSize}
                 total={total}
-                what="soundings"
+                what="sounding"
                 onPage={(next) => setSearch(writeListParams({ ...params, page: next }))}
               />
             </div>
