@@ -70,7 +70,7 @@ export function lineProblem(
     });
   });
   const ties = places.slice(1).map((place, s) => lateralTie(place.x - places[s]!.x, settings.lateral));
-  return { layers, nodes, ties };
+  return { layers, nodes, ties, known: { misfits: new WeakMap(), slopes: new WeakMap() } };
 }
 
 /**

@@ -8,9 +8,21 @@ export interface LineProblem {
   readonly layers: number;
   readonly nodes: readonly LayeredProblem[];
   readonly ties: readonly LateralTie[];
+  /** what is known of parameters that were computed before: a place that stands still is not computed again */
+  readonly known: {
+    readonly misfits: WeakMap<Float64Array, number>;
+    readonly slopes: WeakMap<Float64Array, LinearPlace>;
+  };
 }
 
-/** Free parameters, one array a node. */
+/** The own rows of a node at its parameters: a triangle with −r, Jᵀr and the squares of the columns of J. */
+export interface LinearPlace {
+  readonly node: ChainNode;
+  readonly gradient: Float64Array;
+  readonly squares: Float64Array;
+}
+
+/** Free parameters, one array a node; an array is never changed once it is made. */
 export type LineState = readonly Float64Array[];
 
 export interface LineMisfit {
@@ -32,12 +44,15 @@ export interface LinearLine {
 const tiedValuesOf = ({ nodes, layers }: LineProblem, state: LineState): Float64Array[] =>
   nodes.map((node, s) => tiedValues(node.expand(state[s]!), layers));
 
+function ownMisfit({ problem }: LayeredProblem, at: Float64Array, known: LineProblem['known']): number {
+  const misfit = known.misfits.get(at) ?? problem.evaluate(at, new Float64Array(problem.residuals));
+  known.misfits.set(at, misfit);
+  return misfit;
+}
+
 export function evaluateLine(problem: LineProblem, state: LineState): LineMisfit {
-  const { nodes, ties, layers } = problem;
-  const shares = new Float64Array(nodes.length);
-  nodes.forEach(
-    ({ problem: own }, s) => (shares[s] = own.evaluate(state[s]!, new Float64Array(own.residuals))),
-  );
+  const { nodes, ties, layers, known } = problem;
+  const shares = Float64Array.from(nodes, (node, s) => ownMisfit(node, state[s]!, known));
   const values = tiedValuesOf(problem, state);
   const residual = new Float64Array(2 * layers - 1);
   ties.forEach((tie, s) => {
@@ -48,8 +63,7 @@ export function evaluateLine(problem: LineProblem, state: LineState): LineMisfit
   return { objective: shares.reduce((sum, share) => sum + share, 0), shares };
 }
 
-/** J and −r of the own rows of a node side by side, reduced to a triangle, and its slopes. */
-function lineariseNode({ problem }: LayeredProblem, at: Float64Array) {
+function lineariseNode({ problem }: LayeredProblem, at: Float64Array): LinearPlace {
   const size = at.length;
   const width = size + 1;
   const residual = new Float64Array(problem.residuals);
@@ -85,12 +99,18 @@ function addSlopes(
   }
 }
 
+function linearPlace(node: LayeredProblem, at: Float64Array, known: LineProblem['known']): LinearPlace {
+  const place = known.slopes.get(at) ?? lineariseNode(node, at);
+  known.slopes.set(at, place);
+  return { ...place, gradient: place.gradient.slice(), squares: place.squares.slice() };
+}
+
 /** Columns of the full ln parameters that are free. */
 const freeColumns = ({ held }: LayeredProblem): number[] => held.flatMap((isHeld, j) => (isHeld ? [] : [j]));
 
 export function lineariseLine(problem: LineProblem, state: LineState): LinearLine {
   const { nodes, layers } = problem;
-  const own = nodes.map((node, s) => lineariseNode(node, state[s]!));
+  const own = nodes.map((node, s) => linearPlace(node, state[s]!, problem.known));
   const earths = nodes.map((node, s) => node.expand(state[s]!));
   const values = earths.map((earth) => tiedValues(earth, layers));
   const free = nodes.map(freeColumns);

@@ -25,6 +25,8 @@ const INITIAL_DAMPING = 0.1;
 const LOWEST_DAMPING = 1e-9;
 /** A parameter is damped as if its sensitivity were at least this share of the strongest one's of its node. */
 const SCALE_FLOOR = 0.1;
+/** A place that would move by no more than this share of the furthest move stands still. */
+const STILL = 1e-4;
 /** Overshoot of a node from which it is damped more, and up to which it is damped less. */
 const TOO_FAR = 0.5;
 const KEPT = 0.1;
@@ -88,16 +90,20 @@ function dampingRows(
   });
 }
 
-/** The state after a step within the bounds, the step as it was taken, and its largest part. */
+/**
+ * The state after a step within the bounds, the step as it was taken and its largest part. A place that would hardly move,
+ * compared with the one that moves most, stands still and need not be computed again.
+ */
 function move({ nodes }: LineProblem, state: LineState, step: readonly Float64Array[]) {
-  const moved = nodes.map(({ problem: { low, high } }, s) =>
+  const wanted = nodes.map(({ problem: { low, high } }, s) =>
     state[s]!.map((value, j) => Math.min(high[j]!, Math.max(low[j]!, value + step[s]![j]!))),
   );
-  const taken = moved.map((values, s) => values.map((value, j) => value - state[s]![j]!));
-  const furthest = taken.reduce(
-    (far, part) => part.reduce((most, value) => Math.max(most, Math.abs(value)), far),
-    0,
+  const far = wanted.map((values, s) =>
+    values.reduce((most, value, j) => Math.max(most, Math.abs(value - state[s]![j]!)), 0),
   );
+  const furthest = far.reduce((most, value) => Math.max(most, value), 0);
+  const moved = wanted.map((values, s) => (far[s]! <= STILL * furthest ? state[s]! : values));
+  const taken = moved.map((values, s) => values.map((value, j) => value - state[s]![j]!));
   return { moved, taken, furthest };
 }
 

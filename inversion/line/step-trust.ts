@@ -15,6 +15,9 @@ function promise(matrix: Float64Array, rows: number, step: ArrayLike<number>) {
   return { bend, change };
 }
 
+/** Below this share of the objective an excess is rounding. */
+const ROUNDING = 1e-13;
+
 /**
  * For each node how far its share of the objective came to stand above what the linear line promised, e, against what a step
  * can afford: e/(‖Jδ‖² + 2‖Dδ‖²), D the damping. As a damped step promises −‖Jδ‖² − 2‖Dδ‖² in all, the objective falls where
@@ -43,5 +46,6 @@ export function overshoots(
       excess[side]! -= change / 2;
     }
   });
-  return excess.map((value, s) => (value > 0 ? value / afford[s]! : Number.isNaN(value) ? Infinity : 0));
+  const blur = ROUNDING * before.objective;
+  return excess.map((value, s) => (value > blur ? value / afford[s]! : Number.isNaN(value) ? Infinity : 0));
 }
