@@ -25,11 +25,14 @@ const WHAT_IT_IS = {
     'The cells are a fixed grid: a boundary can only stand at one of its depths, and another ground with as few steps may fit as well.',
 } as const;
 
-const RANGES =
-  'The range of a cell holds only for a ground of this roughness: a sharper ground, such as a thin bed, may lie outside of it and fit as well.';
+/** Share of cells whose 95 % range held the truth: 60 noisy reference soundings of 2–5 sharp beds, every cell of the usual grid. */
+const HELD = { smooth: '66 %', stepped: '57 %' } as const;
+
+const ranges = (kind: keyof typeof HELD): string =>
+  `The range of a cell is what is left to doubt of a ground of this roughness alone. Sharp beds often lie outside of it: on trial soundings of 2 to 5 beds it held the truth in ${HELD[kind]} of the cells, not 95 %.`;
 
 /** Why no ground of flat cells comes down to the target. */
-function whyNot({ readings, readingFit, target }: SmoothWarningInput): string {
+function whyNot({ readings, readingFit, target, cellsAtBound }: SmoothWarningInput): string {
   const perReading = readingFit.chi2 / readings.length;
   const found = `The target of χ²/N ${threeDigits(target)} is out of reach; the closest ground of flat cells has ${threeDigits(perReading)}.`;
   const rises = steepRises(readings);
@@ -37,6 +40,8 @@ function whyNot({ readings, readingFit, target }: SmoothWarningInput): string {
     const pairs = rises.map(([from, to]) => `${from + 1} to ${to + 1}`).join(', ');
     return `${found} ρa rises faster than the spacing from ${rises.length === 1 ? 'reading' : 'readings'} ${pairs}, which no ground of flat beds does.`;
   }
+  if (cellsAtBound.length > 0)
+    return `${found} The bounds of resistivity hold ${cellsAtBound.length === 1 ? 'a cell' : `${cellsAtBound.length} cells`} back.`;
   const far = readingFit.residuals.flatMap((r, i) => (Math.abs(r) > FAR_OFF ? [i + 1] : []));
   if (far.length > 0)
     return `${found} Furthest from it ${far.length === 1 ? 'is reading' : 'are readings'} ${far.join(', ')}: misread values, shifts between branches of MN, or ground that is not flat.`;
@@ -57,5 +62,5 @@ export function smoothWarnings(input: SmoothWarningInput): string[] {
     sentences.push(
       `${input.cellsAtBound.length === 1 ? 'Cell' : 'Cells'} ${input.cellsAtBound.join(', ')} ended on a bound of resistivity; a closer fit may lie beyond it.`,
     );
-  return [...sentences, RANGES];
+  return [...sentences, ranges(input.kind)];
 }

@@ -25,6 +25,7 @@ export interface InversionCase {
   id: string;
   layers: number;
   relative_error: number;
+  true: { rho: number[]; thickness: number[] };
   best_chi2_per_datum: number;
   readings: { halfAB: number; halfMN: number; rhoa: number }[];
 }
