@@ -1,4 +1,5 @@
-/** A positive number for a sentence: three digits, whole from 1000 up. */
+/** A positive number for a sentence, three significant digits, as the tables write it. */
 export function threeDigits(value: number): string {
-  return value >= 999.5 ? String(Math.round(value)) : value.toPrecision(3);
+  const text = value.toPrecision(3);
+  return value >= 999.5 ? String(Number(text)) : text;
 }

@@ -3,7 +3,7 @@
  *
  * Units: lengths m, resistivity Ω·m, conductance S, errors relative (0.03 = 3 %).
  * Matrices are row-major Float64Array. residualᵢ = (ln predictedᵢ − ln observedᵢ)/σᵢ;
- * `jacobian[i * n + j]` = ∂residualᵢ/∂parameterⱼ. Parameters are lnρ₁…lnρ_N, lnh₁…lnh_{N−1}.
+ * `jacobian[i * n + j]` = ∂residualᵢ/∂parameterⱼ. Parameters are lnρ₁…lnρ_N, lnh₁…lnh_{N−1}, then ln shifts of branches.
  * Inputs are never mutated; the same input gives the same bits.
  */
 
@@ -41,6 +41,8 @@ export interface Reading {
   readonly apparentResistivity: number;
   /** standard error of ln ρa, > 0 */
   readonly relativeError: number;
+  /** name of the group, such as an MN, that may stand shifted as a whole */
+  readonly branch?: string | undefined;
 }
 
 /** Closed interval [low, high]; null = unbounded on that side. */
@@ -59,19 +61,66 @@ export interface FixedParameter {
   readonly value: number;
 }
 
+/** What is known beforehand of a value or of the depth of the base of layer `index`, as a Gaussian. */
+export interface GaussianPrior {
+  readonly on: 'resistivity' | 'thickness' | 'depth';
+  readonly index: number;
+  /** Ω·m or m */
+  readonly value: number;
+  /** standard deviation: of the logarithm for resistivity and thickness, in m for a depth */
+  readonly sigma: number;
+}
+
+/** Few free layers; the smoothest of many; many with few steps. */
+export type FitKind = 'layered' | 'smooth' | 'stepped';
+
 export interface FitSettings {
-  readonly kind: 'layered';
+  readonly kind: FitKind;
+  /** layered: a count, or 'auto' for the fewest within the noise; smooth and stepped: cells, 'auto' for the usual grid */
   readonly layers: number | 'auto';
   readonly seed: number;
   readonly bounds: FitBounds;
   readonly fixed: readonly FixedParameter[];
+  readonly priors: readonly GaussianPrior[];
+  /** standard deviation of the ln shift of each branch but the one with most readings; absent = no shifts */
+  readonly branchShiftSigma?: number | undefined;
+  /** lets readings far off the ground count for less */
+  readonly outlierTolerant: boolean;
+  /** χ²/N that a smooth or stepped fit aims at; absent = 1 */
+  readonly targetMisfit?: number | undefined;
   /** a model to start from, beside the seeded starts */
   readonly start?: LayeredEarth | undefined;
 }
 
 /** Why a fit stopped; the sentences stand in `fit/fit-status.ts`. */
 export type FitStatus =
-  'converged-gradient' | 'converged-step' | 'converged-decrease' | 'iteration-limit' | 'no-descent';
+  | 'converged-gradient'
+  | 'converged-step'
+  | 'converged-decrease'
+  | 'iteration-limit'
+  | 'no-descent'
+  | 'target-reached'
+  | 'target-out-of-reach';
+
+/** The factor by which the readings of a branch stand above what the ground of the whole fit gives. */
+export interface BranchShift {
+  branch: string;
+  readings: number;
+  factor: number;
+  /** 95 % of the factor */
+  interval: [number, number];
+  /** true for the branch that the others are measured by */
+  held: boolean;
+}
+
+/** A reading that an outlier-tolerant fit lets count for less than half. */
+export interface DownWeighted {
+  /** in the list of readings, from 0 */
+  index: number;
+  residual: number;
+  /** 1 = counted in full */
+  weight: number;
+}
 
 /** One layer count of an automatic choice. */
 export interface LayerCountFit {
@@ -118,8 +167,16 @@ export interface FitResult {
   darZarrouk: DarZarroukSummary;
   warnings: string[];
   layerCounts: LayerCountFit[] | null;
+  /** of a layered fit with a stated count: how well one layer fewer does, found by a short search; else null */
+  oneFewer: { layers: number; chi2PerReading: number; withinNoise: boolean | null } | null;
+  /** smooth and stepped: whether χ²/N came down to the target; null for a layered fit */
+  reachedTarget: boolean | null;
+  shifts: BranchShift[];
+  downWeighted: DownWeighted[];
   starts: number;
   iterations: number;
+  /** damping of the last step; null in results of engines that did not tell it */
+  damping: number | null;
   engine: string;
 }
 

@@ -81,6 +81,8 @@ function reportFits(): void {
       seed: 1,
       bounds: { resistivity: [0.1, 1e5], thickness: [0.02, 1000] },
       fixed: [],
+      priors: [],
+      outlierTolerant: false,
     });
     return (fit.chi2PerReading - 0.02) / one.best_chi2_per_datum;
   });

@@ -1,27 +1,31 @@
+import { exp } from '../math/exponential';
 import type { EarthModel, FixedParameter } from '../types';
 import { logCovariance } from '../uncertainty/covariance';
 import { Z95, type AllowedModel } from '../uncertainty/parameter-doubt';
 import type { ResidualSystem } from './residual-system';
 
-/** ln parameters of a model and its χ². */
+/** Parameters of a model, ln values then shifts, and Σ residual² with its penalties. */
 export interface FittedModel {
-  readonly logParameters: Float64Array;
+  readonly parameters: Float64Array;
   readonly chi2: number;
 }
 
-/** Two models count as one when no ln parameter differs by more than this. */
+/** Two models count as one when no parameter differs by more than this. */
 const SAME_MODEL = 0.02;
 
-/** The earth of ln parameters; a fixed value is given back as it was stated, not through exp(ln v). */
-export function earthOf(logParameters: Float64Array, fixed: readonly FixedParameter[]): EarthModel {
-  const layers = (logParameters.length + 1) / 2;
-  const values = Array.from(logParameters, Math.exp);
+/** The earth of the first 2N − 1 parameters; a fixed value is given back as it was stated, not through exp(ln v). */
+export function earthOf(
+  parameters: Float64Array,
+  layers: number,
+  fixed: readonly FixedParameter[] = [],
+): EarthModel {
+  const values = Array.from(parameters.subarray(0, 2 * layers - 1), exp);
   for (const { on, index, value } of fixed) values[on === 'resistivity' ? index : layers + index] = value;
   return { resistivity: values.slice(0, layers), thickness: values.slice(layers) };
 }
 
 function same(a: FittedModel, b: FittedModel): boolean {
-  return a.logParameters.every((value, j) => Math.abs(value - b.logParameters[j]!) <= SAME_MODEL);
+  return a.parameters.every((value, j) => Math.abs(value - b.parameters[j]!) <= SAME_MODEL);
 }
 
 /**
@@ -32,24 +36,24 @@ export function allowedModels(
   best: FittedModel,
   others: readonly FittedModel[],
   system: ResidualSystem,
+  layers: number,
   held: readonly boolean[],
   fixed: readonly FixedParameter[],
 ): [AllowedModel, ...AllowedModel[]] {
-  const m = system.readings;
-  const residual = new Float64Array(m);
-  const jacobian = new Float64Array(m * held.length);
-  const describe = ({ logParameters, chi2 }: FittedModel): AllowedModel => {
-    const earth = earthOf(logParameters, fixed);
-    system.linearise(logParameters, earth.resistivity.length, residual, jacobian);
+  const residual = new Float64Array(system.rows);
+  const jacobian = new Float64Array(system.rows * held.length);
+  const describe = ({ parameters, chi2 }: FittedModel): AllowedModel => {
+    system.linearise(parameters, layers, residual, jacobian);
     return {
-      earth,
-      covariance: logCovariance(jacobian, m, held),
+      parameters,
+      earth: earthOf(parameters, layers, fixed),
+      covariance: logCovariance(jacobian, system.rows, held),
       excess: Math.max(0, chi2 - best.chi2),
     };
   };
   const kept: FittedModel[] = [best];
   for (const other of others.toSorted((a, b) => a.chi2 - b.chi2))
-    if (other.chi2 - best.chi2 < Z95 ** 2 && !kept.some((one) => same(one, other))) kept.push(other);
+    if (other.chi2 - best.chi2 < Z95 * Z95 && !kept.some((one) => same(one, other))) kept.push(other);
   return [describe(best), ...kept.slice(1).map(describe)];
 }
 
@@ -58,11 +62,11 @@ export function standsApart([best, ...others]: readonly [
   AllowedModel,
   ...AllowedModel[],
 ]): AllowedModel | null {
-  const of = ({ earth }: AllowedModel) => [...earth.resistivity, ...earth.thickness].map(Math.log);
-  const centre = of(best);
   return (
     others.find((other) =>
-      of(other).some((value, j) => Math.abs(value - centre[j]!) > Z95 * best.covariance.deviation[j]!),
+      other.parameters.some(
+        (value, j) => Math.abs(value - best.parameters[j]!) > Z95 * best.covariance.deviation[j]!,
+      ),
     ) ?? null
   );
 }

@@ -76,10 +76,49 @@ function requireFixed({ fixed, layers, bounds }: FitSettings): void {
   });
 }
 
-/** Throws `InversionError` with the path of the first input that a layered fit cannot use. */
-export function requireFitInput(readings: readonly Reading[], settings: FitSettings): void {
+function requirePriors({ priors, layers }: FitSettings): void {
+  priors.forEach(({ on, index, value, sigma }, i) => {
+    const path = ['settings', 'priors', i];
+    const refuse = (message: string, field?: string) => {
+      throw new InversionError('prior', message, field === undefined ? path : [...path, field]);
+    };
+    if (layers === 'auto') return refuse('a prior needs a stated layer count');
+    const count = on === 'resistivity' ? layers : layers - 1;
+    if (!(Number.isInteger(index) && index >= 0 && index < count))
+      return refuse(
+        count > 0
+          ? `${on} index of the prior is ${index}; it must be a whole number from 0 to ${count - 1}`
+          : `a model of one layer has no ${on} to know beforehand`,
+        'index',
+      );
+    for (const [field, number] of [
+      ['value', value],
+      ['sigma', sigma],
+    ] as const)
+      if (!(number > 0 && Number.isFinite(number)))
+        refuse(`${field} of the prior is ${number}; it must be a number above 0`, field);
+  });
+}
+
+function requireBranchShiftSigma({ branchShiftSigma }: FitSettings): void {
+  if (branchShiftSigma !== undefined && !(branchShiftSigma > 0 && branchShiftSigma <= 1))
+    throw new InversionError(
+      'branch-shift',
+      `branchShiftSigma is ${branchShiftSigma}; it must be above 0 and at most 1`,
+      ['settings', 'branchShiftSigma'],
+    );
+}
+
+/** Throws `InversionError` with the path of the first input that no kind of fit can use. */
+export function requireReadingsAndBounds(readings: readonly Reading[], settings: FitSettings): void {
   requireReadings(readings);
   requireBounds(settings);
+  requireBranchShiftSigma(settings);
+}
+
+/** Throws `InversionError` with the path of the first input that a layered fit cannot use. */
+export function requireFitInput(readings: readonly Reading[], settings: FitSettings): void {
+  requireReadingsAndBounds(readings, settings);
   const { layers } = settings;
   if (layers !== 'auto' && !(Number.isInteger(layers) && layers >= 1 && layers <= MOST_LAYERS))
     throw new InversionError('layer-count', `layers is ${layers}; it must be 1 to ${MOST_LAYERS} or "auto"`, [
@@ -87,5 +126,6 @@ export function requireFitInput(readings: readonly Reading[], settings: FitSetti
       'layers',
     ]);
   requireFixed(settings);
+  requirePriors(settings);
   requireStart(settings);
 }

@@ -6,9 +6,9 @@ import { earthOf, type FittedModel } from './allowed-models';
 import { MOST_LAYERS, requireFitInput } from './check-fit-input';
 import { buildFitResult } from './fit-result';
 import { aicc, bic, chooseLayerCount, countDoubt, withinNoise } from './layer-count';
-import { createLayeredProblem } from './layered-problem';
+import { createLayeredProblem, type LayeredProblem } from './layered-problem';
 import { multiStart, scoutFit, type MultiStartOutcome } from './multi-start';
-import { createResidualSystem, type ResidualSystem } from './residual-system';
+import { createResidualSystem, type ReadingFit, type ResidualSystem } from './residual-system';
 import { soundingCurve, type SoundingCurve } from './starting-models';
 
 export interface FitOptions {
@@ -19,11 +19,11 @@ export interface FitOptions {
 }
 
 interface CountFit {
-  readonly layers: number;
+  readonly layered: LayeredProblem;
   readonly outcome: MultiStartOutcome;
-  readonly logParameters: Float64Array;
+  readonly best: FittedModel;
   readonly others: readonly FittedModel[];
-  readonly held: readonly boolean[];
+  readonly readingFit: ReadingFit;
 }
 
 /**
@@ -41,30 +41,38 @@ export function fitLayered(
   requireFitInput(readings, settings);
   const spreads = readings.map((reading) => reading.spread);
   const operator = options.operators?.operatorFor(spreads) ?? createForwardOperator(spreads);
-  const system = createResidualSystem(operator, readings);
+  const system = createResidualSystem(operator, readings, settings);
   const curve = soundingCurve(readings);
   const most =
     settings.layers === 'auto'
       ? Math.min(MOST_LAYERS, Math.max(1, Math.floor((readings.length + 1) / 2)))
       : settings.layers;
-  const scouts = scoutModels(system, curve, settings, most - 1);
+  // what is known beforehand speaks of the stated count alone
+  const scouts = scoutModels(
+    createResidualSystem(operator, readings, { ...settings, priors: [] }),
+    curve,
+    settings,
+    most - 1,
+  );
   const fits: CountFit[] = [];
   for (let layers = settings.layers === 'auto' ? 1 : most; layers <= most; layers++) {
-    const layered = createLayeredProblem(system, layers, settings.bounds, settings.fixed);
+    const layered = createLayeredProblem(system, layers, settings, settings.branchShiftSigma);
     const outcome = multiStart(layered, curve, createRandomStream(settings.seed), {
       userStart: settings.start?.resistivity.length === layers ? settings.start : undefined,
-      fewer: scouts[layers - 2],
+      fewer: scouts[layers - 2]?.logEarth,
       onProgress: options.onProgress,
     });
+    const fitted = ({ parameters, chi2 }: FittedModel): FittedModel => ({
+      parameters: layered.expand(parameters),
+      chi2,
+    });
+    const best = fitted(outcome);
     fits.push({
-      layers,
+      layered,
       outcome,
-      logParameters: layered.expand(outcome.parameters),
-      others: outcome.others.map(({ parameters, chi2 }) => ({
-        logParameters: layered.expand(parameters),
-        chi2,
-      })),
-      held: layered.held,
+      best,
+      others: outcome.others.map(fitted),
+      readingFit: system.describe(best.parameters, layers),
     });
   }
   const rows = fits.map((fit) => describeCount(fit, readings.length));
@@ -76,7 +84,9 @@ export function fitLayered(
     system,
     ...chosen,
     status: chosen.outcome.status,
+    damping: chosen.outcome.damping,
     layerCounts: settings.layers === 'auto' ? rows.map((row, i) => ({ ...row, chosen: i === index })) : null,
+    oneFewer: settings.layers === 'auto' ? null : (scouts.at(-1)?.fit ?? null),
     starts: fits.reduce((sum, fit) => sum + fit.outcome.starts, 0),
     iterations: fits.reduce((sum, fit) => sum + fit.outcome.iterations, 0),
   });
@@ -85,31 +95,54 @@ export function fitLayered(
     : result;
 }
 
-/** ln parameters of quick fits with 1 … `most` layers, each grown from the one before; they start the shown fits. */
+/** A quick fit that starts the next count, and how well it does: as it is short, the best of its count can only be better. */
+interface Scout {
+  readonly logEarth: Float64Array;
+  readonly fit: NonNullable<FitResult['oneFewer']>;
+}
+
+/** Quick fits with 1 … `most` layers, each grown from the one before; they start the shown fits. */
 function scoutModels(
   system: ResidualSystem,
   curve: SoundingCurve,
   settings: FitSettings,
   most: number,
-): Float64Array[] {
-  const models: Float64Array[] = [];
+): Scout[] {
+  const scouts: Scout[] = [];
   for (let layers = 1; layers <= most; layers++) {
-    const layered = createLayeredProblem(system, layers, settings.bounds, []);
-    models.push(layered.expand(scoutFit(layered, curve, models.at(-1)).parameters));
+    const layered = createLayeredProblem(
+      system,
+      layers,
+      { ...settings, fixed: [], priors: [] },
+      settings.branchShiftSigma,
+    );
+    const { parameters } = scoutFit(layered, curve, scouts.at(-1)?.logEarth);
+    const all = layered.expand(parameters);
+    const { chi2 } = system.describe(all, layers);
+    scouts.push({
+      logEarth: all.subarray(0, 2 * layers - 1),
+      fit: {
+        layers,
+        chi2PerReading: chi2 / system.readings,
+        withinNoise: withinNoise(chi2, all.length, system.readings),
+      },
+    });
   }
-  return models;
+  return scouts;
 }
 
-function describeCount({ layers, outcome, logParameters }: CountFit, readings: number): LayerCountFit {
-  const parameters = 2 * layers - 1;
+function describeCount({ layered, outcome, best, readingFit }: CountFit, readings: number): LayerCountFit {
+  const { layers, held } = layered;
+  const { chi2 } = readingFit;
+  const parameters = held.filter((isHeld) => !isHeld).length;
   return {
     layers,
     status: outcome.status,
-    chi2PerReading: outcome.chi2 / readings,
-    bic: bic(outcome.chi2, parameters, readings),
-    aicc: aicc(outcome.chi2, parameters, readings),
-    withinNoise: withinNoise(outcome.chi2, parameters, readings),
+    chi2PerReading: chi2 / readings,
+    bic: bic(chi2, parameters, readings),
+    aicc: aicc(chi2, parameters, readings),
+    withinNoise: withinNoise(chi2, parameters, readings),
     chosen: false,
-    earth: earthOf(logParameters, []),
+    earth: earthOf(best.parameters, layers),
   };
 }

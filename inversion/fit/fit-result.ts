@@ -2,37 +2,44 @@ import { ENGINE_VERSION } from '../engine-version';
 import { darZarrouk } from '../hydro/dar-zarrouk';
 import { geometricFactor } from '../spread/geometric-factor';
 import { parameterDoubt, type ParameterDoubt } from '../uncertainty/parameter-doubt';
-import type { EarthModel, FitResult, FitSettings, FitStatus, LayerCountFit, Reading } from '../types';
+import type { FitResult, LayeredEarth, FitSettings, FitStatus, LayerCountFit, Reading } from '../types';
 import { allowedModels, earthOf, standsApart, type FittedModel } from './allowed-models';
+import { describeShifts } from './branch-shifts';
 import { fitWarnings } from './fit-warnings';
 import { misfitProbability } from './layer-count';
-import type { ResidualSystem } from './residual-system';
+import type { LayeredProblem } from './layered-problem';
+import type { ReadingFit, ResidualSystem } from './residual-system';
+import { downWeighted } from './tolerant-residual';
 
 export interface FitResultParts {
   readonly readings: readonly Reading[];
   readonly settings: FitSettings;
   readonly system: ResidualSystem;
-  readonly layers: number;
-  readonly logParameters: Float64Array;
+  readonly layered: LayeredProblem;
+  readonly best: FittedModel;
   /** where other starts of the same search ended */
   readonly others: readonly FittedModel[];
-  readonly held: readonly boolean[];
+  readonly readingFit: ReadingFit;
   readonly status: FitStatus;
   readonly layerCounts: LayerCountFit[] | null;
+  readonly oneFewer: FitResult['oneFewer'];
   readonly starts: number;
   readonly iterations: number;
+  readonly damping: number;
 }
 
+const square = (x: number): number => x * x;
+
 /** rms of predicted/observed − 1 in %. */
-function rmsPercent(predicted: readonly number[], readings: readonly Reading[]): number {
+export function rmsPercent(predicted: readonly number[], readings: readonly Reading[]): number {
   const sum = readings.reduce(
-    (total, reading, i) => total + (predicted[i]! / reading.apparentResistivity - 1) ** 2,
+    (total, reading, i) => total + square(predicted[i]! / reading.apparentResistivity - 1),
     0,
   );
   return 100 * Math.sqrt(sum / readings.length);
 }
 
-function summariseDarZarrouk(earth: EarthModel, doubt: ParameterDoubt): FitResult['darZarrouk'] {
+export function summariseDarZarrouk(earth: LayeredEarth, doubt: ParameterDoubt): FitResult['darZarrouk'] {
   const { conductanceS, resistanceOhmM2, totalConductanceS, totalResistanceOhmM2, anisotropy } =
     darZarrouk(earth);
   const { conductanceFactor, resistanceFactor } = doubt;
@@ -47,25 +54,24 @@ function summariseDarZarrouk(earth: EarthModel, doubt: ParameterDoubt): FitResul
   };
 }
 
-/** Everything a fit says about its best model: predictions, residuals, doubt, Maillet's quantities, warnings. */
+/** Everything a layered fit says about its best model: predictions, residuals, doubt, Maillet's quantities, warnings. */
 export function buildFitResult(parts: FitResultParts): FitResult {
-  const { readings, settings, system, layers, logParameters, held } = parts;
+  const { readings, settings, system, layered, best, readingFit } = parts;
+  const { layers, held } = layered;
+  const { predicted, residuals, chi2 } = readingFit;
   const m = readings.length;
-  const earth = earthOf(logParameters, settings.fixed);
-  const residual = new Float64Array(m);
-  const chi2 = system.evaluate(logParameters, layers, residual);
-  const predicted = Array.from(system.operator.predict(earth));
-  const models = allowedModels({ logParameters, chi2 }, parts.others, system, held, settings.fixed);
-  const doubt = parameterDoubt(models, settings.bounds);
+  const models = allowedModels(best, parts.others, system, layers, held, settings.fixed);
+  const [{ earth, covariance }] = models;
+  const doubt = parameterDoubt(models, layered, best.chi2, (free) => earthOf(layered.expand(free), layers));
   const free = held.filter((isHeld) => !isHeld).length;
   const probability = misfitProbability(chi2, free, m);
   return {
     status: parts.status,
-    earth,
+    earth: { resistivity: [...earth.resistivity], thickness: [...earth.thickness] },
     chi2PerReading: chi2 / m,
     rmsPercent: rmsPercent(predicted, readings),
     predicted,
-    residuals: Array.from(residual),
+    residuals,
     geometricFactor: readings.map((reading) => geometricFactor(reading.spread)),
     intervals: doubt.intervals,
     factors: doubt.factors,
@@ -84,8 +90,13 @@ export function buildFitResult(parts: FitResultParts): FitResult {
       apart: standsApart(models),
     }),
     layerCounts: parts.layerCounts,
+    oneFewer: parts.oneFewer,
+    reachedTarget: null,
+    shifts: describeShifts(system.branches, best.parameters, covariance.deviation),
+    downWeighted: settings.outlierTolerant ? downWeighted(residuals) : [],
     starts: parts.starts,
     iterations: parts.iterations,
+    damping: parts.damping,
     engine: ENGINE_VERSION,
   };
 }

@@ -1,13 +1,14 @@
+import { log } from '../math/logarithm';
 import { threeDigits } from '../three-digits';
 import { TOLERANCES } from '../tolerances';
 import { chiSquaredSurvival } from '../uncertainty/chi-squared';
 import type { AllowedModel } from '../uncertainty/parameter-doubt';
-import type { EarthModel, FitSettings, Reading } from '../types';
+import type { FitSettings, LayeredEarth, Reading } from '../types';
 
 export interface FitWarningInput {
   readonly readings: readonly Reading[];
   readonly settings: FitSettings;
-  readonly earth: EarthModel;
+  readonly earth: LayeredEarth;
   readonly held: readonly boolean[];
   readonly predicted: readonly number[];
   readonly chi2: number;
@@ -67,7 +68,7 @@ function valuesAtBounds({ earth, settings, held }: FitWarningInput): string[] {
       if (held[key === 'resistivity' ? i : layers + i]) return [];
       const unit = key === 'resistivity' ? 'Ω·m' : 'm';
       return settings.bounds[key].flatMap((bound, side) =>
-        Math.abs(Math.log(value / bound)) <= TOLERANCES.atBound
+        Math.abs(log(value / bound)) <= TOLERANCES.atBound
           ? [
               `The ${key} of bed ${i + 1} ended on its ${side === 0 ? 'lower' : 'upper'} bound (${bound} ${unit}); a closer fit may lie beyond it.`,
             ]

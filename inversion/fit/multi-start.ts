@@ -1,3 +1,4 @@
+import { log } from '../math/logarithm';
 import type { RandomStream } from '../random';
 import { TOLERANCES } from '../tolerances';
 import type { FitProgress, LayeredEarth } from '../types';
@@ -45,8 +46,8 @@ export interface MultiStartOptions {
   readonly onProgress?: ((progress: FitProgress) => void) | undefined;
 }
 
-function logParameters(earth: LayeredEarth): Float64Array {
-  return Float64Array.from([...earth.resistivity, ...earth.thickness], Math.log);
+function logEarth(earth: LayeredEarth): Float64Array {
+  return Float64Array.from([...earth.resistivity, ...earth.thickness], log);
 }
 
 /** The best of `effort.screened` random models by misfit; only forward runs are spent on them. */
@@ -59,7 +60,7 @@ function screenedStarts(
   if (layered.layers === 1) return [];
   const residual = new Float64Array(layered.problem.residuals);
   return Array.from({ length: effort.screened }, () => {
-    const start = layered.restrict(randomStart(curve, layered.layers, random));
+    const start = layered.startFrom(randomStart(curve, layered.layers, random));
     return { start, chi2: layered.problem.evaluate(start, residual) };
   })
     .sort((a, b) => a.chi2 - b.chi2)
@@ -138,10 +139,10 @@ export function multiStart(
   options: MultiStartOptions = {},
 ): MultiStartOutcome {
   const queue = [
-    ...(options.userStart ? [logParameters(options.userStart)] : []),
+    ...(options.userStart ? [logEarth(options.userStart)] : []),
     evenStart(curve, layered.layers),
     ...(options.fewer ? splitStarts(options.fewer, curve) : []),
-  ].map(layered.restrict);
+  ].map(layered.startFrom);
   return search(
     layered,
     [...queue, ...screenedStarts(layered, curve, random, FULL)],
@@ -157,5 +158,5 @@ export function scoutFit(
   fewer: Float64Array | undefined,
 ): MultiStartOutcome {
   const queue = [evenStart(curve, layered.layers), ...(fewer ? splitStarts(fewer, curve) : [])];
-  return search(layered, queue.map(layered.restrict), SCOUT, undefined);
+  return search(layered, queue.map(layered.startFrom), SCOUT, undefined);
 }

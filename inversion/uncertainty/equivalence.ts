@@ -1,6 +1,6 @@
 import { TOLERANCES } from '../tolerances';
 import { threeDigits } from '../three-digits';
-import type { FitResult } from '../types';
+import type { FitResult, Interval } from '../types';
 
 /** One thing the data cannot tell, or can tell only in combination. */
 export interface DoubtItem {
@@ -31,6 +31,30 @@ const SETTLED_FACTOR = 1.2;
 
 const looseness = (factor: number | null): number => factor ?? Infinity;
 
+/** "3.10 to 13.0 m", "up to 13.0 m", "3.10 m and more"; null where nothing is known. */
+function rangeWords([low, high]: Interval, unit: string): string | null {
+  if (low === null) return high === null ? null : `up to ${threeDigits(high)} ${unit}`;
+  return high === null
+    ? `${threeDigits(low)} ${unit} and more`
+    : `${threeDigits(low)} to ${threeDigits(high)} ${unit}`;
+}
+
+/** How far the two tied values of a bed can go. */
+function tiedRanges({ intervals }: FitResult, bed: number): string {
+  const thickness = rangeWords(intervals.thickness[bed]!, 'm');
+  const resistivity = rangeWords(intervals.resistivity[bed]!, 'Ω·m');
+  const words = [
+    ...(thickness ? [`a thickness of ${thickness}`] : []),
+    ...(resistivity ? [`a resistivity of ${resistivity}`] : []),
+  ];
+  if (words.length === 0) return 'The readings limit neither by itself.';
+  const only =
+    thickness && resistivity
+      ? ''
+      : `, and the readings do not limit the ${thickness ? 'resistivity' : 'thickness'}`;
+  return `By themselves (95 %): ${words.join(' and ')}${only}.`;
+}
+
 function equivalenceOf(result: FitResult, bed: number): DoubtItem | null {
   const { earth, correlation, darZarrouk, factors } = result;
   const r = correlation[bed]?.[earth.resistivity.length + bed] ?? null;
@@ -47,8 +71,8 @@ function equivalenceOf(result: FitResult, bed: number): DoubtItem | null {
     bed,
     kind: conductive ? 'conductance' : 'resistance',
     text: known
-      ? `Bed ${bed + 1} is better known by ${symbol} = ${threeDigits(value)} ${unit}${range(factor)} (68 %) than by its thickness or its resistivity: a thicker bed goes with a ${conductive ? 'higher' : 'lower'} resistivity. Their 95 % ranges tell only roughly how far.`
-      : `Of bed ${bed + 1} the readings tell neither the thickness nor the resistivity, and ${symbol} not within a factor of 2: ${threeDigits(value)} ${unit} is one of many values that fit.`,
+      ? `Bed ${bed + 1} is better known by ${symbol} = ${threeDigits(value)} ${unit}${range(factor)} (68 %) than by its thickness or its resistivity: a thicker bed goes with a ${conductive ? 'higher' : 'lower'} resistivity. ${tiedRanges(result, bed)}`
+      : `Of bed ${bed + 1} the readings tell neither the thickness nor the resistivity, and ${symbol} not within a factor of 2: ${threeDigits(value)} ${unit} is one of many values that fit. ${tiedRanges(result, bed)}`,
     value,
     unit,
     factor,
@@ -62,12 +86,11 @@ function suppressionOf(result: FitResult, bed: number): DoubtItem | null {
   const below = resistivity[bed + 1]!;
   const between = (resistivity[bed]! - above) * (below - resistivity[bed]!) > 0;
   if (!between) return null;
-  const fewer = result.layerCounts?.find((count) => count.layers === resistivity.length - 1);
   const loose = result.factors.thickness[bed] === null || result.factors.resistivity[bed] === null;
-  const dispensable = fewer?.withinNoise === true;
-  if (!loose && !dispensable) return null;
-  const reason = dispensable
-    ? `${fewer.layers} beds already explain the readings within their errors (χ²/N ${fewer.chi2PerReading.toPrecision(3)})`
+  const fewer = result.oneFewer?.withinNoise === true ? result.oneFewer : null;
+  if (!loose && !fewer) return null;
+  const reason = fewer
+    ? `${fewer.layers} ${fewer.layers === 1 ? 'bed' : 'beds'} already explain the readings within their errors (χ²/N ${fewer.chi2PerReading.toPrecision(3)})`
     : 'the readings do not limit it';
   return {
     bed,
@@ -86,13 +109,10 @@ function undetermined(result: FitResult, bed: number): DoubtItem[] {
     const factor = result.factors[kind][bed]!;
     if (looseness(factor) < UNKNOWN_FACTOR) return [];
     const unit = kind === 'resistivity' ? 'Ω·m' : 'm';
-    const [low, high] = result.intervals[kind][bed]!;
-    const told =
-      factor === null || low === null || high === null
-        ? `is not determined: ${threeDigits(value)} ${unit} is one of many values that fit`
-        : // the range is a straight line drawn from this model; on a long curved valley its ends need not fit
-          `is not held within a factor of 2 by this estimate, whose 95 % range is ${threeDigits(low)} to ${threeDigits(high)} ${unit}`;
-    const text = `The ${kind} of bed ${bed + 1} ${told}.`;
+    const words = rangeWords(result.intervals[kind][bed]!, unit);
+    const text = words
+      ? `The ${kind} of bed ${bed + 1} is not held within a factor of 2: ${words} fit (95 %).`
+      : `The readings do not limit the ${kind} of bed ${bed + 1}: ${threeDigits(value)} ${unit} is one of many values that fit.`;
     return [{ bed, kind, text, value, unit, factor } satisfies DoubtItem];
   });
 }

@@ -1,12 +1,19 @@
+import type { LayeredProblem } from '../fit/layered-problem';
+import { exp } from '../math/exponential';
+import { log } from '../math/logarithm';
 import { TOLERANCES } from '../tolerances';
-import type { FitBounds, Interval, LayeredEarth } from '../types';
-import { deviationAlong, type LogCovariance } from './covariance';
+import type { Interval, LayeredEarth } from '../types';
+import type { LogCovariance } from './covariance';
+import { profileEnds, type Asked, type Ends } from './profile-ends';
+import { depthOf, productOf, resistivityOf, thicknessOf, type QuantityOf } from './quantities';
 
 /** Standard normal point that leaves 2.5 % above it; its square is the 95 % point of χ² with one degree of freedom. */
 export const Z95 = 1.959963984540054;
 
 /** A model that the readings allow, with the doubt about it from its own Jacobian. */
 export interface AllowedModel {
+  /** all parameters, ln values then shifts */
+  readonly parameters: Float64Array;
   readonly earth: LayeredEarth;
   readonly covariance: LogCovariance;
   /** its χ² minus the least one found, ≥ 0 */
@@ -26,86 +33,28 @@ export interface ParameterDoubt {
   readonly resistanceFactor: (number | null)[];
 }
 
-/** One positive quantity of a model and the gradient of its logarithm on the ln parameters. */
-interface Quantity {
-  readonly value: number;
-  readonly gradient: (j: number) => number;
-}
-type QuantityOf = (earth: LayeredEarth) => Quantity;
-
-const resistivityOf =
-  (i: number): QuantityOf =>
-  ({ resistivity }) => ({ value: resistivity[i]!, gradient: (j) => (j === i ? 1 : 0) });
-
-const thicknessOf =
-  (i: number): QuantityOf =>
-  ({ resistivity, thickness }) => ({
-    value: thickness[i]!,
-    gradient: (j) => (j === resistivity.length + i ? 1 : 0),
-  });
-
-/** Depth D of the base of layer `base`: ∂lnD/∂lnh_k = h_k/D. */
-const depthOf =
-  (base: number): QuantityOf =>
-  ({ resistivity, thickness }) => {
-    const layers = resistivity.length;
-    const depth = thickness.slice(0, base + 1).reduce((sum, h) => sum + h, 0);
-    return {
-      value: depth,
-      gradient: (j) => (j >= layers && j <= layers + base ? thickness[j - layers]! / depth : 0),
-    };
-  };
-
-/** hρ (`sign` 1) or h/ρ (`sign` −1) of bounded layer i. */
-const productOf =
-  (i: number, sign: 1 | -1): QuantityOf =>
-  ({ resistivity, thickness }) => ({
-    value: thickness[i]! * resistivity[i]! ** sign,
-    gradient: (j) => (j === resistivity.length + i ? 1 : j === i ? sign : 0),
-  });
-
-/**
- * How far ln of a quantity reaches below and above its value in the first (best) model where χ² ≤ least + z²: about each
- * model of excess e it spreads √(z² − e) standard deviations; the reach is that of all of them together.
- */
-function reach(quantity: QuantityOf, models: readonly AllowedModel[], z: number): [number, number] {
-  const best = Math.log(quantity(models[0]!.earth).value);
-  let below = 0;
-  let above = 0;
-  for (const { earth, covariance, excess } of models) {
-    if (excess >= z * z) continue;
-    const { value, gradient } = quantity(earth);
-    const spread = Math.sqrt(z * z - excess) * deviationAlong(covariance, gradient);
-    below = Math.max(below, best - Math.log(value) + spread);
-    above = Math.max(above, Math.log(value) - best + spread);
-  }
-  return [below, above];
+/** True where no free parameter moves the quantity: it is held. */
+function isHeld(quantityOf: QuantityOf, { earth }: AllowedModel, held: readonly boolean[]): boolean {
+  const { gradient } = quantityOf(earth);
+  return held.every((fixed, j) => fixed || gradient(j) === 0);
 }
 
-function interval(
-  quantity: QuantityOf,
-  models: readonly AllowedModel[],
-  [low, high]: readonly [number, number],
-): Interval {
-  const { value } = quantity(models[0]!.earth);
-  const [below, above] = reach(quantity, models, Z95);
-  if (below === 0 && above === 0) return [value, value];
-  if (Math.max(below, above) > Z95 * Math.log(TOLERANCES.factorLimit)) return [null, null];
-  const bottom = value * Math.exp(-below);
-  const top = value * Math.exp(above);
-  return [bottom <= low ? null : bottom, top >= high ? null : top];
+function interval({ low, high }: Ends): Interval {
+  return [low === null ? null : exp(low), high === null ? null : exp(high)];
 }
 
-function factor(quantity: QuantityOf, models: readonly AllowedModel[]): number | null {
-  const value = Math.exp(Math.max(...reach(quantity, models, 1)));
-  return value > TOLERANCES.factorLimit ? null : value;
+function factor(value: number, { low, high }: Ends): number | null {
+  if (low === null || high === null) return null;
+  const best = log(value);
+  const reach = exp(Math.max(best - low, high - best));
+  return reach > TOLERANCES.factorLimit ? null : reach;
 }
 
-function correlations({ deviation, covariance }: LogCovariance): (number | null)[][] {
+function correlations({ deviation, covariance }: LogCovariance, count: number): (number | null)[][] {
   const n = deviation.length;
   const known = (j: number) => deviation[j]! > 0 && deviation[j]! < Infinity;
-  return Array.from({ length: n }, (_, a) =>
-    Array.from({ length: n }, (_unused, b) => {
+  return Array.from({ length: count }, (_, a) =>
+    Array.from({ length: count }, (_unused, b) => {
       if (!known(a) || !known(b)) return null;
       if (a === b) return 1;
       const value = covariance[a * n + b]! / (deviation[a]! * deviation[b]!);
@@ -117,37 +66,52 @@ function correlations({ deviation, covariance }: LogCovariance): (number | null)
 /**
  * 95 % intervals and 68 % factors of ρ, h, the depth of each boundary, S and T, and the correlations of the ln parameters.
  *
- * `models` holds the best one first, then others that the readings allow. An interval is the likelihood region of one
- * quantity, χ² ≤ least + 1.96² (+ 1 for the factors), each model linearised in ln space where it stands: with the best
- * model alone it is value × and ÷ exp(1.96 standard deviations). Without the others it would deny the truth where two
- * grounds fit alike. A factor above `TOLERANCES.factorLimit` is null; an end of an interval that the bounds cut off is
- * null (unbounded); a held parameter gives [v, v], factor 1 and null correlations. Correlations are those of the best.
- * Coverage of values with a factor below 1.5, on noisy soundings of 2–5 layers: 93 % of 1324 in three sets of 150 soundings
- * that nothing was chosen by (90, 94 and 95 %), where the best model alone covers 87–89 % of like sets. Still short of 95 %: a
- * range is a straight line drawn from each model, too narrow where the search missed a ground that fits alike, and too wide
- * along a curved valley (`tests/inversion/uncertainty/coverage.test.ts` holds one set of 150).
+ * `models` holds the best one first, then others that the readings allow. An interval is the profile-likelihood region of
+ * one quantity, χ² ≤ least + 1.96² with all else refitted (+ 1 for the factors), from every model that fits so well:
+ * without the others it would deny the truth where two grounds fit alike. A factor above `TOLERANCES.factorLimit` is null;
+ * an end that the bounds cut off is null (unbounded); a held value gives [v, v] and factor 1. Correlations are the
+ * linear ones of the best, over the 2N − 1 ln values; null for a held or unresolved one.
  */
 export function parameterDoubt(
   models: readonly [AllowedModel, ...AllowedModel[]],
-  bounds: FitBounds,
+  layered: LayeredProblem,
+  leastChi2: number,
+  earthAt: (free: Float64Array) => LayeredEarth,
 ): ParameterDoubt {
-  const { earth, covariance } = models[0];
-  const [hLow, hHigh] = bounds.thickness;
-  const perLayer = <T>(of: (i: number) => T): T[] => earth.resistivity.map((_, i) => of(i));
-  const perBounded = <T>(of: (i: number) => T): T[] => earth.thickness.map((_, i) => of(i));
+  const [best, ...others] = models;
+  const { resistivity, thickness } = best.earth;
+  const quantities: Asked[] = [
+    ...resistivity.map((_, i) => ({ of: resistivityOf(i), limits: 2 as const })),
+    ...thickness.map((_, i) => ({ of: thicknessOf(i), limits: 2 as const })),
+    // the base of the first layer is its thickness
+    ...thickness.slice(1).map((_, i) => ({ of: depthOf(i + 1), limits: 2 as const })),
+    ...thickness.map((_, i) => ({ of: productOf(i, -1), limits: 1 as const })),
+    ...thickness.map((_, i) => ({ of: productOf(i, 1), limits: 1 as const })),
+  ];
+  const free = quantities.filter(({ of }) => !isHeld(of, best, layered.held));
+  const point = ({ parameters, excess }: AllowedModel) => ({
+    parameters: layered.restrict(parameters),
+    chi2: leastChi2 + excess,
+  });
+  const ends = profileEnds(layered, point(best), others.map(point), free, [1, Z95 * Z95], earthAt);
+  const doubts = quantities.map((quantity): { interval: Interval; factor: number | null } => {
+    const { value } = quantity.of(best.earth);
+    const [inner, outer] = ends[free.indexOf(quantity)] ?? [];
+    return inner
+      ? { interval: interval(outer ?? inner), factor: factor(value, inner) }
+      : { interval: [value, value], factor: 1 };
+  });
+  const bounded = thickness.length;
+  const rho = doubts.splice(0, resistivity.length);
+  const h = doubts.splice(0, bounded);
+  const depth = [...h.slice(0, 1), ...doubts.splice(0, Math.max(0, bounded - 1))];
+  const factors = (some: typeof doubts) => some.map((doubt) => doubt.factor);
+  const intervals = (some: typeof doubts) => some.map((doubt) => doubt.interval);
   return {
-    intervals: {
-      resistivity: perLayer((i) => interval(resistivityOf(i), models, bounds.resistivity)),
-      thickness: perBounded((i) => interval(thicknessOf(i), models, bounds.thickness)),
-      depth: perBounded((i) => interval(depthOf(i), models, [(i + 1) * hLow, (i + 1) * hHigh])),
-    },
-    factors: {
-      resistivity: perLayer((i) => factor(resistivityOf(i), models)),
-      thickness: perBounded((i) => factor(thicknessOf(i), models)),
-      depth: perBounded((i) => factor(depthOf(i), models)),
-    },
-    conductanceFactor: perBounded((i) => factor(productOf(i, -1), models)),
-    resistanceFactor: perBounded((i) => factor(productOf(i, 1), models)),
-    correlation: correlations(covariance),
+    intervals: { resistivity: intervals(rho), thickness: intervals(h), depth: intervals(depth) },
+    factors: { resistivity: factors(rho), thickness: factors(h), depth: factors(depth) },
+    conductanceFactor: factors(doubts.slice(0, bounded)),
+    resistanceFactor: factors(doubts.slice(bounded)),
+    correlation: correlations(best.covariance, 2 * resistivity.length - 1),
   };
 }

@@ -22,17 +22,9 @@ export const forwardAnswerSchema = z.strictObject({
   geometricFactor: z.array(z.number().nullable()).describe('K, m, signed; null where halfMN is null'),
 });
 
-const labelledReadingSchema = fitReadingSchema.extend({
-  branch: z
-    .string()
-    .max(40)
-    .optional()
-    .describe('label of the MN branch; a layered fit does not shift branches'),
-});
-
 export const fitRequestSchema = z.strictObject({
   id: lineId,
-  readings: z.array(labelledReadingSchema).min(1).max(2000),
+  readings: z.array(fitReadingSchema).min(1).max(2000),
   settings: fitSettingsSchema,
 });
 
@@ -51,7 +43,7 @@ export const lineErrorSchema = z.strictObject({
 export const COMMAND_LINE_SCHEMAS = {
   spread: spreadSchema,
   earth: layeredEarthSchema,
-  reading: labelledReadingSchema,
+  reading: fitReadingSchema,
   'fit-settings': fitSettingsSchema,
   'fit-status': fitStatusSchema,
   forward: z.strictObject({ request: forwardRequestSchema, answer: forwardAnswerSchema }),

@@ -1,6 +1,10 @@
 import { z } from 'zod';
 import { spreadSchema } from './spread';
 
+/** Cells of a smooth or stepped ground. */
+export const FEWEST_CELLS = 8;
+export const MOST_CELLS = 40;
+
 export const resistivityOhmM = z.number().gt(0).max(1e9).describe('Ω·m');
 export const thicknessM = z.number().gt(0).max(1e6).describe('m');
 
@@ -21,6 +25,11 @@ export const fitReadingSchema = z
     spread: spreadSchema,
     apparentResistivity: resistivityOhmM,
     relativeError: z.number().gt(0).max(1).describe('standard error of ln ρa, used as given'),
+    branch: z
+      .string()
+      .max(80)
+      .optional()
+      .describe('group of readings, such as those of one MN, that may stand shifted as a whole'),
   })
   .meta({ id: 'FitReading' });
 
@@ -41,27 +50,80 @@ export const fixedParameterSchema = z.strictObject({
   value: z.number().gt(0).max(1e9).describe('Ω·m or m'),
 });
 
+/** What is known beforehand; index counts layers from 0 at the surface, a depth is that of the base of the layer. */
+export const gaussianPriorSchema = z.strictObject({
+  on: z.enum(['resistivity', 'thickness', 'depth']),
+  index: z.number().int().min(0).max(7),
+  value: z.number().gt(0).max(1e9).describe('Ω·m or m'),
+  sigma: z
+    .number()
+    .gt(0)
+    .max(1e6)
+    .describe('standard deviation: of the logarithm for resistivity and thickness, in m for a depth'),
+});
+
 export const DEFAULT_BOUNDS = { resistivity: [0.1, 1e5], thickness: [0.02, 1000] } satisfies z.infer<
   typeof fitBoundsSchema
 >;
 
 export const fitSettingsSchema = z
   .strictObject({
-    kind: z.literal('layered'),
-    layers: z.union([z.number().int().min(1).max(8), z.literal('auto')]),
+    kind: z.enum(['layered', 'smooth', 'stepped']),
+    layers: z
+      .union([z.number().int().min(1).max(MOST_CELLS), z.literal('auto')])
+      .default('auto')
+      .describe(
+        'layered: 1 to 8, "auto" = the fewest within the noise; smooth and stepped: 8 to 40 cells, "auto" = the usual grid',
+      ),
     seed: z.number().int().min(0).max(4294967295).default(1),
     bounds: fitBoundsSchema.default(DEFAULT_BOUNDS),
     fixed: z.array(fixedParameterSchema).max(15).default([]),
+    priors: z.array(gaussianPriorSchema).max(30).default([]),
+    branchShiftSigma: z
+      .number()
+      .gt(0)
+      .max(1)
+      .optional()
+      .describe('standard deviation of the ln shift of each branch but the largest; absent = no shifts'),
+    outlierTolerant: z.boolean().default(false).describe('readings far off the ground count for less'),
+    targetMisfit: z
+      .number()
+      .gt(0)
+      .max(1e6)
+      .optional()
+      .describe('χ²/N that a smooth or stepped fit aims at; absent = 1'),
     start: layeredEarthSchema.optional().describe('a model to start from, beside the seeded starts'),
   })
   .superRefine((settings, context) => {
     const issue = (path: (string | number)[], message: string) =>
       context.addIssue({ code: 'custom', path, message });
-    const { layers, fixed, bounds, start } = settings;
-    if (layers === 'auto') {
-      if (fixed.length > 0) issue(['fixed'], 'needs a stated layer count');
+    const { kind, layers, fixed, priors, bounds, start } = settings;
+    if (kind !== 'layered') {
+      for (const field of ['fixed', 'priors'] as const)
+        if (settings[field].length > 0) issue([field], 'belongs to a layered fit');
+      if (start) issue(['start'], 'belongs to a layered fit');
+      if (layers !== 'auto' && layers < FEWEST_CELLS)
+        issue(['layers'], `must be ${FEWEST_CELLS} to ${MOST_CELLS} cells or "auto"`);
       return;
     }
+    if (settings.targetMisfit !== undefined) issue(['targetMisfit'], 'belongs to a smooth or stepped fit');
+    if (layers === 'auto') {
+      if (fixed.length > 0) issue(['fixed'], 'needs a stated layer count');
+      if (priors.length > 0) issue(['priors'], 'needs a stated layer count');
+      return;
+    }
+    if (layers > 8) {
+      issue(['layers'], 'must be 1 to 8 or "auto" in a layered fit');
+      return;
+    }
+    priors.forEach(({ on, index }, i) => {
+      const count = on === 'resistivity' ? layers : layers - 1;
+      if (index >= count)
+        issue(
+          ['priors', i, 'index'],
+          count > 0 ? `must be below ${count}` : `one layer has no ${on} to know beforehand`,
+        );
+    });
     fixed.forEach(({ on, index, value }, i) => {
       const count = on === 'resistivity' ? layers : layers - 1;
       const before = fixed.findIndex((one) => one.on === on && one.index === index);
@@ -87,6 +149,8 @@ export const fitStatusSchema = z.enum([
   'converged-decrease',
   'iteration-limit',
   'no-descent',
+  'target-reached',
+  'target-out-of-reach',
 ]);
 
 const intervalSchema = z.tuple([z.number().nullable(), z.number().nullable()]);
@@ -152,8 +216,45 @@ export const fitResultSchema = z
       )
       .nullable()
       .describe('every count tried when layers is "auto"; null otherwise'),
+    oneFewer: z
+      .strictObject({
+        layers: z.number().int(),
+        chi2PerReading: z.number(),
+        withinNoise: z.boolean().nullable(),
+      })
+      .nullable()
+      .default(null)
+      .describe('of a layered fit with a stated count: how well one layer fewer does; else null'),
+    reachedTarget: z
+      .boolean()
+      .nullable()
+      .default(null)
+      .describe('smooth and stepped: whether χ²/N came down to the target; null for a layered fit'),
+    shifts: z
+      .array(
+        z.strictObject({
+          branch: z.string(),
+          readings: z.number().int(),
+          factor: z.number().describe('the readings of the branch stand this much above the ground of the fit'),
+          interval: z.tuple([z.number(), z.number()]).describe('95 % of the factor'),
+          held: z.boolean().describe('true for the branch that the others are measured by'),
+        }),
+      )
+      .default([])
+      .describe('of branches, where shifts were asked for'),
+    downWeighted: z
+      .array(
+        z.strictObject({
+          index: z.number().int().describe('in the list of readings, from 0'),
+          residual: z.number(),
+          weight: z.number().describe('1 = counted in full'),
+        }),
+      )
+      .default([])
+      .describe('readings more than 2.5 errors off the ground in an outlier-tolerant fit'),
     starts: z.number().int().describe('starting models tried'),
     iterations: z.number().int(),
+    damping: z.number().nullable().default(null).describe('of the last step; null in results before engine 2'),
     engine: z.string().describe('semantic version of the engine'),
   })
   .meta({ id: 'FitResult' });

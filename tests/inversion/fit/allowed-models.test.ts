@@ -14,7 +14,7 @@ const system = createResidualSystem(createForwardOperator(spreads), readings);
 const HELD = [false, false, false];
 
 const model = (rho1: number, rho2: number, h: number, chi2: number): FittedModel => ({
-  logParameters: Float64Array.from([rho1, rho2, h], Math.log),
+  parameters: Float64Array.from([rho1, rho2, h], Math.log),
   chi2,
 });
 const best = model(100, 20, 4, 3);
@@ -28,14 +28,14 @@ describe('allowedModels', () => {
       model(100, 25, 4, 3.5),
       model(100, 22.1, 4, 6.1),
     ];
-    const found = allowedModels(best, others, system, HELD, []);
+    const found = allowedModels(best, others, system, 2, HELD, []);
     expect(found.map(({ earth }) => Math.round(earth.resistivity[1]!))).toEqual([20, 25, 22]);
     expect(found.map(({ excess }) => excess)).toEqual([0, 0.5, 3]);
   });
 
   it('gives a fixed value back as it was stated, in every model', () => {
     const fixed = [{ on: 'resistivity', index: 1, value: 20.000001 }] as const;
-    const found = allowedModels(best, [model(100, 20, 5, 4)], system, [false, true, false], fixed);
+    const found = allowedModels(best, [model(100, 20, 5, 4)], system, 2, [false, true, false], fixed);
     expect(found.map(({ earth }) => earth.resistivity[1])).toEqual([20.000001, 20.000001]);
     expect(found[1]!.covariance.deviation[1]).toBe(0);
   });
@@ -43,9 +43,9 @@ describe('allowedModels', () => {
 
 describe('standsApart', () => {
   it('finds the first model outside of the intervals of the best alone, and none within', () => {
-    const near = allowedModels(best, [model(100, 20.5, 4, 4)], system, HELD, []);
+    const near = allowedModels(best, [model(100, 20.5, 4, 4)], system, 2, HELD, []);
     expect(standsApart(near)).toBeNull();
-    const far = allowedModels(best, [model(100, 20.5, 4, 4), model(100, 60, 4, 5)], system, HELD, []);
+    const far = allowedModels(best, [model(100, 20.5, 4, 4), model(100, 60, 4, 5)], system, 2, HELD, []);
     expect(standsApart(far)!.earth.resistivity[1]).toBeCloseTo(60, 9);
   });
 });

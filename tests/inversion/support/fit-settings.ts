@@ -8,6 +8,8 @@ export function layered(layers: FitSettings['layers'], more: Partial<FitSettings
     seed: 1,
     bounds: { resistivity: [0.1, 1e5], thickness: [0.02, 1000] },
     fixed: [],
+    priors: [],
+    outlierTolerant: false,
     ...more,
   };
 }

@@ -12,6 +12,8 @@ describe('the key of a computation', () => {
       seed: 1,
       bounds: { resistivity: [0.1, 1e5] as [number, number], thickness: [0.02, 1000] as [number, number] },
       fixed: [],
+      priors: [],
+      outlierTolerant: false,
     },
   };
 
