@@ -101,7 +101,10 @@ const boreholeIntervalSchema = z
     baseM: z.number().gt(0).max(5000),
     description: z.string().trim().min(1).max(500),
   })
-  .refine((interval) => interval.baseM > interval.topM, { path: ['baseM'], message: 'must be below topM' });
+  .refine((interval) => interval.baseM > interval.topM, {
+    path: ['baseM'],
+    message: 'must lie below the top of the interval',
+  });
 const waterLevelSchema = z.strictObject({
   measuredOn: dateSchema,
   depthM: z.number().min(-200).max(5000).describe('below ground, m; negative = above ground'),

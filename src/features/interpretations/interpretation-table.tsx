@@ -40,9 +40,11 @@ export function InterpretationTable({ soundingId, interpretations }: Interpretat
             <Cell className="figure">{letterOfRun({ number: interpretation.runNumber })}</Cell>
             <Cell numeric>{interpretation.beds.length}</Cell>
             <Cell numeric>
-              {interpretation.waterLevelDepthM === null
-                ? ''
-                : withUnit(formatLength(interpretation.waterLevelDepthM), 'm')}
+              {interpretation.waterLevelDepthM === null ? (
+                <span className="font-sans text-muted">not given</span>
+              ) : (
+                withUnit(formatLength(interpretation.waterLevelDepthM), 'm')
+              )}
             </Cell>
             <Cell className="whitespace-nowrap">{interpretation.author.name}</Cell>
             <Cell className="whitespace-nowrap">{formatMoment(interpretation.updatedAt)}</Cell>
