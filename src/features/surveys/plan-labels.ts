@@ -64,6 +64,14 @@ const markBox = ({ x, y }: MarkOnPage): Box => ({
   bottom: y + MARK_PX,
 });
 
+/** Distance to the nearest other mark, px. */
+const roomAround = (mark: MarkOnPage, marks: readonly MarkOnPage[]): number =>
+  marks.reduce(
+    (least, other) =>
+      other === mark ? least : Math.min(least, Math.hypot(other.x - mark.x, other.y - mark.y)),
+    Infinity,
+  );
+
 /** What a name takes up at a place: itself, and the line that leads to one far off. */
 function boxesOf(mark: MarkOnPage, at: LabelPlace): Box[] {
   const label = labelBox(mark, at);
@@ -74,17 +82,14 @@ function boxesOf(mark: MarkOnPage, at: LabelPlace): Box[] {
 }
 
 /**
- * A place for each name that covers no mark and no other name; null where there is none. Marks that cover each other, as a
- * sounding at a borehole, choose first: they have the fewest places.
+ * A place for each name that covers no mark and no other name; null where there is none. The marks nearest to another, as
+ * a sounding at a borehole, choose first: they have the fewest places.
  */
 export function placeLabels(marks: readonly MarkOnPage[]): (LabelPlace | null)[] {
-  const boxes = marks.map(markBox);
-  const taken = [...boxes];
+  const taken = marks.map(markBox);
   const places = marks.map((): LabelPlace | null => null);
-  const isCovered = (index: number): boolean =>
-    boxes.some((box, i) => i !== index && overlaps(box, boxes[index]!));
-  const indexes = [...marks.keys()];
-  for (const index of [...indexes.filter(isCovered), ...indexes.filter((i) => !isCovered(i))]) {
+  const room = marks.map((mark) => roomAround(mark, marks));
+  for (const index of [...marks.keys()].toSorted((a, b) => room[a]! - room[b]!)) {
     const mark = marks[index]!;
     const free = PLACES.find((candidate) =>
       boxesOf(mark, candidate).every((box) => !taken.some((other) => overlaps(box, other))),

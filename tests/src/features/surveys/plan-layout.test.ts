@@ -80,6 +80,13 @@ describe('the plan', () => {
     expect([places[2], places[5]].map((found) => found?.isFar)).toEqual([false, false]);
   });
 
+  it('names a borehole and the sounding at its place first where not every name has room', () => {
+    const line = Array.from({ length: 9 }, (_, i) => ({ x: 13 * i, y: 100, name: `S-0${i}` }));
+    const places = placeLabels([...line, { x: 52, y: 98, name: 'BH-1' }]);
+    expect(places.some((found) => found === null)).toBe(true);
+    expect([places[4], places[9]].map((found) => found?.isFar)).toEqual([false, false]);
+  });
+
   it('leads to no far name through a nearer one', () => {
     const around = [
       { x: 75, y: 100, name: '' },
