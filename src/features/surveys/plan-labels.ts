@@ -7,7 +7,7 @@ export interface MarkOnPage {
 export interface LabelPlace {
   dx: number;
   dy: number;
-  anchor: 'start' | 'middle' | 'end';
+  anchor: 'start' | 'middle';
   /** Beyond the nearest names, so that a thin line has to lead to it. */
   isFar: boolean;
 }
@@ -27,11 +27,11 @@ const place = (dx: number, dy: number, anchor: LabelPlace['anchor'], isFar = fal
   isFar,
 });
 
+/** None at the left, where the name of a line stands. */
 const PLACES: readonly LabelPlace[] = [
   place(12, 4, 'start'),
   place(0, -14, 'middle'),
   place(0, 24, 'middle'),
-  place(-12, 4, 'end'),
   place(0, -31, 'middle', true),
   place(0, 41, 'middle', true),
 ];
@@ -48,7 +48,7 @@ const overlaps = (a: Box, b: Box): boolean =>
 
 function labelBox({ x, y, name }: MarkOnPage, { dx, dy, anchor }: LabelPlace): Box {
   const width = name.length * CHARACTER_PX;
-  const left = x + dx - (anchor === 'start' ? 0 : anchor === 'middle' ? width / 2 : width);
+  const left = x + dx - (anchor === 'start' ? 0 : width / 2);
   return {
     left: left - GAP_PX / 2,
     right: left + width + GAP_PX / 2,
