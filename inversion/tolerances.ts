@@ -2,8 +2,6 @@
 export const TOLERANCES = {
   /** A spread is refused when |1/AM − 1/AN − 1/BM + 1/BN| ≤ this × (1/AM + 1/AN + 1/BM + 1/BN): K would be noise. */
   bracketCancellation: 1e-9,
-  /** Tikhonov row of the weight design, in units of the image response: lifts it off the rounding floor. */
-  designRidge: 1e-14,
   /** Predicted/observed below this: the log residual goes on along its tangent, so that a ρa ≤ 0 keeps a finite, falling misfit. */
   logResidualFloor: 1e-3,
   /** converged-gradient: max |Jᵀr|ⱼ/‖Jⱼ‖ of the free parameters ≤ this × √χ²; below it rounding decides the next step. */
@@ -14,6 +12,8 @@ export const TOLERANCES = {
   step: 1e-8,
   /** converged-decrease: χ² fell by less than this × χ² in each of the last three accepted steps. */
   decrease: 1e-6,
+  /** converged-decrease too: the linearised problem, undamped, promises a fall of χ² of no more than this × χ². */
+  promise: 1e-10,
   /** no-descent: damping above this × its scale, and still no smaller χ². */
   damping: 1e9,
   /** Accepted and refused steps of one start together. */

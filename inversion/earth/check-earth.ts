@@ -1,4 +1,5 @@
 import { InversionError } from '../inversion-error';
+import { magnitudeFault } from '../magnitudes';
 import type { LayeredEarth } from '../types';
 
 /** Throws `InversionError` unless the earth has N ≥ 1 positive resistivities and N − 1 positive thicknesses; `path` says where it stands. */
@@ -18,12 +19,9 @@ export function requireEarth(earth: LayeredEarth, path: readonly (string | numbe
   }
   for (const key of ['resistivity', 'thickness'] as const) {
     earth[key].forEach((value, i) => {
-      if (!(value > 0 && Number.isFinite(value)))
-        throw new InversionError('earth-value', `${key} ${i + 1} is ${value}; it must be a number above 0`, [
-          ...path,
-          key,
-          i,
-        ]);
+      const fault = magnitudeFault(value, key);
+      if (fault)
+        throw new InversionError('earth-value', `${key} ${i + 1} is ${value}; ${fault}`, [...path, key, i]);
     });
   }
 }

@@ -1,10 +1,9 @@
 import { expm1 } from '../math/exponential';
 
-/** Nodes of the wavenumber lattice to a factor of two: λ_g = 2^(g/5) in 1/m, 16.6 a decade. */
-export const NODES_PER_OCTAVE = 5;
-
 /** Working arrays of one kernel; made once an operator, written over at each call. */
 export interface KernelScratch {
+  /** nodes of the lattice to a factor of two */
+  readonly perOctave: number;
   /** T₁ at the nodes, Ω·m */
   readonly transform: Float64Array;
   /** dT₁/dparameter, then T₁ again, each `nodes` long: [parameter * nodes + node], Ω·m; grows with the layer count */
@@ -13,8 +12,9 @@ export interface KernelScratch {
   pass: Float64Array;
 }
 
-export function createKernelScratch(nodes: number): KernelScratch {
+export function createKernelScratch(nodes: number, perOctave: number): KernelScratch {
   return {
+    perOctave,
     transform: new Float64Array(nodes),
     columns: new Float64Array(0),
     decay: new Float64Array(nodes),
@@ -26,12 +26,12 @@ export function createKernelScratch(nodes: number): KernelScratch {
  * exp(−2λh) − 1 at every node. Only the first octave calls expm1; the rest follows by expm1(2x) = expm1(x)(2 + expm1(x)),
  * whose relative error grows by about two roundings an octave (≤ 2e-14 over the longest lattice).
  */
-function fillDecay(decay: Float64Array, lambda: Float64Array, thickness: number): void {
+function fillDecay({ decay, perOctave }: KernelScratch, lambda: Float64Array, thickness: number): void {
   const nodes = lambda.length;
-  const seeds = Math.min(NODES_PER_OCTAVE, nodes);
+  const seeds = Math.min(perOctave, nodes);
   for (let g = 0; g < seeds; g++) decay[g] = expm1(-2 * lambda[g]! * thickness);
   for (let g = seeds; g < nodes; g++) {
-    const half = decay[g - NODES_PER_OCTAVE]!;
+    const half = decay[g - perOctave]!;
     decay[g] = half * (2 + half);
   }
 }
@@ -53,7 +53,7 @@ export function transformAtNodes(
   for (let i = layers - 2; i >= 0; i--) {
     const rho = parameters[i]!;
     const perRho = 1 / rho;
-    fillDecay(decay, lambda, parameters[layers + i]!);
+    fillDecay(scratch, lambda, parameters[layers + i]!);
     for (let g = 0; g < nodes; g++) {
       const e = decay[g]!;
       const t = transform[g]!;
@@ -89,7 +89,7 @@ export function transformAndDerivatives(
     const rho = parameters[i]!;
     const perRho = 1 / rho;
     const thickness = parameters[layers + i]!;
-    fillDecay(decay, lambda, thickness);
+    fillDecay(scratch, lambda, thickness);
     const atPass = i * nodes;
     const atRho = i * nodes;
     const atThickness = (layers + i) * nodes;

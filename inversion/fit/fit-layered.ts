@@ -20,6 +20,7 @@ export interface FitOptions {
 
 interface CountFit {
   readonly layered: LayeredProblem;
+  readonly quick: LayeredProblem;
   readonly outcome: MultiStartOutcome;
   readonly best: FittedModel;
   readonly others: readonly FittedModel[];
@@ -47,9 +48,11 @@ export function fitLayered(
     settings.layers === 'auto'
       ? Math.min(MOST_LAYERS, Math.max(1, Math.floor((readings.length + 1) / 2)))
       : settings.layers;
+  const quickSystem = createResidualSystem(operator.quick(), readings, settings);
   // what is known beforehand speaks of the stated count alone
   const scouts = scoutModels(
     createResidualSystem(operator, readings, { ...settings, priors: [] }),
+    createResidualSystem(operator.quick(), readings, { ...settings, priors: [] }),
     curve,
     settings,
     most - 1,
@@ -57,8 +60,10 @@ export function fitLayered(
   const fits: CountFit[] = [];
   for (let layers = settings.layers === 'auto' ? 1 : most; layers <= most; layers++) {
     const layered = createLayeredProblem(system, layers, settings, settings.branchShiftSigma);
+    const quick = createLayeredProblem(quickSystem, layers, settings, settings.branchShiftSigma);
     const outcome = multiStart(layered, curve, createRandomStream(settings.seed), {
       userStart: settings.start?.resistivity.length === layers ? settings.start : undefined,
+      quick,
       fewer: scouts[layers - 2]?.logEarth,
       onProgress: options.onProgress,
     });
@@ -69,6 +74,7 @@ export function fitLayered(
     const best = fitted(outcome);
     fits.push({
       layered,
+      quick,
       outcome,
       best,
       others: outcome.others.map(fitted),
@@ -104,6 +110,7 @@ interface Scout {
 /** Quick fits with 1 … `most` layers, each grown from the one before; they start the shown fits. */
 function scoutModels(
   system: ResidualSystem,
+  quick: ResidualSystem,
   curve: SoundingCurve,
   settings: FitSettings,
   most: number,
@@ -111,7 +118,7 @@ function scoutModels(
   const scouts: Scout[] = [];
   for (let layers = 1; layers <= most; layers++) {
     const layered = createLayeredProblem(
-      system,
+      quick,
       layers,
       { ...settings, fixed: [], priors: [] },
       settings.branchShiftSigma,

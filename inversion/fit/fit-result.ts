@@ -16,6 +16,8 @@ export interface FitResultParts {
   readonly settings: FitSettings;
   readonly system: ResidualSystem;
   readonly layered: LayeredProblem;
+  /** the same problem over the quick operator */
+  readonly quick: LayeredProblem;
   readonly best: FittedModel;
   /** where other starts of the same search ended */
   readonly others: readonly FittedModel[];
@@ -54,6 +56,25 @@ export function summariseDarZarrouk(earth: LayeredEarth, doubt: ParameterDoubt):
   };
 }
 
+/** Residuals of the quick operator that are off by no more than this, in standard errors, tell the ends of intervals. */
+const QUICK_ENOUGH = 0.03;
+
+/** The problem whose χ² is followed to the ends of the intervals, and χ² of the best there: the quick one where it is enough. */
+function problemForDoubt({ layered, quick, best }: FitResultParts): {
+  problem: LayeredProblem;
+  chi2: number;
+} {
+  const at = (problem: LayeredProblem) => {
+    const residual = new Float64Array(problem.problem.residuals);
+    const chi2 = problem.problem.evaluate(problem.restrict(best.parameters), residual);
+    return { problem, residual, chi2 };
+  };
+  const exact = at(layered);
+  const short = at(quick);
+  const enough = short.residual.every((r, i) => Math.abs(r - exact.residual[i]!) <= QUICK_ENOUGH);
+  return enough ? short : exact;
+}
+
 /** Everything a layered fit says about its best model: predictions, residuals, doubt, Maillet's quantities, warnings. */
 export function buildFitResult(parts: FitResultParts): FitResult {
   const { readings, settings, system, layered, best, readingFit } = parts;
@@ -62,7 +83,10 @@ export function buildFitResult(parts: FitResultParts): FitResult {
   const m = readings.length;
   const models = allowedModels(best, parts.others, system, layers, held, settings.fixed);
   const [{ earth, covariance }] = models;
-  const doubt = parameterDoubt(models, layered, best.chi2, (free) => earthOf(layered.expand(free), layers));
+  const followed = problemForDoubt(parts);
+  const doubt = parameterDoubt(models, followed.problem, followed.chi2, (free) =>
+    earthOf(layered.expand(free), layers),
+  );
   const free = held.filter((isHeld) => !isHeld).length;
   const probability = misfitProbability(chi2, free, m);
   return {

@@ -1,7 +1,7 @@
 import { TOLERANCES } from '../tolerances';
 import type { FitStatus } from '../types';
 import { dampedStep } from './damped-step';
-import { createReduction, reduceProblem, type ReducedProblem } from './reduced-problem';
+import { createReduction, reducedMisfit, reduceProblem, type ReducedProblem } from './reduced-problem';
 
 /** A least-squares problem in n free parameters between `low` and `high`, m whitened residuals. */
 export interface LeastSquaresProblem {
@@ -30,11 +30,18 @@ export interface LeastSquaresOutcome {
 export interface LeastSquaresOptions {
   readonly iterations?: number;
   readonly initialDamping?: number;
+  /** converged-decrease as soon as the linearised problem promises less than this × χ²; default `TOLERANCES.promise` */
+  readonly promise?: number;
+  /** asked before each linearised step, with the χ² that it promises; true ends the run as if the limit were reached */
+  readonly abandon?: (parameters: Float64Array, promised: number) => boolean;
   readonly onIteration?: (iteration: number, chi2: number) => void;
 }
 
 const FASTER = 4;
 const SLOWER = 5;
+/** Shares of the promised fall of χ² above which the damping is lowered, and below which it is raised. */
+const WELL_KEPT = 0.75;
+const BADLY_KEPT = 0.25;
 const INITIAL_DAMPING = 0.3;
 const LOWEST_DAMPING = 1e-9;
 /** A parameter is damped as if its sensitivity were at least this share of the strongest one's. */
@@ -52,7 +59,10 @@ const createPoint = (n: number, m: number): Point => ({
   chi2: Infinity,
 });
 
-/** Writes into `trial` where one damped step from `current` leads, each parameter scaled by its own sensitivity. */
+/**
+ * Writes into `trial` where one damped step from `current` leads, each parameter scaled by its own sensitivity; returns the
+ * fall of χ² that the linearised problem promises for it.
+ */
 function stepInto(
   trial: Point,
   current: Point,
@@ -61,7 +71,7 @@ function stepInto(
   free: readonly number[],
   scale: Float64Array,
   damping: number,
-): void {
+): number {
   const low = free.map((j) => (problem.low[j]! - current.parameters[j]!) * scale[j]!);
   const high = free.map((j) => (problem.high[j]! - current.parameters[j]!) * scale[j]!);
   const delta = dampedStep(reduced, low, high, damping);
@@ -73,6 +83,7 @@ function stepInto(
       delta[k]! <= low[k]! ? problem.low[j]! : delta[k]! >= high[k]! ? problem.high[j]! : moved;
   });
   trial.chi2 = problem.evaluate(trial.parameters, trial.residual);
+  return norm2(reduced.rest) - reducedMisfit(reduced, delta);
 }
 
 /** Gradient Jᵀr and the column norms of J. */
@@ -111,6 +122,12 @@ function freeParameters(
   return { free, steepest };
 }
 
+function norm2(values: Float64Array): number {
+  let sum = 0;
+  for (const value of values) sum += value * value;
+  return sum;
+}
+
 function farthestMove(from: Float64Array, to: Float64Array): number {
   let far = 0;
   for (let j = 0; j < from.length; j++) far = Math.max(far, Math.abs(to[j]! - from[j]!));
@@ -131,6 +148,7 @@ export function minimise(
   const n = problem.low.length;
   const m = problem.residuals;
   const limit = options.iterations ?? TOLERANCES.iterations;
+  const promise = options.promise ?? TOLERANCES.promise;
   const jacobian = new Float64Array(m * n);
   const work = createReduction(m, n);
   let current = createPoint(n, m);
@@ -156,8 +174,12 @@ export function minimise(
     const strongest = norms.reduce((most, norm) => Math.max(most, norm), 0);
     const scale = norms.map((norm) => Math.max(norm, SCALE_FLOOR * strongest, 1e-300));
     const reduced = reduceProblem(jacobian, current.residual, n, free, scale, work);
+    const fall = norm2(reduced.rest);
+    if (fall <= promise * current.chi2) return done('converged-decrease');
+    if (options.abandon?.(current.parameters, current.chi2 - fall)) return done('iteration-limit');
+    let promised: number;
     for (;;) {
-      stepInto(trial, current, problem, reduced, free, scale, damping);
+      promised = stepInto(trial, current, problem, reduced, free, scale, damping);
       iteration++;
       if (trial.chi2 < current.chi2) break;
       damping *= SLOWER;
@@ -166,7 +188,9 @@ export function minimise(
     }
     const move = farthestMove(current.parameters, trial.parameters);
     slow = current.chi2 - trial.chi2 < TOLERANCES.decrease * current.chi2 ? slow + 1 : 0;
-    damping = Math.max(LOWEST_DAMPING, damping / FASTER);
+    const kept = (current.chi2 - trial.chi2) / promised;
+    if (kept > WELL_KEPT) damping = Math.max(LOWEST_DAMPING, damping / FASTER);
+    else if (kept < BADLY_KEPT) damping *= 2;
     [current, trial] = [trial, current];
     options.onIteration?.(iteration, current.chi2);
     if (move <= TOLERANCES.step) return done('converged-step');

@@ -2,6 +2,7 @@ import { log } from '../math/logarithm';
 import type { RandomStream } from '../random';
 import { TOLERANCES } from '../tolerances';
 import type { FitProgress, LayeredEarth } from '../types';
+import { Z95 } from '../uncertainty/parameter-doubt';
 import type { LayeredProblem } from './layered-problem';
 import { minimise, type LeastSquaresOptions, type LeastSquaresOutcome } from './levenberg-marquardt';
 import { evenStart, randomStart, splitStarts, type SoundingCurve } from './starting-models';
@@ -16,31 +17,35 @@ export interface SearchEffort {
   readonly shortRun: number;
   /** carried starts in a row without a gain of `TOLERANCES.startImprovement` that end the search */
   readonly patience: number;
-  /** most steps of a carried start, and of the best one at the end */
+  /** most steps of a carried start */
   readonly carried: number;
-  readonly polish: number;
 }
 
 /** For a result that is shown. */
 const FULL: SearchEffort = {
   screened: 200,
-  random: 8,
+  random: 16,
   shortRun: 6,
-  patience: 5,
+  patience: 12,
   carried: 40,
-  polish: TOLERANCES.iterations,
 };
+/** A carried start has converged once its linearised problem promises a fall of χ² of no more than this × χ². */
+const PROMISE = 1e-3;
+/** A carried start this close (in ln) to where another ended goes to the same place. */
+const SAME_PLACE = 0.1;
 /** For a model that only serves to start the next layer count. */
-const SCOUT: SearchEffort = { screened: 0, random: 0, shortRun: 8, patience: 0, carried: 20, polish: 0 };
+const SCOUT: SearchEffort = { screened: 0, random: 0, shortRun: 8, patience: 0, carried: 20 };
 
 export interface MultiStartOutcome extends LeastSquaresOutcome {
   readonly starts: number;
-  /** where the other carried starts ended, in the order in which they were carried */
+  /** where the other carried starts ended */
   readonly others: readonly Pick<LeastSquaresOutcome, 'parameters' | 'chi2'>[];
 }
 
 export interface MultiStartOptions {
   readonly userStart?: LayeredEarth | undefined;
+  /** the same problem over the quick operator, on which the search is made; its best is then carried on with the exact one */
+  readonly quick?: LayeredProblem | undefined;
   /** ln parameters of a model with one layer fewer, whose layers are split in turn */
   readonly fewer?: Float64Array | undefined;
   readonly onProgress?: ((progress: FitProgress) => void) | undefined;
@@ -73,64 +78,88 @@ interface Candidate {
   readonly outcome: LeastSquaresOutcome;
 }
 
+/** Tells the progress of the run from one start. */
+const teller =
+  ({ layers, problem }: LayeredProblem, starts: number, onProgress: MultiStartOptions['onProgress']) =>
+  (start: number) =>
+  (iteration: number, chi2: number): void =>
+    onProgress?.({ layers, start: start + 1, starts, iteration, chi2PerReading: chi2 / problem.residuals });
+
+interface Found {
+  readonly best: Candidate;
+  /** where the carried starts ended, in the order in which they were carried */
+  readonly ends: readonly Candidate[];
+  readonly iterations: number;
+}
+
 function search(
   layered: LayeredProblem,
   queue: readonly Float64Array[],
   effort: SearchEffort,
   onProgress: MultiStartOptions['onProgress'],
-): MultiStartOutcome {
-  const { problem, layers } = layered;
+): Found {
   let iterations = 0;
+  const tell = teller(layered, queue.length, onProgress);
   const run = (from: ArrayLike<number>, start: number, more: LeastSquaresOptions): LeastSquaresOutcome => {
-    const outcome = minimise(problem, from, {
-      ...more,
-      onIteration: (iteration, chi2) =>
-        onProgress?.({
-          layers,
-          start: start + 1,
-          starts: queue.length,
-          iteration,
-          chi2PerReading: chi2 / problem.residuals,
-        }),
-    });
+    const outcome = minimise(layered.problem, from, { ...more, onIteration: tell(start) });
     iterations += outcome.iterations;
     return outcome;
   };
   const [leader, ...others] = queue
     .map((from, start) => ({ start, outcome: run(from, start, { iterations: effort.shortRun }) }))
     .sort((a, b) => a.outcome.chi2 - b.outcome.chi2);
-  const goOn = ({ start, outcome }: Candidate, steps: number): Candidate =>
-    outcome.status === 'iteration-limit' && steps > 0
-      ? {
-          start,
-          outcome: run(outcome.parameters, start, { initialDamping: outcome.damping, iterations: steps }),
-        }
-      : { start, outcome };
-  let best = goOn(leader!, effort.carried);
-  const ends = [best];
+  const ends: Candidate[] = [];
+  let best = leader!;
+  // what cannot come into the 95 % range of the best, or goes where another went, is not carried to its end
+  const abandon = (parameters: Float64Array, promised: number) =>
+    ends.length > 0 &&
+    (promised > best.outcome.chi2 + Z95 * Z95 ||
+      ends.some((end) => parameters.every((p, j) => Math.abs(p - end.outcome.parameters[j]!) < SAME_PLACE)));
+  const carry = ({ start, outcome }: Candidate): Candidate => {
+    const { status, parameters, damping } = outcome;
+    if (status !== 'iteration-limit') return { start, outcome };
+    const more = { initialDamping: damping, iterations: effort.carried, promise: PROMISE, abandon };
+    return { start, outcome: run(parameters, start, more) };
+  };
   let idle = 0;
-  for (const candidate of others) {
-    if (idle >= effort.patience) break;
-    const end = goOn(candidate, effort.carried);
+  for (const candidate of [leader!, ...others]) {
+    if (ends.length > 0 && idle >= effort.patience) break;
+    const end = carry(candidate);
     ends.push(end);
     const gain = 1 - end.outcome.chi2 / best.outcome.chi2;
     idle = gain > TOLERANCES.startImprovement ? 0 : idle + 1;
-    if (gain > 0) best = end;
+    if (end.outcome.chi2 <= best.outcome.chi2) best = end;
   }
-  const { outcome } = goOn(best, effort.polish);
-  return {
-    ...outcome,
-    iterations,
-    starts: queue.length,
-    others: ends.filter((end) => end !== best).map((end) => end.outcome),
-  };
+  return { best, ends, iterations };
+}
+
+/** The ends of a search judged by the exact problem, and the best of them carried to convergence there. */
+function polish(
+  layered: LayeredProblem,
+  { ends, iterations }: Found,
+  starts: number,
+  onProgress: MultiStartOptions['onProgress'],
+): MultiStartOutcome {
+  const { problem } = layered;
+  const residual = new Float64Array(problem.residuals);
+  const judged = ends
+    .map(({ start, outcome: { parameters, damping } }) => {
+      return { start, parameters, damping, chi2: problem.evaluate(parameters, residual) };
+    })
+    .sort((a, b) => a.chi2 - b.chi2);
+  const [best, ...others] = judged;
+  const outcome = minimise(problem, best!.parameters, {
+    initialDamping: best!.damping,
+    onIteration: teller(layered, starts, onProgress)(best!.start),
+  });
+  return { ...outcome, iterations: iterations + outcome.iterations, starts, others };
 }
 
 /**
  * The best of several local fits. Starts: the user's, an even one, the model with one layer fewer with each of its layers
- * split, and the best of many random models. A short run from each sorts them; they are then carried to convergence in
- * that order, until `patience` of them in a row bring no better χ² by 5 % (never because the noise level is reached:
- * that says nothing about a lower one).
+ * split, and the best of many random models. A short run from each sorts them; they are then carried on in that order, until
+ * `patience` of them in a row bring no better χ² by 5 % (never because the noise level is reached: that says nothing about a
+ * lower one), and the best is carried to convergence.
  */
 export function multiStart(
   layered: LayeredProblem,
@@ -138,17 +167,15 @@ export function multiStart(
   random: RandomStream,
   options: MultiStartOptions = {},
 ): MultiStartOutcome {
+  const quick = options.quick ?? layered;
   const queue = [
     ...(options.userStart ? [logEarth(options.userStart)] : []),
     evenStart(curve, layered.layers),
     ...(options.fewer ? splitStarts(options.fewer, curve) : []),
   ].map(layered.startFrom);
-  return search(
-    layered,
-    [...queue, ...screenedStarts(layered, curve, random, FULL)],
-    FULL,
-    options.onProgress,
-  );
+  queue.push(...screenedStarts(quick, curve, random, FULL));
+  const found = search(quick, queue, FULL, options.onProgress);
+  return polish(layered, found, queue.length, options.onProgress);
 }
 
 /** A quick fit that serves to start the next layer count. */
@@ -157,6 +184,14 @@ export function scoutFit(
   curve: SoundingCurve,
   fewer: Float64Array | undefined,
 ): MultiStartOutcome {
-  const queue = [evenStart(curve, layered.layers), ...(fewer ? splitStarts(fewer, curve) : [])];
-  return search(layered, queue.map(layered.startFrom), SCOUT, undefined);
+  const queue = [evenStart(curve, layered.layers), ...(fewer ? splitStarts(fewer, curve) : [])].map(
+    layered.startFrom,
+  );
+  const { best, ends, iterations } = search(layered, queue, SCOUT, undefined);
+  return {
+    ...best.outcome,
+    iterations,
+    starts: queue.length,
+    others: ends.filter((end) => end !== best).map((end) => end.outcome),
+  };
 }

@@ -7,6 +7,17 @@ export interface ReducedProblem {
   readonly rest: Float64Array;
 }
 
+/** ‖z + Rδ‖². */
+export function reducedMisfit({ size, triangle, rest }: ReducedProblem, delta: ArrayLike<number>): number {
+  let sum = 0;
+  for (let i = 0; i < size; i++) {
+    let value = rest[i]!;
+    for (let k = i; k < size; k++) value += triangle[i * size + k]! * delta[k]!;
+    sum += value * value;
+  }
+  return sum;
+}
+
 /** Working array of the reduction, kept by its caller from one step to the next. */
 export const createReduction = (rows: number, columns: number): Float64Array =>
   new Float64Array(rows * (columns + 1));

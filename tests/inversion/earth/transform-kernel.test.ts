@@ -15,7 +15,7 @@ describe('transformAtNodes', () => {
   it('is the recurrence to rounding over twelve decades, for thin, thick and strongly contrasting layers', () => {
     const random = createRandomStream(3);
     const errors = Array.from({ length: 40 }, () => randomEarth(random)).flatMap((earth) => {
-      const scratch = createKernelScratch(LAMBDA.length);
+      const scratch = createKernelScratch(LAMBDA.length, 5);
       transformAtNodes([...earth.resistivity, ...earth.thickness], earth.resistivity.length, LAMBDA, scratch);
       return Array.from(LAMBDA, (lambda, g) =>
         relativeError(scratch.transform[g]!, resistivityTransform(earth, lambda)),
@@ -38,7 +38,7 @@ describe('transformAndDerivatives', () => {
       const earth = randomEarth(random);
       const layers = earth.resistivity.length;
       const parameters = [...earth.resistivity, ...earth.thickness];
-      const scratch = createKernelScratch(LAMBDA.length);
+      const scratch = createKernelScratch(LAMBDA.length, 5);
       transformAndDerivatives(parameters, layers, LAMBDA, scratch);
       parameters.forEach((_, j) => {
         const best = Math.min(
@@ -51,7 +51,7 @@ describe('transformAndDerivatives', () => {
 
   it('sums to T₁ over the resistivities, because T₁ scales with all of them', () => {
     const parameters = [100, 10, 1000, 2, 3];
-    const scratch = createKernelScratch(LAMBDA.length);
+    const scratch = createKernelScratch(LAMBDA.length, 5);
     transformAndDerivatives(parameters, 3, LAMBDA, scratch);
     LAMBDA.forEach((_, g) => {
       const sum = [0, 1, 2].reduce((total, i) => total + scratch.columns[i * LAMBDA.length + g]!, 0);
@@ -69,7 +69,7 @@ function worstGap(
   analytic: ReturnType<typeof createKernelScratch>,
 ): number {
   const at = (sign: number) => {
-    const scratch = createKernelScratch(LAMBDA.length);
+    const scratch = createKernelScratch(LAMBDA.length, 5);
     transformAtNodes(parameters.with(j, parameters[j]! * Math.exp(sign * step)), layers, LAMBDA, scratch);
     return scratch.transform;
   };
