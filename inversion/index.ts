@@ -23,6 +23,7 @@ export { geometricFactor } from './spread/geometric-factor';
 export { IDEAL_SCHLUMBERGER_DEPTH, plottingSpacing } from './spread/plotting-spacing';
 export { createForwardOperator, type ForwardOperator } from './operator/forward-operator';
 export { createOperatorCache, type OperatorCache } from './operator/operator-cache';
+export { fitEarth } from './fit/fit-earth';
 export { fitLayered, type FitOptions } from './fit/fit-layered';
 export { fitLine } from './line/fit-line';
 export type {

@@ -1,4 +1,4 @@
-import { createOperatorCache, fitLayered } from '../../inversion';
+import { createOperatorCache, fitEarth } from '../../inversion';
 import { fitRequestSchema } from '../contract/command-line';
 import type { FitResult } from '../contract/fit';
 import { parseLine } from './parse-line';
@@ -8,6 +8,6 @@ export function answerFit(): (line: unknown) => { id: string | number } & FitRes
   const operators = createOperatorCache();
   return (line) => {
     const { id, readings, settings } = parseLine(fitRequestSchema, line);
-    return { id, ...fitLayered(readings, settings, { operators }) };
+    return { id, ...fitEarth(readings, settings, { operators }) };
   };
 }

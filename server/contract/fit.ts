@@ -235,7 +235,9 @@ export const fitResultSchema = z
         z.strictObject({
           branch: z.string(),
           readings: z.number().int(),
-          factor: z.number().describe('the readings of the branch stand this much above the ground of the fit'),
+          factor: z
+            .number()
+            .describe('the readings of the branch stand this much above the ground of the fit'),
           interval: z.tuple([z.number(), z.number()]).describe('95 % of the factor'),
           held: z.boolean().describe('true for the branch that the others are measured by'),
         }),
@@ -254,7 +256,11 @@ export const fitResultSchema = z
       .describe('readings more than 2.5 errors off the ground in an outlier-tolerant fit'),
     starts: z.number().int().describe('starting models tried'),
     iterations: z.number().int(),
-    damping: z.number().nullable().default(null).describe('of the last step; null in results before engine 2'),
+    damping: z
+      .number()
+      .nullable()
+      .default(null)
+      .describe('of the last step; null in results before engine 2'),
     engine: z.string().describe('semantic version of the engine'),
   })
   .meta({ id: 'FitResult' });

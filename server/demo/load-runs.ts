@@ -1,4 +1,4 @@
-import { fitLayered } from '../../inversion/index';
+import { fitEarth } from '../../inversion/index';
 import { fitResultSchema, fitSettingsSchema, type FitSettingsInput } from '../contract/fit';
 import type { Work } from '../http/context';
 import { storeResult, takeRun } from '../jobs/run-lease';
@@ -49,7 +49,7 @@ async function finishRun(
   const lease = await takeRun(work, 'demo', run.id);
   if (!lease) throw new Error(`run ${run.id} of the demo could not be taken`);
   const startedAt = performance.now();
-  const result = fitResultSchema.parse(fitLayered(lease.input.readings, lease.input.settings));
+  const result = fitResultSchema.parse(fitEarth(lease.input.readings, lease.input.settings));
   await storeResult(work, lease, result, performance.now() - startedAt);
   await work.db.transaction((trx) => work.jobs.dropRun(trx, run.id));
   return { id: run.id, layers: result.earth.resistivity.length, noteVersion: run.note.version };

@@ -1,6 +1,6 @@
 import { performance } from 'node:perf_hooks';
 import type { MessagePort } from 'node:worker_threads';
-import { fitLayered, InversionError } from '../../inversion/index';
+import { fitEarth, InversionError } from '../../inversion/index';
 import type { FitResult } from '../contract/fit';
 import type { RunInput } from '../contract/runs';
 import { progressReport } from './fit-progress';
@@ -21,12 +21,12 @@ export default function computeFit({ input, progress }: FitOrder): FitAnswer {
   const startedAt = performance.now();
   let reportedAt = startedAt;
   try {
-    const result = fitLayered(input.readings, input.settings, {
+    const result = fitEarth(input.readings, input.settings, {
       onProgress(state) {
         const now = performance.now();
         if (now - reportedAt < REPORT_EVERY_MS) return;
         reportedAt = now;
-        progress.postMessage(progressReport(state, input.settings.layers));
+        progress.postMessage(progressReport(state, input.settings));
       },
     });
     return { result, durationMs: performance.now() - startedAt };

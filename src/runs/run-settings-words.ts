@@ -1,5 +1,13 @@
 import { DEFAULT_BOUNDS, type FitSettings, type LayeredEarthModel } from '../../server/contract/fit';
-import { formatGiven, formatLength, formatResistivity, formatSignificant, withUnit } from '../ui/format';
+import {
+  formatCount,
+  formatGiven,
+  formatLength,
+  formatRelativeError,
+  formatResistivity,
+  formatSignificant,
+  withUnit,
+} from '../ui/format';
 import { bedCount } from './run-title';
 
 const UNIT = { resistivity: 'Ω·m', thickness: 'm' } as const;
@@ -19,18 +27,46 @@ export function settingsWords(settings: FitSettings): { label: string; value: st
       `${on} of bed ${index + 1} at ${withUnit(formatSignificant(value, 4), UNIT[on])}`,
   );
   return [
-    {
-      label: 'Beds',
-      value: settings.layers === 'auto' ? 'count to be found, 1 to 8' : bedCount(settings.layers),
-    },
-    {
-      label: 'Start',
-      value: settings.start ? `a model beside the curve: ${earthWords(settings.start)}` : 'the curve',
-    },
+    ...groundWords(settings),
     ...(held.length > 0 ? [{ label: 'Held', value: held.join('; ') }] : []),
+    ...(settings.priors.length > 0
+      ? [{ label: 'Known beforehand', value: settings.priors.map(priorWords).join('; ') }]
+      : []),
+    ...(settings.branchShiftSigma === undefined
+      ? []
+      : [
+          {
+            label: 'Branches',
+            value: `shifted, each within about ${formatRelativeError(settings.branchShiftSigma)}`,
+          },
+        ]),
+    ...(settings.outlierTolerant ? [{ label: 'Outliers', value: 'count for less' }] : []),
     ...bounds,
     { label: 'Seed', value: String(settings.seed) },
   ];
+}
+
+function groundWords({ kind, layers, start, targetMisfit }: FitSettings): { label: string; value: string }[] {
+  if (kind !== 'layered')
+    return [
+      {
+        label: 'Ground',
+        value: `${kind === 'smooth' ? 'smooth' : 'with few steps'}, ${layers === 'auto' ? 'the usual grid of cells' : formatCount(layers, 'cell')}`,
+      },
+      { label: 'Aim', value: `χ²/N ${formatSignificant(targetMisfit ?? 1, 3)}` },
+    ];
+  return [
+    { label: 'Beds', value: layers === 'auto' ? 'count to be found, 1 to 8' : bedCount(layers) },
+    { label: 'Start', value: start ? `a model beside the curve: ${earthWords(start)}` : 'the curve' },
+  ];
+}
+
+function priorWords({ on, index, value, sigma }: FitSettings['priors'][number]): string {
+  const where = on === 'depth' ? `base of bed ${index + 1}` : `${on} of bed ${index + 1}`;
+  const unit = on === 'resistivity' ? 'Ω·m' : 'm';
+  return on === 'depth'
+    ? `${where} at ${formatSignificant(value, 3)} ± ${withUnit(formatSignificant(sigma, 2), unit)}`
+    : `${where} near ${withUnit(formatSignificant(value, 3), unit)}, times or divided by ${formatSignificant(Math.exp(sigma), 3)}`;
 }
 
 /** "120 Ω·m to 2.1 m, 45 Ω·m to 15.4 m, 300 Ω·m below"; depths from the surface. */

@@ -8,8 +8,9 @@ export function bedCount(count: number): string {
   return formatCount(count, 'bed');
 }
 
-/** The beds a run ended with, or was asked for: "4 beds", "4 beds, count found". */
+/** The beds a run ended with, or was asked for: "4 beds", "4 beds, count found"; of many cells their kind: "smooth ground". */
 export function describeBeds(run: Pick<RunSummary, 'settings' | 'outcome'>): string {
+  if (run.settings.kind !== 'layered') return `${run.settings.kind} ground`;
   const asked = run.settings.layers;
   const found = run.outcome?.earth.resistivity.length;
   if (asked === 'auto') return found === undefined ? 'finding the count' : `${bedCount(found)}, count found`;

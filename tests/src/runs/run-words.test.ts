@@ -39,3 +39,31 @@ it('tells bounds that are not the usual ones as they were given', () => {
   expect(facts).toContain('Resistivity within 0.1 to 25\u202f000\u00a0Ω·m');
   expect(facts.some((fact) => fact.startsWith('Thickness'))).toBe(false);
 });
+
+it('says of each kind of fit what it was asked for', () => {
+  const facts = (settings: object) =>
+    settingsWords(fitSettingsSchema.parse(settings)).map(({ label, value }) =>
+      `${label}: ${value}`.replaceAll('\u00a0', ' '),
+    );
+  expect(facts({ kind: 'smooth', targetMisfit: 0.8 })).toEqual([
+    'Ground: smooth, the usual grid of cells',
+    'Aim: χ²/N 0.800',
+    'Seed: 1',
+  ]);
+  expect(facts({ kind: 'stepped', layers: 24 })[0]).toBe('Ground: with few steps, 24 cells');
+  const tied = facts({
+    kind: 'layered',
+    layers: 3,
+    priors: [
+      { on: 'depth', index: 1, value: 12.4, sigma: 0.3 },
+      { on: 'resistivity', index: 0, value: 80, sigma: 0.2 },
+    ],
+    branchShiftSigma: 0.1,
+    outlierTolerant: true,
+  });
+  expect(tied).toContain(
+    'Known beforehand: base of bed 2 at 12.4 ± 0.30 m; resistivity of bed 1 near 80.0 Ω·m, times or divided by 1.22',
+  );
+  expect(tied).toContain('Branches: shifted, each within about 10 %');
+  expect(tied).toContain('Outliers: count for less');
+});
