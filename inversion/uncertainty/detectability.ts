@@ -118,7 +118,6 @@ function tellApartRefitted(
       fixed: [],
       priors: [],
       outlierTolerant: false,
-      start: other,
     },
   );
   const columns = 2 * earth.resistivity.length - 1;

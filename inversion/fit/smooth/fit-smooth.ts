@@ -7,15 +7,13 @@ import { requireSmoothInput } from './check-smooth-input';
 import { fewestSteps } from './few-steps';
 import { buildSmoothResult, type SmoothResultParts } from './smooth-result';
 import { soundingCells } from './sounding-cells';
-import { balanceAt, lambdaRange, smoothestWithin, type TradeOffOptions } from './trade-off';
+import { smoothestOrClosest, type TradeOffOptions } from './trade-off';
 
 /**
  * χ²/N of a smooth or stepped ground unless another is asked for. At 1 the readings are met as closely as their errors
  * deserve; below it a ground of many cells begins to follow the errors themselves.
  */
 export const USUAL_TARGET = 1;
-/** Where the target is out of reach, the smoothest ground within this share above the least χ² stands for it. */
-export const SPARE = 0.05;
 
 /**
  * The smoothest ground of many cells that brings χ²/N down to the target (`kind: 'smooth'`), or one with few steps
@@ -61,11 +59,7 @@ function search(
 ): Pick<SmoothResultParts, 'balance' | 'problem' | 'reached' | 'uniform'> {
   const even = { boundaryWeights: new Float64Array(cell.cells - 1).fill(1) };
   const options = { cell, shape: even, onBalance };
-  const range = lambdaRange(options, uniform);
-  const first = balanceAt(options, range[1], uniform);
-  const { balance: closest, reached } = smoothestWithin(options, target, first, range);
-  const goal = reached ? target : (1 + SPARE) * closest.chi2;
-  const smooth = reached ? closest : smoothestWithin(options, goal, closest, range).balance;
+  const { balance: smooth, reached, goal, first, range } = smoothestOrClosest(options, target, uniform);
   const { balance, shape } =
     kind === 'stepped' ? fewestSteps(cell, smooth, goal, range, onBalance) : { balance: smooth, shape: even };
   return {

@@ -95,3 +95,23 @@ export function smoothestWithin(
   }
   return { balance: least, reached: false };
 }
+
+/** Where a goal is out of reach, the smoothest ground within this share above the least χ² stands for it. */
+const SPARE = 0.05;
+
+/**
+ * The smoothest ground at the `target` χ² or, where that is out of reach, within 5 % of the least; `goal` is the χ² that was
+ * aimed at in the end, `first` the ground of the largest λ, all but uniform or at its reference.
+ */
+export function smoothestOrClosest(
+  options: TradeOffOptions,
+  target: number,
+  uniform: Float64Array,
+): { balance: Balance; reached: boolean; goal: number; first: Balance; range: [number, number] } {
+  const range = lambdaRange(options, uniform);
+  const first = balanceAt(options, range[1], uniform);
+  const { balance, reached } = smoothestWithin(options, target, first, range);
+  if (reached) return { balance, reached, goal: target, first, range };
+  const goal = (1 + SPARE) * balance.chi2;
+  return { balance: smoothestWithin(options, goal, balance, range).balance, reached, goal, first, range };
+}

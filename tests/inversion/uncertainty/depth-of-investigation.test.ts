@@ -23,7 +23,7 @@ const stretched = (earth: LayeredEarth, by: number): LayeredEarth => ({
 describe('depthOfInvestigation', () => {
   it('lets the readings decide where they see, and the references far below', () => {
     const readings = soundingOf(UNIFORM, SCHLUMBERGER, 0.03);
-    const { index, edge, references, medianDepth } = depthOfInvestigation(readings, cells('smooth'));
+    const { index, edge, references, medianDepth, caution } = depthOfInvestigation(readings, cells('smooth'));
     index
       .filter(({ depth }) => depth > 0.4 && depth < 90)
       .forEach(({ value }) => expect(Math.abs(value)).toBeLessThan(0.1));
@@ -35,6 +35,7 @@ describe('depthOfInvestigation', () => {
     expect(references[0] / references[1]).toBeCloseTo(10, 10);
     expect(Math.sqrt(references[0] * references[1]) / 100).toBeCloseTo(1, 1);
     expect(medianDepth).toBe(effectiveDepth(SCHLUMBERGER.at(-1)!));
+    expect(caution).toContain('up to 3.7 times deeper');
   });
 
   it('counts two grounds that cross on their way apart as apart', () => {
