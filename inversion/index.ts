@@ -46,6 +46,12 @@ export {
   type FitPairComparison,
 } from './compare/compare-fits';
 export { describeDoubt, type DoubtItem } from './uncertainty/equivalence';
+export {
+  DETERMINATION_SOURCE,
+  DETERMINATION_WORDS,
+  determinationOf,
+  type Determination,
+} from './uncertainty/determination';
 export { chiSquaredPoint, chiSquaredSurvival } from './uncertainty/chi-squared';
 export { darZarrouk, type DarZarrouk, type DarZarroukPart } from './hydro/dar-zarrouk';
 export { mailletQuantity, type MailletQuantity } from './hydro/maillet-quantities';

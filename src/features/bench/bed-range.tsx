@@ -1,5 +1,5 @@
 import type { FitResult } from '../../../server/contract/fit';
-import { determinationOf, DETERMINATION_WORDS } from '../../runs/determination';
+import { determinationOf, DETERMINATION_WORDS } from '../../../inversion';
 import { isRejected } from '../../runs/rejected-fit';
 import { classNames } from '../../ui/class-names';
 import { formatLength, formatRange, formatResistivity, formatSignificant } from '../../ui/format';

@@ -1,6 +1,6 @@
 import { Minus, Plus } from 'lucide-react';
 import type { FitResult, LayeredEarthModel } from '../../../server/contract/fit';
-import { DETERMINATION_SOURCE } from '../../runs/determination';
+import { DETERMINATION_SOURCE } from '../../../inversion';
 import { BedSwatch } from '../../runs/bed-swatch';
 import { isRejected, REJECTED_RANGES_NOTE } from '../../runs/rejected-fit';
 import { boundaryDepths } from '../../charts/chart-data';

@@ -1,5 +1,4 @@
 import { expect, it } from 'vitest';
-import { determinationOf } from '../../../src/runs/determination';
 import { letterOfRun, titleOfRun } from '../../../src/runs/run-title';
 import type { RunSummary } from '../../../server/contract/runs';
 
@@ -34,17 +33,4 @@ it('says what a run is', () => {
   expect(titleOfRun(run('auto'))).toBe('finding the count');
   expect(titleOfRun(run('auto', 0, 1))).toBe('1 bed, count found');
   expect(titleOfRun(run(4, 1, 4, 'held at borehole'))).toBe('held at borehole');
-});
-
-it('grades a value by its factor', () => {
-  expect([1.1, 1.2, 1.49, 1.5, 1.99, 2, null].map((factor) => determinationOf(factor, false))).toEqual([
-    'well',
-    'determined',
-    'determined',
-    'poorly',
-    'poorly',
-    'not determined',
-    'not determined',
-  ]);
-  expect(determinationOf(1, true)).toBe('held');
 });

@@ -1,4 +1,4 @@
-/** How well a value is known, by its 68 % factor (Auken & Christiansen 2004, Geophysics 69, 752–761). */
+/** How well a value is known, by its 68 % factor (Auken & Christiansen 2004, Geophysics 69, 752–761; limits from memory). */
 export type Determination = 'held' | 'well' | 'determined' | 'poorly' | 'not determined';
 
 const LIMITS = [
@@ -7,7 +7,7 @@ const LIMITS = [
   [2, 'poorly'],
 ] as const satisfies readonly (readonly [number, Determination])[];
 
-/** `factor` multiplies and divides the value; null = the data give no limit. */
+/** The class of a value whose 68 % factor (≥ 1) is `factor`; null = the readings give no limit. */
 export function determinationOf(factor: number | null, isHeld: boolean): Determination {
   if (isHeld) return 'held';
   if (factor === null) return 'not determined';
