@@ -55,11 +55,21 @@ export function profileEnds(
   const profiler = createProfiler(layered.problem);
   const free = layered.held.flatMap((isHeld, j) => (isHeld ? [] : [j]));
   const found: AllowedPoint[] = [...others];
+  // every point is asked for every quantity
+  const earths = new Map<Float64Array, LayeredEarth>();
+  const earthOnce = (at: Float64Array): LayeredEarth => {
+    const earth = earths.get(at) ?? earthAt(at);
+    earths.set(at, earth);
+    return earth;
+  };
 
   const questsOf = ({ of, limits: count }: Asked, side: 1 | -1): Quest[] => {
-    const directed: DirectedQuantity = (at) => {
-      const { value, gradient } = of(earthAt(at));
-      return { value: side * log(value), gradient: Float64Array.from(free, (j) => side * gradient(j)) };
+    const directed: DirectedQuantity = {
+      value: (at) => side * log(of(earthOnce(at)).value),
+      gradient: (at) => {
+        const { gradient } = of(earthOnce(at));
+        return Float64Array.from(free, (j) => side * gradient(j));
+      },
     };
     const near: Quest = { directed, limit: best.chi2 + limits[0], nearer: null, end: null };
     return count === 1 ? [near] : [near, { ...near, limit: best.chi2 + limits[1], nearer: near }];
@@ -69,7 +79,7 @@ export function profileEnds(
 
   const search = (quest: Quest, foot: Linearised, from?: AllowedPoint) => {
     if (quest.end?.open || foot.chi2 >= quest.limit) return;
-    const start = from && { ...from, reach: quest.directed(from.parameters).value };
+    const start = from && { ...from, reach: quest.directed.value(from.parameters) };
     const end = profiler.end(foot, quest.directed, quest.limit, start);
     found.push(end);
     if (!quest.end || end.open || end.reach > quest.end.reach) quest.end = end;
@@ -84,7 +94,7 @@ export function profileEnds(
   const covered = ({ parameters }: AllowedPoint) =>
     all.every(
       ({ directed, end, nearer }) =>
-        nearer === null || !end || end.open || directed(parameters).value <= end.reach,
+        nearer === null || !end || end.open || directed.value(parameters) <= end.reach,
     );
 
   const bestFoot = profiler.foot(best.parameters);
@@ -98,7 +108,7 @@ export function profileEnds(
       let reach = quest.end.reach + FURTHER;
       for (const point of found) {
         if (point.chi2 > quest.limit) continue;
-        const value = quest.directed(point.parameters).value;
+        const value = quest.directed.value(point.parameters);
         if (value > reach) [further, reach] = [point, value];
       }
       if (further === null) continue;

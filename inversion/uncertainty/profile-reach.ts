@@ -15,7 +15,10 @@ export interface ProfileEnd {
 }
 
 /** s · ln quantity and its gradient on the free parameters. */
-export type DirectedQuantity = (parameters: Float64Array) => { value: number; gradient: Float64Array };
+export interface DirectedQuantity {
+  readonly value: (parameters: Float64Array) => number;
+  readonly gradient: (parameters: Float64Array) => Float64Array;
+}
 
 const STEPS = 40;
 /** No free parameter moves further than this (in ln) in one step: beyond it the tangent says little. */
@@ -173,7 +176,7 @@ export function createProfiler(problem: LeastSquaresProblem): Profiler {
     end: (foot, quantity, limit, from) => {
       const rise = limit - foot.chi2;
       const tolerance = CLOSE * rise;
-      const origin = quantity(foot.at).value;
+      const origin = quantity.value(foot.at);
       let best: Pick<ProfileEnd, 'parameters' | 'reach' | 'chi2'> = from ?? {
         parameters: foot.at,
         reach: origin,
@@ -185,7 +188,7 @@ export function createProfiler(problem: LeastSquaresProblem): Profiler {
       let calm = true;
       let steps = 0;
       for (; steps < STEPS && damping < STIFFEST; steps++) {
-        const parameters = constrainedStep(problem, here, quantity(here.at).gradient, limit, damping);
+        const parameters = constrainedStep(problem, here, quantity.gradient(here.at), limit, damping);
         if (parameters === null) break;
         const chi2 = problem.evaluate(parameters, work.residual);
         if (!(chi2 <= limit + rise) || (chi2 > limit + tolerance && ++outside > RETURNS)) {
@@ -200,7 +203,7 @@ export function createProfiler(problem: LeastSquaresProblem): Profiler {
           continue;
         }
         outside = 0;
-        const reach = quantity(parameters).value;
+        const reach = quantity.value(parameters);
         const gained = reach - best.reach;
         if (gained > 0) best = { parameters, reach, chi2 };
         const small = gained <= GAIN * Math.max(GAIN, best.reach - origin);
