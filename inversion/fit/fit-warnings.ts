@@ -4,6 +4,7 @@ import { TOLERANCES } from '../tolerances';
 import { chiSquaredSurvival } from '../uncertainty/chi-squared';
 import type { AllowedModel } from '../uncertainty/parameter-doubt';
 import type { FitSettings, LayeredEarth, Reading } from '../types';
+import { downWeighted, SET_ASIDE } from './tolerant-residual';
 
 export interface FitWarningInput {
   readonly readings: readonly Reading[];
@@ -78,6 +79,26 @@ function valuesAtBounds({ earth, settings, held }: FitWarningInput): string[] {
   );
 }
 
+/** More than this share of readings set aside is no scatter of single errors. */
+const MANY = 0.2;
+
+/** The readings that an outlier-tolerant fit lets count for little, by name. */
+function setAside({ readings, predicted, settings }: FitWarningInput): string[] {
+  if (!settings.outlierTolerant) return [];
+  const far = downWeighted(
+    readings.map((reading, i) => log(predicted[i]! / reading.apparentResistivity) / reading.relativeError),
+  );
+  if (far.length === 0) return [];
+  const named = list(far.map(({ index }) => index + 1));
+  const count = far.length === 1 ? 'counts' : 'count';
+  const words = `${named[0]!.toUpperCase()}${named.slice(1)} ${count} for little: more than ${SET_ASIDE} errors off this ground.`;
+  return far.length <= MANY * readings.length
+    ? [words]
+    : [
+        `${words} That is ${far.length} of ${readings.length}, too many for single errors: another ground or larger errors are likelier.`,
+      ];
+}
+
 /** Plain sentences that stand beside a result. */
 export function fitWarnings(input: FitWarningInput): string[] {
   const { readings, predicted, freeParameters } = input;
@@ -98,5 +119,5 @@ export function fitWarnings(input: FitWarningInput): string[] {
     warnings.push(
       `${readings.length} ${readings.length === 1 ? 'reading does' : 'readings do'} not determine ${freeParameters} unknowns: this is one of endlessly many models that fit.`,
     );
-  return [...warnings, ...anotherGround(input), ...valuesAtBounds(input)];
+  return [...warnings, ...setAside(input), ...anotherGround(input), ...valuesAtBounds(input)];
 }

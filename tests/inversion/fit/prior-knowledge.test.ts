@@ -138,6 +138,11 @@ describe('outlier-tolerant fits', () => {
     expect(tolerant.downWeighted[0]!.weight).toBeLessThan(0.05);
     expect(tolerant.residuals[9]).toBeLessThan(-15);
     expect(bent.downWeighted).toEqual([]);
+    expect(tolerant.warnings).toEqual([
+      'Reading 10 counts for little: more than 2.5 errors off this ground.',
+    ]);
+    const one = fitEarth(good, layered(1, { outlierTolerant: true }));
+    expect(one.warnings.join(' ')).toMatch(/That is \d+ of 18, too many for single errors/);
   });
 
   it('does not buy a bed for an outlier when it chooses the count', () => {
