@@ -1,21 +1,27 @@
 import { requireEarth } from '../earth/check-earth';
 import { InversionError } from '../inversion-error';
+import { magnitudeFault } from '../magnitudes';
 import { requireSpread } from '../spread/require-spread';
 import type { FitSettings, Reading } from '../types';
 
 export const MOST_LAYERS = 8;
+/** A shift held closer than this is none. */
+const LEAST_SHIFT_SIGMA = 1e-9;
 
 function requireReadings(readings: readonly Reading[]): void {
   if (readings.length === 0)
     throw new InversionError('no-readings', 'there are no readings; a fit needs at least one', ['readings']);
   readings.forEach((reading, i) => {
     requireSpread(reading.spread, ['readings', i, 'spread']);
-    for (const field of ['apparentResistivity', 'relativeError'] as const) {
-      const value = reading[field];
-      if (!(value > 0 && Number.isFinite(value)))
+    for (const [field, of] of [
+      ['apparentResistivity', 'resistivity'],
+      ['relativeError', 'relativeError'],
+    ] as const) {
+      const fault = magnitudeFault(reading[field], of);
+      if (fault)
         throw new InversionError(
           'reading-value',
-          `${field} of reading ${i + 1} is ${value}; it must be a number above 0`,
+          `${field} of reading ${i + 1} is ${reading[field]}; ${fault}`,
           ['readings', i, field],
         );
     }
@@ -31,6 +37,13 @@ function requireBounds({ bounds }: FitSettings): void {
         `the ${key} bounds are ${low} to ${high}; they must be two numbers above 0, the lower one first`,
         ['settings', 'bounds', key],
       );
+    const fault = magnitudeFault(low, key) ?? magnitudeFault(high, key);
+    if (fault)
+      throw new InversionError('bounds', `the ${key} bounds are ${low} to ${high}; ${fault}`, [
+        'settings',
+        'bounds',
+        key,
+      ]);
   }
 }
 
@@ -91,20 +104,21 @@ function requirePriors({ priors, layers }: FitSettings): void {
           : `a model of one layer has no ${on} to know beforehand`,
         'index',
       );
-    for (const [field, number] of [
-      ['value', value],
-      ['sigma', sigma],
-    ] as const)
-      if (!(number > 0 && Number.isFinite(number)))
-        refuse(`${field} of the prior is ${number}; it must be a number above 0`, field);
+    for (const [field, number, of] of [
+      ['value', value, on === 'resistivity' ? 'resistivity' : 'thickness'],
+      ['sigma', sigma, on === 'depth' ? 'thickness' : 'relativeError'],
+    ] as const) {
+      const fault = magnitudeFault(number, of);
+      if (fault) refuse(`${field} of the prior is ${number}; ${fault}`, field);
+    }
   });
 }
 
 function requireBranchShiftSigma({ branchShiftSigma }: FitSettings): void {
-  if (branchShiftSigma !== undefined && !(branchShiftSigma > 0 && branchShiftSigma <= 1))
+  if (branchShiftSigma !== undefined && !(branchShiftSigma >= LEAST_SHIFT_SIGMA && branchShiftSigma <= 1))
     throw new InversionError(
       'branch-shift',
-      `branchShiftSigma is ${branchShiftSigma}; it must be above 0 and at most 1`,
+      `branchShiftSigma is ${branchShiftSigma}; it must be from ${LEAST_SHIFT_SIGMA} to 1`,
       ['settings', 'branchShiftSigma'],
     );
 }

@@ -1,5 +1,6 @@
 import { MOST_LAYERS, requireFitInput } from '../fit/check-fit-input';
 import { InversionError, type InversionErrorCode } from '../inversion-error';
+import { magnitudeFault } from '../magnitudes';
 import type { LineBorehole, LineSettings, LineSounding } from './line-types';
 
 /** Scales outside of these are as good as one ground throughout, or as no tie. */
@@ -50,12 +51,10 @@ function requireBorehole({ x, contacts }: LineBorehole, layers: LineSettings['la
           : 'one layer has no boundary for a contact',
         [...at, 'boundary'],
       );
-    for (const [field, value] of Object.entries({ depth, sigma }))
-      if (!(value > 0 && Number.isFinite(value)))
-        refuse('borehole', `${field} of the contact is ${value}; it must be a number above 0`, [
-          ...at,
-          field,
-        ]);
+    for (const [field, value] of Object.entries({ depth, sigma })) {
+      const fault = magnitudeFault(value, 'thickness');
+      if (fault) refuse('borehole', `${field} of the contact is ${value}; ${fault}`, [...at, field]);
+    }
     const crossed = contacts.slice(0, c).find((one) => (one.boundary - boundary) * (one.depth - depth) <= 0);
     if (crossed)
       refuse(

@@ -1,3 +1,4 @@
+import { LARGEST_DISTANCE_RATIO, magnitudeFault } from '../magnitudes';
 import { TOLERANCES } from '../tolerances';
 import type { Spread } from '../types';
 import { electrodeDistances, inverseDistanceBracket, type ElectrodeDistances } from './electrode-distances';
@@ -24,11 +25,12 @@ function lengthFault(spread: Spread): SpreadFault | null {
   for (const field of LENGTH_FIELDS[spread.type]) {
     const value = values.get(field);
     if (value === null && MAY_BE_NULL.has(field)) continue;
-    if (typeof value === 'number' && Number.isFinite(value) && value > 0) continue;
+    const fault = magnitudeFault(value, field === 'n' ? 'separation' : 'length');
+    if (!fault) continue;
     return {
       code: 'spread-length',
       field,
-      message: `${field} is ${String(value)}; it must be a number above 0${MAY_BE_NULL.has(field) ? ' or null' : ''}`,
+      message: `${field} is ${String(value)}; ${fault}${MAY_BE_NULL.has(field) ? ' or null' : ''}`,
     };
   }
   return null;
@@ -37,6 +39,11 @@ function lengthFault(spread: Spread): SpreadFault | null {
 function cancels(d: ElectrodeDistances): boolean {
   const scale = [d.am, d.an, d.bm, d.bn].reduce<number>((sum, r) => (r === null ? sum : sum + 1 / r), 0);
   return Math.abs(inverseDistanceBracket(d)) <= TOLERANCES.bracketCancellation * scale;
+}
+
+function tooFarApart(d: ElectrodeDistances): boolean {
+  const finite = [d.am, d.an, d.bm, d.bn].filter((r) => r !== null);
+  return Math.max(...finite) > LARGEST_DISTANCE_RATIO * Math.min(...finite);
 }
 
 /** null when the spread can be used; otherwise the first fault, with what was found and what is allowed. */
@@ -57,6 +64,13 @@ export function checkSpread(spread: Spread): SpreadFault | null {
       field: spread.type === 'electrodes' ? 'am' : 'halfMN',
       message:
         '1/AM − 1/AN − 1/BM + 1/BN cancels, so these electrodes measure no voltage on uniform ground and K is unbounded; check the four distances',
+    };
+  }
+  if (distances && tooFarApart(distances)) {
+    return {
+      code: 'spread-length',
+      field: spread.type === 'electrodes' ? 'am' : LENGTH_FIELDS[spread.type].at(-1)!,
+      message: `the longest distance between these electrodes is more than ${LARGEST_DISTANCE_RATIO} times the shortest; check them`,
     };
   }
   return null;
