@@ -1,7 +1,14 @@
 import fc from 'fast-check';
 import { expect, it } from 'vitest';
 import { createForwardOperator, geometricFactor, type Spread } from '../../inversion';
-import { answerOrRefusal, soundSpread, spoiltEarth, spoiltSpread, wildEarth } from './support/bad-input';
+import {
+  answerOrRefusal,
+  soundSpread,
+  spoiltEarth,
+  spoiltSpread,
+  tally,
+  wildEarth,
+} from './support/bad-input';
 
 const forward = (
   earth: Parameters<ReturnType<typeof createForwardOperator>['predict']>[0],
@@ -9,15 +16,17 @@ const forward = (
 ) => answerOrRefusal({ ...earth, spreads }, () => Array.from(createForwardOperator(spreads).predict(earth)));
 
 it('refuses what cannot be, or gives finite resistivities', () => {
+  const seen = tally();
   fc.assert(
     fc.property(spoiltEarth, fc.array(spoiltSpread, { maxLength: 4 }), (earth, spreads) => {
-      forward(earth, spreads);
+      seen.count(forward(earth, spreads));
       spreads.forEach((spread) =>
         answerOrRefusal({ spreads: spread, ...spread }, () => geometricFactor(spread)),
       );
     }),
     { seed: 1, numRuns: 300 },
   );
+  expect(Math.min(seen.answered(), seen.refused())).toBeGreaterThan(10);
 });
 
 it('takes every earth to contrasts of 10¹³ and beds of 1 µm', () => {

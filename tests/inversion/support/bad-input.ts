@@ -160,3 +160,18 @@ export const ODD_SOUNDINGS: readonly [string, readonly Reading[]][] = [
 ];
 
 export const manyReadings = (count: number): Reading[] => wenner(count, (i) => 100 + 5 * Math.sin(i));
+
+/** Tells how many of the outcomes were answers and how many refusals: a test of odd input must meet both. */
+export function tally(): {
+  readonly count: (outcome: unknown) => void;
+  readonly answered: () => number;
+  readonly refused: () => number;
+} {
+  let answers = 0;
+  let refusals = 0;
+  return {
+    count: (outcome) => void (outcome === null ? (refusals += 1) : (answers += 1)),
+    answered: () => answers,
+    refused: () => refusals,
+  };
+}
