@@ -1,6 +1,6 @@
 import { TOLERANCES } from '../tolerances';
 import type { FitStatus } from '../types';
-import { dampedStep } from './damped-step';
+import { packagedStep, type DampedStep } from './damped-step';
 import { createReduction, reducedMisfit, reduceProblem, type ReducedProblem } from './reduced-problem';
 
 /** A least-squares problem in n free parameters between `low` and `high`, m whitened residuals. */
@@ -32,16 +32,17 @@ export interface LeastSquaresOptions {
   readonly initialDamping?: number;
   /** converged-decrease as soon as the linearised problem promises less than this × χ²; default `TOLERANCES.promise` */
   readonly promise?: number;
-  /** asked before each linearised step, with the χ² that it promises; true ends the run as if the limit were reached */
+  /** asked before each linearised step, with the χ² that the linearised problem promises; true ends the run as if the limit were reached */
   readonly abandon?: (parameters: Float64Array, promised: number) => boolean;
+  /** what computes a step; default the packaged solver */
+  readonly step?: DampedStep;
   readonly onIteration?: (iteration: number, chi2: number) => void;
 }
 
 const FASTER = 4;
 const SLOWER = 5;
-/** Shares of the promised fall of χ² above which the damping is lowered, and below which it is raised. */
-const WELL_KEPT = 0.75;
-const BADLY_KEPT = 0.25;
+/** The damping is lowered when χ² fell by more than this share of what the linearised problem promised. */
+const WELL_KEPT = 0.25;
 const INITIAL_DAMPING = 0.3;
 const LOWEST_DAMPING = 1e-9;
 /** A parameter is damped as if its sensitivity were at least this share of the strongest one's. */
@@ -71,10 +72,11 @@ function stepInto(
   free: readonly number[],
   scale: Float64Array,
   damping: number,
+  step: DampedStep,
 ): number {
   const low = free.map((j) => (problem.low[j]! - current.parameters[j]!) * scale[j]!);
   const high = free.map((j) => (problem.high[j]! - current.parameters[j]!) * scale[j]!);
-  const delta = dampedStep(reduced, low, high, damping);
+  const delta = step(reduced, low, high, damping);
   trial.parameters.set(current.parameters);
   free.forEach((j, k) => {
     const moved = current.parameters[j]! + delta[k]! / scale[j]!;
@@ -135,8 +137,7 @@ function farthestMove(from: Float64Array, to: Float64Array): number {
 }
 
 /**
- * Bounded Levenberg–Marquardt from `start`: the packaged solver driven one step at a time on the reduced problem, a step kept
- * only if χ² falls, damping ÷4 on success and ×5 on failure; one run of the forward model a step, one Jacobian a kept step.
+ * Bounded Levenberg–Marquardt from `start`: one step at a time on the reduced problem, kept only if χ² falls, damping ÷4 on success and ×5 on failure; one run of the forward model a step, one Jacobian a kept step.
  * A parameter that sits on a bound and would leave it is held for that step.
  * Source: Marquardt 1963; scaled damping after Moré 1978.
  */
@@ -148,9 +149,10 @@ export function minimise(
   const n = problem.low.length;
   const m = problem.residuals;
   const limit = options.iterations ?? TOLERANCES.iterations;
+  const step = options.step ?? packagedStep;
   const promise = options.promise ?? TOLERANCES.promise;
   const jacobian = new Float64Array(m * n);
-  const work = createReduction(m, n);
+  const reduction = createReduction(m, n);
   let current = createPoint(n, m);
   let trial = createPoint(n, m);
   for (let j = 0; j < n; j++)
@@ -173,13 +175,13 @@ export function minimise(
     if (steepest <= TOLERANCES.gradient * level) return done('converged-gradient');
     const strongest = norms.reduce((most, norm) => Math.max(most, norm), 0);
     const scale = norms.map((norm) => Math.max(norm, SCALE_FLOOR * strongest, 1e-300));
-    const reduced = reduceProblem(jacobian, current.residual, n, free, scale, work);
+    const reduced = reduceProblem(jacobian, current.residual, n, free, scale, reduction);
     const fall = norm2(reduced.rest);
     if (fall <= promise * current.chi2) return done('converged-decrease');
     if (options.abandon?.(current.parameters, current.chi2 - fall)) return done('iteration-limit');
     let promised: number;
     for (;;) {
-      promised = stepInto(trial, current, problem, reduced, free, scale, damping);
+      promised = stepInto(trial, current, problem, reduced, free, scale, damping, step);
       iteration++;
       if (trial.chi2 < current.chi2) break;
       damping *= SLOWER;
@@ -190,7 +192,6 @@ export function minimise(
     slow = current.chi2 - trial.chi2 < TOLERANCES.decrease * current.chi2 ? slow + 1 : 0;
     const kept = (current.chi2 - trial.chi2) / promised;
     if (kept > WELL_KEPT) damping = Math.max(LOWEST_DAMPING, damping / FASTER);
-    else if (kept < BADLY_KEPT) damping *= 2;
     [current, trial] = [trial, current];
     options.onIteration?.(iteration, current.chi2);
     if (move <= TOLERANCES.step) return done('converged-step');

@@ -3,6 +3,7 @@ import type { RandomStream } from '../random';
 import { TOLERANCES } from '../tolerances';
 import type { FitProgress, LayeredEarth } from '../types';
 import { Z95 } from '../uncertainty/parameter-doubt';
+import { createSearchStep } from './damped-step';
 import type { LayeredProblem } from './layered-problem';
 import { minimise, type LeastSquaresOptions, type LeastSquaresOutcome } from './levenberg-marquardt';
 import { evenStart, randomStart, splitStarts, type SoundingCurve } from './starting-models';
@@ -24,15 +25,17 @@ export interface SearchEffort {
 /** For a result that is shown. */
 const FULL: SearchEffort = {
   screened: 200,
-  random: 16,
-  shortRun: 6,
-  patience: 12,
+  random: 24,
+  shortRun: 4,
+  patience: 20,
   carried: 40,
 };
 /** A carried start has converged once its linearised problem promises a fall of χ² of no more than this × χ². */
 const PROMISE = 1e-3;
 /** A carried start this close (in ln) to where another ended goes to the same place. */
 const SAME_PLACE = 0.1;
+/** χ² above the least under which a model is allowed by the readings: it is then kept beside the best. */
+const ALLOWED = Z95 * Z95;
 /** For a model that only serves to start the next layer count. */
 const SCOUT: SearchEffort = { screened: 0, random: 0, shortRun: 8, patience: 0, carried: 20 };
 
@@ -76,6 +79,8 @@ function screenedStarts(
 interface Candidate {
   readonly start: number;
   readonly outcome: LeastSquaresOutcome;
+  /** left on its way, so that it stands for no model of its own */
+  readonly abandoned?: boolean;
 }
 
 /** Tells the progress of the run from one start. */
@@ -99,9 +104,10 @@ function search(
   onProgress: MultiStartOptions['onProgress'],
 ): Found {
   let iterations = 0;
+  const step = createSearchStep(layered.problem.low.length);
   const tell = teller(layered, queue.length, onProgress);
   const run = (from: ArrayLike<number>, start: number, more: LeastSquaresOptions): LeastSquaresOutcome => {
-    const outcome = minimise(layered.problem, from, { ...more, onIteration: tell(start) });
+    const outcome = minimise(layered.problem, from, { ...more, step, onIteration: tell(start) });
     iterations += outcome.iterations;
     return outcome;
   };
@@ -111,15 +117,21 @@ function search(
   const ends: Candidate[] = [];
   let best = leader!;
   // what cannot come into the 95 % range of the best, or goes where another went, is not carried to its end
-  const abandon = (parameters: Float64Array, promised: number) =>
+  const hopeless = (parameters: Float64Array, promised: number) =>
     ends.length > 0 &&
-    (promised > best.outcome.chi2 + Z95 * Z95 ||
+    (promised > best.outcome.chi2 + ALLOWED ||
       ends.some((end) => parameters.every((p, j) => Math.abs(p - end.outcome.parameters[j]!) < SAME_PLACE)));
   const carry = ({ start, outcome }: Candidate): Candidate => {
     const { status, parameters, damping } = outcome;
     if (status !== 'iteration-limit') return { start, outcome };
-    const more = { initialDamping: damping, iterations: effort.carried, promise: PROMISE, abandon };
-    return { start, outcome: run(parameters, start, more) };
+    let abandoned = false;
+    const outcomeOfMore = run(parameters, start, {
+      initialDamping: damping,
+      iterations: effort.carried,
+      promise: PROMISE,
+      abandon: (at, promised) => (abandoned = hopeless(at, promised)),
+    });
+    return { start, outcome: outcomeOfMore, abandoned };
   };
   let idle = 0;
   for (const candidate of [leader!, ...others]) {
@@ -143,16 +155,23 @@ function polish(
   const { problem } = layered;
   const residual = new Float64Array(problem.residuals);
   const judged = ends
-    .map(({ start, outcome: { parameters, damping } }) => {
-      return { start, parameters, damping, chi2: problem.evaluate(parameters, residual) };
+    .map(({ start, abandoned, outcome: { parameters, damping } }) => {
+      return { start, abandoned, parameters, damping, chi2: problem.evaluate(parameters, residual) };
     })
     .sort((a, b) => a.chi2 - b.chi2);
   const [best, ...others] = judged;
+  const tell = teller(layered, starts, onProgress)(best!.start);
+  tell(0, best!.chi2);
   const outcome = minimise(problem, best!.parameters, {
     initialDamping: best!.damping,
-    onIteration: teller(layered, starts, onProgress)(best!.start),
+    onIteration: tell,
   });
-  return { ...outcome, iterations: iterations + outcome.iterations, starts, others };
+  return {
+    ...outcome,
+    iterations: iterations + outcome.iterations,
+    starts,
+    others: others.filter((other) => !other.abandoned),
+  };
 }
 
 /**

@@ -2,7 +2,7 @@
 export interface ReducedProblem {
   /** free parameters */
   readonly size: number;
-  /** upper triangle of R, row-major with row length `size` */
+  /** upper triangle of R, row-major with row length `size`; what follows it is of no account */
   readonly triangle: Float64Array;
   readonly rest: Float64Array;
 }
@@ -18,14 +18,24 @@ export function reducedMisfit({ size, triangle, rest }: ReducedProblem, delta: A
   return sum;
 }
 
-/** Working array of the reduction, kept by its caller from one step to the next. */
-export const createReduction = (rows: number, columns: number): Float64Array =>
-  new Float64Array(rows * (columns + 1));
+/** Working arrays of the reduction, kept by its caller from one step to the next. */
+export interface Reduction {
+  /** column-major, the residual last */
+  readonly work: Float64Array;
+  readonly triangle: Float64Array;
+  readonly rest: Float64Array;
+}
+
+export const createReduction = (rows: number, columns: number): Reduction => ({
+  work: new Float64Array(rows * (columns + 1)),
+  triangle: new Float64Array(columns * columns),
+  rest: new Float64Array(columns),
+});
 
 /**
  * Householder QR of the columns `free` of a row-major `rows × columns` Jacobian, each divided by its `scale`, with the
  * residual carried along: JS⁻¹ = QR and z = Qᵀr, so that ‖r + JS⁻¹δ‖² = ‖z + Rδ‖² + what no δ can change. A problem with
- * fewer rows than parameters keeps zero rows. Source: Golub & Van Loan 2013, Matrix Computations, algorithm 5.2.1.
+ * fewer rows than parameters keeps zero rows. The result stands in `reduction` until the next call. Source: Golub & Van Loan 2013, Matrix Computations, algorithm 5.2.1.
  */
 export function reduceProblem(
   jacobian: Float64Array,
@@ -33,8 +43,9 @@ export function reduceProblem(
   columns: number,
   free: readonly number[],
   scale: Float64Array,
-  work: Float64Array,
+  reduction: Reduction,
 ): ReducedProblem {
+  const { work, triangle, rest } = reduction;
   const rows = residual.length;
   const size = free.length;
   for (let k = 0; k < size; k++) {
@@ -44,12 +55,12 @@ export function reduceProblem(
   }
   work.set(residual, size * rows);
   const pivots = Math.min(size, rows);
-  const triangle = new Float64Array(size * size);
+  triangle.fill(0);
+  rest.fill(0);
   for (let k = 0; k < pivots; k++) {
     triangle[k * size + k] = reflectColumn(work, rows, k, size);
     for (let j = k + 1; j < size; j++) triangle[k * size + j] = work[j * rows + k]!;
   }
-  const rest = new Float64Array(size);
   for (let k = 0; k < pivots; k++) rest[k] = work[size * rows + k]!;
   return { size, triangle, rest };
 }

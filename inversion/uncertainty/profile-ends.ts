@@ -68,7 +68,9 @@ export function profileEnds(
       value: (at) => side * log(of(earthOnce(at)).value),
       gradient: (at) => {
         const { gradient } = of(earthOnce(at));
-        return Float64Array.from(free, (j) => side * gradient(j));
+        const slope = new Float64Array(free.length);
+        for (let k = 0; k < free.length; k++) slope[k] = side * gradient(free[k]!);
+        return slope;
       },
     };
     const near: Quest = { directed, limit: best.chi2 + limits[0], nearer: null, end: null };

@@ -52,6 +52,9 @@ export interface Linearised {
 interface Work {
   readonly residual: Float64Array;
   readonly jacobian: Float64Array;
+  readonly factor: Float64Array;
+  readonly alongG: Float64Array;
+  readonly alongB: Float64Array;
 }
 
 function linearise(problem: LeastSquaresProblem, at: Float64Array, work: Work): Linearised {
@@ -71,33 +74,37 @@ function linearise(problem: LeastSquaresProblem, at: Float64Array, work: Work): 
   return { at, chi2, normal, slope };
 }
 
-/** A⁻¹g and A⁻¹b over the columns in `free`, A the normal matrix lifted off its rounding floor. */
+/** A⁻¹g and A⁻¹b over the columns in `free` into `work`, A the normal matrix lifted off its rounding floor; false where it cannot. */
 function solveBoth(
+  { factor, alongG, alongB }: Work,
   normal: Float64Array,
   damping: number,
   free: readonly number[],
   g: Float64Array,
   b: Float64Array,
-) {
+): boolean {
   const n = g.length;
   const k = free.length;
-  const factor = new Float64Array(k * k);
   let strongest = 0;
   for (const j of free) strongest = Math.max(strongest, normal[j * n + j]!);
-  free.forEach((row, r) => {
-    for (let c = 0; c <= r; c++) factor[r * k + c] = normal[row * n + free[c]!]!;
+  for (let r = 0; r < k; r++) {
+    const row = free[r]! * n;
+    for (let c = 0; c <= r; c++) factor[r * k + c] = normal[row + free[c]!]!;
     factor[r * k + r]! += damping + RIDGE * strongest;
-  });
-  const alongG = Float64Array.from(free, (j) => g[j]!);
-  const alongB = Float64Array.from(free, (j) => b[j]!);
-  if (!choleskyInPlace(factor, k)) return null;
+    alongG[r] = g[free[r]!]!;
+    alongB[r] = b[free[r]!]!;
+  }
+  if (!choleskyInPlace(factor, k)) return false;
   choleskySolve(factor, k, alongG);
   choleskySolve(factor, k, alongB);
-  return { alongG, alongB };
+  return true;
 }
 
-const inner = (free: readonly number[], a: Float64Array, packed: Float64Array): number =>
-  free.reduce((sum, j, k) => sum + a[j]! * packed[k]!, 0);
+function inner(free: readonly number[], a: Float64Array, packed: Float64Array): number {
+  let sum = 0;
+  for (let k = 0; k < free.length; k++) sum += a[free[k]!]! * packed[k]!;
+  return sum;
+}
 
 /**
  * The step from a point, no longer than `longest` and no further than the first bound in its way: going on from there with
@@ -105,6 +112,7 @@ const inner = (free: readonly number[], a: Float64Array, packed: Float64Array): 
  */
 function constrainedStep(
   problem: LeastSquaresProblem,
+  work: Work,
   { at, chi2, normal, slope }: Linearised,
   g: Float64Array,
   limit: number,
@@ -113,14 +121,13 @@ function constrainedStep(
   const delta = new Float64Array(at.length);
   let free = Array.from(at, (_, j) => j);
   for (;;) {
-    const solved = solveBoth(normal, damping, free, g, slope);
-    if (solved === null) return null;
-    const least = chi2 - inner(free, slope, solved.alongB);
-    const perG = inner(free, g, solved.alongG);
+    if (!solveBoth(work, normal, damping, free, g, slope)) return null;
+    const least = chi2 - inner(free, slope, work.alongB);
+    const perG = inner(free, g, work.alongG);
     if (perG === 0) return null;
     const alpha = perG > 0 && limit > least ? Math.sqrt((limit - least) / perG) : 0;
     delta.fill(0);
-    free.forEach((j, k) => (delta[j] = alpha * solved.alongG[k]! - solved.alongB[k]!));
+    free.forEach((j, k) => (delta[j] = alpha * work.alongG[k]! - work.alongB[k]!));
     const stay = free.filter((j) => (delta[j]! < 0 ? at[j]! > problem.low[j]! : at[j]! < problem.high[j]!));
     if (stay.length === free.length) break;
     free = stay;
@@ -170,6 +177,9 @@ export function createProfiler(problem: LeastSquaresProblem): Profiler {
   const work: Work = {
     residual: new Float64Array(problem.residuals),
     jacobian: new Float64Array(problem.residuals * n),
+    factor: new Float64Array(n * n),
+    alongG: new Float64Array(n),
+    alongB: new Float64Array(n),
   };
   return {
     foot: (parameters) => linearise(problem, parameters, work),
@@ -188,7 +198,7 @@ export function createProfiler(problem: LeastSquaresProblem): Profiler {
       let calm = true;
       let steps = 0;
       for (; steps < STEPS && damping < STIFFEST; steps++) {
-        const parameters = constrainedStep(problem, here, quantity.gradient(here.at), limit, damping);
+        const parameters = constrainedStep(problem, work, here, quantity.gradient(here.at), limit, damping);
         if (parameters === null) break;
         const chi2 = problem.evaluate(parameters, work.residual);
         if (!(chi2 <= limit + rise) || (chi2 > limit + tolerance && ++outside > RETURNS)) {
