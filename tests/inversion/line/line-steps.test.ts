@@ -1,9 +1,9 @@
 import { describe, expect, it } from 'vitest';
 import { lateralTie, logEarthOf, tiedValues } from '../../../inversion/line/lateral-ties';
-import { lineProblem, placesOf } from '../../../inversion/line/line-layout';
+import { lineProblem, loneProblem, placesOf } from '../../../inversion/line/line-layout';
 import { evaluateLine, lineariseLine, type LineState } from '../../../inversion/line/line-problem';
 import { repairLine } from '../../../inversion/line/line-repair';
-import { bestPath, type Candidate } from '../../../inversion/line/line-starts';
+import { bestPath, lineStarts, type Candidate } from '../../../inversion/line/line-starts';
 import { minimiseLine } from '../../../inversion/line/minimise-line';
 import type { LineSettings } from '../../../inversion';
 import { alongLine, everyMetres, inventedLine } from './invented-line';
@@ -107,5 +107,35 @@ describe('a sounding in a wrong valley', () => {
       bestPath(places, choices, 1, { resistivity: depth, depth }).map(({ free }) => free[0]);
     expect(chosen(0.2)).toEqual([3, 3.1, 3]);
     expect(chosen(100)).toEqual([3, 5, 3]);
+  });
+});
+
+describe('the starts of a line', () => {
+  const line = inventedLine(everyMetres(100, 5), () => GROUND);
+
+  it('are those of the neighbours where a sounding has too few readings of its own', () => {
+    const poor = line.map(({ x, readings }, i) => ({
+      x,
+      readings: i === 2 ? readings.slice(0, 2) : readings,
+    }));
+    const settings = alongLine(3);
+    const places = placesOf(poor, settings);
+    const lone = places.map(({ x, sounding }, s) => ({
+      x,
+      curve: sounding!.curve,
+      layered: loneProblem(places, s, 3, settings),
+      fewer: undefined,
+    }));
+    const starts = lineStarts(lone, settings.lateral, 1, undefined, () => undefined);
+    starts[2]!.forEach((value, j) => expect(Math.abs(value - logs[j]!)).toBeLessThan(0.5));
+  });
+
+  it('know the contacts of a borehole next to them, where the layers have that boundary', () => {
+    const contacts = [{ boundary: 1, depth: 16, sigma: 1 }];
+    const settings = alongLine(3, { boreholes: [{ x: 150, contacts }] });
+    const places = placesOf(line, settings);
+    const rows = (s: number, layers: number) =>
+      loneProblem(places, s, layers, settings).problem.residuals - places[s]!.sounding!.readings.length;
+    expect([rows(0, 3), rows(1, 3), rows(3, 3), rows(1, 2)]).toEqual([0, 1, 1, 0]);
   });
 });
