@@ -1,0 +1,9 @@
+import { fitRows } from './bench/fit-rows';
+import { kernelRow } from './bench/kernel-row';
+import { poolRows } from './bench/pool-rows';
+import { printRow } from './bench/table';
+
+/** Speed of the engine against yardsticks that are run in turn with it; only ratios are judged. */
+printRow(await kernelRow());
+for (const row of await fitRows()) printRow(row);
+for (const row of await poolRows()) printRow(row);
