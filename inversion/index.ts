@@ -102,3 +102,16 @@ export {
   type PlannedReading,
   type TellingApart,
 } from './uncertainty/detectability';
+export { ensembleRange } from './uncertainty/ensemble/ensemble-range';
+export type {
+  EnsemblePrior,
+  EnsembleProgress,
+  EnsembleResult,
+  EnsembleStatus,
+  Quantiles,
+  SampleSettings,
+  TargetAnswer,
+  TargetBed,
+} from './uncertainty/ensemble/ensemble-types';
+export { sampleEnsemble } from './uncertainty/ensemble/sample-ensemble';
+export type { SampleOptions } from './uncertainty/ensemble/stop-check';

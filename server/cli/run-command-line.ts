@@ -29,6 +29,10 @@ export async function runCommandLine(
       const { answerFitLine } = await import('./answer-fit-line');
       return answerLines(input, output, answerFitLine());
     }
+    case 'sample': {
+      const { answerSample } = await import('./answer-sample');
+      return answerLines(input, output, answerSample());
+    }
     case 'schema':
       return printSchema(rest[0], output, errors);
     case 'help':

@@ -7,6 +7,12 @@ import {
   layeredEarthSchema,
 } from './fit';
 import { fitLineAnswerSchema, fitLineRequestSchema, fitLineSettingsSchema } from './fit-line';
+import {
+  ensembleStatusSchema,
+  sampleAnswerSchema,
+  sampleRequestSchema,
+  sampleSettingsSchema,
+} from './sample';
 import { lineId } from './line-id';
 import { spreadSchema } from './spread';
 
@@ -56,6 +62,11 @@ export const COMMAND_LINE_SCHEMAS = {
   'fit-line-settings': fitLineSettingsSchema,
   'fit-line-request': fitLineRequestSchema,
   'fit-line-answer': fitLineAnswerSchema,
+  sample: z.strictObject({ request: sampleRequestSchema, answer: sampleAnswerSchema }),
+  'sample-settings': sampleSettingsSchema,
+  'sample-status': ensembleStatusSchema,
+  'sample-request': sampleRequestSchema,
+  'sample-answer': sampleAnswerSchema,
   error: lineErrorSchema,
 } as const;
 

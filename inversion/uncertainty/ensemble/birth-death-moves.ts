@@ -5,6 +5,9 @@ import type { Ground } from './ground';
 import type { GroundSpace } from './ground-space';
 import type { Move } from './metropolis';
 
+/** What new layers are drawn from: ln ranges of resistivity and depth, and the counts that may be reached. */
+export type MoveRange = Pick<GroundSpace, 'fewest' | 'most' | 'logResistivity' | 'logBoundary'>;
+
 /** How lnρ of a new layer is drawn about that of the layer it is cut from: shares and standard deviations; the rest is even over the prior. */
 const NEAR = [
   { share: 0.35, sigma: 0.25 },
@@ -13,7 +16,7 @@ const NEAR = [
 const EVEN_SHARE = 0.3;
 
 function drawNewResistivity(
-  { logResistivity: [low, high] }: GroundSpace,
+  { logResistivity: [low, high] }: MoveRange,
   beside: number,
   random: RandomStream,
 ): number {
@@ -27,7 +30,7 @@ function drawNewResistivity(
 
 /** ln density of that draw for a value within the prior. */
 function logNewResistivity(
-  { logResistivity: [low, high] }: GroundSpace,
+  { logResistivity: [low, high] }: MoveRange,
   value: number,
   beside: number,
 ): number {
@@ -43,7 +46,7 @@ function logNewResistivity(
  * A new boundary, even in ln depth over the prior; the part of the cut layer above it or below it, by a toss, gets a ρ of its own.
  * ln q ratio = ln(1/N) − ln(1/Z) − ln q(ρ): `deathMove` chooses among N boundaries then, and tosses too.
  */
-export function birthMove(space: GroundSpace, weight: number): Move {
+export function birthMove(space: MoveRange, weight: number): Move {
   const [low, high] = space.logBoundary;
   const logRange = log(high - low);
   return {
@@ -71,7 +74,7 @@ export function birthMove(space: GroundSpace, weight: number): Move {
 }
 
 /** One boundary, each as likely, goes with the layer above it or below it, by a toss: `birthMove` backwards. */
-export function deathMove(space: GroundSpace, weight: number): Move {
+export function deathMove(space: MoveRange, weight: number): Move {
   const logRange = log(space.logBoundary[1] - space.logBoundary[0]);
   return {
     name: 'death',

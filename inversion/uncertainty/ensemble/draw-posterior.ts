@@ -1,25 +1,26 @@
 import { createRandomStream } from '../../random';
 import type { EnsembleProgress } from './ensemble-types';
 import { bulkEffectiveSize, rankRHat, type Chains } from './diagnostics';
+import type { GroundSpace } from './ground-space';
 import type { Model } from './metropolis';
 import { monitoredChains } from './monitored-chains';
 import { samplingMoves } from './moves';
-import { chosenMembers, joinPopulations, type Population } from './population';
-import { runChain, type ChainRun, type MoveCount } from './run-chains';
-import { temperedPopulation } from './temper';
+import { chosenMembers, otherPopulations, type Population } from './population';
+import { walkMembers, type MoveCount, type Walk } from './walk-members';
+import { temperedPopulations } from './temper';
 
 export const CHAINS = 4;
 /** R-hat below this and at least so many effective samples: the chains are long enough (Vehtari et al. 2021). */
 export const R_HAT_LIMIT = 1.01;
 export const LEAST_EFFECTIVE = 400;
-/** How often the run may be taken up again, twice as long each time. */
-const RETRIES = 3;
-/** Moves from one kept sample to the next, at first. */
+/** How often all is done again. */
+const RETRIES = 1;
+/** Moves from one kept sample to the next. */
 const THINNING = { stated: 3, unknown: 10 };
-/** Samples a chain takes before the proposals are fitted anew, and those of all chains that they are fitted to. */
-const WARM_UP = 400;
-const MOST_FITTED = 2000;
-const REPORT_EVERY = 100;
+/** Members of each population by layer count. */
+const SIZES = [0, 150, 150, 250, 600];
+/** About as many members of all populations serve to fit proposals. */
+const MOST_FITTED = 4000;
 
 export interface PosteriorDraws {
   readonly chains: readonly Population[];
@@ -45,7 +46,7 @@ function thinnedMembers(population: Population): Population {
   );
 }
 
-function addCounts(runs: readonly ChainRun[]): MoveCount[] {
+function addCounts(runs: readonly Walk[]): MoveCount[] {
   return runs[0]!.counts.map(({ move }, m) => ({
     move,
     tried: runs.reduce((sum, run) => sum + run.counts[m]!.tried, 0),
@@ -63,43 +64,39 @@ function diagnose(monitored: readonly Chains[]): Pick<PosteriorDraws, 'rHat' | '
   return { rHat, effectiveSampleSize };
 }
 
+/** Members of each population: more where there is more to find. */
+function firstSize({ fewest, most }: GroundSpace): number {
+  if (fewest < most) return 500;
+  return SIZES[most] ?? 600;
+}
+
 /**
- * Samples of prior × likelihood by four chains, each from a tempered population of its own. Proposals are fitted to what
- * came before and then stand still; where the chains do not agree, all is thrown away and run twice as long.
+ * Samples of prior × likelihood from four populations, each tempered from draws of the prior and then walking on. No member of one
+ * enters another: they lend each other only what proposals are made from, which stands still
+ * while samples are kept. Where the populations do not agree, all is done again with three times as many members.
  */
 export function drawPosterior(model: Model, { draws, seed, report }: DrawOptions): PosteriorDraws {
   const { space } = model;
-  const stated = space.fewest === space.most;
-  const size = stated ? Math.min(500, Math.max(150, 50 * (2 * space.most - 1))) : 400;
   const streams = Array.from({ length: CHAINS }, (_, c) => createRandomStream((seed + c * 0x9e3779b9) >>> 0));
-  const starts = streams.map((random, c) =>
-    temperedPopulation(model, size, random, (beta) =>
-      report({ stage: 'tempering', share: (c + beta) / CHAINS }),
-    ),
-  );
-  const tempered = joinPopulations(starts.map((start) => start.tempered));
-  const run = (from: readonly Population[], length: number, thinning: number): ChainRun[] => {
-    const pool = thinnedMembers(joinPopulations(from));
-    const moves = samplingMoves(space, pool, tempered, streams[0]!);
-    return streams.map((random, c) =>
-      runChain(model, moves, from[c]!, from[c]!.size - 1, length, thinning, random, (draw) => {
-        if (draw % REPORT_EVERY === 0) report({ stage: 'sampling', share: (c + draw / length) / CHAINS });
-      }),
+  const length = Math.max(4, Math.ceil(draws / CHAINS));
+  const thinning = space.fewest === space.most ? THINNING.stated : THINNING.unknown;
+  for (let attempt = 0, size = firstSize(space); ; attempt++, size *= 3) {
+    const { posterior, tempered } = temperedPopulations(model, size, streams, (beta) =>
+      report({ stage: 'tempering', share: beta }),
     );
-  };
-  const length = Math.max(2, Math.ceil(draws / CHAINS));
-  let thinning = stated ? THINNING.stated : THINNING.unknown;
-  let runs = run(
-    starts.map((start) => start.posterior),
-    Math.min(WARM_UP, length),
-    thinning,
-  );
-  for (let attempt = 0; ; attempt++, thinning *= 2) {
-    const before = runs.map(({ samples }) => samples);
-    runs = run(before, length, thinning);
-    const chains = runs.map(({ samples }) => samples);
+    const others = (populations: readonly Population[], c: number) =>
+      thinnedMembers(otherPopulations(populations, c));
+    const walks = streams.map((random, c) => {
+      const moves = samplingMoves(space, others(posterior, c), others(tempered, c), random);
+      return walkMembers(model, moves, posterior[c]!, length, thinning, random, (share) =>
+        report({ stage: 'sampling', share: (c + share) / CHAINS }),
+      );
+    });
+    const chains = walks.map(({ samples }) => samples);
     const found = diagnose(monitoredChains(space, chains));
     const enough = found.rHat < R_HAT_LIMIT && found.effectiveSampleSize >= LEAST_EFFECTIVE;
-    if (enough || attempt === RETRIES) return { chains, counts: addCounts(runs), thinning, ...found };
+    // more members do not help where too few samples are asked for
+    const few = length * CHAINS < 2 * LEAST_EFFECTIVE;
+    if (enough || few || attempt === RETRIES) return { chains, counts: addCounts(walks), thinning, ...found };
   }
 }

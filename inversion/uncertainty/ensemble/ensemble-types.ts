@@ -30,7 +30,7 @@ export interface SampleSettings {
 export type EnsembleStatus = 'finished' | 'chain-too-short';
 
 export type MoveName =
-  'difference' | 'mixture' | 'birth' | 'death' | 'boundary' | 'resistivity' | 'equivalence';
+  'difference' | 'mixture' | 'birth' | 'death' | 'relocation' | 'boundary' | 'resistivity' | 'equivalence';
 
 /** Quantiles of the samples, in the unit of the quantity. */
 export interface Quantiles {

@@ -10,7 +10,6 @@ import {
 
 /** Points that a component needs, times its dimensions. */
 const POINTS_PER_DIMENSION = 10;
-const ROUNDS = 20;
 /** Added to each variance, against the variance of all points: well below the width of the narrowest ridge. */
 const RIDGE = 1e-5;
 /** Scale matrices are widened by this: a chain gets stuck where a proposal falls short. */
@@ -120,7 +119,12 @@ function shareOut(
  * None where the points are too few.
  * Source: Peel & McLachlan 2000, Statistics and Computing 10, 339–348, with the scales of Kent, Tyler & Vardi 1994 (from memory).
  */
-export function fitComponents(points: Points, most: number, random: RandomStream): MixtureParts {
+export function fitComponents(
+  points: Points,
+  most: number,
+  rounds: number,
+  random: RandomStream,
+): MixtureParts {
   const { values, count, d } = points;
   const components = Math.min(most, Math.floor(count / (POINTS_PER_DIMENSION * d)));
   const moments = { means: new Float64Array(components * d), scales: new Float64Array(components * d * d) };
@@ -135,7 +139,7 @@ export function fitComponents(points: Points, most: number, random: RandomStream
     stretchScale(moments, c, d, 1 / components, variance);
   });
   const shares = Array.from({ length: components }, () => new Float64Array(count));
-  for (let round = 0; round < ROUNDS; round++) {
+  for (let round = 0; round < rounds; round++) {
     shareOut(createMixture({ weights, ...moments }), points, shares, weights);
     shares.forEach((share, c) => {
       // a component that lost its points stays where it was

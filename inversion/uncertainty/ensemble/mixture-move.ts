@@ -12,9 +12,14 @@ import type { Ground } from './ground';
 import type { Move } from './metropolis';
 import { membersByCount, type Population } from './population';
 
-/** Most components, and share of the proposal, of the mixture fitted to the posterior and of that fitted to the tempered population. */
-const POSTERIOR = { components: 10, share: 0.8 };
-const TEMPERED = { components: 5, share: 0.2 };
+/** Points that a mixture is fitted to, its share of the proposal, and how much is spent on the fit. */
+export interface MixtureSource {
+  readonly population: Population;
+  readonly share: number;
+  /** at most so many components a value of the ground */
+  readonly componentsPerValue: number;
+  readonly rounds: number;
+}
 
 interface CountMixture {
   readonly layers: number;
@@ -34,20 +39,19 @@ function joinParts(parts: readonly MixtureParts[]): MixtureParts {
   return { weights: join('weights'), means: join('means'), scales: join('scales') };
 }
 
-/** A mixture for each layer count that the populations hold often enough, with the chance of the count. */
-function mixturesByCount(posterior: Population, tempered: Population, random: RandomStream): CountMixture[] {
-  const temperedMembers = membersByCount(tempered);
-  const found = membersByCount(posterior).flatMap((members, layers): CountMixture[] => {
-    const parts = [
-      { ...POSTERIOR, points: pointsOf(posterior, members, layers) },
-      { ...TEMPERED, points: pointsOf(tempered, temperedMembers[layers]!, layers) },
-    ].map(({ points, components, share }) => {
-      const fitted = fitComponents(points, components, random);
+/** A mixture for each layer count that the sources hold often enough; the first tells how likely each count is. */
+function mixturesByCount(sources: readonly MixtureSource[], random: RandomStream): CountMixture[] {
+  const members = sources.map(({ population }) => membersByCount(population));
+  const found = members[0]!.flatMap((first, layers): CountMixture[] => {
+    if (layers === 0) return [];
+    const parts = sources.map(({ population, share, componentsPerValue, rounds }, s): MixtureParts => {
+      const points = pointsOf(population, members[s]![layers]!, layers);
+      const fitted = fitComponents(points, componentsPerValue * points.d, rounds, random);
       return { ...fitted, weights: fitted.weights.map((weight) => weight * share) };
     });
     const joined = joinParts(parts);
     if (joined.weights.length === 0) return [];
-    return [{ layers, chance: members.length + 1, mixture: createMixture(joined) }];
+    return [{ layers, chance: first.length + 1, mixture: createMixture(joined) }];
   });
   const total = found.reduce((sum, { chance }) => sum + chance, 0);
   return found.map((one) => ({ ...one, chance: one.chance / total }));
@@ -55,22 +59,20 @@ function mixturesByCount(posterior: Population, tempered: Population, random: Ra
 
 /**
  * A draw from mixtures of Student-t densities that were fitted beforehand, whatever the present ground: it carries the chain from
- * mode to mode and from count to count at once. A part is fitted to a tempered population, which reaches into the tails.
- * Null where the populations are too small for any.
+ * mode to mode and from count to count at once. None where the sources hold too few grounds.
  */
-export function mixtureMove(
-  posterior: Population,
-  tempered: Population,
+export function mixtureMoves(
+  sources: readonly MixtureSource[],
   weight: number,
   random: RandomStream,
-): Move | null {
-  const byCount = mixturesByCount(posterior, tempered, random);
-  if (byCount.length === 0) return null;
+): Move[] {
+  const byCount = mixturesByCount(sources, random);
+  if (byCount.length === 0) return [];
   const logDensityOf = (ground: Ground): number => {
     const one = byCount.find(({ layers }) => layers === ground.layers);
     return one ? log(one.chance) + logDensity(one.mixture, ground.values) : -Infinity;
   };
-  return {
+  const move: Move = {
     name: 'mixture',
     weight,
     propose: (from, to, stream) => {
@@ -83,4 +85,5 @@ export function mixtureMove(
       return from.logMixture - to.logMixture;
     },
   };
+  return [move];
 }

@@ -1,35 +1,65 @@
+import { log } from '../../math/logarithm';
 import type { RandomStream } from '../../random';
-import { birthMove, boundaryMove, deathMove, equivalenceMove, resistivityMove } from './birth-death-moves';
+import {
+  birthMove,
+  boundaryMove,
+  deathMove,
+  equivalenceMove,
+  resistivityMove,
+  type MoveRange,
+} from './birth-death-moves';
+import { inDepth, movesInTurn } from './depth-moves';
 import { differenceMove } from './difference-move';
 import type { GroundSpace } from './ground-space';
 import type { Move } from './metropolis';
-import { mixtureMove } from './mixture-move';
+import { mixtureMoves } from './mixture-move';
 import type { Population } from './population';
 
-/** The moves from count to count and of one value at a time; none where the count is stated. */
-function countMoves(space: GroundSpace): Move[] {
-  if (space.fewest === space.most) return [];
+/** A boundary and a layer set anew elsewhere. */
+function relocationMove(range: MoveRange, weight: number): Move {
+  const more = { ...range, fewest: 1, most: range.most + 1 };
+  return movesInTurn('relocation', weight, birthMove(more, 1), deathMove(more, 1), range.most);
+}
+
+/** Moves of one boundary or one layer at a time. Their depths are ln depths, also where the coordinates are thicknesses. */
+function localMoves(space: GroundSpace): Move[] {
+  const moves = [boundaryMove(0.1), equivalenceMove(0.08)];
+  if (space.fewest < space.most)
+    return [
+      birthMove(space, 0.15),
+      deathMove(space, 0.15),
+      relocationMove(space, 0.12),
+      resistivityMove(0.1),
+      ...moves,
+    ];
+  const { most, logBoundary } = space;
+  if (most === 1) return [];
+  const range = { ...space, logBoundary: [logBoundary[0], logBoundary[1] + log(most - 1)] as const };
   return [
-    birthMove(space, 0.18),
-    deathMove(space, 0.18),
-    boundaryMove(0.12),
-    resistivityMove(0.12),
-    equivalenceMove(0.1),
+    resistivityMove(0.04),
+    ...[relocationMove(range, 0.08), ...moves].map((move) => inDepth(move, most)),
   ];
 }
 
-/** While the population is still being tempered. */
-export function temperingMoves(space: GroundSpace, population: Population): Move[] {
-  return [...countMoves(space), differenceMove(population, 0.3)];
+/** At one temperature: differences within a population that stands still, and draws from what is quickly fitted to it. */
+export function temperingMoves(space: GroundSpace, population: Population, random: RandomStream): Move[] {
+  const source = { population, share: 1, componentsPerValue: 1, rounds: 5 };
+  return [...localMoves(space), differenceMove(population, 0.3), ...mixtureMoves([source], 0.3, random)];
 }
 
-/** For the chains whose samples are kept: the populations stand still, so every move keeps its detailed balance. */
+/**
+ * For the walks whose samples are kept: the populations stand still, so every move keeps its detailed balance. A part of the
+ * mixture is fitted to a tempered population, which reaches into the tails.
+ */
 export function samplingMoves(
   space: GroundSpace,
   posterior: Population,
   tempered: Population,
   random: RandomStream,
 ): Move[] {
-  const mixture = mixtureMove(posterior, tempered, 0.45, random);
-  return [...temperingMoves(space, posterior), ...(mixture ? [mixture] : [])];
+  const sources = [
+    { population: posterior, share: 0.8, componentsPerValue: 3, rounds: 12 },
+    { population: tempered, share: 0.2, componentsPerValue: 1, rounds: 12 },
+  ];
+  return [...localMoves(space), differenceMove(posterior, 0.3), ...mixtureMoves(sources, 0.45, random)];
 }

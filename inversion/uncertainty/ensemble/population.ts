@@ -66,6 +66,11 @@ export function joinPopulations(parts: readonly Population[]): Population {
   return joined;
 }
 
+/** All populations but number `c`, joined. */
+export function otherPopulations(populations: readonly Population[], c: number): Population {
+  return joinPopulations(populations.filter((_, other) => other !== c));
+}
+
 /** Members of each layer count: entry N lists those of N layers. */
 export function membersByCount({ layers, stride }: Population): number[][] {
   const lists: number[][] = Array.from({ length: (stride + 1) / 2 + 1 }, () => []);

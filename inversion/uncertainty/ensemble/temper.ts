@@ -1,25 +1,34 @@
 import { exp } from '../../math/exponential';
 import type { RandomStream } from '../../random';
 import { createGround } from './ground';
-import { metropolisStep, pickMove, type Model } from './metropolis';
+import { metropolisStep, pickMove, type Model, type Move } from './metropolis';
 import { temperingMoves } from './moves';
-import { chosenMembers, createPopulation, getGround, putGround, type Population } from './population';
+import {
+  chosenMembers,
+  otherPopulations,
+  createPopulation,
+  getGround,
+  putGround,
+  type Population,
+} from './population';
 
 /** Draws of the prior, times the size of the population, that are screened by forward runs. */
 const SCREENED = 12;
-/** Steps of every member at each temperature, and at the last. */
-const SWEEPS = 3;
-const LAST_SWEEPS = 12;
+/** Steps of every member in a round, and rounds at each temperature and at the last. */
+const SWEEPS = 4;
+const ROUNDS = 2;
+const LAST_ROUNDS = 4;
+
 /** The next temperature leaves this share of the members' weight as effective size. */
-const KEPT_SHARE = 0.5;
+const KEPT_SHARE = 0.7;
 
 /** The inverse temperature whose population is given back too: wider than the posterior, but about where it is. */
 const HALF_WAY = 0.4;
 
 export interface TemperedPopulations {
-  readonly posterior: Population;
+  readonly posterior: readonly Population[];
   /** the same at an inverse temperature of 0.4 */
-  readonly tempered: Population;
+  readonly tempered: readonly Population[];
 }
 
 /** Exact draws of the prior with their likelihoods. */
@@ -49,7 +58,7 @@ function weigh(logLikelihood: Float64Array, step: number, weights: Float64Array)
   return (sum * sum) / squares;
 }
 
-/** The largest step up to `most` that keeps the effective size at `wanted`, by bisection in the ratio; `weights` are left for it. */
+/** The largest step up to `most` that keeps the effective size at `wanted`, by bisection. */
 function nextStep(logLikelihood: Float64Array, most: number, wanted: number, weights: Float64Array): number {
   if (weigh(logLikelihood, most, weights) >= wanted) return most;
   let low = 0;
@@ -59,9 +68,7 @@ function nextStep(logLikelihood: Float64Array, most: number, wanted: number, wei
     if (weigh(logLikelihood, middle, weights) >= wanted) low = middle;
     else high = middle;
   }
-  const step = low === 0 ? high : low;
-  weigh(logLikelihood, step, weights);
-  return step;
+  return low === 0 ? high : low;
 }
 
 /** `size` members by systematic resampling: member i about size · wᵢ/Σw times (Kitagawa 1996). */
@@ -78,14 +85,15 @@ function resample(weights: Float64Array, size: number, random: RandomStream): In
   return chosen;
 }
 
-/** One step of every member at inverse temperature `beta`; differences are taken from the population as it stood before. */
-function sweep(model: Model, population: Population, beta: number, random: RandomStream): void {
+/** One step of every member at inverse temperature `beta`; returns nothing, the population is moved in place. */
+function sweep(
+  model: Model,
+  population: Population,
+  moves: readonly Move[],
+  beta: number,
+  random: RandomStream,
+): void {
   const [current, trial] = [createGround(model.space.most), createGround(model.space.most)];
-  const before = chosenMembers(
-    population,
-    Int32Array.from({ length: population.size }, (_, i) => i),
-  );
-  const moves = temperingMoves(model.space, before);
   for (let i = 0; i < population.size; i++) {
     getGround(population, i, current);
     current.logPrior = model.space.logPrior(current);
@@ -95,31 +103,55 @@ function sweep(model: Model, population: Population, beta: number, random: Rando
 }
 
 /**
- * A population that is led from the prior to the posterior: draws of the prior, screened by forward runs, are resampled by
- * L^Δβ and moved at each of a ladder of inverse temperatures β from 0 to 1 that sets itself. It starts from no fit.
+ * Sweeps at one temperature, in rounds; each round first fits what it proposes to the populations as they stand. What a population
+ * is proposed comes from the others alone: a proposal fitted to the members that it moves would hold them where they are.
+ */
+function settle(
+  model: Model,
+  populations: readonly Population[],
+  beta: number,
+  streams: readonly RandomStream[],
+): void {
+  const rounds = beta === 1 ? LAST_ROUNDS : ROUNDS;
+  for (let round = 0; round < rounds; round++) {
+    const moves = streams.map((random, c) =>
+      temperingMoves(model.space, otherPopulations(populations, c), random),
+    );
+    populations.forEach((population, c) => {
+      for (let turn = 0; turn < SWEEPS; turn++) sweep(model, population, moves[c]!, beta, streams[c]!);
+    });
+  }
+}
+
+/**
+ * Populations, one a stream, that are led from the prior to the posterior: draws of the prior, screened by forward runs, are resampled
+ * by L^Δβ and moved at each of a ladder of inverse temperatures β from 0 to 1 that sets itself. They start from no fit.
  * Source: Del Moral, Doucet & Jasra 2006, J. R. Statist. Soc. B 68, 411–436 (from memory).
  */
-export function temperedPopulation(
+export function temperedPopulations(
   model: Model,
   size: number,
-  random: RandomStream,
+  streams: readonly RandomStream[],
   onStep: (beta: number) => void,
 ): TemperedPopulations {
-  let population = priorPopulation(model, SCREENED * size, random);
-  let halfWay = population;
+  let populations = streams.map((random) => priorPopulation(model, SCREENED * size, random));
+  let halfWay: Population[] = [];
   let beta = 0;
   while (beta < 1) {
-    const weights = new Float64Array(population.size);
-    const wanted = KEPT_SHARE * size;
     const next = beta < HALF_WAY ? HALF_WAY : 1;
-    const step = nextStep(population.logLikelihood, next - beta, wanted, weights);
+    const weights = populations.map((population) => new Float64Array(population.size));
+    const steps = populations.map(({ logLikelihood }, c) =>
+      nextStep(logLikelihood, next - beta, KEPT_SHARE * size, weights[c]!),
+    );
+    const step = Math.min(...steps);
     beta = step >= next - beta ? next : beta + step;
-    population = chosenMembers(population, resample(weights, size, random));
-    for (let turn = 0; turn < (beta === 1 ? LAST_SWEEPS : SWEEPS); turn++) {
-      sweep(model, population, beta, random);
-    }
-    if (beta === HALF_WAY) halfWay = population;
+    populations = populations.map((population, c) => {
+      weigh(population.logLikelihood, step, weights[c]!);
+      return chosenMembers(population, resample(weights[c]!, size, streams[c]!));
+    });
+    settle(model, populations, beta, streams);
+    if (beta === HALF_WAY) halfWay = populations;
     onStep(beta);
   }
-  return { posterior: population, tempered: halfWay };
+  return { posterior: populations, tempered: halfWay };
 }
