@@ -29,7 +29,7 @@ export interface DepthOfInvestigation {
 
 /** Measured on six grounds of 1–3 beds at errors of 1, 3 and 10 %: 0.5 against 1 in ln depth, the edge at 0.2. */
 const CAUTION =
-  'This edge hangs on how soon a cell that no reading reaches turns to its reference, which no reading tells: turning half as fast moved it up to 3.7 times deeper on trial grounds. It hardly follows the size of the errors. For a layered ground, ask how deep a threefold change would show.';
+  'This edge hangs on how soon a cell that no reading reaches turns to its reference, which no reading tells: turning half as fast moved it up to 3.6 times deeper on trial grounds. It hardly follows the size of the errors. For a layered ground, ask how deep a threefold change would show.';
 
 const EDGE = { from: 0.1, at: 0.2, to: 0.5 } as const;
 /** ρ of one reference half-space over that of the other. */

@@ -10,7 +10,7 @@ export const MOST_CELLS = 40;
 export const USUAL_CELLS = { smooth: 30, stepped: 40 } as const;
 
 /** First and last boundary as shares of the shortest and the longest spacing on the AB/2 axis. */
-const SHALLOWEST = 0.2;
+const SHALLOWEST = 0.05;
 const DEEPEST = 1;
 /** The grid spans at least this ratio of depths, also where all readings share one spacing. */
 const LEAST_SPAN = 10;
@@ -18,8 +18,9 @@ const LEAST_SPAN = 10;
 /**
  * Thicknesses in m of `cells` − 1 cells over a half-space, their boundaries even in ln depth.
  *
- * They run from 0.2 of the shortest to once the longest spacing (as AB/2), half and two and a half times its median depth:
- * what is shallower or deeper than that shares one value, since the readings could hardly tell its parts apart.
+ * They run from 0.05 of the shortest to once the longest spacing (as AB/2). The first must be so shallow: a thin resistive or
+ * conductive skin under 0.2 of the shortest spacing moves every reading, and a grid that starts there calls such soundings
+ * impossible.
  * `deepest` sets another last boundary, as a share of the longest spacing.
  */
 export function cellGrid(readings: readonly Reading[], cells: number, deepest = DEEPEST): number[] {

@@ -25,7 +25,8 @@ describe('depthOfInvestigation', () => {
     const readings = soundingOf(UNIFORM, SCHLUMBERGER, 0.03);
     const { index, edge, references, medianDepth, caution } = depthOfInvestigation(readings, cells('smooth'));
     index
-      .filter(({ depth }) => depth > 0.4 && depth < 90)
+      // about the median depth of the shortest spread (0.4 m) the index swings to −0.14 as it does about the longest's
+      .filter(({ depth }) => depth > 0.6 && depth < 90)
       .forEach(({ value }) => expect(Math.abs(value)).toBeLessThan(0.1));
     expect(index.at(-1)!.value).toBeGreaterThan(0.9);
     expect(edge.from!).toBeLessThan(edge.at!);
@@ -35,7 +36,7 @@ describe('depthOfInvestigation', () => {
     expect(references[0] / references[1]).toBeCloseTo(10, 10);
     expect(Math.sqrt(references[0] * references[1]) / 100).toBeCloseTo(1, 1);
     expect(medianDepth).toBe(effectiveDepth(SCHLUMBERGER.at(-1)!));
-    expect(caution).toContain('up to 3.7 times deeper');
+    expect(caution).toContain('up to 3.6 times deeper');
   });
 
   it('counts two grounds that cross on their way apart as apart', () => {

@@ -55,8 +55,34 @@ describe('fitSmooth', () => {
       });
     }
     expect(wrong).toEqual([]);
-    // what the warning says of the ranges: 66 % over all 60 soundings
-    expect(Math.abs(held / all - 0.66)).toBeLessThan(0.08);
+    // what the warning says of the ranges: 69 % over all 60 soundings
+    expect(Math.abs(held / all - 0.69)).toBeLessThan(0.08);
+  });
+
+  it('reaches the target over a skin thinner than 0.2 of the shortest spacing', () => {
+    // a seeded random draw over 16 000/29.4/47.2/9740 Ω·m, 0.215/43.8/24.4 m, which a grid from 0.2 on leaves at χ²/N 16
+    const drawn: [Spread, number][] = [
+      [{ type: 'schlumberger', halfAB: 2.44904, halfMN: 0.0369684 }, 30.3792],
+      [{ type: 'half-schlumberger', halfAB: 275.825, halfMN: 3.21214 }, 134.906],
+      [{ type: 'wenner', spacing: 27.0184 }, 31.4416],
+      [{ type: 'pole-pole', spacing: 0.667 }, 450.504],
+      [{ type: 'dipole-dipole', dipole: 162.163, n: 1 }, 71.0087],
+      [{ type: 'schlumberger', halfAB: 1.20323, halfMN: 0.0484825 }, 140.302],
+      [{ type: 'half-schlumberger', halfAB: 298.013, halfMN: 13.955 }, 146.073],
+      [{ type: 'wenner', spacing: 103.428 }, 72.7606],
+      [{ type: 'pole-pole', spacing: 2.4168 }, 35.1036],
+      [{ type: 'dipole-dipole', dipole: 2.3554, n: 1 }, 29.852],
+      [{ type: 'schlumberger', halfAB: 23.1356, halfMN: 0.448991 }, 30.1312],
+      [{ type: 'half-schlumberger', halfAB: 213.623, halfMN: 4.94134 }, 103.545],
+      [{ type: 'wenner', spacing: 418.22 }, 283.905],
+    ];
+    const readings = drawn.map(([spread, apparentResistivity]) => ({
+      spread,
+      apparentResistivity,
+      relativeError: 0.01,
+    }));
+    for (const kind of ['smooth', 'stepped'] as const)
+      expect(fitSmooth(readings, cells(kind)).reachedTarget).toBe(true);
   });
 
   it('finds a gradient again as deep as the readings see', () => {
@@ -132,7 +158,7 @@ describe('fitSmooth', () => {
       expect(value / low!).toBeCloseTo(high! / value, 8);
     });
     expect(fit.intervals.thickness[4]).toEqual([fit.earth.thickness[4], fit.earth.thickness[4]]);
-    expect(fit.warnings).toContainEqual(expect.stringContaining('in 66 % of the cells, not 95 %'));
+    expect(fit.warnings).toContainEqual(expect.stringContaining('in 69 % of the cells, not 95 %'));
   });
 
   it('says that a target is out of reach, and which readings no flat ground can give', () => {
