@@ -221,7 +221,7 @@ export function createProfiler(problem: LeastSquaresProblem): Profiler {
         if (small) damping *= SLOWER;
         else if (calm) damping /= FASTER;
         calm = !small;
-        here = linearise(problem, best.parameters, work);
+        if (here.at !== best.parameters) here = linearise(problem, best.parameters, work);
       }
       const open = best.chi2 < limit - tolerance;
       // on a parabola √(rise of χ²) grows as the reach does

@@ -1,6 +1,6 @@
 import { performance } from 'node:perf_hooks';
 import type { MessagePort } from 'node:worker_threads';
-import { fitEarth, InversionError } from '../../inversion/index';
+import { createOperatorCache, fitEarth, InversionError } from '../../inversion/index';
 import type { FitResult } from '../contract/fit';
 import type { RunInput } from '../contract/runs';
 import { progressReport } from './fit-progress';
@@ -15,6 +15,8 @@ export type FitAnswer =
   { readonly result: FitResult; readonly durationMs: number } | { readonly refusal: string };
 
 const REPORT_EVERY_MS = 250;
+/** Soundings of a survey share their spacings. */
+const operators = createOperatorCache();
 
 /** The body of a computing thread: one fit, with its progress told at most four times a second. */
 export default function computeFit({ input, progress }: FitOrder): FitAnswer {
@@ -22,6 +24,7 @@ export default function computeFit({ input, progress }: FitOrder): FitAnswer {
   let reportedAt = startedAt;
   try {
     const result = fitEarth(input.readings, input.settings, {
+      operators,
       onProgress(state) {
         const now = performance.now();
         if (now - reportedAt < REPORT_EVERY_MS) return;
