@@ -7,6 +7,9 @@ import type { Ground } from './ground';
 /** The most layers of a ground whose count is unknown. */
 export const MOST_COUNT = 8;
 
+/** Up to so many stated layers differences and mixtures move a ground well, and a short ladder of temperatures is enough. */
+export const FEW_LAYERS = 3;
+
 /** The grounds that a prior allows, and what its coordinates mean. */
 export interface GroundSpace {
   readonly fewest: number;

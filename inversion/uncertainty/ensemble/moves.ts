@@ -10,7 +10,7 @@ import {
 } from './birth-death-moves';
 import { inDepth, movesInTurn } from './depth-moves';
 import { differenceMove } from './difference-move';
-import type { GroundSpace } from './ground-space';
+import { FEW_LAYERS, type GroundSpace } from './ground-space';
 import type { Move } from './metropolis';
 import { mixtureMoves } from './mixture-move';
 import type { Population } from './population';
@@ -33,7 +33,7 @@ function localMoves(space: GroundSpace): Move[] {
       ...moves,
     ];
   const { most, logBoundary } = space;
-  if (most === 1) return [];
+  if (most <= FEW_LAYERS) return [];
   const range = { ...space, logBoundary: [logBoundary[0], logBoundary[1] + log(most - 1)] as const };
   return [
     resistivityMove(0.04),

@@ -1,6 +1,7 @@
 import { exp } from '../../math/exponential';
 import type { RandomStream } from '../../random';
 import { createGround } from './ground';
+import { FEW_LAYERS } from './ground-space';
 import { metropolisStep, pickMove, type Model, type Move } from './metropolis';
 import { temperingMoves } from './moves';
 import {
@@ -20,7 +21,7 @@ const ROUNDS = 2;
 const LAST_ROUNDS = 4;
 
 /** The next temperature leaves this share of the members' weight as effective size. */
-const KEPT_SHARE = 0.7;
+const KEPT_SHARE = { few: 0.5, many: 0.7 };
 
 /** The inverse temperature whose population is given back too: wider than the posterior, but about where it is. */
 const HALF_WAY = 0.4;
@@ -135,13 +136,14 @@ export function temperedPopulations(
   onStep: (beta: number) => void,
 ): TemperedPopulations {
   let populations = streams.map((random) => priorPopulation(model, SCREENED * size, random));
+  const keptShare = model.space.most <= FEW_LAYERS ? KEPT_SHARE.few : KEPT_SHARE.many;
   let halfWay: Population[] = [];
   let beta = 0;
   while (beta < 1) {
     const next = beta < HALF_WAY ? HALF_WAY : 1;
     const weights = populations.map((population) => new Float64Array(population.size));
     const steps = populations.map(({ logLikelihood }, c) =>
-      nextStep(logLikelihood, next - beta, KEPT_SHARE * size, weights[c]!),
+      nextStep(logLikelihood, next - beta, keptShare * size, weights[c]!),
     );
     const step = Math.min(...steps);
     beta = step >= next - beta ? next : beta + step;
