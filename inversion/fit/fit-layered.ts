@@ -1,15 +1,16 @@
 import { createForwardOperator } from '../operator/forward-operator';
 import type { OperatorCache } from '../operator/operator-cache';
 import { createRandomStream } from '../random';
-import type { FitProgress, FitResult, FitSettings, LayerCountFit, Reading } from '../types';
+import type { FitProgress, FitResult, FitSettings, LayerCountFit, LayeredEarth, Reading } from '../types';
 import { earthOf, type FittedModel } from './allowed-models';
 import { MOST_LAYERS, requireFitInput } from './check-fit-input';
 import { buildFitResult } from './fit-result';
 import { aicc, bic, chooseLayerCount, countDoubt, withinNoise } from './layer-count';
 import { createLayeredProblem, type LayeredProblem } from './layered-problem';
+import { moderateModel } from './moderate-model';
 import { multiStart, scoutFit, type MultiStartOutcome } from './multi-start';
 import { createResidualSystem, type ReadingFit, type ResidualSystem } from './residual-system';
-import { soundingCurve, type SoundingCurve } from './starting-models';
+import { logEarth, moderateStart, soundingCurve, type SoundingCurve } from './starting-models';
 
 export interface FitOptions {
   /** called after each kept step */
@@ -81,9 +82,10 @@ export function fitLayered(
       readingFit: system.describe(best.parameters, layers),
     });
   }
-  const rows = fits.map((fit) => describeCount(fit, readings.length));
-  const index = settings.layers === 'auto' ? chooseLayerCount(rows) : 0;
-  const chosen = fits[index]!;
+  const ladder = fits.map((fit) => describeCount(fit, readings.length));
+  const index = settings.layers === 'auto' ? chooseLayerCount(ladder) : 0;
+  const chosen = moderated(fits[index]!, system, curve, settings.start);
+  const rows = ladder.with(index, describeCount(chosen, readings.length));
   const result = buildFitResult({
     readings,
     settings,
@@ -99,6 +101,27 @@ export function fitLayered(
   return settings.layers === 'auto'
     ? { ...result, warnings: [...result.warnings, ...countDoubt(rows, index)] }
     : result;
+}
+
+/** The same fit with a moderate model for its best, which then stands among the others. */
+function moderated(
+  fit: CountFit,
+  system: ResidualSystem,
+  curve: SoundingCurve,
+  start: LayeredEarth | undefined,
+): CountFit {
+  const { layered, outcome, best, others } = fit;
+  const { layers } = layered;
+  const centre = start?.resistivity.length === layers ? logEarth(start) : moderateStart(curve, layers);
+  const found = moderateModel(layered, outcome, centre);
+  if (found.parameters === outcome.parameters) return fit;
+  const parameters = layered.expand(found.parameters);
+  return {
+    ...fit,
+    best: { parameters, chi2: found.chi2 },
+    others: [best, ...others],
+    readingFit: system.describe(parameters, layers),
+  };
 }
 
 /** A quick fit that starts the next count, and how well it does: as it is short, the best of its count can only be better. */

@@ -1,4 +1,3 @@
-import { log } from '../math/logarithm';
 import type { RandomStream } from '../random';
 import { TOLERANCES } from '../tolerances';
 import type { FitProgress, LayeredEarth } from '../types';
@@ -6,7 +5,7 @@ import { Z95 } from '../uncertainty/parameter-doubt';
 import { createSearchStep } from './damped-step';
 import type { LayeredProblem } from './layered-problem';
 import { minimise, type LeastSquaresOptions, type LeastSquaresOutcome } from './levenberg-marquardt';
-import { evenStart, randomStart, splitStarts, type SoundingCurve } from './starting-models';
+import { evenStart, logEarth, randomStart, splitStarts, type SoundingCurve } from './starting-models';
 
 /** How hard a search looks. */
 export interface SearchEffort {
@@ -52,10 +51,6 @@ export interface MultiStartOptions {
   /** ln parameters of a model with one layer fewer, whose layers are split in turn */
   readonly fewer?: Float64Array | undefined;
   readonly onProgress?: ((progress: FitProgress) => void) | undefined;
-}
-
-function logEarth(earth: LayeredEarth): Float64Array {
-  return Float64Array.from([...earth.resistivity, ...earth.thickness], log);
 }
 
 /** The best of `effort.screened` random models by misfit; only forward runs are spent on them. */

@@ -2,7 +2,7 @@ import { exp } from '../math/exponential';
 import { log } from '../math/logarithm';
 import { plottingSpacing } from '../spread/plotting-spacing';
 import type { RandomStream } from '../random';
-import type { Reading } from '../types';
+import type { LayeredEarth, Reading } from '../types';
 
 /** A sounding as a curve: ln spacing and ln ρa, ascending in spacing. */
 export interface SoundingCurve {
@@ -66,6 +66,18 @@ export function evenStart(curve: SoundingCurve, layers: number): Float64Array {
   const { low, high } = depthRange(curve);
   const logDepths = Array.from({ length: layers - 1 }, (_, i) => low + ((high - low) * (i + 1)) / layers);
   return modelFromDepths(curve, logDepths, () => 0);
+}
+
+/** The same, with the mean of the curve for every resistivity: a model that says least. */
+export function moderateStart(curve: SoundingCurve, layers: number): Float64Array {
+  const { logResistivity } = curve;
+  const mean = logResistivity.reduce((sum, value) => sum + value, 0) / logResistivity.length;
+  return evenStart(curve, layers).fill(mean, 0, layers);
+}
+
+/** ln parameters of an earth. */
+export function logEarth({ resistivity, thickness }: LayeredEarth): Float64Array {
+  return Float64Array.from([...resistivity, ...thickness], log);
 }
 
 function depthRange({ logSpacing }: SoundingCurve): { low: number; high: number } {

@@ -8,11 +8,13 @@ import {
   fitStatusMessage,
   InversionError,
   type FitProgress,
+  type FitResult,
   type FitSettings,
   type LayeredEarth,
   type Reading,
   type Spread,
 } from '../../../inversion';
+import { MODERATION } from '../../../inversion/fit/moderate-model';
 import { inversionCases, type InversionCase } from '../support/read-reference';
 import { layered } from '../support/fit-settings';
 
@@ -131,7 +133,9 @@ describe('fitLayered', () => {
     const fit = fitLayered(sounding(H_TYPE, WENNER, 0.02), layered(3), { onProgress: (p) => seen.push(p) });
     expect(new Set(seen.map((p) => p.layers))).toEqual(new Set([3]));
     expect(Math.max(...seen.map((p) => p.start))).toBe(fit.starts);
-    expect(seen.at(-1)!.chi2PerReading).toBeCloseTo(fit.chi2PerReading, 9);
+    const least = seen.at(-1)!.chi2PerReading;
+    expect(fit.chi2PerReading).toBeGreaterThan(0.999999 * least);
+    expect(fit.chi2PerReading).toBeLessThanOrEqual(1.0000001 * (1 + MODERATION) * least);
   });
 
   it('warns of a misfit that the errors do not explain, with the scaled alternative, and rescales nothing', () => {
@@ -147,10 +151,9 @@ describe('fitLayered', () => {
     expect(scale).toBeCloseTo(Math.sqrt((bold.chi2PerReading * 14) / 9), 1);
     expect(careful.misfitProbability).toBeGreaterThan(0.01);
     expect(careful.warnings).toEqual([]);
-    expect(Math.log(careful.factors.resistivity[0]!) / Math.log(bold.factors.resistivity[0]!)).toBeCloseTo(
-      5,
-      1,
-    );
+    const width = ({ intervals }: FitResult) =>
+      Math.log(intervals.resistivity[0]![1]! / intervals.resistivity[0]![0]!);
+    expect(width(careful) / width(bold)).toBeCloseTo(5, 0);
   });
 
   it('says that the ideal gradient stood in for an unrecorded MN', () => {
