@@ -1,5 +1,5 @@
 import { TOLERANCES } from '../tolerances';
-import { threeDigits } from '../three-digits';
+import { amount, threeDigits } from '../three-digits';
 import type { FitResult, Interval } from '../types';
 
 /** One thing the data cannot tell, or can tell only in combination. */
@@ -33,10 +33,10 @@ const looseness = (factor: number | null): number => factor ?? Infinity;
 
 /** "3.10 to 13.0 m", "up to 13.0 m", "3.10 m and more"; null where nothing is known. */
 function rangeWords([low, high]: Interval, unit: string): string | null {
-  if (low === null) return high === null ? null : `up to ${threeDigits(high)} ${unit}`;
+  if (low === null) return high === null ? null : `up to ${amount(high, unit)}`;
   return high === null
-    ? `${threeDigits(low)} ${unit} and more`
-    : `${threeDigits(low)} to ${threeDigits(high)} ${unit}`;
+    ? `${amount(low, unit)} and more`
+    : `${threeDigits(low)} to ${amount(high, unit)}`;
 }
 
 /** How far the two tied values of a bed can go. */
@@ -71,8 +71,8 @@ function equivalenceOf(result: FitResult, bed: number): DoubtItem | null {
     bed,
     kind: conductive ? 'conductance' : 'resistance',
     text: known
-      ? `Bed ${bed + 1} is better known by ${symbol} = ${threeDigits(value)} ${unit}${range(factor)} (68 %) than by its thickness or its resistivity: a thicker bed goes with a ${conductive ? 'higher' : 'lower'} resistivity. ${tiedRanges(result, bed)}`
-      : `Of bed ${bed + 1} the readings tell neither the thickness nor the resistivity, and ${symbol} not within a factor of 2: ${threeDigits(value)} ${unit} is one of many values that fit. ${tiedRanges(result, bed)}`,
+      ? `Bed ${bed + 1} is better known by ${symbol} = ${amount(value, unit)}${range(factor)} (68 %) than by its thickness or its resistivity: a thicker bed goes with a ${conductive ? 'higher' : 'lower'} resistivity. ${tiedRanges(result, bed)}`
+      : `Of bed ${bed + 1} the readings tell neither the thickness nor the resistivity, and ${symbol} not within a factor of 2: ${amount(value, unit)} is one of many values that fit. ${tiedRanges(result, bed)}`,
     value,
     unit,
     factor,
@@ -112,7 +112,7 @@ function undetermined(result: FitResult, bed: number): DoubtItem[] {
     const words = rangeWords(result.intervals[kind][bed]!, unit);
     const text = words
       ? `The ${kind} of bed ${bed + 1} is not held within a factor of 2: ${words} fit (95 %).`
-      : `The readings do not limit the ${kind} of bed ${bed + 1}: ${threeDigits(value)} ${unit} is one of many values that fit.`;
+      : `The readings do not limit the ${kind} of bed ${bed + 1}: ${amount(value, unit)} is one of many values that fit.`;
     return [{ bed, kind, text, value, unit, factor } satisfies DoubtItem];
   });
 }

@@ -35,7 +35,7 @@ describe('describeDoubt', () => {
     const item = describeDoubt(fit).find((doubt) => doubt.kind === 'conductance')!;
     expect(item).toMatchObject({ bed: 1, unit: 'S' });
     expect(item.value).toBeCloseTo(0.3, 2);
-    expect(item.text).toContain('Bed 2 is better known by S = h/ρ = 0.300 S');
+    expect(item.text).toContain('Bed 2 is better known by S = h/ρ = 0.300\u00a0S');
     expect(item.factor!).toBeGreaterThan(1);
     expect(item.factor!).toBeLessThan(fit.factors.thickness[1] ?? Infinity);
   });
@@ -69,13 +69,13 @@ describe('describeDoubt', () => {
         (item) => item.kind === 'conductance',
       )!.text;
     expect(words(1.041)).toContain(
-      'is better known by S = h/ρ = 0.300 S\u00a0±\u00a04.1\u00a0% (68 %) than by its thickness',
+      'is better known by S = h/ρ = 0.300\u00a0S\u00a0±\u00a04.1\u00a0% (68 %) than by its thickness',
     );
-    expect(words(1.7)).toContain('is better known by S = h/ρ = 0.300 S, times or divided by 1.70 (68 %)');
+    expect(words(1.7)).toContain('is better known by S = h/ρ = 0.300\u00a0S, times or divided by 1.70 (68 %)');
     for (const factor of [2, null])
       expect(words(factor)).toContain(
         'Of bed 2 the readings tell neither the thickness nor the resistivity, and S = h/ρ not within a factor of 2: ' +
-          '0.300 S is one of many values that fit. By themselves (95 %): a thickness of ',
+          '0.300\u00a0S is one of many values that fit. By themselves (95 %): a thickness of ',
       );
   });
 
@@ -109,7 +109,7 @@ describe('describeDoubt', () => {
     const resistivity: Interval[] = [fit.intervals.resistivity[0]!, [3, 140]];
     const intervals = { ...fit.intervals, resistivity };
     expect(describeDoubt({ ...fit, factors: wide, intervals })[0]!.text).toBe(
-      'The resistivity of bed 2 is not held within a factor of 2: 3.00 to 140 Ω·m fit (95 %).',
+      'The resistivity of bed 2 is not held within a factor of 2: 3.00 to 140\u00a0Ω·m fit (95 %).',
     );
   });
 });
