@@ -24,6 +24,7 @@ export { IDEAL_SCHLUMBERGER_DEPTH, plottingSpacing } from './spread/plotting-spa
 export { createForwardOperator, type ForwardOperator } from './operator/forward-operator';
 export { createOperatorCache, type OperatorCache } from './operator/operator-cache';
 export { fitEarth } from './fit/fit-earth';
+export { hasCells } from './fit/smooth/has-cells';
 export { fitLayered, type FitOptions } from './fit/fit-layered';
 export { fitLine } from './line/fit-line';
 export type {

@@ -1,4 +1,5 @@
 import { NOISE_TAIL } from '../fit/layer-count';
+import { hasCells } from '../fit/smooth/has-cells';
 import { threeDigits } from '../three-digits';
 import { TOLERANCES } from '../tolerances';
 import type { FitResult, Interval } from '../types';
@@ -28,7 +29,7 @@ export interface FitPairComparison {
   /** second − first */
   chi2PerReadingDifference: number;
   rmsPercentDifference: number;
-  /** second / first; null where a half-space has none */
+  /** second / first; null where a half-space has none, and for cells, whose grid ends where it will */
   totalConductanceRatio: number | null;
   totalResistanceRatio: number | null;
   /** which values differ beyond their intervals, and which model fits closer, in words */
@@ -85,7 +86,11 @@ const COLUMNS: readonly Column[] = [
   },
 ];
 
+/** Cells are no beds, so nothing of theirs is set against a bed. */
+const comparable = (a: FitResult, b: FitResult): boolean => !hasCells(a) && !hasCells(b);
+
 function bedDifferences(a: FitResult, b: FitResult): BedDifference[] {
+  if (!comparable(a, b)) return [];
   return COLUMNS.flatMap(({ quantity, unit, values, intervals }) => {
     const first = values(a);
     const second = values(b);
@@ -205,7 +210,20 @@ function totalsSentence(a: FitResult, b: FitResult): string | null {
   return s && t && `Above the deepest boundary: conductance ${s}; transverse resistance ${t}.`;
 }
 
+/** What each ground is made of, where one has cells. */
+function cellsSentence(a: FitResult, b: FitResult, names: Names): string {
+  const [first, second] = [a, b].map((result, i) => {
+    const count = bedCount(result);
+    return `${names[i]!} has ${count} ${hasCells(result) ? 'cells of a fixed grid' : count === 1 ? 'bed' : 'beds'}`;
+  });
+  return `${first}, ${second!.replace(/^The /, 'the ')}: they are not compared bed by bed.`;
+}
+
 function describePair(a: FitResult, b: FitResult, beds: readonly BedDifference[], names: Names): string {
+  if (!comparable(a, b))
+    return [cellsSentence(a, b, names), misfitSentence(a, b, beds, names), narrowSentence(a, b, names)]
+      .filter((sentence) => sentence !== null)
+      .join(' ');
   return [
     countsSentence(a, b),
     differencesSentence(a, b, beds),
@@ -234,8 +252,12 @@ export function compareFits(results: readonly FitResult[], names?: readonly stri
         beds,
         chi2PerReadingDifference: b.chi2PerReading - a.chi2PerReading,
         rmsPercentDifference: b.rmsPercent - a.rmsPercent,
-        totalConductanceRatio: ratio(a.darZarrouk.totalConductanceS, b.darZarrouk.totalConductanceS),
-        totalResistanceRatio: ratio(a.darZarrouk.totalResistanceOhmM2, b.darZarrouk.totalResistanceOhmM2),
+        totalConductanceRatio: comparable(a, b)
+          ? ratio(a.darZarrouk.totalConductanceS, b.darZarrouk.totalConductanceS)
+          : null,
+        totalResistanceRatio: comparable(a, b)
+          ? ratio(a.darZarrouk.totalResistanceOhmM2, b.darZarrouk.totalResistanceOhmM2)
+          : null,
         text: describePair(a, b, beds, [
           names?.[first] ?? DEFAULT_NAMES[0],
           names?.[first + 1 + offset] ?? DEFAULT_NAMES[1],

@@ -1,4 +1,5 @@
 import { TOLERANCES } from '../tolerances';
+import { hasCells } from '../fit/smooth/has-cells';
 import { amount, threeDigits } from '../three-digits';
 import type { FitResult, Interval } from '../types';
 
@@ -34,9 +35,7 @@ const looseness = (factor: number | null): number => factor ?? Infinity;
 /** "3.10 to 13.0 m", "up to 13.0 m", "3.10 m and more"; null where nothing is known. */
 function rangeWords([low, high]: Interval, unit: string): string | null {
   if (low === null) return high === null ? null : `up to ${amount(high, unit)}`;
-  return high === null
-    ? `${amount(low, unit)} and more`
-    : `${threeDigits(low)} to ${amount(high, unit)}`;
+  return high === null ? `${amount(low, unit)} and more` : `${threeDigits(low)} to ${amount(high, unit)}`;
 }
 
 /** How far the two tied values of a bed can go. */
@@ -120,9 +119,10 @@ function undetermined(result: FitResult, bed: number): DoubtItem[] {
 /**
  * What the data cannot tell, bed by bed, in plain sentences: equivalence where |correlation of ln h and ln ρ| passes 0.95
  * (S = h/ρ when it is positive, T = hρ when negative) and the bed's own values are not settled, suppression where a middle bed
- * can go, values with a 68 % factor of 2 or more.
+ * can go, values with a 68 % factor of 2 or more. Of cells nothing: they are no beds, and their warnings say so.
  */
 export function describeDoubt(result: FitResult): DoubtItem[] {
+  if (hasCells(result)) return [];
   return result.earth.resistivity.flatMap((_, bed) => {
     const equivalence = equivalenceOf(result, bed);
     const suppression = suppressionOf(result, bed);

@@ -99,7 +99,7 @@ export const soundingRowSchema = z
       .strictObject({
         id: idSchema,
         number: z.number().int(),
-        layers: z.number().int(),
+        layers: z.number().int().nullable().describe('count of beds; null for a smooth or stepped ground'),
         chi2PerReading: z.number(),
         rmsPercent: z.number(),
         predicted: z.array(z.strictObject({ spacingM: z.number(), apparentResistivityOhmM: z.number() })),
@@ -107,7 +107,7 @@ export const soundingRowSchema = z
       })
       .nullable()
       .describe(
-        'the finished run that stands for it: the pinned one, else that of the weightiest interpretation, else the newest',
+        'the finished run that stands for it: the pinned one, else that of the weightiest interpretation, else the newest that has beds, else the newest',
       ),
     updatedAt: timestampSchema,
   })

@@ -1,4 +1,5 @@
 import type { z } from 'zod';
+import { hasCells } from '../../inversion';
 import type { Actor } from '../access/actor';
 import { recordAudit } from '../access/audit';
 import { getSoundingAccess, requireCan } from '../access/survey-access';
@@ -57,6 +58,10 @@ export async function createInterpretation(
   const { result } = run;
   if (!result)
     throw new AppError('wrong-state', `Only a finished run can be interpreted; this one is ${run.state}.`);
+  if (hasCells(result))
+    throw new AppError('invalid', 'A smooth or stepped ground has no beds to interpret; fit beds first.', {
+      faults: [{ path: ['body', 'runId'], message: 'is a ground of cells, which are no beds' }],
+    });
   return db.transaction(async (trx) => {
     const layers = result.earth.resistivity.length;
     const id = await insertInterpretation(trx, { soundingId, runId, authorId: actor.userId, title, layers });

@@ -33,7 +33,12 @@ export interface SoundingPageRow {
   predicted: number[] | null;
 }
 
-/** The run that stands for a sounding: the pinned finished one, else that of the weightiest interpretation, else the newest. */
+const HAS_BEDS_SQL = `(run.input -> 'settings' ->> 'kind' = 'layered')`;
+
+/**
+ * The run that stands for a sounding: the pinned finished one, else that of the weightiest interpretation, else the newest that
+ * has beds, else the newest.
+ */
 const LATEST_RUN_SQL = `LATERAL (
   SELECT run.id, run.number, run.revision_id, run.input, computation.result
   FROM run
@@ -41,10 +46,13 @@ const LATEST_RUN_SQL = `LATERAL (
   JOIN run_note ON run_note.run_id = run.id
   JOIN computation ON computation.id = run_state.computation_id
   WHERE run.sounding_id = sounding.id
-  ORDER BY run_note.pinned DESC, ${leastWeightSql(OF_RUN_SQL)} ASC NULLS LAST, run.number DESC LIMIT 1
+  ORDER BY run_note.pinned DESC, ${leastWeightSql(OF_RUN_SQL)} ASC NULLS LAST,
+    ${HAS_BEDS_SQL} DESC, run.number DESC LIMIT 1
 ) AS latest ON true`;
 
-const LAYERS_SQL = `jsonb_array_length(latest.result -> 'earth' -> 'resistivity')`;
+/** Cells are no beds, so a ground of cells has no count. */
+const LAYERS_SQL = `CASE WHEN latest.input -> 'settings' ->> 'kind' = 'layered'
+  THEN jsonb_array_length(latest.result -> 'earth' -> 'resistivity') END`;
 const MISFIT_SQL = `(latest.result ->> 'chi2PerReading')::float8`;
 const NAME_SQL = 'sounding.name COLLATE natural_order';
 

@@ -62,8 +62,7 @@ function presentPoint(reading: Reading): SoundingTableRow['curve'] {
 function presentLatestRun(row: SoundingPageRow): SoundingTableRow['latestRun'] {
   const { run_id: id, run_number: number, layers, predicted } = row;
   const { chi2_per_reading: chi2PerReading, rms_percent: rmsPercent, run_readings: readings } = row;
-  if (id === null || number === null || layers === null || chi2PerReading === null || rmsPercent === null)
-    return null;
+  if (id === null || number === null || chi2PerReading === null || rmsPercent === null) return null;
   return {
     id,
     number,

@@ -87,6 +87,8 @@ export interface GroundColumn {
   isRejected?: boolean | undefined;
   /** A word for each bed, as the ground unit. */
   bedNotes?: readonly (string | null)[] | undefined;
+  /** The layers are many cells of a fixed grid: drawn without ranges, and nothing to take hold of. */
+  isCells?: boolean | undefined;
   /** Values held in a fit; the thickness of a bed stands at its base. */
   held?: readonly HeldValue[] | undefined;
 }

@@ -47,7 +47,7 @@ export function ColumnSlot(props: ColumnSlotProps): ReactNode {
       )}
       <GroundBar {...props} width={barWidth} onScaleResistivity={props.onScaleResistivity} />
       <BoundaryMarks
-        boundaries={groundBoundaries(column)}
+        boundaries={column.isCells ? [] : groundBoundaries(column)}
         scale={scale}
         x={barEnd}
         barX={x}
@@ -93,5 +93,5 @@ function columnSentence(column: GroundColumn): string {
   const reach = column.depthOfInvestigation
     ? `; the data reach about ${column.depthOfInvestigation.toPrecision(2)} m`
     : '';
-  return `${name}: ${formatCount(column.earth.resistivity.length, 'bed')}${reach}`;
+  return `${name}: ${formatCount(column.earth.resistivity.length, column.isCells ? 'cell' : 'bed')}${reach}`;
 }

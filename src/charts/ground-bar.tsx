@@ -41,12 +41,12 @@ export function GroundBar(props: GroundBarProps): ReactNode {
         </linearGradient>
       </defs>
       <rect x={x} y={0} width={width} height={scale.height} fill={`url(#${gradientId})`} />
-      {column.earth.thickness.map((_, index) => {
+      {boundariesOf(column).map((_, index) => {
         const y = scale.yOf(beds[index]?.base ?? 0);
         return <line key={index} x1={x} x2={x + width} y1={y} y2={y} stroke="#ffffff" strokeOpacity={0.75} />;
       })}
       {beds
-        .filter((bed) => isThin(bed, scale))
+        .filter((bed) => !column.isCells && isThin(bed, scale))
         .map((bed) => (
           <ThinBed key={bed.index} bed={bed} scale={scale} x={x} width={width} />
         ))}
@@ -57,6 +57,9 @@ export function GroundBar(props: GroundBarProps): ReactNode {
     </g>
   );
 }
+
+/** Cells stand on one another without a line between. */
+const boundariesOf = ({ earth, isCells }: GroundColumn) => (isCells ? [] : earth.thickness);
 
 const heightOf = (bed: GroundBed, scale: DepthScale): number =>
   (bed.base === null ? scale.height : scale.yOf(bed.base)) - scale.yOf(bed.top);

@@ -114,6 +114,7 @@ export function labelRoom(column: GroundColumn, scale: DepthScale): number {
  * Number and interval stand in one line where `room`, px, lets them.
  */
 export function groundLabels(column: GroundColumn, scale: DepthScale, room: number): GroundLabel[] {
+  if (column.isCells) return [];
   const groundOf = groundBeds(column);
   const isThicknessHeld = groundOf.map((bed) => bed.held.thickness);
   const beds = groundOf.flatMap((bed): GroundLabel[] => {

@@ -1,3 +1,4 @@
+import { hasCells } from '../../inversion';
 import type { FitReading, LayeredEarthModel } from '../../server/contract/fit';
 import type { Revision } from '../../server/contract/readings';
 import type { Run } from '../../server/contract/runs';
@@ -145,6 +146,7 @@ export function columnOfRun(run: Run, bedNotes?: readonly (string | null)[]): Gr
     earth: run.result.earth,
     intervals: run.result.intervals,
     isRejected: isRejected(run.result),
+    isCells: hasCells(run.result),
     held: run.settings.fixed,
     bedNotes,
   };

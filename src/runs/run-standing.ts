@@ -9,11 +9,15 @@ export function weightOfInterpretation(run: Pick<RunSummary, 'interpretedAs'>): 
   return run.interpretedAs === null ? STANDING_STATES.length : STANDING_STATES.indexOf(run.interpretedAs);
 }
 
-/** What stands for the sounding first: the pinned run, then by its interpretation, then the newest. */
+/** A smooth or stepped ground has cells of a fixed grid, which are no beds. */
+export const hasBeds = ({ settings }: Pick<RunSummary, 'settings'>): boolean => settings.kind === 'layered';
+
+/** What stands for the sounding first: the pinned run, then by its interpretation, then one that has beds, then the newest. */
 export function byStanding(first: RunSummary, second: RunSummary): number {
   return (
     Number(second.note.pinned) - Number(first.note.pinned) ||
     weightOfInterpretation(first) - weightOfInterpretation(second) ||
+    Number(hasBeds(second)) - Number(hasBeds(first)) ||
     second.number - first.number
   );
 }

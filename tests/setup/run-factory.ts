@@ -1,5 +1,5 @@
 import type { Knex } from 'knex';
-import { ENGINE_VERSION, fitLayered } from '../../inversion/index';
+import { ENGINE_VERSION, fitEarth } from '../../inversion/index';
 import { fitSettingsSchema, type FitSettingsInput } from '../../server/contract/fit';
 import type { Reading } from '../../server/contract/readings';
 import type { RunInput } from '../../server/contract/runs';
@@ -48,7 +48,7 @@ export async function createRun(db: Knex, soundingId: string, given: Given): Pro
 }
 
 async function insertComputation(trx: Knex, key: string, input: RunInput): Promise<string | null> {
-  const result = fitLayered(input.readings, input.settings);
+  const result = fitEarth(input.readings, input.settings);
   const [made] = await trx('computation')
     .insert({
       key,

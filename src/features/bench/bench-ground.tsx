@@ -1,5 +1,6 @@
 import type { GroundColumn } from '../../charts/chart-data';
-import { DepthColumn } from '../../charts/depth-column';
+import { DepthColumn, type DepthColumnProps } from '../../charts/depth-column';
+import { hasCells } from '../../../inversion';
 import type { Run } from '../../../server/contract/runs';
 import type { Sounding } from '../../../server/contract/soundings';
 import { columnOfHand, columnOfRun } from '../../runs/curve-of-run';
@@ -55,6 +56,13 @@ function Column({ sounding, run, model, selectedBed, onSelectBed }: Omit<BenchGr
     ? columnOfHand(model.hand, model.handName, held)
     : run && columnOfRun(run);
   if (!column) return null;
+  const moves: Pick<DepthColumnProps, 'onMoveBoundary' | 'onScaleResistivity'> = column.isCells
+    ? {}
+    : {
+        onMoveBoundary: (boundary, depth, gesture) =>
+          model.edit(withBoundary(earth, boundary, depth), gesture),
+        onScaleResistivity: (bed, factor) => model.edit(withResistivityScaled(earth, bed, factor)),
+      };
   return (
     <DepthColumn
       // One id for run and hand, so that the drawing keeps its focus and its drag when the first edit is made.
@@ -64,9 +72,26 @@ function Column({ sounding, run, model, selectedBed, onSelectBed }: Omit<BenchGr
       height={520}
       selectedBed={selectedBed}
       onSelectBed={onSelectBed}
-      onMoveBoundary={(boundary, depth, gesture) => model.edit(withBoundary(earth, boundary, depth), gesture)}
-      onScaleResistivity={(bed, factor) => model.edit(withResistivityScaled(earth, bed, factor))}
+      {...moves}
     />
+  );
+}
+
+/** A ground of cells is read from its drawing and the table behind it; there are no beds to take hold of. */
+function CellsNote({ kind, model, mayFit }: { kind: string; model: ModelHandle; mayFit: boolean }) {
+  return (
+    <section className="max-w-prose">
+      <h2 className="font-semibold">Cells</h2>
+      <p className="mt-1 text-muted">
+        A {kind} ground has cells of a fixed grid, which are no beds. The table of the drawing has every cell
+        with its range.
+      </p>
+      {mayFit && model.begin ? (
+        <Button size="small" className="mt-3" onClick={model.begin}>
+          Begin beds by hand
+        </Button>
+      ) : null}
+    </section>
   );
 }
 
@@ -74,6 +99,8 @@ function Numbers({ sounding, run, model, selectedBed, onSelectBed }: Omit<BenchG
   const { earth } = model;
   if (!earth) return null;
   const shownRun = model.hand ? null : run;
+  if (shownRun?.result && hasCells(shownRun.result))
+    return <CellsNote kind={shownRun.settings.kind} model={model} mayFit={sounding.can.run} />;
   return (
     <section className="flex max-w-4xl flex-col gap-1">
       <HandBar model={model} runLetter={run ? letterOfRun(run) : null}>

@@ -1,5 +1,6 @@
 import { useCallback, useMemo, useRef, useState } from 'react';
 import { useSearchParams } from 'react-router-dom';
+import { hasCells } from '../../../inversion';
 import type { FitSettingsInput } from '../../../server/contract/fit';
 import type { Sounding } from '../../../server/contract/soundings';
 import type { Revision } from '../../../server/contract/readings';
@@ -30,6 +31,8 @@ export interface BenchWorkspaceProps {
   run: Run | null;
 }
 
+const NONE: readonly string[] = [];
+
 /** Ground, curve and Ledger at one table. */
 export function BenchWorkspace({ sounding, revision, runs, run }: BenchWorkspaceProps) {
   const { can } = sounding;
@@ -58,6 +61,7 @@ export function BenchWorkspace({ sounding, revision, runs, run }: BenchWorkspace
   const fit = (settings: FitSettingsInput) =>
     request.mutate(settings, { onSuccess: (asked) => awaitRun(asked.id) });
   const result = model.hand ? null : (run?.result ?? null);
+  const isCells = result !== null && hasCells(result);
   return (
     <div className="grid flex-1 grid-cols-1 lg:grid-cols-[18rem_minmax(0,1fr)] xl:grid-cols-[19rem_minmax(0,1fr)_22rem] 2xl:grid-cols-[21rem_minmax(0,1fr)_24rem]">
       <DrawingRegion
@@ -70,8 +74,8 @@ export function BenchWorkspace({ sounding, revision, runs, run }: BenchWorkspace
           <BenchDrawing sounding={sounding} data={data} run={run} curve={curve} />
           {can.run ? (
             <FitControls
-              model={model.earth}
-              held={model.held}
+              model={isCells ? null : model.earth}
+              held={isCells ? NONE : model.held}
               onRelease={model.releaseAll}
               onFit={fit}
               isAsking={request.isPending}
@@ -114,7 +118,9 @@ export function BenchWorkspace({ sounding, revision, runs, run }: BenchWorkspace
         </div>
       </DrawingRegion>
       <div className="flex min-w-0 flex-col gap-6 border-t border-rule px-4 py-5 sm:px-7 lg:order-3 lg:col-span-2 xl:col-span-1 xl:border-t-0 xl:border-l">
-        {model.earth ? <FiguresOfModel earth={model.earth} misfit={curve.misfit} fit={result} /> : null}
+        {model.earth ? (
+          <FiguresOfModel earth={model.earth} misfit={curve.misfit} fit={result} isCells={isCells} />
+        ) : null}
         {result && run ? (
           <section aria-labelledby="doubt-title">
             <h2 id="doubt-title" className="mb-2 font-semibold">

@@ -10,10 +10,12 @@ export interface FiguresProps {
   misfit: { chi2PerReading: number; rmsPercent: number } | null;
   /** The run whose model it is; null for a model by hand, which nobody has tested. */
   fit: { misfitProbability: number | null } | null;
+  /** The ground has cells of a grid, and what lies above the last of them means nothing. */
+  isCells: boolean;
 }
 
 /** The few numbers a model is judged by: how it fits, and what it conducts along and across. */
-export function FiguresOfModel({ earth, misfit, fit }: FiguresProps) {
+export function FiguresOfModel({ earth, misfit, fit, isCells }: FiguresProps) {
   const sums = darZarrouk(earth);
   const last = earth.resistivity.length;
   const chi2 = misfit ? formatMisfit(misfit.chi2PerReading) : '–';
@@ -35,7 +37,7 @@ export function FiguresOfModel({ earth, misfit, fit }: FiguresProps) {
     <div>
       <FigureStrip items={closeness} />
       <RejectedLine fit={fit} />
-      {last > 1 ? (
+      {last > 1 && !isCells ? (
         <div className="-mt-px">
           <FigureStrip items={along} />
         </div>

@@ -1,15 +1,16 @@
 import type { UseFormReturn } from 'react-hook-form';
+import { Checkbox } from '../../ui/checkbox';
 import { FormNumber } from '../../ui/form-number';
 import type { FitForm } from './fit-form';
 
-/** Bounds and seed, folded away: most fits leave them as they are. */
+/** Bounds, outliers and seed, folded away: most fits leave them as they are. */
 export function FitBoundsFields({ form }: { form: UseFormReturn<FitForm> }) {
   const { errors } = form.formState;
-  const hasFault = Object.keys(errors).some((name) => name !== 'layers' && name !== 'start');
+  const hasFault = Object.keys(errors).some((name) => !['kind', 'layers', 'start'].includes(name));
   return (
     <details open={hasFault || undefined} className="max-w-2xl">
       <summary className="min-h-6 w-fit rounded text-sm text-muted hover:text-ink touch:min-h-11">
-        Bounds and seed
+        Bounds, outliers and seed
       </summary>
       <div className="mt-2 grid grid-cols-2 gap-3 sm:grid-cols-3">
         <FormNumber
@@ -44,6 +45,7 @@ export function FitBoundsFields({ form }: { form: UseFormReturn<FitForm> }) {
           integer
         />
       </div>
+      <Checkbox className="mt-3" label="Outliers count for less" {...form.register('outlierTolerant')} />
     </details>
   );
 }

@@ -49,6 +49,12 @@ const START_OPTIONS = [
   { value: 'model', label: 'From this model' },
 ] as const;
 
+const GROUND_OPTIONS = [
+  { value: 'layered', label: 'Beds' },
+  { value: 'smooth', label: 'Smooth' },
+  { value: 'stepped', label: 'Few steps' },
+] as const;
+
 /** Everything a fit is asked for with, and the one button that asks. */
 export function FitControls(props: FitControlsProps) {
   const { model, held, onFit, onReady, isAsking, onRelease } = props;
@@ -59,6 +65,8 @@ export function FitControls(props: FitControlsProps) {
   });
   const start = useController({ control: form.control, name: 'start' }).field;
   const layers = useController({ control: form.control, name: 'layers' }).field;
+  const kind = useController({ control: form.control, name: 'kind' }).field;
+  const isBeds = kind.value === 'layered';
   const shown = shownChoices({ layers: layers.value, start: start.value }, model, held);
   const request = (settings: FitSettingsInput) => {
     const faults = faultsOfSettings(settings);
@@ -77,19 +85,31 @@ export function FitControls(props: FitControlsProps) {
     <form onSubmit={ask} aria-label="Fit" className="flex flex-col gap-3">
       <div className="flex flex-wrap items-end gap-x-3 gap-y-3">
         <Button kind="main" type="submit" loading={isAsking} icon={<Play aria-hidden size={14} />}>
-          Fit beds
+          {isBeds ? 'Fit beds' : 'Fit ground'}
         </Button>
-        <Field label="Beds" className="w-40">
-          <Select {...layers} value={shown.layers} disabled={shown.isCountOfModel} options={LAYER_OPTIONS} />
+        <Field label="Ground" className="w-32">
+          <Select {...kind} options={GROUND_OPTIONS} />
         </Field>
-        <Field label="Start" className="w-40">
-          <Select
-            {...start}
-            value={shown.start}
-            options={model ? START_OPTIONS : START_OPTIONS.slice(0, 1)}
-          />
-        </Field>
-        {held.length > 0 ? (
+        {isBeds ? (
+          <>
+            <Field label="Beds" className="w-40">
+              <Select
+                {...layers}
+                value={shown.layers}
+                disabled={shown.isCountOfModel}
+                options={LAYER_OPTIONS}
+              />
+            </Field>
+            <Field label="Start" className="w-40">
+              <Select
+                {...start}
+                value={shown.start}
+                options={model ? START_OPTIONS : START_OPTIONS.slice(0, 1)}
+              />
+            </Field>
+          </>
+        ) : null}
+        {isBeds && held.length > 0 ? (
           <p className="flex min-h-8 items-center gap-2 text-sm text-muted">
             {formatCount(held.length, 'value')} held
             <Button kind="quiet" size="small" onClick={onRelease}>
@@ -98,7 +118,7 @@ export function FitControls(props: FitControlsProps) {
           </p>
         ) : null}
       </div>
-      {shown.isCountOfModel ? (
+      {isBeds && shown.isCountOfModel ? (
         <p className="text-sm text-muted">
           {held.length > 0 ? 'Held values belong to this model' : 'The fit starts from this model'}, so it has{' '}
           {formatCount(Number(shown.layers), 'bed')}.

@@ -10,6 +10,9 @@ import { formatGiven } from '../../ui/format';
 import type { ModelValue } from './hand-model';
 import { heldKey } from './hand-model-store';
 
+/** What a fit may make of the ground. */
+export const GROUND_CHOICES = ['layered', 'smooth', 'stepped'] as const;
+
 export const LAYER_CHOICES = ['auto', '1', '2', '3', '4', '5', '6', '7', '8'] as const;
 
 const bound = (max: number) =>
@@ -21,6 +24,8 @@ const bound = (max: number) =>
 /** The controls of a fit as filled in; the contract's settings are made from it by `settingsOf`. */
 export const fitFormSchema = z
   .strictObject({
+    kind: z.enum(GROUND_CHOICES),
+    outlierTolerant: z.boolean(),
     layers: z.enum(LAYER_CHOICES),
     start: z.enum(['curve', 'model']),
     resistivityLow: bound(1e9),
@@ -40,6 +45,8 @@ export const fitFormSchema = z
 export type FitForm = z.infer<typeof fitFormSchema>;
 
 export const DEFAULT_FIT_FORM: FitForm = {
+  kind: 'layered',
+  outlierTolerant: false,
   layers: 'auto',
   start: 'curve',
   resistivityLow: DEFAULT_BOUNDS.resistivity[0],
@@ -85,11 +92,14 @@ export function settingsOf(
   model: LayeredEarthModel | null,
   held: readonly string[],
 ): FitSettingsInput {
+  const { seed, outlierTolerant } = form;
+  if (form.kind !== 'layered') return { kind: form.kind, seed, bounds: boundsOf(form), outlierTolerant };
   const { start, layers, isCountOfModel } = shownChoices(form, model, held);
   return {
     kind: 'layered',
+    outlierTolerant,
     layers: layers === 'auto' ? 'auto' : Number(layers),
-    seed: form.seed,
+    seed,
     bounds: boundsOf(form),
     fixed:
       model && isCountOfModel
@@ -116,6 +126,7 @@ export function settingsOfCount(
   return {
     kind: 'layered',
     layers: earth.resistivity.length,
+    outlierTolerant: asked.outlierTolerant,
     seed: form.seed === DEFAULT_FIT_FORM.seed ? asked.seed : form.seed,
     bounds: { resistivity: pick('resistivity'), thickness: pick('thickness') },
     fixed: [],

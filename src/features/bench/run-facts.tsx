@@ -4,6 +4,7 @@ import { fitStatusMessage } from '../../../inversion';
 import { messageOf } from '../../api/api-error';
 import { addressOf } from '../../app/addresses';
 import { cacheWords } from '../../runs/cache-words';
+import { hasBeds } from '../../runs/run-standing';
 import { settingsWords } from '../../runs/run-settings-words';
 import { letterOfRun } from '../../runs/run-title';
 import { Button, ButtonLink } from '../../ui/button';
@@ -55,7 +56,7 @@ export function RunFacts({ run, runs, can }: RunFactsProps) {
       </dl>
       {outcome ? <p className="mt-1.5 text-sm text-muted">{fitStatusMessage(outcome.status)}</p> : null}
       <div className="mt-3 flex flex-wrap gap-2">
-        {can.interpret ? (
+        {can.interpret && hasBeds(run) ? (
           <ButtonLink
             size="small"
             to={`${addressOf('interpretations', { soundingId: run.soundingId })}?start=${run.id}`}

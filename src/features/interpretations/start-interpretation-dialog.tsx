@@ -7,7 +7,7 @@ import type { Sounding } from '../../../server/contract/soundings';
 import { formFaults } from '../../api/form-faults';
 import { addressOf } from '../../app/addresses';
 import { isRejected, REJECTED_WORDS } from '../../runs/rejected-fit';
-import { byStanding } from '../../runs/run-standing';
+import { byStanding, hasBeds } from '../../runs/run-standing';
 import { letterOfRun, titleOfRun } from '../../runs/run-title';
 import { Button } from '../../ui/button';
 import { Dialog } from '../../ui/dialog';
@@ -44,7 +44,8 @@ const likeliest = (runs: readonly RunSummary[]): RunSummary | undefined =>
   )[0];
 
 export function StartInterpretationDialog(props: StartInterpretationDialogProps) {
-  const { sounding, runs, runId, onClose } = props;
+  const { sounding, runId, onClose } = props;
+  const runs = props.runs.filter(hasBeds);
   const navigate = useNavigate();
   const create = useCreateInterpretation(sounding.id);
   const first = runs.find((run) => run.id === runId) ?? likeliest(runs);

@@ -1,6 +1,7 @@
 import type { Run } from '../../../server/contract/runs';
 import { boundaryDepths } from '../../charts/chart-data';
 import { BedSwatch } from '../../runs/bed-swatch';
+import { hasBeds } from '../../runs/run-standing';
 import { isRejected } from '../../runs/rejected-fit';
 import { formatLength, formatRange, formatResistivity, withUnit } from '../../ui/format';
 import { Cell, Table, TableBody, TableRow } from '../../ui/table';
@@ -11,7 +12,10 @@ const RANGES_ASSUME = ', which assumes that the run explains the readings';
 
 /** Bed by bed from the surface: value and 95 % range of each run. */
 export function BedComparison({ runs }: { runs: readonly Run[] }) {
-  const most = Math.max(...runs.map((run) => run.result?.earth.resistivity.length ?? 0));
+  const most = Math.max(
+    ...runs.map((run) => (hasBeds(run) ? (run.result?.earth.resistivity.length ?? 0) : 0)),
+  );
+  if (most === 0) return null;
   return (
     <section aria-labelledby="beds-title">
       <h2 id="beds-title" className="mb-1 font-semibold">
@@ -42,6 +46,7 @@ export function BedComparison({ runs }: { runs: readonly Run[] }) {
 function BedOfRun({ run, bed }: { run: Run; bed: number }) {
   const { result } = run;
   const resistivity = result?.earth.resistivity[bed];
+  if (!hasBeds(run)) return <span className="text-muted">{bed === 0 ? 'cells, no beds' : ''}</span>;
   if (!result || resistivity === undefined) return <span className="text-muted">none</span>;
   const base = boundaryDepths(result.earth)[bed];
   return (

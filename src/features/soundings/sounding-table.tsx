@@ -82,7 +82,7 @@ function Row({ item }: { item: SoundingRow }) {
         {item.curve.length === 0 ? '' : item.curve.length}
       </Cell>
       <Cell className="hidden sm:table-cell" numeric>
-        {run?.layers}
+        {run ? (run.layers ?? '–') : null}
       </Cell>
       <Cell className="hidden sm:table-cell" numeric>
         {run ? <Misfit run={run} /> : null}

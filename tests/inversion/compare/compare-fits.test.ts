@@ -1,10 +1,17 @@
 import { describe, expect, it } from 'vitest';
-import { compareFits, createForwardOperator, fitLayered, type LayeredEarth } from '../../../inversion';
+import {
+  compareFits,
+  createForwardOperator,
+  describeDoubt,
+  fitEarth,
+  type FitSettings,
+  type LayeredEarth,
+} from '../../../inversion';
 import { layered } from '../support/fit-settings';
 
 const SPREADS = Array.from({ length: 14 }, (_, i) => ({ type: 'wenner', spacing: 1.5 ** i }) as const);
 
-function fitOf(earth: LayeredEarth, layers = earth.resistivity.length) {
+function fitOf(earth: LayeredEarth, layers = earth.resistivity.length, more: Partial<FitSettings> = {}) {
   const predicted = createForwardOperator(SPREADS).predict(earth);
   const readings = SPREADS.map((spread, i) => ({
     spread,
@@ -12,7 +19,7 @@ function fitOf(earth: LayeredEarth, layers = earth.resistivity.length) {
     apparentResistivity: predicted[i]! * (i % 2 === 0 ? 1.01 : 0.99),
     relativeError: 0.03,
   }));
-  return fitLayered(readings, layered(layers));
+  return fitEarth(readings, { ...layered(layers), ...more });
 }
 
 const BASE = fitOf({ resistivity: [100, 20], thickness: [5] });
@@ -31,6 +38,17 @@ describe('compareFits', () => {
   it('says that the same readings do not choose between models that differ and fit alike', () => {
     const [pair] = compareFits([BASE, fitOf({ resistivity: [100, 30], thickness: [5] })]).pairs;
     expect(pair!.text).toContain('the same readings do not choose between them.');
+  });
+
+  it('sets no bed against the cells of a smooth ground, and says nothing of its beds', () => {
+    const smooth = fitOf({ resistivity: [100, 20], thickness: [5] }, 2, { kind: 'smooth', layers: 'auto' });
+    const [pair] = compareFits([BASE, smooth], ['Run A', 'Run B']).pairs;
+    expect(pair!.beds).toEqual([]);
+    expect(pair!.totalConductanceRatio).toBeNull();
+    expect(pair!.text).toMatch(
+      /^Run A has 2 beds, Run B has \d+ cells of a fixed grid: they are not compared bed by bed\. /,
+    );
+    expect(describeDoubt(smooth)).toEqual([]);
   });
 
   it('tells the base of bed 1 once, as its thickness', () => {

@@ -36,6 +36,13 @@ describe('beginning an interpretation', () => {
     const early = await geophysicist.post(path, { runId: waiting.id, title: 'Sand' });
     expect(early.body).toMatchObject({ status: 409, code: 'wrong-state' });
     expect(early.body.detail).toContain('queued');
+    const smooth = await createRun(db, here.soundingId, {
+      requestedBy: idOf(geophysicist),
+      settings: { kind: 'smooth' },
+    });
+    const cells = await geophysicist.post(path, { runId: smooth.id, title: 'Sand' });
+    expect(cells.body).toMatchObject({ status: 422, faults: [{ path: ['body', 'runId'] }] });
+    expect(cells.body.detail).toContain('no beds to interpret');
   });
 
   it('lists the newest first', async () => {

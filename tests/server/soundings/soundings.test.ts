@@ -93,10 +93,13 @@ const finishRun = async (
   soundingId: string,
   revisionId: string,
   number: number,
-  given: { layers: number; chi2: number; pinned?: boolean; state?: 'finished' | 'failed' },
+  given: { layers: number; chi2: number; pinned?: boolean; state?: 'finished' | 'failed'; kind?: 'smooth' },
 ): Promise<string> => {
   const spread = { type: 'schlumberger', halfAB: 10, halfMN: 1 };
-  const input = { readings: [{ spread, apparentResistivity: 50, relativeError: 0.03 }], settings: {} };
+  const input = {
+    readings: [{ spread, apparentResistivity: 50, relativeError: 0.03 }],
+    settings: { kind: given.kind ?? 'layered' },
+  };
   const result = {
     earth: { resistivity: Array.from({ length: given.layers }, () => 50), thickness: [] },
     chi2PerReading: given.chi2,
@@ -269,6 +272,17 @@ describe('GET /surveys/:surveyId/soundings', () => {
     expect(seen).toEqual([4, 1, 2, 1, 3, 3]);
     await server.db('run_note').where({ run_id: runs[3] }).update({ pinned: true });
     expect(await shown()).toBe(4);
+  });
+
+  it('shows beds before a newer ground of cells, which has no count of beds', async () => {
+    const { id } = await server.createSounding(listed, { name: 'V 30' });
+    const revision = await server.createRevision(id, lead.user?.id ?? '');
+    await finishRun(id, revision.id, 1, { layers: 3, chi2: 1 });
+    const smooth = await finishRun(id, revision.id, 2, { layers: 30, chi2: 1, kind: 'smooth' });
+    const shown = async () => (await list('?search=V%2030')).items[0]?.latestRun;
+    expect(await shown()).toMatchObject({ number: 1, layers: 3 });
+    await server.db('run_note').where({ run_id: smooth }).update({ pinned: true });
+    expect(await shown()).toMatchObject({ number: 2, layers: null });
   });
 });
 

@@ -62,6 +62,7 @@ it('asks for one count of a run within the bounds that are set, else within thos
   });
   expect(settingsOfCount(DEFAULT_FIT_FORM, asked, model)).toEqual({
     kind: 'layered',
+    outlierTolerant: false,
     layers: 3,
     seed: 7,
     bounds: asked.bounds,
@@ -73,6 +74,21 @@ it('asks for one count of a run within the bounds that are set, else within thos
     seed: 3,
     bounds: { resistivity: [0.1, 2000], thickness: [0.5, 60] },
   });
+});
+
+it('asks for a smooth or stepped ground without beds, whatever is held', () => {
+  for (const kind of ['smooth', 'stepped'] as const) {
+    const settings = settingsOf({ ...DEFAULT_FIT_FORM, kind, layers: '5', outlierTolerant: true }, model, [
+      'thickness 1',
+    ]);
+    expect(settings).toEqual({
+      kind,
+      seed: 1,
+      bounds: { resistivity: [0.1, 1e5], thickness: [0.02, 1000] },
+      outlierTolerant: true,
+    });
+    expect(fitSettingsSchema.safeParse(settings).success).toBe(true);
+  }
 });
 
 it('tells a held value that lies outside the bounds by its bed', () => {
