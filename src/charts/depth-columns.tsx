@@ -55,7 +55,9 @@ export function DepthColumns(props: DepthColumnsProps) {
     legend = true,
   } = props;
   const palette = useChartPalette();
-  const [kind, setKind] = useState<DepthScaleKind>('linear');
+  const [chosenKind, setKind] = useState<DepthScaleKind | null>(null);
+  // cells are even in ln depth, and most of them lie in the first metres
+  const kind = chosenKind ?? (columns.some((column) => column.isCells) ? 'log' : 'linear');
   const [ownSelected, setOwnSelected] = useState<DepthColumnsProps['selected']>(null);
   const { ref, size } = useBoxSize<HTMLDivElement>();
   // While a boundary is dragged the depths stay where they are; else the scale would run away from the hand.

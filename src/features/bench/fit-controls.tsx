@@ -87,12 +87,12 @@ export function FitControls(props: FitControlsProps) {
         <Button kind="main" type="submit" loading={isAsking} icon={<Play aria-hidden size={14} />}>
           {isBeds ? 'Fit beds' : 'Fit ground'}
         </Button>
-        <Field label="Ground" className="w-32">
+        <Field label="Ground" className="w-28">
           <Select {...kind} options={GROUND_OPTIONS} />
         </Field>
         {isBeds ? (
           <>
-            <Field label="Beds" className="w-40">
+            <Field label="Beds" className="w-36">
               <Select
                 {...layers}
                 value={shown.layers}
@@ -100,7 +100,7 @@ export function FitControls(props: FitControlsProps) {
                 options={LAYER_OPTIONS}
               />
             </Field>
-            <Field label="Start" className="w-40">
+            <Field label="Start" className="w-36">
               <Select
                 {...start}
                 value={shown.start}
