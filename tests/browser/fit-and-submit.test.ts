@@ -80,3 +80,24 @@ it('an interpretation with nothing written is submitted only when that is confir
   expect(await stateOf()).toBe('in-review');
   expectNoFaults(faults);
 });
+
+it('a smooth ground is fitted from the Bench, and its cells are no beds to edit, compare or interpret', async () => {
+  const { page, faults } = await enter(browser, app.baseUrl, 'geophysicist', await benchOf('S-03'));
+  await openRun(page, 'A').waitFor();
+  await page
+    .getByRole('form', { name: 'Fit' })
+    .getByRole('combobox', { name: 'Ground' })
+    .selectOption('Smooth');
+  expect(await page.getByRole('combobox', { name: 'Beds' }).count()).toBe(0);
+  await page.getByRole('button', { name: 'Fit ground' }).click();
+  await page.getByRole('heading', { name: 'Run B', exact: true }).waitFor({ timeout: 60_000 });
+  await page.getByRole('heading', { name: 'Cells', exact: true }).waitFor();
+  expect(await shownEarth(page)).toEqual({ resistivity: [], thickness: [] });
+  expect(await page.getByRole('link', { name: 'Interpret this run' }).count()).toBe(0);
+  const { id } = await app.knex('sounding').where({ name: 'S-03' }).first<{ id: string }>('id');
+  const runs = await app.knex('run').where({ sounding_id: id }).orderBy('number').pluck<string[]>('id');
+  await page.goto(`${app.baseUrl}/soundings/${id}/side-by-side?runs=${runs.slice(-2).join(',')}`);
+  await page.getByText('they are not compared bed by bed').waitFor();
+  await page.getByText('cells, no beds').waitFor();
+  expectNoFaults(faults);
+});
