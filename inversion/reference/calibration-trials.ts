@@ -1,4 +1,5 @@
 import { exp } from '../math/exponential';
+import { pow } from '../math/power';
 import { createForwardOperator } from '../operator/forward-operator';
 import { createRandomStream, type RandomStream } from '../random';
 import type { Reading, Spread } from '../types';
@@ -16,7 +17,7 @@ import type { Model } from '../uncertainty/ensemble/metropolis';
 /** The prior that true grounds are drawn from and sampled under. */
 const PRIOR: EnsemblePrior = { resistivity: [5, 1000], thickness: [0.7, 30] };
 const RELATIVE_ERROR = 0.05;
-const SPREADS: Spread[] = Array.from({ length: 12 }, (_, i) => ({ type: 'wenner', spacing: 1.5 ** i }));
+const SPREADS: Spread[] = Array.from({ length: 12 }, (_, i) => ({ type: 'wenner', spacing: pow(1.5, i) }));
 const DRAWS = 1000;
 /** Samples that the truth is ranked among. */
 const RANKED = 99;
