@@ -71,7 +71,9 @@ describe('describeDoubt', () => {
     expect(words(1.041)).toContain(
       'is better known by S = h/ρ = 0.300\u00a0S\u00a0±\u00a04.1\u00a0% (68 %) than by its thickness',
     );
-    expect(words(1.7)).toContain('is better known by S = h/ρ = 0.300\u00a0S, times or divided by 1.70 (68 %)');
+    expect(words(1.7)).toContain(
+      'is better known by S = h/ρ = 0.300\u00a0S, times or divided by 1.70 (68 %)',
+    );
     for (const factor of [2, null])
       expect(words(factor)).toContain(
         'Of bed 2 the readings tell neither the thickness nor the resistivity, and S = h/ρ not within a factor of 2: ' +
