@@ -80,7 +80,7 @@ export function FieldSheetView({ sounding, fieldSheet, keeper }: FieldSheetViewP
       <SheetActions sounding={sounding} fieldSheet={fieldSheet} sheet={sheet} keeper={keeper} />
       <CrewCaution />
       <SheetNotices fieldSheet={fieldSheet} sheet={sheet} readOnly={readOnly} />
-      <div className="grid items-start gap-x-8 gap-y-6 xl:grid-cols-[minmax(0,1fr)_minmax(24rem,36%)]">
+      <div className="grid items-start gap-x-6 gap-y-6 xl:grid-cols-[minmax(0,1fr)_24rem] 2xl:grid-cols-[minmax(0,1fr)_minmax(24rem,36%)] 2xl:gap-x-8">
         {/* The keys of undo belong to the sheet as a whole, not to the one cell that has the cursor. */}
         <div className="flex min-w-0 flex-col gap-3" onKeyDownCapture={onKeyDown}>
           {readOnly ? null : (
