@@ -84,9 +84,10 @@ function BedRow(props: BedTableProps & { index: number }) {
       </Cell>
       <ValueCells {...props} value={{ on: 'resistivity', index }} />
       {base === undefined ? (
-        <Cell colSpan={2} className="align-top leading-8 text-muted">
-          to any depth
-        </Cell>
+        <>
+          <Cell className="align-top leading-8 whitespace-nowrap text-muted">to any depth</Cell>
+          <Cell className="hidden sm:table-cell" />
+        </>
       ) : (
         <>
           <ValueCells {...props} value={{ on: 'thickness', index }} />
@@ -109,7 +110,7 @@ interface ChangeCellProps {
 function ChangeCell({ earth, index, onEdit }: ChangeCellProps) {
   return (
     <Cell className="text-right align-top whitespace-nowrap">
-      <span className="inline-flex flex-col sm:flex-row">
+      <span className="-mx-2.5 inline-flex flex-col sm:mx-0 sm:flex-row">
         <IconButton
           label={`Split bed ${index + 1} in two`}
           icon={<Plus aria-hidden size={15} />}
