@@ -1,4 +1,5 @@
 import { useQuery } from '@tanstack/react-query';
+import { Fragment } from 'react';
 import { QueryView } from '../../app/query-view';
 import { formatMoment } from '../../ui/format';
 import { Pager } from '../../ui/pager';
@@ -32,7 +33,7 @@ export function AuditEventTable() {
                     <Cell className="figure whitespace-nowrap">{formatMoment(event.at)}</Cell>
                     <Cell className="whitespace-nowrap">{event.actorName ?? 'the system'}</Cell>
                     <Cell className="wrap-anywhere sm:whitespace-nowrap">
-                      <span className="figure">{event.action}</span>
+                      <ActionName action={event.action} />
                       <span className="block text-muted sm:hidden">{event.subject}</span>
                     </Cell>
                     <Cell className="hidden min-w-48 wrap-anywhere sm:table-cell">{event.subject}</Cell>
@@ -50,3 +51,19 @@ export function AuditEventTable() {
     </QueryView>
   );
 }
+
+/** As "sounding.created"; a narrow place breaks it at the dot, not within a word. */
+const ActionName = ({ action }: { action: string }) => (
+  <span className="figure">
+    {action.split('.').map((word, place) => (
+      <Fragment key={word}>
+        {place > 0 ? (
+          <>
+            <wbr />.
+          </>
+        ) : null}
+        {word}
+      </Fragment>
+    ))}
+  </span>
+);
