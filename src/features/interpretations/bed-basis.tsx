@@ -12,12 +12,12 @@ export function BedBasis({ result, layerIndex }: { result: FitResult; layerIndex
       </p>
       <p className="figure whitespace-nowrap">{bed.resistivity}</p>
       <p className="text-sm text-muted">
-        95 % <span className="figure">{bed.resistivityRange}</span>
+        95 % <span className="figure whitespace-nowrap">{bed.resistivityRange}</span>
       </p>
       <p className="figure mt-1 whitespace-nowrap">{bed.place}</p>
       {bed.baseRange === null ? null : (
         <p className="text-sm text-muted">
-          base, 95 % <span className="figure">{bed.baseRange}</span>
+          base, 95 % <span className="figure whitespace-nowrap">{bed.baseRange}</span>
         </p>
       )}
     </div>
