@@ -66,6 +66,7 @@ export function fitLayered(
       userStart: settings.start?.resistivity.length === layers ? settings.start : undefined,
       quick,
       fewer: scouts[layers - 2]?.logEarth,
+      grown: beyondNoise(fits) ? fits.at(-1)!.best.parameters.subarray(0, 2 * layers - 3) : undefined,
       onProgress: options.onProgress,
     });
     const fitted = ({ parameters, chi2 }: FittedModel): FittedModel => ({
@@ -103,6 +104,11 @@ export function fitLayered(
     : result;
 }
 
+/** True where a count before the last is within the noise already. */
+function beyondNoise(fits: readonly CountFit[]): boolean {
+  return fits.slice(0, -1).some((fit) => describeCount(fit, fit.readingFit.residuals.length).withinNoise);
+}
+
 /** The same fit with a moderate model for its best, which then stands among the others. */
 function moderated(
   fit: CountFit,
@@ -110,10 +116,10 @@ function moderated(
   curve: SoundingCurve,
   start: LayeredEarth | undefined,
 ): CountFit {
-  const { layered, outcome, best, others } = fit;
+  const { layered, quick, outcome, best, others } = fit;
   const { layers } = layered;
   const centre = start?.resistivity.length === layers ? logEarth(start) : moderateStart(curve, layers);
-  const found = moderateModel(layered, outcome, centre);
+  const found = moderateModel(layered, quick, outcome, centre);
   if (found.parameters === outcome.parameters) return fit;
   const parameters = layered.expand(found.parameters);
   return {

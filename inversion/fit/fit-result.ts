@@ -3,7 +3,7 @@ import { darZarrouk } from '../hydro/dar-zarrouk';
 import { geometricFactor } from '../spread/geometric-factor';
 import { parameterDoubt, type ParameterDoubt } from '../uncertainty/parameter-doubt';
 import type { FitResult, LayeredEarth, FitSettings, FitStatus, LayerCountFit, Reading } from '../types';
-import { allowedModels, earthOf, standsApart, type FittedModel } from './allowed-models';
+import { allowedModels, standsApart, type FittedModel } from './allowed-models';
 import { describeShifts } from './branch-shifts';
 import { fitWarnings } from './fit-warnings';
 import { misfitProbability } from './layer-count';
@@ -84,9 +84,7 @@ export function buildFitResult(parts: FitResultParts): FitResult {
   const models = allowedModels(best, parts.others, system, layers, held, settings.fixed);
   const [{ earth, covariance }] = models;
   const followed = problemForDoubt(parts);
-  const doubt = parameterDoubt(models, followed.problem, followed.chi2, (free) =>
-    earthOf(layered.expand(free), layers),
-  );
+  const doubt = parameterDoubt(models, followed.problem, followed.chi2);
   const free = held.filter((isHeld) => !isHeld).length;
   const probability = misfitProbability(chi2, free, m);
   return {

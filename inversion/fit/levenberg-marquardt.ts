@@ -1,6 +1,6 @@
 import { TOLERANCES } from '../tolerances';
 import type { FitStatus } from '../types';
-import { packagedStep, type DampedStep } from './damped-step';
+import { packagedStep } from './damped-step';
 import { createReduction, reducedMisfit, reduceProblem, type ReducedProblem } from './reduced-problem';
 
 /** A least-squares problem in n free parameters between `low` and `high`, m whitened residuals. */
@@ -30,23 +30,19 @@ export interface LeastSquaresOutcome {
 export interface LeastSquaresOptions {
   readonly iterations?: number;
   readonly initialDamping?: number;
-  /** converged-decrease as soon as the linearised problem promises less than this × χ²; default `TOLERANCES.promise` */
-  readonly promise?: number;
-  /** asked before each linearised step, with the χ² that the linearised problem promises; true ends the run as if the limit were reached */
-  readonly abandon?: (parameters: Float64Array, promised: number) => boolean;
-  /** what computes a step; default the packaged solver */
-  readonly step?: DampedStep;
   readonly onIteration?: (iteration: number, chi2: number) => void;
 }
 
-const FASTER = 4;
-const SLOWER = 5;
+export const FASTER = 4;
+export const SLOWER = 5;
 /** The damping is lowered when χ² fell by more than this share of what the linearised problem promised. */
-const WELL_KEPT = 0.25;
-const INITIAL_DAMPING = 0.3;
-const LOWEST_DAMPING = 1e-9;
+export const WELL_KEPT = 0.25;
+export const INITIAL_DAMPING = 0.3;
+/** `initialDamping` from where a search ended: so near to the least, hardly any is needed. */
+export const POLISH_DAMPING = 1e-6;
+export const LOWEST_DAMPING = 1e-9;
 /** A parameter is damped as if its sensitivity were at least this share of the strongest one's. */
-const SCALE_FLOOR = 0.1;
+export const SCALE_FLOOR = 0.1;
 
 interface Point {
   readonly parameters: Float64Array;
@@ -72,11 +68,10 @@ function stepInto(
   free: readonly number[],
   scale: Float64Array,
   damping: number,
-  step: DampedStep,
 ): number {
   const low = free.map((j) => (problem.low[j]! - current.parameters[j]!) * scale[j]!);
   const high = free.map((j) => (problem.high[j]! - current.parameters[j]!) * scale[j]!);
-  const delta = step(reduced, low, high, damping);
+  const delta = packagedStep(reduced, low, high, damping);
   trial.parameters.set(current.parameters);
   free.forEach((j, k) => {
     const moved = current.parameters[j]! + delta[k]! / scale[j]!;
@@ -149,8 +144,6 @@ export function minimise(
   const n = problem.low.length;
   const m = problem.residuals;
   const limit = options.iterations ?? TOLERANCES.iterations;
-  const step = options.step ?? packagedStep;
-  const promise = options.promise ?? TOLERANCES.promise;
   const jacobian = new Float64Array(m * n);
   const reduction = createReduction(m, n);
   let current = createPoint(n, m);
@@ -177,11 +170,10 @@ export function minimise(
     const scale = norms.map((norm) => Math.max(norm, SCALE_FLOOR * strongest, 1e-300));
     const reduced = reduceProblem(jacobian, current.residual, n, free, scale, reduction);
     const fall = norm2(reduced.rest);
-    if (fall <= promise * current.chi2) return done('converged-decrease');
-    if (options.abandon?.(current.parameters, current.chi2 - fall)) return done('iteration-limit');
+    if (fall <= TOLERANCES.promise * current.chi2) return done('converged-decrease');
     let promised: number;
     for (;;) {
-      promised = stepInto(trial, current, problem, reduced, free, scale, damping, step);
+      promised = stepInto(trial, current, problem, reduced, free, scale, damping);
       iteration++;
       if (trial.chi2 < current.chi2) break;
       damping *= SLOWER;

@@ -1,6 +1,7 @@
 import { logCovariance } from '../uncertainty/covariance';
 import type { LayeredProblem } from './layered-problem';
-import { minimise, type LeastSquaresProblem } from './levenberg-marquardt';
+import { minimise, POLISH_DAMPING, type LeastSquaresProblem } from './levenberg-marquardt';
+import { createDescent } from './search-descent';
 
 /** Free parameters and Σ residual². */
 export interface FreeModel {
@@ -15,6 +16,8 @@ const LOOSE = 0.5;
 /** Weights of a departure of 1 in ln, tried from the strongest on: the first leaves what the readings tell to 0.5 in ln alone. */
 const WEIGHTS = [0.3, 0.1, 0.03, 0.01, 0.003, 0.001];
 const STEPS = 25;
+/** A moderate model has converged once its linearised problem promises a fall of no more than this × its objective. */
+const PROMISE = 1e-5;
 
 /** The problem with one more row for each parameter: √weight × its departure from the centre. */
 function pulled(problem: LeastSquaresProblem, centre: Float64Array, weight: number): LeastSquaresProblem {
@@ -54,6 +57,8 @@ function pulled(problem: LeastSquaresProblem, centre: Float64Array, weight: numb
  */
 export function moderateModel(
   layered: LayeredProblem,
+  /** the same problem over the quick operator, by which they are tried */
+  quick: LayeredProblem,
   least: FreeModel,
   /** all parameters */
   centre: ArrayLike<number>,
@@ -68,8 +73,14 @@ export function moderateModel(
   if (deviation.every((value) => value <= LOOSE)) return least;
   const towards = layered.restrict(centre);
   for (const weight of WEIGHTS) {
-    const { parameters } = minimise(pulled(problem, towards, weight), least.parameters, {
+    const near = createDescent(pulled(quick.problem, towards, weight))(least.parameters, {
       iterations: STEPS,
+      promise: PROMISE,
+    });
+    if (problem.evaluate(near.parameters, residual) > (1 + MODERATION) * least.chi2) continue;
+    const { parameters } = minimise(pulled(problem, towards, weight), near.parameters, {
+      iterations: STEPS,
+      initialDamping: POLISH_DAMPING,
     });
     const chi2 = problem.evaluate(parameters, residual);
     if (chi2 <= (1 + MODERATION) * least.chi2) return { parameters, chi2 };

@@ -2,9 +2,9 @@ import type { RandomStream } from '../random';
 import { TOLERANCES } from '../tolerances';
 import type { FitProgress, LayeredEarth } from '../types';
 import { Z95 } from '../uncertainty/parameter-doubt';
-import { createSearchStep } from './damped-step';
 import type { LayeredProblem } from './layered-problem';
-import { minimise, type LeastSquaresOptions, type LeastSquaresOutcome } from './levenberg-marquardt';
+import { minimise, POLISH_DAMPING, type LeastSquaresOutcome } from './levenberg-marquardt';
+import { createDescent, type DescentOptions } from './search-descent';
 import { evenStart, logEarth, randomStart, splitStarts, type SoundingCurve } from './starting-models';
 
 /** How hard a search looks. */
@@ -25,14 +25,18 @@ export interface SearchEffort {
 const FULL: SearchEffort = {
   screened: 200,
   random: 24,
-  shortRun: 4,
+  shortRun: 3,
   patience: 20,
   carried: 40,
 };
+/** For a layer count beyond those that the readings ask for: beside what the count below grew into, little is tried. */
+const LIGHT: SearchEffort = { screened: 40, random: 4, shortRun: 3, patience: 5, carried: 20 };
 /** A carried start has converged once its linearised problem promises a fall of χ² of no more than this × χ². */
 const PROMISE = 1e-3;
+/** The best of them is carried on until that is no more than this, before the exact problem takes it over. */
+const QUICK_PROMISE = 1e-6;
 /** A carried start this close (in ln) to where another ended goes to the same place. */
-const SAME_PLACE = 0.1;
+const SAME_PLACE = 0.2;
 /** χ² above the least under which a model is allowed by the readings: it is then kept beside the best. */
 const ALLOWED = Z95 * Z95;
 /** For a model that only serves to start the next layer count. */
@@ -50,6 +54,8 @@ export interface MultiStartOptions {
   readonly quick?: LayeredProblem | undefined;
   /** ln parameters of a model with one layer fewer, whose layers are split in turn */
   readonly fewer?: Float64Array | undefined;
+  /** set where the readings do not ask for so many layers: ln parameters of the best model with one layer fewer, which then lead the search */
+  readonly grown?: Float64Array | undefined;
   readonly onProgress?: ((progress: FitProgress) => void) | undefined;
 }
 
@@ -99,10 +105,14 @@ function search(
   onProgress: MultiStartOptions['onProgress'],
 ): Found {
   let iterations = 0;
-  const step = createSearchStep(layered.problem.low.length);
+  const descend = createDescent(layered.problem);
   const tell = teller(layered, queue.length, onProgress);
-  const run = (from: ArrayLike<number>, start: number, more: LeastSquaresOptions): LeastSquaresOutcome => {
-    const outcome = minimise(layered.problem, from, { ...more, step, onIteration: tell(start) });
+  const run = (
+    from: ArrayLike<number>,
+    start: number,
+    more: Partial<DescentOptions>,
+  ): LeastSquaresOutcome => {
+    const outcome = descend(from, { promise: PROMISE, ...more, onIteration: tell(start) });
     iterations += outcome.iterations;
     return outcome;
   };
@@ -123,7 +133,6 @@ function search(
     const outcomeOfMore = run(parameters, start, {
       initialDamping: damping,
       iterations: effort.carried,
-      promise: PROMISE,
       abandon: (at, promised) => (abandoned = hopeless(at, promised)),
     });
     return { start, outcome: outcomeOfMore, abandoned };
@@ -143,6 +152,7 @@ function search(
 /** The ends of a search judged by the exact problem, and the best of them carried to convergence there. */
 function polish(
   layered: LayeredProblem,
+  quick: LayeredProblem,
   { ends, iterations }: Found,
   starts: number,
   onProgress: MultiStartOptions['onProgress'],
@@ -157,8 +167,13 @@ function polish(
   const [best, ...others] = judged;
   const tell = teller(layered, starts, onProgress)(best!.start);
   tell(0, best!.chi2);
-  const outcome = minimise(problem, best!.parameters, {
+  const near = createDescent(quick.problem)(best!.parameters, {
     initialDamping: best!.damping,
+    promise: QUICK_PROMISE,
+    onIteration: tell,
+  });
+  const outcome = minimise(problem, near.parameters, {
+    initialDamping: POLISH_DAMPING,
     onIteration: tell,
   });
   return {
@@ -185,11 +200,12 @@ export function multiStart(
   const queue = [
     ...(options.userStart ? [logEarth(options.userStart)] : []),
     evenStart(curve, layered.layers),
-    ...(options.fewer ? splitStarts(options.fewer, curve) : []),
+    ...[options.fewer, options.grown].flatMap((model) => (model ? splitStarts(model, curve) : [])),
   ].map(layered.startFrom);
-  queue.push(...screenedStarts(quick, curve, random, FULL));
-  const found = search(quick, queue, FULL, options.onProgress);
-  return polish(layered, found, queue.length, options.onProgress);
+  const effort = options.grown ? LIGHT : FULL;
+  queue.push(...screenedStarts(quick, curve, random, effort));
+  const found = search(quick, queue, effort, options.onProgress);
+  return polish(layered, quick, found, queue.length, options.onProgress);
 }
 
 /** A quick fit that serves to start the next layer count. */

@@ -43,15 +43,19 @@ export interface ResidualSystem {
   readonly describe: (parameters: ArrayLike<number>, layers: number) => ReadingFit;
 }
 
+const FLOOR = TOLERANCES.logResidualFloor;
+const LOG_FLOOR = log(FLOOR);
+
 /**
- * ln(predicted/observed), and its slope against predicted, both per unit observed.
- * Below `TOLERANCES.logResidualFloor` (a prediction near or under zero) the logarithm goes on along its tangent.
+ * ln(predicted/observed). Below `TOLERANCES.logResidualFloor` (a prediction near or under zero) the logarithm goes on along
+ * its tangent.
  */
-export function logRatio(ratio: number): { value: number; slope: number } {
-  const floor = TOLERANCES.logResidualFloor;
-  if (ratio >= floor) return { value: log(ratio), slope: 1 / ratio };
-  return { value: log(floor) + (ratio - floor) / floor, slope: 1 / floor };
+export function logRatio(ratio: number): number {
+  return ratio >= FLOOR ? log(ratio) : LOG_FLOOR + (ratio - FLOOR) / FLOOR;
 }
+
+/** Slope of `logRatio` per unit observed. */
+export const logRatioSlope = (ratio: number): number => 1 / Math.max(ratio, FLOOR);
 
 /** residualᵢ = (ln predictedᵢ + shift of its branch − ln observedᵢ)/σᵢ over the readings, in their order; then the penalties. */
 export function createResidualSystem(
@@ -98,7 +102,7 @@ export function createResidualSystem(
       operator.predictInto(values, layers, predicted);
       let sum = 0;
       for (let i = 0; i < m; i++) {
-        const ratio = logRatio(predicted[i]! / observed[i]!).value + shiftAt(parameters, count, i);
+        const ratio = logRatio(predicted[i]! / observed[i]!) + shiftAt(parameters, count, i);
         const r = tolerant ? tolerantResidual(ratio * perSigma[i]!).value : ratio * perSigma[i]!;
         residual[i] = r;
         sum += r * r;
@@ -111,14 +115,14 @@ export function createResidualSystem(
       operator.predictWithJacobianInto(values, layers, predicted, jacobian, width);
       let sum = 0;
       for (let i = 0; i < m; i++) {
-        const { value, slope } = logRatio(predicted[i]! / observed[i]!);
-        const plain = (value + shiftAt(parameters, count, i)) * perSigma[i]!;
+        const ratio = predicted[i]! / observed[i]!;
+        const plain = (logRatio(ratio) + shiftAt(parameters, count, i)) * perSigma[i]!;
         const told = tolerant ? tolerantResidual(plain) : null;
         const r = told ? told.value : plain;
         const perLog = (told ? told.slope : 1) * perSigma[i]!;
         residual[i] = r;
         sum += r * r;
-        const scale = (slope * perLog) / observed[i]!;
+        const scale = (logRatioSlope(ratio) * perLog) / observed[i]!;
         for (let j = 0; j < count; j++) jacobian[i * width + j]! *= scale;
         for (let s = 0; s < shifts; s++) jacobian[i * width + count + s] = s === shiftOf[i] ? perLog : 0;
       }
@@ -133,7 +137,7 @@ export function createResidualSystem(
       const shift = (i: number) => shiftAt(parameters, count, i);
       const residuals = Array.from(
         predicted,
-        (value, i) => (logRatio(value / observed[i]!).value + shift(i)) * perSigma[i]!,
+        (value, i) => (logRatio(value / observed[i]!) + shift(i)) * perSigma[i]!,
       );
       return {
         predicted: Array.from(predicted, (value, i) => (shift(i) === 0 ? value : value * exp(shift(i)))),

@@ -1,9 +1,10 @@
 import { exp } from '../math/exponential';
+import { logEarth } from '../fit/starting-models';
 import { log } from '../math/logarithm';
 import { TOLERANCES } from '../tolerances';
 import type { FitBounds, Interval, LayeredEarth } from '../types';
 import { Z95, type ParameterDoubt } from '../uncertainty/parameter-doubt';
-import { depthOf, productOf, resistivityOf, thicknessOf, type QuantityOf } from '../uncertainty/quantities';
+import { depthOf, productOf, resistivityOf, thicknessOf, type Quantity } from '../uncertainty/quantities';
 import { chainCovarianceRoots, factoriseChain } from './block-chain';
 import type { LinearLine } from './line-problem';
 
@@ -62,6 +63,17 @@ export function placeCovariance(root: Float64Array, held: readonly boolean[]): P
   return { deviation, along, between };
 }
 
+/** Standard deviation of ln quantity at one place. */
+export function deviationAt(
+  quantity: Quantity,
+  parameters: Float64Array,
+  { along }: PlaceCovariance,
+): number {
+  const slope = new Float64Array(parameters.length);
+  quantity.gradient(parameters, slope);
+  return along((j) => slope[j] ?? 0);
+}
+
 function interval(value: number, deviation: number, [low, high]: readonly [number, number]): Interval {
   if (deviation === 0) return [value, value];
   if (deviation > log(TOLERANCES.factorLimit)) return [null, null];
@@ -88,10 +100,12 @@ export function placeDoubt(
   const [hLow, hHigh] = bounds.thickness;
   const perLayer = <T>(of: (i: number) => T): T[] => earth.resistivity.map((_, i) => of(i));
   const perBounded = <T>(of: (i: number) => T): T[] => earth.thickness.map((_, i) => of(i));
-  const deviationOf = (quantity: QuantityOf) => covariance.along(quantity(earth).gradient);
-  const intervalOf = (quantity: QuantityOf, range: readonly [number, number]) =>
-    interval(quantity(earth).value, deviationOf(quantity), range);
-  const factorOf = (quantity: QuantityOf) => factor(deviationOf(quantity));
+  const parameters = logEarth(earth);
+  const layers = earth.resistivity.length;
+  const deviationOf = (quantity: Quantity) => deviationAt(quantity, parameters, covariance);
+  const intervalOf = (quantity: Quantity, range: readonly [number, number]) =>
+    interval(exp(quantity.value(parameters)), deviationOf(quantity), range);
+  const factorOf = (quantity: Quantity) => factor(deviationOf(quantity));
   const { deviation, between } = covariance;
   const known = (j: number) => deviation[j]! > 0 && deviation[j]! < Infinity;
   const correlation = (a: number, b: number): number | null => {
@@ -102,16 +116,16 @@ export function placeDoubt(
   return {
     intervals: {
       resistivity: perLayer((i) => intervalOf(resistivityOf(i), bounds.resistivity)),
-      thickness: perBounded((i) => intervalOf(thicknessOf(i), bounds.thickness)),
-      depth: perBounded((i) => intervalOf(depthOf(i), [(i + 1) * hLow, (i + 1) * hHigh])),
+      thickness: perBounded((i) => intervalOf(thicknessOf(layers, i), bounds.thickness)),
+      depth: perBounded((i) => intervalOf(depthOf(layers, i), [(i + 1) * hLow, (i + 1) * hHigh])),
     },
     factors: {
       resistivity: perLayer((i) => factorOf(resistivityOf(i))),
-      thickness: perBounded((i) => factorOf(thicknessOf(i))),
-      depth: perBounded((i) => factorOf(depthOf(i))),
+      thickness: perBounded((i) => factorOf(thicknessOf(layers, i))),
+      depth: perBounded((i) => factorOf(depthOf(layers, i))),
     },
-    conductanceFactor: perBounded((i) => factorOf(productOf(i, -1))),
-    resistanceFactor: perBounded((i) => factorOf(productOf(i, 1))),
+    conductanceFactor: perBounded((i) => factorOf(productOf(layers, i, -1))),
+    resistanceFactor: perBounded((i) => factorOf(productOf(layers, i, 1))),
     correlation: numbers.map((a) => numbers.map((b) => correlation(a, b))),
   };
 }

@@ -1,8 +1,10 @@
+import { logEarth } from '../fit/starting-models';
+import { exp } from '../math/exponential';
 import { threeDigits } from '../three-digits';
 import { TOLERANCES } from '../tolerances';
 import type { LayeredEarth } from '../types';
 import { depthOf } from '../uncertainty/quantities';
-import type { PlaceCovariance } from './line-doubt';
+import { deviationAt, type PlaceCovariance } from './line-doubt';
 import type { LinePlace } from './line-layout';
 import type { LineBorehole, LineContact } from './line-types';
 
@@ -23,8 +25,10 @@ export interface BoredPlace {
  * variance of D after the fit (the studentised residual; Cook & Weisberg 1982, from memory).
  */
 function tension({ earth, covariance }: BoredPlace, { boundary, depth, sigma }: LineContact): number {
-  const { value, gradient } = depthOf(boundary)(earth);
-  const deviation = (value * covariance.along(gradient)) / sigma;
+  const quantity = depthOf(earth.resistivity.length, boundary);
+  const parameters = logEarth(earth);
+  const value = exp(quantity.value(parameters));
+  const deviation = (value * deviationAt(quantity, parameters, covariance)) / sigma;
   const share = deviation * deviation;
   return share < OWN_WORD ? Math.abs(value - depth) / (sigma * Math.sqrt(1 - share)) : 0;
 }

@@ -40,7 +40,7 @@ export const QUICK_LATTICE: LatticeGrade = {
   name: 'quick',
   perOctave: 2,
   highest: 10,
-  lowestNeutral: -16,
+  lowestNeutral: -10,
   lowestCharged: -34,
   deepestNeutral: 4,
   deepestCharged: 6,

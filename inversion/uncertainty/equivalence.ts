@@ -51,7 +51,7 @@ function tiedRanges({ intervals }: FitResult, bed: number): string {
     thickness && resistivity
       ? ''
       : `, and the readings do not limit the ${thickness ? 'resistivity' : 'thickness'}`;
-  return `By themselves (95 %): ${words.join(' and ')}${only}.`;
+  return `By themselves (95\u00a0%): ${words.join(' and ')}${only}.`;
 }
 
 function equivalenceOf(result: FitResult, bed: number): DoubtItem | null {
@@ -64,13 +64,13 @@ function equivalenceOf(result: FitResult, bed: number): DoubtItem | null {
   const value = (conductive ? darZarrouk.conductanceS : darZarrouk.resistanceOhmM2)[bed]!;
   const factor = (conductive ? darZarrouk.conductanceFactor : darZarrouk.resistanceFactor)[bed]!;
   const unit = conductive ? 'S' : 'Ω·m²';
-  const symbol = conductive ? 'S = h/ρ' : 'T = hρ';
+  const symbol = conductive ? 'S\u00a0=\u00a0h/ρ' : 'T\u00a0=\u00a0hρ';
   const known = factor !== null && factor < UNKNOWN_FACTOR && factor < loosest;
   return {
     bed,
     kind: conductive ? 'conductance' : 'resistance',
     text: known
-      ? `Bed ${bed + 1} is better known by ${symbol} = ${amount(value, unit)}${range(factor)} (68 %) than by its thickness or its resistivity: a thicker bed goes with a ${conductive ? 'higher' : 'lower'} resistivity. ${tiedRanges(result, bed)}`
+      ? `Bed ${bed + 1} is better known by ${symbol}\u00a0=\u00a0${amount(value, unit)}${range(factor)} (68\u00a0%) than by its thickness or its resistivity: a thicker bed goes with a ${conductive ? 'higher' : 'lower'} resistivity. ${tiedRanges(result, bed)}`
       : `Of bed ${bed + 1} the readings tell neither the thickness nor the resistivity, and ${symbol} not within a factor of 2: ${amount(value, unit)} is one of many values that fit. ${tiedRanges(result, bed)}`,
     value,
     unit,
@@ -110,7 +110,7 @@ function undetermined(result: FitResult, bed: number): DoubtItem[] {
     const unit = kind === 'resistivity' ? 'Ω·m' : 'm';
     const words = rangeWords(result.intervals[kind][bed]!, unit);
     const text = words
-      ? `The ${kind} of bed ${bed + 1} is not held within a factor of 2: ${words} fit (95 %).`
+      ? `The ${kind} of bed ${bed + 1} is not held within a factor of 2: ${words} fit (95\u00a0%).`
       : `The readings do not limit the ${kind} of bed ${bed + 1}: ${amount(value, unit)} is one of many values that fit.`;
     return [{ bed, kind, text, value, unit, factor } satisfies DoubtItem];
   });

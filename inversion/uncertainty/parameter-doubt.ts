@@ -1,11 +1,10 @@
 import type { LayeredProblem } from '../fit/layered-problem';
 import { exp } from '../math/exponential';
-import { log } from '../math/logarithm';
 import { TOLERANCES } from '../tolerances';
 import type { Interval, LayeredEarth } from '../types';
 import type { LogCovariance } from './covariance';
 import { profileEnds, type Asked, type Ends } from './profile-ends';
-import { depthOf, productOf, resistivityOf, thicknessOf, type QuantityOf } from './quantities';
+import { depthOf, productOf, resistivityOf, thicknessOf, type Quantity } from './quantities';
 
 /** Standard normal point that leaves 2.5 % above it; its square is the 95 % point of χ² with one degree of freedom. */
 export const Z95 = 1.959963984540054;
@@ -34,18 +33,24 @@ export interface ParameterDoubt {
 }
 
 /** True where no free parameter moves the quantity: it is held. */
-function isHeld(quantityOf: QuantityOf, { earth }: AllowedModel, held: readonly boolean[]): boolean {
-  const { gradient } = quantityOf(earth);
-  return held.every((fixed, j) => fixed || gradient(j) === 0);
+function isHeld(quantity: Quantity, { parameters }: AllowedModel, held: readonly boolean[]): boolean {
+  const slope = new Float64Array(held.length);
+  quantity.gradient(parameters, slope);
+  return held.every((fixed, j) => fixed || slope[j] === 0);
+}
+
+/** Depths of the bases of the bounded layers. */
+function basesOf(thickness: readonly number[]): number[] {
+  let depth = 0;
+  return thickness.map((h) => (depth += h));
 }
 
 function interval({ low, high }: Ends): Interval {
   return [low === null ? null : exp(low), high === null ? null : exp(high)];
 }
 
-function factor(value: number, { low, high }: Ends): number | null {
+function factor(best: number, { low, high }: Ends): number | null {
   if (low === null || high === null) return null;
-  const best = log(value);
   const reach = exp(Math.max(best - low, high - best));
   return reach > TOLERANCES.factorLimit ? null : reach;
 }
@@ -76,30 +81,32 @@ export function parameterDoubt(
   models: readonly [AllowedModel, ...AllowedModel[]],
   layered: LayeredProblem,
   leastChi2: number,
-  earthAt: (free: Float64Array) => LayeredEarth,
 ): ParameterDoubt {
   const [best, ...others] = models;
   const { resistivity, thickness } = best.earth;
+  const layers = resistivity.length;
   const quantities: Asked[] = [
     ...resistivity.map((_, i) => ({ of: resistivityOf(i), limits: 2 as const })),
-    ...thickness.map((_, i) => ({ of: thicknessOf(i), limits: 2 as const })),
+    ...thickness.map((_, i) => ({ of: thicknessOf(layers, i), limits: 2 as const })),
     // the base of the first layer is its thickness
-    ...thickness.slice(1).map((_, i) => ({ of: depthOf(i + 1), limits: 2 as const })),
-    ...thickness.map((_, i) => ({ of: productOf(i, -1), limits: 1 as const })),
-    ...thickness.map((_, i) => ({ of: productOf(i, 1), limits: 1 as const })),
+    ...thickness.slice(1).map((_, i) => ({ of: depthOf(layers, i + 1), limits: 2 as const })),
+    ...thickness.map((_, i) => ({ of: productOf(layers, i, -1), limits: 1 as const })),
+    ...thickness.map((_, i) => ({ of: productOf(layers, i, 1), limits: 1 as const })),
   ];
+  // what is held keeps its bits
+  const stated = [...resistivity, ...thickness, ...basesOf(thickness).slice(1)];
   const free = quantities.filter(({ of }) => !isHeld(of, best, layered.held));
   const point = ({ parameters, excess }: AllowedModel) => ({
     parameters: layered.restrict(parameters),
     chi2: leastChi2 + excess,
   });
-  const ends = profileEnds(layered, point(best), others.map(point), free, [1, Z95 * Z95], earthAt);
-  const doubts = quantities.map((quantity): { interval: Interval; factor: number | null } => {
-    const { value } = quantity.of(best.earth);
+  const ends = profileEnds(layered, point(best), others.map(point), free, [1, Z95 * Z95]);
+  const doubts = quantities.map((quantity, i): { interval: Interval; factor: number | null } => {
+    const centre = quantity.of.value(best.parameters);
     const [inner, outer] = ends[free.indexOf(quantity)] ?? [];
     return inner
-      ? { interval: interval(outer ?? inner), factor: factor(value, inner) }
-      : { interval: [value, value], factor: 1 };
+      ? { interval: interval(outer ?? inner), factor: factor(centre, inner) }
+      : { interval: [stated[i] ?? null, stated[i] ?? null], factor: 1 };
   });
   const bounded = thickness.length;
   const rho = doubts.splice(0, resistivity.length);

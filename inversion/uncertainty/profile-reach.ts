@@ -1,5 +1,5 @@
 import type { LeastSquaresProblem } from '../fit/levenberg-marquardt';
-import { choleskyInPlace, choleskySolve } from '../matrix/cholesky';
+import { createLimitStepper, type LimitStep, type Linearised } from './constrained-step';
 
 /** How far a quantity goes on one side while the misfit stays within a limit. */
 export interface ProfileEnd {
@@ -12,222 +12,145 @@ export interface ProfileEnd {
   readonly open: boolean;
   /** true when the first step from the foot of the valley led there */
   readonly straight: boolean;
+  /** with which a search further on may begin */
+  readonly damping: number;
 }
 
-/** s · ln quantity and its gradient on the free parameters. */
+/** s · ln quantity and its gradient on the free parameters, which is written over by the next call. */
 export interface DirectedQuantity {
   readonly value: (parameters: Float64Array) => number;
   readonly gradient: (parameters: Float64Array) => Float64Array;
 }
 
+/** What a search knows beforehand. */
+export interface SearchHint {
+  /** a point under the limit to go on from, such as an end at a lower limit */
+  readonly from?: Float64Array | undefined;
+  /** the damping with which a search there ended */
+  readonly damping?: number | undefined;
+  /** true for a few steps alone, after which the tangent tells the rest */
+  readonly short?: boolean | undefined;
+}
+
 const STEPS = 40;
-/** No free parameter moves further than this (in ln) in one step: beyond it the tangent says little. */
-const LONGEST = 1.5;
-/** The end is found when χ² is within this share of its rise of the limit … */
+const SHORT_STEPS = 4;
+/** A point stands within the limit when its χ² is above it by no more than this share of its rise. */
 const CLOSE = 0.03;
-/** … and a further step would gain less than this share of the reach. */
-const GAIN = 0.005;
+/** The end is found at a point whose χ² is within this share of its rise of the limit … */
+const NEAR = 0.1;
+/** … when the step from there to the limit would change the reach by less than this share; it is then added. */
+const GAIN = 0.02;
+/** A reach shorter than this, in ln, counts as this much in the line above. */
+const SHORTEST = 0.01;
 /**
  * A move of 1 in ln counts for this much χ² at first, so that a step leaves out what gains little along a flat valley. It falls
- * with every step that stays within the limit and rises with every one that does not.
+ * with every second step in a row that stays within the limit, and rises with how far one is outside.
  */
-const DAMPING = 0.1;
+const DAMPING = 1;
 const FASTER = 4;
 const SLOWER = 5;
+/** The damping is multiplied by this × √(χ² above the limit per rise), from `SLOWER` up to `MOST_SLOWER`. */
+const PER_OVERSHOOT = 3;
+const MOST_SLOWER = 50;
 const STIFFEST = 1e6;
 /** Steps in a row outside of the limit before the search goes back. */
 const RETURNS = 2;
-/** Share of the strongest sensitivity, squared, that lifts the normal matrix off its rounding floor. */
-const RIDGE = 1e-12;
-
-/** The misfit about one point: χ², JᵀJ (row-major n × n) and Jᵀr. */
-export interface Linearised {
-  readonly at: Float64Array;
-  readonly chi2: number;
-  readonly normal: Float64Array;
-  readonly slope: Float64Array;
-}
-
-/** Working arrays of one problem. */
-interface Work {
-  readonly residual: Float64Array;
-  readonly jacobian: Float64Array;
-  readonly factor: Float64Array;
-  readonly alongG: Float64Array;
-  readonly alongB: Float64Array;
-}
-
-function linearise(problem: LeastSquaresProblem, at: Float64Array, work: Work): Linearised {
-  const n = at.length;
-  const { residual, jacobian } = work;
-  const chi2 = problem.linearise(at, residual, jacobian);
-  const normal = new Float64Array(n * n);
-  const slope = new Float64Array(n);
-  for (let i = 0; i < residual.length; i++) {
-    for (let j = 0; j < n; j++) {
-      const value = jacobian[i * n + j]!;
-      slope[j]! += value * residual[i]!;
-      for (let k = 0; k <= j; k++) normal[j * n + k]! += value * jacobian[i * n + k]!;
-    }
-  }
-  for (let j = 0; j < n; j++) for (let k = j + 1; k < n; k++) normal[j * n + k] = normal[k * n + j]!;
-  return { at, chi2, normal, slope };
-}
-
-/** A⁻¹g and A⁻¹b over the columns in `free` into `work`, A the normal matrix lifted off its rounding floor; false where it cannot. */
-function solveBoth(
-  { factor, alongG, alongB }: Work,
-  normal: Float64Array,
-  damping: number,
-  free: readonly number[],
-  g: Float64Array,
-  b: Float64Array,
-): boolean {
-  const n = g.length;
-  const k = free.length;
-  let strongest = 0;
-  for (const j of free) strongest = Math.max(strongest, normal[j * n + j]!);
-  for (let r = 0; r < k; r++) {
-    const row = free[r]! * n;
-    for (let c = 0; c <= r; c++) factor[r * k + c] = normal[row + free[c]!]!;
-    factor[r * k + r]! += damping + RIDGE * strongest;
-    alongG[r] = g[free[r]!]!;
-    alongB[r] = b[free[r]!]!;
-  }
-  if (!choleskyInPlace(factor, k)) return false;
-  choleskySolve(factor, k, alongG);
-  choleskySolve(factor, k, alongB);
-  return true;
-}
-
-function inner(free: readonly number[], a: Float64Array, packed: Float64Array): number {
-  let sum = 0;
-  for (let k = 0; k < free.length; k++) sum += a[free[k]!]! * packed[k]!;
-  return sum;
-}
-
-/**
- * The step from a point, no longer than `longest` and no further than the first bound in its way: going on from there with
- * that parameter held keeps to the valley. null where nothing is left to move.
- */
-function constrainedStep(
-  problem: LeastSquaresProblem,
-  work: Work,
-  { at, chi2, normal, slope }: Linearised,
-  g: Float64Array,
-  limit: number,
-  damping: number,
-): Float64Array | null {
-  const delta = new Float64Array(at.length);
-  let free = Array.from(at, (_, j) => j);
-  for (;;) {
-    if (!solveBoth(work, normal, damping, free, g, slope)) return null;
-    const least = chi2 - inner(free, slope, work.alongB);
-    const perG = inner(free, g, work.alongG);
-    if (perG === 0) return null;
-    const alpha = perG > 0 && limit > least ? Math.sqrt((limit - least) / perG) : 0;
-    delta.fill(0);
-    free.forEach((j, k) => (delta[j] = alpha * work.alongG[k]! - work.alongB[k]!));
-    const stay = free.filter((j) => (delta[j]! < 0 ? at[j]! > problem.low[j]! : at[j]! < problem.high[j]!));
-    if (stay.length === free.length) break;
-    free = stay;
-    if (free.length === 0) return null;
-  }
-  let longestMove = 0;
-  let share = Infinity;
-  for (const j of free) {
-    const move = Math.abs(delta[j]!);
-    longestMove = Math.max(longestMove, move);
-    if (move > 0)
-      share = Math.min(share, Math.abs((delta[j]! < 0 ? problem.low : problem.high)[j]! - at[j]!) / move);
-  }
-  if (longestMove === 0) return null;
-  share = Math.min(share, 1, LONGEST / longestMove);
-  const parameters = at.map((value, j) =>
-    Math.min(problem.high[j]!, Math.max(problem.low[j]!, value + share * delta[j]!)),
-  );
-  return parameters;
-}
+/** Up to this much outside, per rise, a step counts as a calm one. */
+const CALM = 0.3;
+/** The tangent at a foot is trusted to within this factor. */
+const TRUST = 1.5;
 
 /** Finds ends of profile intervals of one problem, each from the foot of a valley or from a point found before. */
 export interface Profiler {
   /** the misfit about a model at the foot of its valley, to be shared by all quantities */
   readonly foot: (parameters: Float64Array) => Linearised;
+  /** s · ln quantity that a search from this foot may come to, by its tangent and half as much again */
+  readonly promise: (foot: Linearised, quantity: DirectedQuantity, limit: number) => number;
   readonly end: (
     foot: Linearised,
     quantity: DirectedQuantity,
     limit: number,
-    /** a point under the limit to go on from, such as an end at a lower limit */
-    from?: Pick<ProfileEnd, 'parameters' | 'reach' | 'chi2'>,
+    hint?: SearchHint,
   ) => ProfileEnd;
 }
+
+/** Factor of the damping after a step that left the limit by `over` rises. */
+const stiffening = (over: number): number =>
+  over < Infinity ? Math.min(MOST_SLOWER, Math.max(SLOWER, PER_OVERSHOOT * Math.sqrt(over))) : MOST_SLOWER;
 
 /**
  * The furthest value of one quantity with χ² ≤ `limit`: an end of its profile-likelihood interval.
  *
- * Each step solves max gᵀδ subject to ‖r + Jδ‖² ≤ limit: δ = −A⁻¹Jᵀr + α A⁻¹g, A = JᵀJ, α from the limit. A parameter
- * that sits on a bound and would leave it is held and the rest solved again. A step may leave the limit by as much as the whole
- * rise, since the next one comes back along the valley; further out it is halved. What is returned keeps to the limit.
- * Accuracy: χ² at the end is within 3 % of its rise of the limit, so the reach within 1.5 %; exact where χ² is a parabola.
- * Where the first step lands on the limit the misfit is a parabola so far, and that is the end.
+ * Each step solves the linearised problem (`LimitStepper`). One may leave the limit by as much as the whole rise, since the
+ * next comes back along the valley; further out the search goes back with more damping. Near the limit, a step that would
+ * change little is added along the tangent. Accuracy: the reach within 2 % where the valley is not bent further on; exact
+ * where χ² is a parabola. Where the first step lands on the limit the misfit is a parabola so far, and that is the end.
  * Source: Venzon & Moolgavkar 1988, Appl. Statist. 37, 87–94 (from memory).
  */
 export function createProfiler(problem: LeastSquaresProblem): Profiler {
-  const n = problem.low.length;
-  const work: Work = {
-    residual: new Float64Array(problem.residuals),
-    jacobian: new Float64Array(problem.residuals * n),
-    factor: new Float64Array(n * n),
-    alongG: new Float64Array(n),
-    alongB: new Float64Array(n),
-  };
+  const { linearise, step } = createLimitStepper(problem);
   return {
-    foot: (parameters) => linearise(problem, parameters, work),
-    end: (foot, quantity, limit, from) => {
+    foot: linearise,
+    promise: (foot, quantity, limit) =>
+      quantity.value(foot.at) + TRUST * (step(foot, quantity.gradient(foot.at), limit, 0)?.gain ?? 0),
+    end: (foot, quantity, limit, { from, damping = DAMPING, short = false } = {}) => {
       const rise = limit - foot.chi2;
-      const tolerance = CLOSE * rise;
       const origin = quantity.value(foot.at);
-      let best: Pick<ProfileEnd, 'parameters' | 'reach' | 'chi2'> = from ?? {
-        parameters: foot.at,
-        reach: origin,
-        chi2: foot.chi2,
-      };
-      let here = from ? linearise(problem, from.parameters, work) : foot;
-      let damping = DAMPING;
+      const most = short ? SHORT_STEPS : STEPS;
+      let here = from ? linearise(from) : foot;
+      let best = here;
+      let reach = quantity.value(here.at);
       let outside = 0;
       let calm = true;
-      let steps = 0;
-      for (; steps < STEPS && damping < STIFFEST; steps++) {
-        const parameters = constrainedStep(problem, work, here, quantity.gradient(here.at), limit, damping);
-        if (parameters === null) break;
-        const chi2 = problem.evaluate(parameters, work.residual);
-        if (!(chi2 <= limit + rise) || (chi2 > limit + tolerance && ++outside > RETURNS)) {
-          damping *= SLOWER;
-          calm = false;
+      let straight = false;
+      let found = false;
+      let next: LimitStep | null = null;
+      for (let steps = 0; steps < most && damping < STIFFEST; steps++) {
+        next = step(here, quantity.gradient(here.at), limit, damping);
+        if (next === null) break;
+        const near = here === best && here !== foot && Math.abs(here.chi2 - limit) <= NEAR * rise;
+        if (near && Math.abs(next.gain) <= GAIN * Math.max(SHORTEST, reach - origin)) {
+          if (!next.whole) break;
+          reach += next.gain;
+          found = true;
+          break;
+        }
+        const there = linearise(next.parameters);
+        const over = (there.chi2 - limit) / rise;
+        if (!(over <= 1) || (over > CLOSE && ++outside > RETURNS)) {
+          damping *= stiffening(over);
           outside = 0;
-          if (here.at !== best.parameters) here = linearise(problem, best.parameters, work);
+          here = best;
+          calm = false;
           continue;
         }
-        if (chi2 > limit + tolerance) {
-          here = linearise(problem, parameters, work);
+        here = there;
+        if (over > CLOSE) {
+          calm &&= over <= CALM;
           continue;
         }
         outside = 0;
-        const reach = quantity.value(parameters);
-        const gained = reach - best.reach;
-        if (gained > 0) best = { parameters, reach, chi2 };
-        const small = gained <= GAIN * Math.max(GAIN, best.reach - origin);
-        if (chi2 >= limit - tolerance && (here === foot || small)) break;
-        if (small) damping *= SLOWER;
-        else if (calm) damping /= FASTER;
-        calm = !small;
-        if (here.at !== best.parameters) here = linearise(problem, best.parameters, work);
+        const value = quantity.value(there.at);
+        if (value <= reach) {
+          here = best;
+          damping *= SLOWER;
+          continue;
+        }
+        straight = steps === 0 && !from && over >= -CLOSE;
+        best = there;
+        reach = value;
+        if (straight) break;
+        if (calm) damping /= FASTER;
+        calm = true;
       }
-      const open = best.chi2 < limit - tolerance;
+      const stopped = next === null || !next.whole;
+      const under = !found && best.chi2 < limit - (stopped ? CLOSE : NEAR) * rise;
+      const open = under && !(short && next !== null);
+      if (under && !open)
+        reach += Math.max(0, step(best, quantity.gradient(best.at), limit, DAMPING)?.gain ?? 0);
       // on a parabola √(rise of χ²) grows as the reach does
-      const straight = steps === 0 && !open;
-      const share = straight ? Math.sqrt(rise / (best.chi2 - foot.chi2)) : 1;
-      return { ...best, reach: origin + share * (best.reach - origin), open, straight };
+      if (straight) reach = origin + Math.sqrt(rise / (best.chi2 - foot.chi2)) * (reach - origin);
+      return { parameters: best.at, chi2: best.chi2, reach, open, straight, damping };
     },
   };
 }

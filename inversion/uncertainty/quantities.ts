@@ -1,39 +1,45 @@
-import type { LayeredEarth } from '../types';
+import { exp } from '../math/exponential';
+import { log } from '../math/logarithm';
 
-/** One positive quantity of an earth: its value, and the gradient of its logarithm on the ln parameters. */
+/** The logarithm of one positive quantity of an earth of N layers as a function of its 2N − 1 ln parameters. */
 export interface Quantity {
-  readonly value: number;
-  readonly gradient: (j: number) => number;
+  readonly value: (parameters: ArrayLike<number>) => number;
+  /** Writes the gradient into `slope`; entries beyond 2N − 1 become 0. */
+  readonly gradient: (parameters: ArrayLike<number>, slope: Float64Array) => void;
 }
-export type QuantityOf = (earth: LayeredEarth) => Quantity;
 
-export const resistivityOf =
-  (i: number): QuantityOf =>
-  ({ resistivity }) => ({ value: resistivity[i]!, gradient: (j) => (j === i ? 1 : 0) });
+const coordinate = (j: number): Quantity => ({
+  value: (parameters) => parameters[j]!,
+  gradient: (_, slope) => void (slope.fill(0)[j] = 1),
+});
 
-export const thicknessOf =
-  (i: number): QuantityOf =>
-  ({ resistivity, thickness }) => ({
-    value: thickness[i]!,
-    gradient: (j) => (j === resistivity.length + i ? 1 : 0),
-  });
+export const resistivityOf = (i: number): Quantity => coordinate(i);
+
+export const thicknessOf = (layers: number, i: number): Quantity => coordinate(layers + i);
 
 /** Depth D of the base of layer `base`: ∂lnD/∂lnh_k = h_k/D. */
-export const depthOf =
-  (base: number): QuantityOf =>
-  ({ resistivity, thickness }) => {
-    const layers = resistivity.length;
-    const depth = thickness.slice(0, base + 1).reduce((sum, h) => sum + h, 0);
-    return {
-      value: depth,
-      gradient: (j) => (j >= layers && j <= layers + base ? thickness[j - layers]! / depth : 0),
-    };
+export function depthOf(layers: number, base: number): Quantity {
+  const depthAt = (parameters: ArrayLike<number>): number => {
+    let depth = 0;
+    for (let k = 0; k <= base; k++) depth += exp(parameters[layers + k]!);
+    return depth;
   };
+  return {
+    value: (parameters) => log(depthAt(parameters)),
+    gradient: (parameters, slope) => {
+      const depth = depthAt(parameters);
+      slope.fill(0);
+      for (let k = layers; k <= layers + base; k++) slope[k] = exp(parameters[k]!) / depth;
+    },
+  };
+}
 
 /** hρ (`sign` 1) or h/ρ (`sign` −1) of bounded layer i. */
-export const productOf =
-  (i: number, sign: 1 | -1): QuantityOf =>
-  ({ resistivity, thickness }) => ({
-    value: sign === 1 ? thickness[i]! * resistivity[i]! : thickness[i]! / resistivity[i]!,
-    gradient: (j) => (j === resistivity.length + i ? 1 : j === i ? sign : 0),
-  });
+export const productOf = (layers: number, i: number, sign: 1 | -1): Quantity => ({
+  value: (parameters) => parameters[layers + i]! + sign * parameters[i]!,
+  gradient: (_, slope) => {
+    slope.fill(0);
+    slope[layers + i] = 1;
+    slope[i] = sign;
+  },
+});

@@ -32,7 +32,7 @@ describe('moderateModel', () => {
     // S = 0.25 S from a bed a thirtieth as thick: an end of the valley
     const thin = logs(80, 0.2, 400, 3, 0.05);
     const chi2 = problem.problem.evaluate(thin, new Float64Array(problem.problem.residuals));
-    const found = moderateModel(problem, { parameters: thin, chi2 }, logs(80, 80, 80, 2, 6));
+    const found = moderateModel(problem, problem, { parameters: thin, chi2 }, logs(80, 80, 80, 2, 6));
     expect(found.chi2).toBeLessThanOrEqual((1 + MODERATION) * chi2);
     expect(found.parameters[4]!).toBeGreaterThan(Math.log(0.3));
     expect(found.parameters[1]!).toBeGreaterThan(Math.log(1));
@@ -45,6 +45,6 @@ describe('moderateModel', () => {
       parameters: logs(...earth.resistivity, ...earth.thickness),
       chi2: chi2PerReading * readings.length,
     };
-    expect(moderateModel(problem, least, logs(50, 50, 5))).toBe(least);
+    expect(moderateModel(problem, problem, least, logs(50, 50, 5))).toBe(least);
   });
 });
