@@ -3,7 +3,7 @@ import { logEarth } from '../fit/starting-models';
 import { log } from '../math/logarithm';
 import { TOLERANCES } from '../tolerances';
 import type { FitBounds, Interval, LayeredEarth } from '../types';
-import { Z95, type ParameterDoubt } from '../uncertainty/parameter-doubt';
+import { basesOf, Z95, type ParameterDoubt } from '../uncertainty/parameter-doubt';
 import { depthOf, productOf, resistivityOf, thicknessOf, type Quantity } from '../uncertainty/quantities';
 import { chainCovarianceRoots, factoriseChain } from './block-chain';
 import type { LinearLine } from './line-problem';
@@ -101,10 +101,12 @@ export function placeDoubt(
   const perLayer = <T>(of: (i: number) => T): T[] => earth.resistivity.map((_, i) => of(i));
   const perBounded = <T>(of: (i: number) => T): T[] => earth.thickness.map((_, i) => of(i));
   const parameters = logEarth(earth);
+  const depths = basesOf(earth.thickness);
   const layers = earth.resistivity.length;
   const deviationOf = (quantity: Quantity) => deviationAt(quantity, parameters, covariance);
-  const intervalOf = (quantity: Quantity, range: readonly [number, number]) =>
-    interval(exp(quantity.value(parameters)), deviationOf(quantity), range);
+  // what is held keeps its bits, so values are those of the earth
+  const intervalOf = (quantity: Quantity, value: number, range: readonly [number, number]) =>
+    interval(value, deviationOf(quantity), range);
   const factorOf = (quantity: Quantity) => factor(deviationOf(quantity));
   const { deviation, between } = covariance;
   const known = (j: number) => deviation[j]! > 0 && deviation[j]! < Infinity;
@@ -115,9 +117,9 @@ export function placeDoubt(
   const numbers = Array.from({ length: count }, (_, j) => j);
   return {
     intervals: {
-      resistivity: perLayer((i) => intervalOf(resistivityOf(i), bounds.resistivity)),
-      thickness: perBounded((i) => intervalOf(thicknessOf(layers, i), bounds.thickness)),
-      depth: perBounded((i) => intervalOf(depthOf(layers, i), [(i + 1) * hLow, (i + 1) * hHigh])),
+      resistivity: perLayer((i) => intervalOf(resistivityOf(i), earth.resistivity[i]!, bounds.resistivity)),
+      thickness: perBounded((i) => intervalOf(thicknessOf(layers, i), earth.thickness[i]!, bounds.thickness)),
+      depth: perBounded((i) => intervalOf(depthOf(layers, i), depths[i]!, [(i + 1) * hLow, (i + 1) * hHigh])),
     },
     factors: {
       resistivity: perLayer((i) => factorOf(resistivityOf(i))),

@@ -40,7 +40,7 @@ function isHeld(quantity: Quantity, { parameters }: AllowedModel, held: readonly
 }
 
 /** Depths of the bases of the bounded layers. */
-function basesOf(thickness: readonly number[]): number[] {
+export function basesOf(thickness: readonly number[]): number[] {
   let depth = 0;
   return thickness.map((h) => (depth += h));
 }
