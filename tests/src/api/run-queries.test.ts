@@ -1,7 +1,10 @@
 import { QueryClient } from '@tanstack/react-query';
-import { beforeEach, expect, it } from 'vitest';
+import { beforeEach, expect, it, vi } from 'vitest';
 import type { RunSummary } from '../../../server/contract/runs';
+import { getJson } from '../../../src/api/http';
 import { putRun, runListQuery } from '../../../src/api/run-queries';
+
+vi.mock('../../../src/api/http', () => ({ getJson: vi.fn() }));
 
 const run = (number: number, state: RunSummary['state'], progress = 0, noteVersion = 1) =>
   ({
@@ -47,4 +50,15 @@ it('leaves a Ledger that was never fetched to its own fetching', () => {
   client.clear();
   putRun(client, run(4, 'queued'));
   expect(items()).toEqual([]);
+});
+
+it('lets no Ledger that was asked for earlier take back what events told meanwhile', async () => {
+  let answer = (_list: { items: RunSummary[] }) => {};
+  vi.mocked(getJson).mockReturnValue(new Promise((resolve) => (answer = resolve)));
+  const fetching = client.fetchQuery(runListQuery('s'));
+  putRun(client, run(2, 'finished', 1));
+  putRun(client, run(3, 'queued'));
+  answer({ items: [run(2, 'running', 0.8), run(1, 'finished', 1, 2)] });
+  await fetching;
+  expect(items()).toEqual([run(3, 'queued'), run(2, 'finished', 1), run(1, 'finished', 1, 2)]);
 });
