@@ -1,5 +1,6 @@
 import { MOST_LAYERS, requireFitInput } from '../../fit/check-fit-input';
 import { InversionError } from '../../inversion-error';
+import { magnitudeFault } from '../../magnitudes';
 import type { Reading } from '../../types';
 import type { EnsemblePrior, SampleSettings, TargetBed } from './ensemble-types';
 
@@ -7,22 +8,21 @@ export const MOST_DRAWS = 1_000_000;
 
 type Path = readonly (string | number)[];
 
-function requireRange([low, high]: readonly [number, number], path: Path): void {
-  if (!(low > 0 && high > low && Number.isFinite(high)))
-    throw new InversionError(
-      'bounds',
-      `the range is ${low} to ${high}; it must be two numbers above 0, the lower one first`,
-      path,
-    );
+function requireRange(range: readonly [number, number], of: keyof EnsemblePrior, path: Path): void {
+  const [low, high] = range;
+  const fault =
+    low < high ? (magnitudeFault(low, of) ?? magnitudeFault(high, of)) : 'the lower one must come first';
+  if (fault)
+    throw new InversionError('bounds', `the ${of} range is ${low} to ${high}; ${fault}`, [...path, of]);
 }
 
 function requirePrior(prior: EnsemblePrior, path: Path): void {
-  for (const key of ['resistivity', 'thickness'] as const) requireRange(prior[key], [...path, key]);
+  for (const key of ['resistivity', 'thickness'] as const) requireRange(prior[key], key, path);
 }
 
 function requireTarget({ resistivity, minThickness, topAbove }: TargetBed): void {
   const path = ['settings', 'target'];
-  requireRange(resistivity, [...path, 'resistivity']);
+  requireRange(resistivity, 'resistivity', path);
   for (const [field, value] of [
     ['minThickness', minThickness],
     ['topAbove', topAbove],

@@ -19,6 +19,8 @@ const RETRIES = 1;
 const THINNING = { stated: 3, unknown: 10 };
 /** Members of each population by layer count. */
 const SIZES = [0, 150, 150, 250, 600];
+/** Where few samples are asked for, this is enough. */
+const ENOUGH = 250;
 /** About as many members of all populations serve to fit proposals. */
 const MOST_FITTED = 4000;
 
@@ -80,7 +82,8 @@ export function drawPosterior(model: Model, { draws, seed, report }: DrawOptions
   const streams = Array.from({ length: CHAINS }, (_, c) => createRandomStream((seed + c * 0x9e3779b9) >>> 0));
   const length = Math.max(4, Math.ceil(draws / CHAINS));
   const thinning = space.fewest === space.most ? THINNING.stated : THINNING.unknown;
-  for (let attempt = 0, size = firstSize(space); ; attempt++, size *= 3) {
+  const first = Math.min(firstSize(space), Math.max(ENOUGH, length));
+  for (let attempt = 0, size = first; ; attempt++, size *= 3) {
     const { posterior, tempered } = temperedPopulations(model, size, streams, (beta) =>
       report({ stage: 'tempering', share: beta }),
     );

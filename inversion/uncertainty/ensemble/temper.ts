@@ -23,6 +23,11 @@ const LAST_ROUNDS = 4;
 /** The next temperature leaves this share of the members' weight as effective size. */
 const KEPT_SHARE = { few: 0.5, many: 0.7 };
 
+/** After so many steps, far more than readings that fit a ground need, β grows at least fourfold: at most 20 steps are left. */
+const MANY_STEPS = 40;
+const LEAST_GROWTH = 4;
+const LEAST_BETA = 1e-12;
+
 /** The inverse temperature whose population is given back too: wider than the posterior, but about where it is. */
 const HALF_WAY = 0.4;
 
@@ -139,14 +144,17 @@ export function temperedPopulations(
   const keptShare = model.space.most <= FEW_LAYERS ? KEPT_SHARE.few : KEPT_SHARE.many;
   let halfWay: Population[] = [];
   let beta = 0;
+  let taken = 0;
   while (beta < 1) {
     const next = beta < HALF_WAY ? HALF_WAY : 1;
     const weights = populations.map((population) => new Float64Array(population.size));
     const steps = populations.map(({ logLikelihood }, c) =>
       nextStep(logLikelihood, next - beta, keptShare * size, weights[c]!),
     );
-    const step = Math.min(...steps);
-    beta = step >= next - beta ? next : beta + step;
+    const floor = taken++ < MANY_STEPS ? 0 : Math.max(LEAST_BETA, LEAST_GROWTH * beta);
+    const reached = Math.max(beta + Math.min(...steps), floor);
+    const step = Math.min(reached, next) - beta;
+    beta = reached >= next ? next : reached;
     populations = populations.map((population, c) => {
       weigh(population.logLikelihood, step, weights[c]!);
       return chosenMembers(population, resample(weights[c]!, size, streams[c]!));
