@@ -60,6 +60,21 @@ it('the start that is shown is the start that is asked for, before and after a f
   expectNoFaults(faults);
 });
 
+it('a Ledger that was asked for before the run ended does not hide its end', async () => {
+  const { page, faults } = await enter(browser, app.baseUrl, 'geophysicist', await benchOf('S-03'));
+  await openRun(page, 'A').waitFor();
+  await page.route(/\/api\/v1\/soundings\/[^/]+\/runs$/, async (route) => {
+    if (route.request().method() !== 'GET') return route.continue();
+    const response = await route.fetch();
+    await new Promise((resolve) => setTimeout(resolve, 2000));
+    return route.fulfill({ response });
+  });
+  await page.getByRole('button', { name: 'Fit beds' }).click();
+  await page.getByRole('heading', { name: 'Run B', exact: true }).waitFor({ timeout: 60_000 });
+  expect(new URL(page.url()).searchParams.get('run')).not.toBeNull();
+  expectNoFaults(faults);
+});
+
 it('an interpretation with nothing written is submitted only when that is confirmed', async () => {
   const { page, faults } = await enter(browser, app.baseUrl, 'geophysicist', await benchOf('S-01'));
   await openRun(page, 'A').click();

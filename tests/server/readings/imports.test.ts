@@ -125,6 +125,21 @@ describe('POST /soundings/:soundingId/imports', () => {
     expect((await outsider.get(path)).status).toBe(404);
   });
 
+  it('keeps with the revision which lines were left out, and why', async () => {
+    const twice = FAULTY.replace('20;40;100', '-20;forty;100');
+    const made = revisionSchema.parse((await importing(twice, 'good-rows')).body);
+    const kept = revisionSchema.parse((await guest.get(`/revisions/${made.id}`)).body);
+    expect(kept.importFaults).toMatchObject([
+      { row: 3, column: 'V (mV)', found: 'ninety', message: 'is not a number' },
+      { row: 4, column: 'a (m)', found: '-20' },
+      { row: 4, column: 'V (mV)', found: 'forty' },
+    ]);
+    const list = await guest.get(`/soundings/${soundingId}/revisions`);
+    expect(list.body).toMatchObject({ items: [{ number: 1, linesLeftOut: 2 }] });
+    const whole = revisionSchema.parse((await importing(GOOD, 'all')).body);
+    expect([whole.linesLeftOut, whole.importFaults]).toEqual([0, []]);
+  });
+
   it('is the same revision when the readings are equal, and keeps a draft', async () => {
     const units = (await preview(GOOD)).mapping.units;
     const rows = [{ cells: { spacing: '5' }, excluded: null }];

@@ -4,7 +4,7 @@ import type { RunSummary } from '../../../server/contract/runs';
 import { getJson } from '../../../src/api/http';
 import { putRun, runListQuery } from '../../../src/api/run-queries';
 
-vi.mock('../../../src/api/http', () => ({ getJson: vi.fn() }));
+vi.mock('../../../src/api/http', () => ({ getJson: vi.fn<typeof getJson>() }));
 
 const run = (number: number, state: RunSummary['state'], progress = 0, noteVersion = 1) =>
   ({
