@@ -8,6 +8,7 @@ import * as createNaturalCollation from './20261201000600_create_natural_collati
 import * as addUnitsToReadingDraft from './20261201000700_add_units_to_reading_draft';
 import * as createInterpretationContributors from './20261201000800_create_interpretation_contributors';
 import * as addEditedToReviewEvent from './20261201000900_add_edited_to_review_event';
+import * as addImportFaultsToDataRevision from './20261201001000_add_import_faults_to_data_revision';
 
 export interface NamedMigration {
   name: string;
@@ -28,4 +29,8 @@ export const migrations: readonly NamedMigration[] = [
     migration: createInterpretationContributors,
   },
   { name: '20261201000900_add_edited_to_review_event', migration: addEditedToReviewEvent },
+  {
+    name: '20261201001000_add_import_faults_to_data_revision',
+    migration: addImportFaultsToDataRevision,
+  },
 ];

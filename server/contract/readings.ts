@@ -145,6 +145,10 @@ export const revisionSummarySchema = z
     readings: z.number().int(),
     excluded: z.number().int(),
     sourceFile: z.strictObject({ id: idSchema, name: z.string(), sha256: z.string() }).nullable(),
+    linesLeftOut: z
+      .number()
+      .int()
+      .describe('lines of the source file whose faults kept them out when it was imported'),
     current: z.boolean(),
   })
   .meta({ id: 'RevisionSummary' });
@@ -156,6 +160,7 @@ export const revisionSchema = revisionSummarySchema
     readings: z.array(readingSchema),
     derived: z.array(derivedReadingSchema).describe('one a reading, in order'),
     checks: z.array(readingCheckSchema),
+    importFaults: z.array(rowFaultSchema).describe('why lines of the source file were left out'),
   })
   .meta({ id: 'Revision' });
 export type Revision = z.infer<typeof revisionSchema>;

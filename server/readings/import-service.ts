@@ -84,7 +84,7 @@ export async function importFile(
       sounding,
       readings: sheet.good.map(({ reading }) => reading),
       baseRevisionId: form.baseRevisionId,
-      file,
+      file: { ...file, faults: sheet.rowFaults },
     });
     return new Reply(created ? 201 : 200, presentRevision(await getRevisionRow(trx, actor, revisionId)));
   });

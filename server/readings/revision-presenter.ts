@@ -17,6 +17,7 @@ const presentHead = (row: RevisionSummaryRow) => ({
     row.source_file_id === null
       ? null
       : { id: row.source_file_id, name: row.source_file_name ?? '', sha256: row.source_file_sha256 ?? '' },
+  linesLeftOut: row.lines_left_out,
   current: row.current,
 });
 
@@ -31,7 +32,13 @@ export function presentRevision(row: RevisionRow): Revision {
     const follows = derived[index];
     return follows ? [{ row: index + 1, reading, derived: follows }] : [];
   });
-  return { ...presentHead(row), readings: row.readings, derived, checks: checkReadings(checked) };
+  return {
+    ...presentHead(row),
+    readings: row.readings,
+    derived,
+    checks: checkReadings(checked),
+    importFaults: row.import_faults,
+  };
 }
 
 export const presentDraft = (row: DraftRow): z.infer<typeof draftSchema> => ({

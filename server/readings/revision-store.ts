@@ -1,6 +1,6 @@
 import type { Knex } from 'knex';
 import type { Actor } from '../access/actor';
-import type { Reading } from '../contract/readings';
+import type { Reading, RowFault } from '../contract/readings';
 import { notFound } from '../errors';
 
 export interface RevisionSummaryRow {
@@ -16,11 +16,13 @@ export interface RevisionSummaryRow {
   source_file_id: string | null;
   source_file_name: string | null;
   source_file_sha256: string | null;
+  lines_left_out: number;
   current: boolean;
 }
 
 export interface RevisionRow extends RevisionSummaryRow {
   readings: Reading[];
+  import_faults: RowFault[];
   error_floor: number;
 }
 
@@ -49,6 +51,10 @@ const visibleRevisions = (db: Knex, actor: Actor) =>
         `(SELECT count(*)::int FROM jsonb_array_elements(data_revision.readings) AS reading
           WHERE reading ->> 'excluded' IS NOT NULL) AS excluded_count`,
       ),
+      db.raw(
+        `(SELECT count(DISTINCT fault -> 'row')::int
+          FROM jsonb_array_elements(data_revision.import_faults) AS fault) AS lines_left_out`,
+      ),
       db.raw('sounding.current_revision_id IS NOT DISTINCT FROM data_revision.id AS current'),
     );
 
@@ -67,7 +73,7 @@ export async function listRevisionRows(
 async function findWhere(db: Knex, actor: Actor, where: object): Promise<RevisionRow | null> {
   const row = await visibleRevisions(db, actor)
     .where(where)
-    .first('data_revision.readings', 'survey.error_floor');
+    .first('data_revision.readings', 'data_revision.import_faults', 'survey.error_floor');
   return (row as RevisionRow | undefined) ?? null;
 }
 

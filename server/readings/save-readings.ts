@@ -1,7 +1,7 @@
 import type { Knex } from 'knex';
 import type { Actor } from '../access/actor';
 import { recordAudit } from '../access/audit';
-import type { Reading } from '../contract/readings';
+import type { Reading, RowFault } from '../contract/readings';
 import { AppError } from '../errors';
 import { contentHash } from './content-hash';
 import { presentRevision } from './revision-presenter';
@@ -12,6 +12,8 @@ export interface SourceFile {
   readonly name: string;
   readonly sha256: string;
   readonly bytes: Buffer;
+  /** of the lines that were left out */
+  readonly faults: readonly RowFault[];
 }
 
 export interface ReadingsToSave {
@@ -90,6 +92,7 @@ async function insertRevision(
     content_hash: hash,
     readings: JSON.stringify(readings),
     source_file_id: fileId,
+    import_faults: JSON.stringify(file?.faults ?? []),
     author_id: actor.userId,
   });
 }

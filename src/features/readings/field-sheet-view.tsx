@@ -7,6 +7,7 @@ import { CheckList } from './check-list';
 import { CrewCaution } from './crew-caution';
 import type { DraftKeeper } from './draft-keeper';
 import { FaultList } from './fault-list';
+import { LeftOutLines } from './left-out-lines';
 import { isBlock, readPasted } from './paste-text';
 import { RevisionList } from './revision-list';
 import { SheetActions } from './sheet-actions';
@@ -109,6 +110,7 @@ export function FieldSheetView({ sounding, fieldSheet, keeper }: FieldSheetViewP
         <div className="flex min-w-0 flex-col gap-6">
           <SheetCurve sounding={sounding} readings={settled} onFocusRow={setCurrentRow} />
           <CheckList readings={settled.length} checks={checks} onJump={jumpToRow} />
+          {fieldSheet.revision ? <LeftOutLines revision={fieldSheet.revision} /> : null}
           <RevisionList sounding={sounding} sheet={sheet} />
         </div>
       </div>

@@ -7,20 +7,20 @@ import { Dialog } from '../../ui/dialog';
 import { formatCount } from '../../ui/format';
 import { FormErrors } from '../../ui/form-errors';
 import { Notice } from '../../ui/notice';
-import { showToast } from '../../ui/show-toast';
 import { Skeleton } from '../../ui/view-states';
 import { FilePicker } from './file-picker';
 import { ImportPreviewView } from './import-preview-view';
 import { importReadiness } from './import-readiness';
 import { useImport, usePreviewImport } from './reading-mutations';
-import { saveOutcome } from './save-outcome';
+import { importOutcome } from './save-outcome';
 
 interface ImportDialogProps {
   sounding: Sounding;
   hasDraft: boolean;
   /** the revision that the sheet shows */
   current: Revision | null;
-  onImported: (revision: Revision) => void;
+  /** the revision that was made of the file, and what came of it in a sentence */
+  onImported: (revision: Revision, outcome: string) => void;
   onClose: () => void;
 }
 
@@ -46,11 +46,7 @@ export function ImportDialog({ sounding, hasDraft, current, onImported, onClose 
       { file, mapping: shown.mapping, accept, baseRevisionId: current?.id ?? null },
       {
         onSuccess: (outcome) => {
-          onImported(outcome.revision);
-          showToast({
-            title: `${formatCount(outcome.revision.readings.length, 'reading')} read in. ${saveOutcome(outcome)}`,
-            kind: 'good',
-          });
+          onImported(outcome.revision, importOutcome(shown, outcome));
           onClose();
         },
       },
@@ -63,7 +59,7 @@ export function ImportDialog({ sounding, hasDraft, current, onImported, onClose 
       onOpenChange={(open) => !open && onClose()}
       width="wide"
       title="Read in a file"
-      description="Text with one reading a line: CSV or any table saved as text. Nothing is stored before you choose below."
+      description="Text with one reading a line: CSV or any table saved as text. Nothing is stored before you choose below; what you import is saved as a revision at once."
       actions={
         <>
           <Button onClick={onClose}>Import nothing</Button>

@@ -10,6 +10,7 @@ import { formatCount, formatMoment, formatRelativeError, formatSignificant } fro
 import { showToast } from '../../ui/show-toast';
 import { Cell, HeaderCell, Table, TableBody, TableHead, TableRow } from '../../ui/table';
 import { CheckList } from './check-list';
+import { LeftOutLines } from './left-out-lines';
 import { gridColumnName, gridColumnUnit, gridColumns, isTextColumn } from './sheet-columns-view';
 import { cellOf } from './sheet-rows';
 import { contentOfRevision } from './start-sheet';
@@ -60,6 +61,7 @@ export function RevisionDialog({ revisionId, sounding, sheet, onClose }: Revisio
         {(loaded) => (
           <div className="flex flex-col gap-5">
             <RevisionTable revision={loaded} sounding={sounding} />
+            <LeftOutLines revision={loaded} />
             <CheckList readings={loaded.readings.length} checks={loaded.checks} />
           </div>
         )}

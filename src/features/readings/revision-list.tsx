@@ -30,7 +30,7 @@ export function RevisionList({ sounding, sheet }: { sounding: Sounding; sheet: S
       <QueryView query={revisions} loadingLabel="Loading revisions" loadingLines={3}>
         {({ items }) =>
           items.length === 0 ? (
-            <p className="text-muted">None yet. Saving the sheet makes the first.</p>
+            <p className="text-muted">None yet. Saving the sheet or reading in a file makes the first.</p>
           ) : (
             <ol className="border-t border-rule">
               {items.map((revision) => (
@@ -54,13 +54,16 @@ export function RevisionList({ sounding, sheet }: { sounding: Sounding; sheet: S
                   </span>
                   <span className="w-full text-sm text-muted">
                     {formatCount(revision.readings, 'reading')}
-                    {revision.excluded > 0 ? `, ${revision.excluded} left out` : ''}
+                    {revision.excluded > 0 ? `, ${revision.excluded} left out with a reason` : ''}
                     {revision.sourceFile ? (
                       <>
                         , from{' '}
                         <a href={`${API_ROOT}/revisions/${revision.id}/source-file`} download>
                           {revision.sourceFile.name}
                         </a>
+                        {revision.linesLeftOut > 0
+                          ? `; ${formatCount(revision.linesLeftOut, 'line')} of it left out at import`
+                          : ''}
                       </>
                     ) : null}
                   </span>

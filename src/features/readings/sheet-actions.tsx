@@ -9,6 +9,7 @@ import { Button, ButtonLink } from '../../ui/button';
 import { ConfirmDialog } from '../../ui/confirm-dialog';
 import { formatDay } from '../../ui/format';
 import { FormErrors } from '../../ui/form-errors';
+import { Notice } from '../../ui/notice';
 import { PageHeader } from '../../ui/page-header';
 import { showToast } from '../../ui/show-toast';
 import type { DraftKeeper } from './draft-keeper';
@@ -33,6 +34,7 @@ type OpenDialog = 'import' | 'details' | 'discard' | null;
 /** The head of the Field sheet: saving, reading in a file, the sounding's details. */
 export function SheetActions({ sounding, fieldSheet, sheet, keeper }: SheetActionsProps) {
   const [open, setOpen] = useState<OpenDialog>(null);
+  const [imported, setImported] = useState<string | null>(null);
   const [theirs, setTheirs] = useState<Revision | null>(null);
   const save = useSaveRevision(sounding.id);
   const discard = useDiscardDraft(sounding.id);
@@ -107,6 +109,11 @@ export function SheetActions({ sounding, fieldSheet, sheet, keeper }: SheetActio
           </>
         }
       />
+      {imported !== null && !sheet.isChanged ? (
+        <Notice>
+          <output>{imported}</output>
+        </Notice>
+      ) : null}
       <FormErrors faults={hasCode(fault, 'conflict') && theirs ? [] : formFaults(fault)} />
       {open === 'details' ? (
         <SoundingDetailsDialog sounding={sounding} onClose={() => setOpen(null)} />
@@ -116,7 +123,10 @@ export function SheetActions({ sounding, fieldSheet, sheet, keeper }: SheetActio
           sounding={sounding}
           hasDraft={sheet.isChanged}
           current={fieldSheet.revision}
-          onImported={show}
+          onImported={(revision, outcome) => {
+            show(revision);
+            setImported(outcome);
+          }}
           onClose={() => setOpen(null)}
         />
       ) : null}
