@@ -63,6 +63,8 @@ it('the start that is shown is the start that is asked for, before and after a f
 it('a Ledger that was asked for before the run ended does not hide its end', async () => {
   const { page, faults } = await enter(browser, app.baseUrl, 'geophysicist', await benchOf('S-03'));
   await openRun(page, 'A').waitFor();
+  // a request that no earlier run has answered
+  await page.getByRole('combobox', { name: 'Beds' }).selectOption('6');
   await page.route(/\/api\/v1\/soundings\/[^/]+\/runs$/, async (route) => {
     if (route.request().method() !== 'GET') return route.continue();
     const response = await route.fetch();
