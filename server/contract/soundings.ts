@@ -102,6 +102,12 @@ export const soundingRowSchema = z
         layers: z.number().int().nullable().describe('count of beds; null for a smooth or stepped ground'),
         chi2PerReading: z.number(),
         rmsPercent: z.number(),
+        misfitProbability: z
+          .number()
+          .nullable()
+          .describe(
+            'of a misfit at least as large, were model and errors right; null where it cannot be tested',
+          ),
         predicted: z.array(z.strictObject({ spacingM: z.number(), apparentResistivityOhmM: z.number() })),
         ofOlderReadings: z.boolean(),
       })

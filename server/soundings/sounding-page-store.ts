@@ -30,6 +30,7 @@ export interface SoundingPageRow {
   layers: number | null;
   chi2_per_reading: number | null;
   rms_percent: number | null;
+  misfit_probability: number | null;
   predicted: number[] | null;
 }
 
@@ -141,6 +142,7 @@ export async function listSoundingRows(
       db.raw(`${LAYERS_SQL} AS layers`),
       db.raw(`${MISFIT_SQL} AS chi2_per_reading`),
       db.raw(`(latest.result ->> 'rmsPercent')::float8 AS rms_percent`),
+      db.raw(`(latest.result ->> 'misfitProbability')::float8 AS misfit_probability`),
       db.raw(`latest.result -> 'predicted' AS predicted`),
     );
 }

@@ -69,6 +69,7 @@ function presentLatestRun(row: SoundingPageRow): SoundingTableRow['latestRun'] {
     layers,
     chi2PerReading,
     rmsPercent,
+    misfitProbability: row.misfit_probability,
     predicted: (readings ?? []).flatMap(({ spread }, i) => {
       const value = predicted?.[i];
       return value === undefined

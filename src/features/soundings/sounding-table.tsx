@@ -2,6 +2,7 @@ import { Link } from 'react-router-dom';
 import type { SoundingRow } from '../../../server/contract/soundings';
 import { addressOf } from '../../app/addresses';
 import { CurveSparkline } from '../../charts/curve-sparkline';
+import { RejectedMark } from '../../runs/rejected-mark';
 import { letterOfRun } from '../../runs/run-title';
 import { SoundingStateMark } from '../../soundings/sounding-state-mark';
 import { SPREAD_LABELS } from '../../soundings/spread-words';
@@ -43,7 +44,13 @@ export function SoundingTable({ items, params, onSort }: SoundingTableProps) {
         <HeaderCell className="hidden sm:table-cell" numeric {...sortable('layers')}>
           Beds
         </HeaderCell>
-        <HeaderCell className="hidden sm:table-cell" numeric unit="χ² per reading" {...sortable('misfit')}>
+        <HeaderCell
+          className="hidden sm:table-cell"
+          numeric
+          unit="χ²/N"
+          title="χ² per reading: near 1 the fit misses the readings by as much as their errors allow"
+          {...sortable('misfit')}
+        >
           Misfit
         </HeaderCell>
         <HeaderCell className="hidden md:table-cell" numeric>
@@ -91,7 +98,10 @@ function Row({ item }: { item: SoundingRow }) {
         {run ? formatPercent(run.rmsPercent) : ''}
       </Cell>
       <Cell>
-        <SoundingStateMark state={item.state} />
+        <span className="inline-flex flex-col items-start leading-tight">
+          <SoundingStateMark state={item.state} />
+          <RejectedMark fit={run} />
+        </span>
       </Cell>
     </TableRow>
   );
@@ -100,9 +110,8 @@ function Row({ item }: { item: SoundingRow }) {
 function Misfit({ run }: { run: NonNullable<SoundingRow['latestRun']> }) {
   return (
     <span className="inline-flex flex-col items-end leading-tight">
-      <span>
-        <span className="text-muted">{letterOfRun(run)}</span> {formatMisfit(run.chi2PerReading)}
-      </span>
+      <span>{formatMisfit(run.chi2PerReading)}</span>
+      <span className="font-sans text-xs text-muted">run {letterOfRun(run)}</span>
       {run.ofOlderReadings ? <span className="font-sans text-xs text-copper">older readings</span> : null}
     </span>
   );

@@ -2,8 +2,8 @@ import type { Survey } from '../../../server/contract/surveys';
 
 const STEPS = [
   ['soundings', 'soundings'],
-  ['measured', 'measured'],
-  ['fitted', 'fitted'],
+  ['measured', 'with readings'],
+  ['fitted', 'with a fit'],
   ['interpreted', 'interpreted'],
   ['accepted', 'accepted'],
 ] as const;
@@ -16,7 +16,7 @@ export interface ProgressStep {
   share: number;
 }
 
-/** The way of a survey from its soundings to accepted interpretations. */
+/** The way of a survey from its soundings to accepted interpretations; a step counts those beyond it too. */
 export const progressSteps = (progress: Survey['progress']): ProgressStep[] =>
   STEPS.map(([key, label]) => ({
     key,

@@ -70,7 +70,8 @@ function PlanLegend({ items, surveyId }: { items: readonly PlanItem[]; surveyId:
   const holes = items.filter((item) => item.kind === 'borehole').length;
   const list = addressOf('surveySoundings', { surveyId });
   return (
-    <ul className="mt-2 flex flex-wrap gap-x-5 gap-y-1 text-sm">
+    <ul className="mt-2 flex flex-wrap items-center gap-x-5 gap-y-1 text-sm">
+      <li className="text-muted">Each counted once, by how far it is now:</li>
       {counts.map(({ state, count }) => (
         <li key={state}>
           <Link

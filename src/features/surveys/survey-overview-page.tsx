@@ -33,7 +33,10 @@ function Overview({ survey }: { survey: Survey }) {
       <div className="grid items-start gap-x-12 gap-y-8 lg:grid-cols-[minmax(0,1fr)_22rem]">
         <SurveyMap survey={survey} />
         <aside className="flex flex-col gap-6 border-t border-rule pt-4">
-          <SurveyProgress progress={survey.progress} />
+          <div>
+            <SurveyProgress progress={survey.progress} />
+            <p className="mt-1 text-sm text-muted">Each step counts the soundings that went further, too.</p>
+          </div>
           {survey.description === '' ? null : (
             <p className="max-w-prose whitespace-pre-wrap">{survey.description}</p>
           )}

@@ -105,6 +105,7 @@ const finishRun = async (
     chi2PerReading: given.chi2,
     rmsPercent: 2,
     predicted: [51],
+    misfitProbability: 0.004,
   };
   const finished = given.state !== 'failed';
   const [computation] = await server
@@ -206,6 +207,7 @@ describe('GET /surveys/:surveyId/soundings', () => {
       number: 1,
       layers: 3,
       chi2PerReading: 1.5,
+      misfitProbability: 0.004,
       ofOlderReadings: false,
     });
     expect(v1?.latestRun?.predicted).toEqual([{ spacingM: 10, apparentResistivityOhmM: 51 }]);
