@@ -1,4 +1,4 @@
-import type { Borehole } from '../../../server/contract/surveys';
+import type { Borehole } from '../../server/contract/surveys';
 
 /** The water level measured last; null where none was. */
 export function latestWaterLevel(

@@ -1,4 +1,5 @@
 import type { Borehole } from '../../../server/contract/surveys';
+import { LogTable } from '../../boreholes/log-table';
 import { Button } from '../../ui/button';
 import { formatDay, formatLength, withUnit } from '../../ui/format';
 import { BoreholeLogDrawing } from './borehole-log-drawing';
@@ -38,11 +39,10 @@ export function BoreholeCard({ borehole, maxDepthM, onEdit }: BoreholeCardProps)
           </Button>
         ) : null}
       </div>
-      {intervals.length === 0 ? (
-        <p className="text-muted">No log.</p>
-      ) : (
+      {intervals.length === 0 ? null : (
         <BoreholeLogDrawing borehole={borehole} maxDepthM={maxDepthM} height={340} />
       )}
+      <LogTable borehole={borehole} />
       <WaterLevels borehole={borehole} />
       {note === '' ? null : <p className="max-w-prose whitespace-pre-wrap">{note}</p>}
     </li>

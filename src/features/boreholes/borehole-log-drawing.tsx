@@ -1,10 +1,10 @@
 import type { Borehole } from '../../../server/contract/surveys';
+import { boreholeLog } from '../../boreholes/borehole-log';
 import { BoreholeBar } from '../../charts/borehole-bar';
 import { useChartPalette } from '../../charts/chart-palette';
 import { DepthAxis } from '../../charts/depth-axis';
 import { depthScale } from '../../charts/depth-scale';
 import { useBoxSize } from '../../charts/use-box-size';
-import { latestWaterLevel } from './latest-water-level';
 
 const AXIS_PX = 44;
 const PAD_PX = 12;
@@ -21,15 +21,6 @@ export function BoreholeLogDrawing({ borehole, maxDepthM, height }: BoreholeLogD
   const palette = useChartPalette();
   const { ref, size } = useBoxSize<HTMLDivElement>();
   const scale = depthScale('linear', { minDepth: 0.1, maxDepth: maxDepthM }, height - 2 * PAD_PX);
-  const log = {
-    name: borehole.name,
-    beds: borehole.intervals.map(({ topM, baseM, description }) => ({
-      top: topM,
-      base: baseM,
-      label: description,
-    })),
-    waterLevel: latestWaterLevel(borehole)?.depthM ?? null,
-  };
   return (
     <div ref={ref} className="min-w-0">
       {size.width > 0 ? (
@@ -37,7 +28,7 @@ export function BoreholeLogDrawing({ borehole, maxDepthM, height }: BoreholeLogD
           <g transform={`translate(0 ${PAD_PX})`}>
             <DepthAxis scale={scale} x={AXIS_PX} width={size.width - AXIS_PX} palette={palette} />
             <BoreholeBar
-              log={log}
+              log={boreholeLog(borehole)}
               scale={scale}
               x={AXIS_PX + 14}
               width={size.width - AXIS_PX - 18}

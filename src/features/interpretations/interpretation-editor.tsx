@@ -77,8 +77,8 @@ export function InterpretationEditor(props: InterpretationEditorProps) {
       {interpretation.version > base.version && !theirs ? (
         <NewerVersion isDirty={isDirty} onTakeUp={() => takeUp(interpretation)} />
       ) : null}
-      <div className="grid gap-x-8 gap-y-6 lg:grid-cols-[minmax(16rem,20rem)_minmax(0,1fr)]">
-        <LiveGround control={form.control} run={run} soundingName={sounding.name} />
+      <div className="grid gap-x-8 gap-y-6 lg:grid-cols-[minmax(16rem,20rem)_minmax(0,1fr)] 2xl:grid-cols-[minmax(26rem,30rem)_minmax(0,1fr)]">
+        <LiveGround control={form.control} run={run} sounding={sounding} />
         <div className="min-w-0 print:hidden">
           <InterpretationFields form={form} run={run} />
         </div>
@@ -118,15 +118,15 @@ export function InterpretationEditor(props: InterpretationEditorProps) {
 interface LiveProps {
   control: ReturnType<typeof useForm<InterpretationForm>>['control'];
   run: Run;
-  soundingName: string;
+  sounding: Sounding;
 }
 
-function LiveGround({ control, run, soundingName }: LiveProps) {
+function LiveGround({ control, run, sounding }: LiveProps) {
   const [beds, waterLevel] = useWatch({ control, name: ['beds', 'waterLevelDepthM'] });
   return (
     <InterpretationGround
       run={run}
-      soundingName={soundingName}
+      sounding={sounding}
       grounds={beds.map((bed) => bed.ground.trim())}
       waterLevelDepthM={waterLevel !== null && Number.isFinite(waterLevel) ? waterLevel : null}
     />

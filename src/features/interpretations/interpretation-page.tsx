@@ -14,9 +14,12 @@ import { InterpretationEditor } from './interpretation-editor';
 import { InterpretationReading } from './interpretation-reading';
 import { InterpretationStateMark } from '../../runs/interpretation-state-mark';
 import { interpretationQuery } from './interpretation-queries';
+import { NearestHoles } from './nearest-holes';
+import { OtherModels } from './other-models';
 import { ReviewHistory } from './review-history';
 import { ReviewPanel } from './review-panel';
 import { RunBasis } from './run-basis';
+import { RunGivens } from './run-givens';
 
 export function InterpretationPage() {
   const { interpretationId = '' } = useParams();
@@ -91,6 +94,9 @@ function InterpretationDesk({ sounding, interpretation, run }: InterpretationDes
       >
         <ReviewPanel interpretation={interpretation} isDirty={interpretation.can.edit && isDirty} />
         <RunBasis run={run} />
+        <RunGivens run={run} />
+        <OtherModels run={run} />
+        <NearestHoles sounding={sounding} />
         <ReviewHistory interpretation={interpretation} />
       </aside>
     </div>

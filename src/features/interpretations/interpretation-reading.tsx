@@ -18,10 +18,10 @@ export function InterpretationReading({ sounding, interpretation, run }: Interpr
   return (
     <article className="flex flex-col gap-6">
       <h1 className="text-xl font-semibold">{interpretation.title}</h1>
-      <div className="grid gap-x-8 gap-y-6 lg:grid-cols-[minmax(16rem,20rem)_minmax(0,1fr)]">
+      <div className="grid gap-x-8 gap-y-6 lg:grid-cols-[minmax(16rem,20rem)_minmax(0,1fr)] 2xl:grid-cols-[minmax(26rem,30rem)_minmax(0,1fr)]">
         <InterpretationGround
           run={run}
-          soundingName={sounding.name}
+          sounding={sounding}
           grounds={grounds}
           waterLevelDepthM={waterLevelDepthM}
         />

@@ -1,7 +1,7 @@
 import { expect, it } from 'vitest';
 import { detailsInWords } from '../../../src/features/admin/details-in-words';
 import { deviceName } from '../../../src/features/account/device-name';
-import { latestWaterLevel } from '../../../src/features/boreholes/latest-water-level';
+import { latestWaterLevel } from '../../../src/boreholes/latest-water-level';
 
 it.each([
   ['Mozilla/5.0 (X11; Linux x86_64; rv:130.0) Gecko/20100101 Firefox/130.0', 'Firefox on Linux'],
