@@ -1,25 +1,37 @@
 import type { DemoInterpretation } from './scenario';
 
-/** What the demo's people have written so far; numbers are left to the runs they stand on. */
+/** What the demo's people have written so far. Every number in it is the run's or a borehole's; a test compares them. */
 export const INTERPRETATIONS: readonly DemoInterpretation[] = [
   {
     sounding: 'S-03',
     layers: 4,
     title: 'Gravel over rock at the old well',
     narrative:
-      'Dry gravel over a clay bed, then the water-bearing gravel of BH-1, then rock.\n\n' +
-      'The base of the gravel agrees with the contact in BH-1 within the interval of the fit. The clay is known by its ' +
-      'conductance only; its thickness is taken from the borehole, not from the sounding.',
+      'BH-1, 21 m away, met dry silty gravel, clay, water-bearing gravel and rock, with contacts at 1.9, 6.2 and 27.4 m. The ' +
+      'run, which was not told of the hole, puts them at 1.75, 6.83 and 28.1 m; each of the hole lies within its 95 % range.\n\n' +
+      'The clay is known by its conductance, 0.141 S. Its thickness and its resistivity trade against each other: that the bed ' +
+      'is clay, and where it ends, is known from the hole. The base of the gravel is loosely held by the readings and closely ' +
+      'by the hole. The water level is that of BH-1 in May.',
     beds: [
-      { ground: 'dry silty gravel', role: 'cover', confidence: 'well-supported', otherCandidates: '' },
+      {
+        ground: 'dry silty gravel',
+        role: 'cover',
+        confidence: 'well-supported',
+        otherCandidates: 'dry sand',
+      },
       { ground: 'clay with stones', role: 'aquitard', confidence: 'likely', otherCandidates: 'silt' },
       {
         ground: 'sandy gravel, water-bearing',
         role: 'aquifer',
         confidence: 'well-supported',
-        otherCandidates: '',
+        otherCandidates: 'weathered rock',
       },
-      { ground: 'crystalline rock', role: 'basement', confidence: 'well-supported', otherCandidates: '' },
+      {
+        ground: 'crystalline rock',
+        role: 'basement',
+        confidence: 'well-supported',
+        otherCandidates: 'cemented gravel',
+      },
     ],
     waterLevelDepthM: 6.4,
     end: 'accepted',
@@ -29,16 +41,24 @@ export const INTERPRETATIONS: readonly DemoInterpretation[] = [
     layers: 4,
     title: 'Gravel over marl at the village',
     narrative:
-      'The sounding stands beside BH-2 and shows the same order: cover, clay, gravel, marl.\n\n' +
-      'Product of thickness and resistivity of the gravel is well held; thickness alone is not, and follows the borehole.',
+      'BH-2, 13 m away, met silt, clay, gravel and marl, with contacts at 2.0, 6.5 and 30.6 m. The run, which was not told of ' +
+      'the hole, puts them at 1.91, 6.00 and 32.2 m; each of the hole lies within its 95 % range.\n\n' +
+      'The product of thickness and resistivity of the gravel is well held, 2610 Ω·m². Its thickness alone is not: 26.2 m in ' +
+      'the run, 24.1 m in the hole, and the readings would bear much less. Of the clay they tell the conductance, 0.220 S; its ' +
+      'name and its thickness come from the hole. The water level is that of BH-2 in May.',
     beds: [
-      { ground: 'sandy silt, dry', role: 'cover', confidence: 'well-supported', otherCandidates: '' },
+      {
+        ground: 'sandy silt, dry',
+        role: 'cover',
+        confidence: 'well-supported',
+        otherCandidates: 'dry clayey gravel',
+      },
       { ground: 'grey clay', role: 'aquitard', confidence: 'likely', otherCandidates: 'silty sand' },
       {
         ground: 'gravel and coarse sand, water-bearing',
         role: 'aquifer',
         confidence: 'well-supported',
-        otherCandidates: '',
+        otherCandidates: 'gravel with silt',
       },
       { ground: 'marl', role: 'aquitard', confidence: 'likely', otherCandidates: 'clay; brackish gravel' },
     ],
@@ -50,13 +70,19 @@ export const INTERPRETATIONS: readonly DemoInterpretation[] = [
     layers: 4,
     title: 'Proposed site of the second well',
     narrative:
-      'The curve asks for a thick bed of moderate resistivity below a thin conductive one. By likeness with BH-2, three ' +
-      'hundred metres to the east, the thick bed is read as water-bearing gravel.\n\n' +
-      'What the sounding does not tell: whether the conductive base is marl, as in BH-2, or brackish water, as in BH-4. ' +
-      'Thickness of the clay is not known apart from its resistivity. One reading is left out with its reason.\n\n' +
+      'The curve asks for a thick bed of 137 Ω·m, from 7.06 to 38.4 m, between a conductive bed and a conductive base of ' +
+      '12.0 Ω·m. By likeness with BH-2, 285 m to the east, the thick bed is read as water-bearing gravel. Three beds do not ' +
+      'explain the readings.\n\n' +
+      'What the sounding does not tell: whether the conductive base is marl, as in BH-2, or holds brackish water, as in BH-4. ' +
+      'The clay is known by its conductance, 0.166 S, not by its thickness. One reading is left out with its reason.\n\n' +
       'A test hole to the base of the gravel, with conductivity of the water measured as it is drilled, would decide both.',
     beds: [
-      { ground: 'dry gravelly soil', role: 'cover', confidence: 'well-supported', otherCandidates: '' },
+      {
+        ground: 'dry gravelly soil',
+        role: 'cover',
+        confidence: 'well-supported',
+        otherCandidates: 'dry sand',
+      },
       { ground: 'clay, thin', role: 'aquitard', confidence: 'possible', otherCandidates: 'silt, thicker' },
       {
         ground: 'gravel and sand',
@@ -79,21 +105,23 @@ export const INTERPRETATIONS: readonly DemoInterpretation[] = [
     layers: 3,
     title: 'Brackish water below the lower meadow',
     narrative:
-      'Sand and gravel over a very conductive half-space. BH-4, a few metres away, met brackish water near the depth of ' +
-      'the contact. The resistivity of the lowest bed is too low for marl.',
+      'Ground of 70.9 Ω·m down to 18.2 m, and 3.87 Ω·m below. BH-4, 16 m away, met brackish water at 18.1 m, which lies within ' +
+      'the 95 % range of that contact.\n\n' +
+      'The resistivity of the lowest bed is well held and far below that of the marl at the village. Clay soaked with brackish ' +
+      'water would look the same; that it is sand and gravel is known from the hole. The water level is that of BH-4 in May.',
     beds: [
-      { ground: 'sandy soil', role: 'cover', confidence: 'well-supported', otherCandidates: '' },
+      { ground: 'sandy soil', role: 'cover', confidence: 'well-supported', otherCandidates: 'sandy silt' },
       {
         ground: 'sand and gravel, fresh water',
         role: 'aquifer',
         confidence: 'well-supported',
-        otherCandidates: '',
+        otherCandidates: 'sand with some silt',
       },
       {
         ground: 'sand and gravel, brackish water',
         role: 'saline',
-        confidence: 'well-supported',
-        otherCandidates: '',
+        confidence: 'likely',
+        otherCandidates: 'clay with brackish water',
       },
     ],
     waterLevelDepthM: 1.9,
@@ -104,17 +132,24 @@ export const INTERPRETATIONS: readonly DemoInterpretation[] = [
     layers: 3,
     title: 'Rock near the middle of the line',
     narrative:
-      'Three beds fit within the noise. Geology expects weathered rock between the gravel and the fresh rock; the curve ' +
-      'neither asks for such a bed nor forbids one.',
+      'Two beds explain the readings already; three, on which this stands, pass closer: 48.0, 250 and 1450 Ω·m with contacts at ' +
+      '10.6 and 27.9 m. Neither contact is well held, and another model of three beds fits nearly as well.\n\n' +
+      'Geology expects weathered rock between the gravel and the fresh rock. With four beds the misfit is smaller again, yet ' +
+      'the curve neither asks for such a bed nor forbids one.',
     beds: [
       { ground: 'silt and sand', role: 'cover', confidence: 'likely', otherCandidates: 'clayey gravel' },
       {
         ground: 'gravel or weathered rock',
         role: 'unknown',
         confidence: 'possible',
-        otherCandidates: 'both',
+        otherCandidates: 'gravel over weathered rock',
       },
-      { ground: 'crystalline rock', role: 'basement', confidence: 'likely', otherCandidates: '' },
+      {
+        ground: 'crystalline rock',
+        role: 'basement',
+        confidence: 'likely',
+        otherCandidates: 'less weathered rock',
+      },
     ],
     waterLevelDepthM: null,
     end: 'draft',

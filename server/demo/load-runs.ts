@@ -13,9 +13,19 @@ const NOT_FITTED = ['S-05', 'S-16', 'S-23', 'S-24'];
 const FURTHER_RUNS: Record<string, { layers: number; label: string; note: string }[]> = {
   'S-07': [{ layers: 3, label: 'without the clay', note: 'Too few beds: the residuals wander.' }],
   'S-10': [
-    { layers: 3, label: 'branch not tied', note: 'The middle MN branch stands 15 % high; see the checks.' },
+    {
+      layers: 3,
+      label: 'three beds',
+      note: 'Too few beds; the middle MN branch stands high as well, see the checks.',
+    },
   ],
-  'S-12': [{ layers: 4, label: 'with weathered rock', note: 'No better than three beds.' }],
+  'S-12': [
+    {
+      layers: 4,
+      label: 'with weathered rock',
+      note: 'Closer still, though two beds are within the noise already.',
+    },
+  ],
 };
 
 /**

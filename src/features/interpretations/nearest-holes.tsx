@@ -6,7 +6,7 @@ import { addressOf } from '../../app/addresses';
 import { latestWaterLevel } from '../../boreholes/latest-water-level';
 import { LogTable } from '../../boreholes/log-table';
 import { nearestBoreholes, type NearBorehole } from '../../boreholes/nearest-boreholes';
-import { formatDay, formatGiven, formatSignificant, withUnit } from '../../ui/format';
+import { formatDay, formatGiven, withUnit } from '../../ui/format';
 
 const MOST_SHOWN = 2;
 
@@ -37,7 +37,7 @@ function NearHole({ borehole, distanceM }: NearBorehole) {
         <Link to={to} className="font-semibold">
           {borehole.name}
         </Link>
-        , <span className="whitespace-nowrap">{withUnit(formatSignificant(distanceM, 2), 'm away')}</span>
+        , <span className="whitespace-nowrap">{withUnit(formatGiven(Math.round(distanceM)), 'm away')}</span>
       </h3>
       <LogTable borehole={borehole} />
       <p className="border-t border-rule py-1">
