@@ -1,5 +1,5 @@
 import type { ReactNode } from 'react';
-import { formatCount } from '../ui/format';
+import { formatCount, formatLength, withUnit } from '../ui/format';
 import { BoundaryMarks, type MoveBoundary } from './boundary-marks';
 import type { GroundColumn } from './chart-data';
 import { MONO, SANS, type ChartPalette } from './chart-palette';
@@ -74,7 +74,7 @@ export function ColumnSlot(props: ColumnSlotProps): ReactNode {
             strokeDasharray="4 3"
           />
           <text x={x} y={scale.height + 15} fontSize={12} fontFamily={SANS} fill={palette.muted}>
-            below {Number(reach.toPrecision(2))} m: little seen
+            below {withUnit(formatLength(reach), 'm')}: little seen
           </text>
         </g>
       ) : null}
@@ -91,7 +91,7 @@ function barWidthOf({ column, scale, width }: ColumnSlotProps): number {
 function columnSentence(column: GroundColumn): string {
   const name = column.letter === '' ? column.name : `Run ${column.letter}, ${column.name}`;
   const reach = column.depthOfInvestigation
-    ? `; the data reach about ${column.depthOfInvestigation.toPrecision(2)} m`
+    ? `; the data reach about ${withUnit(formatLength(column.depthOfInvestigation), 'm')}`
     : '';
   return `${name}: ${formatCount(column.earth.resistivity.length, column.isCells ? 'cell' : 'bed')}${reach}`;
 }

@@ -1,5 +1,5 @@
 import type { CustomSeriesOption } from 'echarts';
-import { withUnit } from '../ui/format';
+import { formatGiven, withUnit } from '../ui/format';
 import type { CurveReading } from './chart-data';
 import { MONO, SANS, type ChartPalette } from './chart-palette';
 import { textWidth } from './fit-text';
@@ -12,7 +12,7 @@ export interface CurveBranch {
 }
 
 /** As written on the sheet: 0.5, 10. */
-const lengthText = (length: number): string => String(Number(length.toPrecision(3)));
+const lengthText = (length: number): string => formatGiven(Number(length.toPrecision(3)));
 
 /** "MN/2 0.5 m" */
 export const branchName = (halfMN: number): string => withUnit(`MN/2 ${lengthText(halfMN)}`, 'm');

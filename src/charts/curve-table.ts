@@ -1,4 +1,4 @@
-import { formatFixed, formatRelativeError, formatResistivity, formatSignificant } from '../ui/format';
+import { formatFixed, formatLength, formatRelativeError, formatResistivity } from '../ui/format';
 import type { CurveLine, CurveReading } from './chart-data';
 import type { ChartColumn, ChartTable } from './chart-table';
 
@@ -15,8 +15,8 @@ export function curveTable(
   const nameOf = (line: CurveLine) => (line.letter === '' ? line.name : `run ${line.letter}`);
   const hasMN = readings.some((reading) => reading.halfMN !== undefined);
   const columns: ChartColumn[] = [
-    { label, unit, format: (value) => formatSignificant(value) },
-    ...(hasMN ? [{ label: 'MN/2', unit: 'm', format: (value: number) => formatSignificant(value) }] : []),
+    { label, unit, format: formatLength },
+    ...(hasMN ? [{ label: 'MN/2', unit: 'm', format: formatLength }] : []),
     { label: 'Measured', unit: 'Ω·m', format: formatResistivity },
     { label: 'Standard error', unit: 'relative', format: formatRelativeError },
     { label: 'Used' },

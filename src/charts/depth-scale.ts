@@ -1,3 +1,5 @@
+import { formatGiven } from '../ui/format';
+
 export type DepthScaleKind = 'linear' | 'log';
 
 export interface DepthTick {
@@ -67,5 +69,5 @@ function roundStep(least: number): number {
 }
 
 function tickAt(depth: number, yOf: (depth: number) => number): DepthTick {
-  return { depth, y: yOf(depth), label: String(Number(depth.toPrecision(6))) };
+  return { depth, y: yOf(depth), label: formatGiven(Number(depth.toPrecision(6))) };
 }

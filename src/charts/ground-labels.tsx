@@ -1,5 +1,5 @@
 import type { ReactNode } from 'react';
-import { formatResistivity } from '../ui/format';
+import { formatLength, formatResistivity, withUnit } from '../ui/format';
 import type { GroundColumn } from './chart-data';
 import { haloOf, MONO, SANS, type ChartPalette } from './chart-palette';
 import type { DepthScale } from './depth-scale';
@@ -144,7 +144,7 @@ export function groundLabels(column: GroundColumn, scale: DepthScale, room: numb
   const bases = groundBoundaries(column).map((boundary): GroundLabel => ({
     key: `base ${boundary.index}`,
     y: scale.yOf(boundary.depth),
-    strong: [boundary.rangeText === '' ? `${Number(boundary.depth.toPrecision(3))} m` : boundary.rangeText],
+    strong: [boundary.rangeText === '' ? withUnit(formatLength(boundary.depth), 'm') : boundary.rangeText],
     isThin: false,
     note: boundaryNote(boundary.unresolved, isThicknessHeld[boundary.index] ?? false),
     kind: 'boundary',

@@ -1,4 +1,11 @@
-import { formatLength, formatRange, formatResistivity, NOT_BOUNDED, withUnit } from '../ui/format';
+import {
+  formatLength,
+  formatRange,
+  formatResistivity,
+  isHeldRange,
+  NOT_BOUNDED,
+  withUnit,
+} from '../ui/format';
 import {
   boundaryDepths,
   type BoreholeLog,
@@ -17,7 +24,7 @@ export interface GroundBoundary {
   depth: number;
   low: number | null;
   high: number | null;
-  /** "3.2–8.9 m", "at least 3.2 m", "not bounded". Empty without intervals. */
+  /** "3.20–8.90 m", "at least 3.20 m", "not bounded". Empty without intervals, and where all above is held. */
   rangeText: string;
   unresolved: boolean;
 }
@@ -39,7 +46,7 @@ export function groundBoundaries(column: GroundColumn): GroundBoundary[] {
   return boundaryDepths(column.earth).map((depth, index) => {
     const bounds: Bounds | undefined = column.intervals?.depth[index];
     const [low, high] = bounds ?? [null, null];
-    const range = bounds ? formatRange(bounds) : '';
+    const range = rangeOf(bounds);
     const isWide = low !== null && high !== null && high / Math.max(low, 1e-9) > UNRESOLVED_FACTOR;
     return {
       index,
@@ -62,7 +69,7 @@ export function groundBeds(column: GroundColumn): GroundBed[] {
       base: depths[index] ?? null,
       resistivity,
       color: rampColor(resistivity),
-      rangeText: bounds ? formatRange(bounds) : '',
+      rangeText: rangeOf(bounds),
       note: column.bedNotes?.[index] ?? null,
       held: {
         resistivity: isHeld(column, 'resistivity', index),
@@ -71,6 +78,9 @@ export function groundBeds(column: GroundColumn): GroundBed[] {
     };
   });
 }
+
+const rangeOf = (bounds: Bounds | undefined): string =>
+  bounds === undefined || isHeldRange(bounds) ? '' : formatRange(bounds);
 
 const isHeld = ({ held = [] }: GroundColumn, on: HeldValue['on'], index: number): boolean =>
   held.some((value) => value.on === on && value.index === index);
@@ -85,7 +95,7 @@ export function bedSentence(bed: GroundBed): string {
     bed.base === null
       ? `below ${formatLength(bed.top)} m`
       : `${formatLength(bed.top)} to ${formatLength(bed.base)} m`;
-  const interval = bed.rangeText === '' ? '' : `, 95 % ${bed.rangeText.replace('–', ' to ')} ohm metres`;
+  const interval = bed.rangeText === '' ? '' : `, 95\u00a0% ${bed.rangeText.replace('–', ' to ')} ohm metres`;
   const note = bed.note ? `, ${bed.note}` : '';
   const held = heldNames(bed, { resistivity: ', resistivity held', thickness: ', thickness held' }).join('');
   return `Bed ${bed.index + 1}, ${formatResistivity(bed.resistivity)} ohm metres, ${place}${interval}${note}${held}`;

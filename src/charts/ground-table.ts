@@ -1,7 +1,12 @@
-import { formatLength, formatResistivity } from '../ui/format';
+import { formatLength, formatResistivity, isHeldRange } from '../ui/format';
 import type { ChartColumn, ChartTable } from './chart-table';
-import type { GroundColumn } from './chart-data';
+import type { Bounds, GroundColumn } from './chart-data';
 import { groundBeds, groundBoundaries, heldNames } from './ground-profile';
+
+const NONE: Bounds = [null, null];
+
+/** The ends that were found; a held value has none. */
+const told = (bounds: Bounds = NONE): Bounds => (isHeldRange(bounds) ? NONE : bounds);
 
 /** Beds of one or several grounds with their 95 % intervals, for the table and the CSV. */
 export function groundTable(columns: readonly GroundColumn[]): ChartTable {
@@ -10,8 +15,8 @@ export function groundTable(columns: readonly GroundColumn[]): ChartTable {
     ...(several ? [{ label: 'Run' }] : []),
     { label: 'Bed' },
     { label: 'Resistivity', unit: 'Ω·m', format: formatResistivity },
-    { label: '95 %, low', unit: 'Ω·m', format: formatResistivity },
-    { label: '95 %, high', unit: 'Ω·m', format: formatResistivity },
+    { label: '95\u00a0%, low', unit: 'Ω·m', format: formatResistivity },
+    { label: '95\u00a0%, high', unit: 'Ω·m', format: formatResistivity },
     { label: 'Top', unit: 'm', format: formatLength },
     { label: 'Base', unit: 'm', format: formatLength },
     { label: 'Base, low', unit: 'm', format: formatLength },
@@ -21,8 +26,9 @@ export function groundTable(columns: readonly GroundColumn[]): ChartTable {
   const rows = columns.flatMap((column) => {
     const boundaries = groundBoundaries(column);
     return groundBeds(column).map((bed) => {
-      const [low = null, high = null] = column.intervals?.resistivity[bed.index] ?? [];
-      const boundary = column.intervals ? boundaries[bed.index] : undefined;
+      const [low, high] = told(column.intervals?.resistivity[bed.index]);
+      const boundary = boundaries[bed.index];
+      const [highest, deepest] = boundary && column.intervals ? told([boundary.low, boundary.high]) : NONE;
       const held = heldNames(bed, { resistivity: 'ρ held', thickness: 'h held' });
       const note = [...(bed.note === null ? [] : [bed.note]), ...held].join(', ');
       return [
@@ -33,8 +39,8 @@ export function groundTable(columns: readonly GroundColumn[]): ChartTable {
         high,
         bed.top,
         bed.base,
-        boundary?.low ?? null,
-        boundary?.high ?? null,
+        highest,
+        deepest,
         note,
       ];
     });

@@ -1,3 +1,5 @@
+import { formatGiven } from '../ui/format';
+
 /** A stretch of a log axis: log10 of its ends. */
 export interface LogRange {
   min: number;
@@ -77,8 +79,5 @@ export function labelledTicks(range: LogRange, pixelsPerDecade: number, labelWid
 
 /** Number of a tick without trailing zeros: 0.5, 20, 1000, 10 000. */
 export function tickLabel(position: number): string {
-  const value = 10 ** position;
-  const rounded = Number(value.toPrecision(3));
-  const text = rounded < 1 ? String(rounded) : rounded.toFixed(0);
-  return text.length < 5 || rounded < 1 ? text : text.replace(/\B(?=(\d{3})+$)/g, '\u202f');
+  return formatGiven(Number((10 ** position).toPrecision(3)));
 }

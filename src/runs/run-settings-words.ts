@@ -1,8 +1,10 @@
 import { DEFAULT_BOUNDS, type FitSettings, type LayeredEarthModel } from '../../server/contract/fit';
+import { timesOrDivided } from '../../inversion/three-digits';
 import {
   formatCount,
   formatGiven,
   formatLength,
+  formatMisfit,
   formatRelativeError,
   formatResistivity,
   formatSignificant,
@@ -23,8 +25,7 @@ export function settingsWords(settings: FitSettings): { label: string; value: st
       : [{ label: key === 'resistivity' ? 'Resistivity within' : 'Thickness within', value }];
   });
   const held = settings.fixed.map(
-    ({ on, index, value }) =>
-      `${on} of bed ${index + 1} at ${withUnit(formatSignificant(value, 4), UNIT[on])}`,
+    ({ on, index, value }) => `${on} of bed ${index + 1} at ${withUnit(formatSignificant(value), UNIT[on])}`,
   );
   return [
     ...groundWords(settings),
@@ -53,7 +54,7 @@ function groundWords({ kind, layers, start, targetMisfit }: FitSettings): { labe
         label: 'Ground',
         value: `${kind === 'smooth' ? 'smooth' : 'with few steps'}, ${layers === 'auto' ? 'the usual grid of cells' : formatCount(layers, 'cell')}`,
       },
-      { label: 'Aim', value: `χ²/N ${formatSignificant(targetMisfit ?? 1, 3)}` },
+      { label: 'Aim', value: `χ²/N\u00a0${formatMisfit(targetMisfit ?? 1)}` },
     ];
   return [
     { label: 'Beds', value: layers === 'auto' ? 'count to be found, 1 to 8' : bedCount(layers) },
@@ -61,12 +62,13 @@ function groundWords({ kind, layers, start, targetMisfit }: FitSettings): { labe
   ];
 }
 
-function priorWords({ on, index, value, sigma }: FitSettings['priors'][number]): string {
+/** "base of bed 2 at 12.4 ± 0.300 m", "resistivity of bed 1 near 80.0 Ω·m ×÷ 1.22". */
+export function priorWords({ on, index, value, sigma }: FitSettings['priors'][number]): string {
   const where = on === 'depth' ? `base of bed ${index + 1}` : `${on} of bed ${index + 1}`;
   const unit = on === 'resistivity' ? 'Ω·m' : 'm';
   return on === 'depth'
-    ? `${where} at ${formatSignificant(value, 3)} ± ${withUnit(formatSignificant(sigma, 2), unit)}`
-    : `${where} near ${withUnit(formatSignificant(value, 3), unit)}, times or divided by ${formatSignificant(Math.exp(sigma), 3)}`;
+    ? `${where} at ${formatSignificant(value)}\u00a0±\u00a0${withUnit(formatSignificant(sigma), unit)}`
+    : `${where} near ${withUnit(formatSignificant(value), unit)} ${timesOrDivided(Math.exp(sigma))}`;
 }
 
 /** "120 Ω·m to 2.1 m, 45 Ω·m to 15.4 m, 300 Ω·m below"; depths from the surface. */

@@ -1,8 +1,10 @@
 import type { FitReading } from '../../server/contract/fit';
 import type { SpreadType } from '../../server/contract/spread';
-import { formatLength, formatSignificant, withUnit } from '../ui/format';
+import { formatGiven, withUnit } from '../ui/format';
 
-const metres = (length: number): string => withUnit(formatLength(length), 'm');
+/** As the crew wrote it; a conversion of units may leave further digits. */
+const given = (value: number): string => formatGiven(Number(value.toPrecision(6)));
+const metres = (length: number): string => withUnit(given(length), 'm');
 
 /** Within a sentence. */
 export const SPREAD_NAMES: Record<SpreadType, string> = {
@@ -26,7 +28,7 @@ export function spacingLabel(spread: FitReading['spread']): string {
     case 'pole-pole':
       return `AM ${metres(spread.spacing)}`;
     case 'dipole-dipole':
-      return `a ${metres(spread.dipole)}, n ${formatSignificant(spread.n, 3)}`;
+      return `a ${metres(spread.dipole)}, n ${given(spread.n)}`;
     case 'electrodes':
       return `AM ${spread.am === null ? 'at infinity' : metres(spread.am)}`;
   }

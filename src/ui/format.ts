@@ -1,27 +1,15 @@
 import { differenceInCalendarDays, format } from 'date-fns';
+import { groupDigits, significant, threeDigits, withMinus } from '../../inversion/three-digits';
 
-/** U+202F: groups digits and keeps a unit with its number without letting the line break. */
-const THIN = '\u202f';
 const DASH = '\u2013';
-const MINUS = '\u2212';
 
-/** Words for a bound that the data do not give. */
+/** Words for a bound that the data do not give, and for a range of no width: the value was held, and nothing is told of it. */
 export const NOT_BOUNDED = 'not bounded';
+export const HELD = 'held';
 
 /** `digits` significant figures, plain decimals, groups apart from 10 000 on: 0.0123, 12.4, 1240, 12 400. */
 export function formatSignificant(value: number, digits = 3): string {
-  if (!Number.isFinite(value)) return DASH;
-  if (value === 0) return '0';
-  const magnitude = Math.abs(value);
-  // Rounding may carry into the next decade (9.996 → 10.0), so the decade is taken after it.
-  const decade = Math.floor(Math.log10(Number(magnitude.toPrecision(digits))));
-  const decimals = Math.max(0, digits - 1 - decade);
-  if (decimals > 9) return withMinus(value, trimExponent(magnitude, digits));
-  const rounded =
-    decade >= digits
-      ? Math.round(magnitude / 10 ** (decade - digits + 1)) * 10 ** (decade - digits + 1)
-      : magnitude;
-  return withMinus(value, groupDigits(rounded.toFixed(decimals)));
+  return significant(value, digits);
 }
 
 /** A number as a person gave it, groups apart: 0.1, 7000, 12 400. */
@@ -36,20 +24,14 @@ export function formatFixed(value: number, decimals: number): string {
   return Number(text) === 0 ? text : withMinus(value, groupDigits(text));
 }
 
-/** Resistivity in Ω·m, three significant figures, no unit. */
-export function formatResistivity(value: number): string {
-  return formatSignificant(value, 3);
-}
+/** Resistivity in Ω·m, no unit. */
+export const formatResistivity = threeDigits;
 
-/** χ² per reading, the same three significant figures wherever it stands. */
-export function formatMisfit(chi2PerReading: number): string {
-  return formatSignificant(chi2PerReading, 3);
-}
+/** Length in m, no unit. */
+export const formatLength = threeDigits;
 
-/** Length in m, no unit: two significant figures below 10 m (3.1), three above (12.4). */
-export function formatLength(value: number): string {
-  return formatSignificant(value, Math.abs(value) < 9.95 ? 2 : 3);
-}
+/** χ²/N, no unit. */
+export const formatMisfit = threeDigits;
 
 export function withUnit(text: string, unit: string): string {
   return `${text}\u00a0${unit}`;
@@ -62,16 +44,16 @@ export function formatPercent(value: number, decimals = 1): string {
 
 export type Bounds = readonly [number | null, number | null];
 
-/**
- * "1.2–3.4", "at least 1.2", "at most 3.4" or "not bounded". Each end has two significant figures (three from 100 on) and
- * as many more as it takes to tell the ends apart: 134–145, 3.9–36, 138.2–138.9.
- */
-export function formatRange([low, high]: Bounds, formatValue?: (value: number) => string): string {
-  const one = formatValue ?? ((value: number) => formatSignificant(value, leastDigits(value)));
-  if (low === null) return high === null ? NOT_BOUNDED : `at most ${one(high)}`;
-  if (high === null) return `at least ${one(low)}`;
-  const end = formatValue ?? ((value: number) => formatSignificant(value, rangeDigits(value, high - low)));
-  const [from, to] = [end(low), end(high)];
+/** Whether a range is that of a held value: the value alone, to the last bit. */
+export const isHeldRange = ([low, high]: Bounds): boolean => low !== null && low === high;
+
+/** "1.20–3.40", "at least 1.20", "at most 3.40", "not bounded" or "held"; ends that read alike are one number. */
+export function formatRange(bounds: Bounds): string {
+  const [low, high] = bounds;
+  if (isHeldRange(bounds)) return HELD;
+  if (low === null) return high === null ? NOT_BOUNDED : `at most ${threeDigits(high)}`;
+  if (high === null) return `at least ${threeDigits(low)}`;
+  const [from, to] = [threeDigits(low), threeDigits(high)];
   return from === to ? from : `${from}${DASH}${to}`;
 }
 
@@ -107,27 +89,4 @@ export function formatDuration(milliseconds: number): string {
 /** "1 reading", "20 readings", "12 400 readings". */
 export function formatCount(count: number, one: string, many = `${one}s`): string {
   return `${groupDigits(String(count))} ${count === 1 ? one : many}`;
-}
-
-/** Significant figures of one end so that the last of them is at most half the width of the range, 5 at most. */
-function rangeDigits(end: number, width: number): number {
-  if (end === 0 || width <= 0) return leastDigits(end);
-  const needed = Math.floor(Math.log10(Math.abs(end))) - Math.floor(Math.log10(width / 2)) + 1;
-  return Math.min(5, Math.max(leastDigits(end), needed));
-}
-
-const leastDigits = (end: number) => (Math.abs(end) < 99.5 ? 2 : 3);
-
-function groupDigits(text: string): string {
-  const [whole = '', decimals] = text.split('.');
-  const grouped = whole.length < 5 ? whole : whole.replace(/\B(?=(\d{3})+$)/g, THIN);
-  return decimals === undefined ? grouped : `${grouped}.${decimals}`;
-}
-
-function trimExponent(magnitude: number, digits: number): string {
-  return magnitude.toExponential(digits - 1).replace('-', MINUS);
-}
-
-function withMinus(value: number, text: string): string {
-  return value < 0 ? `${MINUS}${text}` : text;
 }

@@ -1,8 +1,9 @@
 import type { FitResult } from '../../../server/contract/fit';
 import { determinationOf, DETERMINATION_WORDS } from '../../../inversion';
+import { timesOrDivided } from '../../../inversion/three-digits';
 import { isRejected } from '../../runs/rejected-fit';
 import { classNames } from '../../ui/class-names';
-import { formatLength, formatRange, formatResistivity, formatSignificant } from '../../ui/format';
+import { formatRange, HELD } from '../../ui/format';
 import type { ModelValue } from './hand-model';
 import { heldKey } from './hand-model-store';
 
@@ -20,20 +21,15 @@ export function BedRange({ result, value, heldInRun }: BedRangeProps) {
   const grade = determinationOf(factor, isHeld);
   // Where the readings reject the model, what its ranges say of them means nothing.
   const isOpen = !isHeld && isRejected(result);
-  const format = on === 'resistivity' ? formatResistivity : formatLength;
   return (
     <span className="block pb-1 leading-tight">
-      {isHeld ? null : (
-        <span className={classNames('figure block text-sm', isOpen && 'text-muted')}>
-          {formatRange(result.intervals[on][index] ?? [null, null], format)}
-        </span>
-      )}
-      {isOpen ? null : (
+      <span className={classNames('figure block text-sm', isOpen && 'text-muted')}>
+        {isHeld ? HELD : formatRange(result.intervals[on][index] ?? [null, null])}
+      </span>
+      {isHeld || isOpen ? null : (
         <span className="block text-xs text-muted">
           {DETERMINATION_WORDS[grade]}
-          {isHeld || factor === null ? null : (
-            <span className="figure block sm:inline"> ×÷{formatSignificant(factor, 3)}</span>
-          )}
+          {factor === null ? null : <span className="figure block sm:inline"> {timesOrDivided(factor)}</span>}
         </span>
       )}
     </span>

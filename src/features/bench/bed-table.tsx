@@ -8,9 +8,10 @@ import { Checkbox } from '../../ui/checkbox';
 import { classNames } from '../../ui/class-names';
 import { formatLength, formatSignificant } from '../../ui/format';
 import { IconButton } from '../../ui/icon-button';
+import { Sentence } from '../../ui/sentence';
 import { Cell, HeaderCell, Table, TableBody, TableHead, TableRow } from '../../ui/table';
 import { BedRange } from './bed-range';
-import { MAX_BEDS, withBedSplit, withoutBed, withValue, type ModelValue } from './hand-model';
+import { HAND_LIMITS, MAX_BEDS, withBedSplit, withoutBed, withValue, type ModelValue } from './hand-model';
 import { heldKey } from './hand-model-store';
 import { ValueCell } from './value-cell';
 
@@ -53,20 +54,30 @@ export function BedTable(props: BedTableProps) {
           ))}
         </TableBody>
       </Table>
-      <p className="mt-1.5 max-w-prose text-sm text-muted">{noteOf(props)}</p>
+      <p className="mt-1.5 max-w-prose text-sm text-muted">
+        <Sentence text={noteOf(props)} />
+      </p>
     </div>
   );
 }
 
-function noteOf({ result, onEdit, onHold }: BedTableProps): string {
+const HELD_NOTE = 'A held value has no range, and the ranges of the others hold only if it is right.';
+
+function noteOf({ result, heldInRun, onEdit, onHold }: BedTableProps): string {
   if (!result)
     return onEdit
       ? 'This model has no ranges; fit it to see what the readings tell of it.'
       : 'This model has no ranges of its own.';
   const ranges = isRejected(result)
     ? REJECTED_RANGES_NOTE
-    : `Under each value its 95 % range, then how well it is known. ${DETERMINATION_SOURCE}.`;
-  return onHold ? `${ranges} A ticked value is held in the next fit.` : ranges;
+    : `Under each value its 95\u00a0% range, then how well it is known, and its 68\u00a0% factor ×÷. ${DETERMINATION_SOURCE}.`;
+  return [
+    ranges,
+    heldInRun.length > 0 ? HELD_NOTE : '',
+    onHold ? 'A ticked value is held in the next fit.' : '',
+  ]
+    .filter((sentence) => sentence !== '')
+    .join(' ');
 }
 
 function BedRow(props: BedTableProps & { index: number }) {
@@ -151,10 +162,12 @@ function ValueCells(props: BedTableProps & { value: ModelValue }) {
             key={formatSignificant(number, 6)}
             label={`${on === 'resistivity' ? 'Resistivity' : 'Thickness'} of bed ${index + 1}`}
             value={number}
+            unit={on === 'resistivity' ? 'Ω·m' : 'm'}
+            limits={HAND_LIMITS[on]}
             onCommit={(next) => onEdit(withValue(earth, value, next))}
           />
         ) : (
-          <span className="figure px-1.5">{formatSignificant(number, 4)}</span>
+          <span className="figure px-1.5">{formatSignificant(number)}</span>
         )}
       </span>
       {result ? (

@@ -66,7 +66,7 @@ function Column({ sounding, run, model, selectedBed, onSelectBed }: Omit<BenchGr
   return (
     <DepthColumn
       // One id for run and hand, so that the drawing keeps its focus and its drag when the first edit is made.
-      column={{ ...column, id: 'ground', letter: '', held }}
+      column={{ ...column, id: 'ground', letter: '', held: [...(column.held ?? []), ...held] }}
       title="Ground"
       subject={sounding.name}
       height={520}

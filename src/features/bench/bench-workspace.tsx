@@ -8,6 +8,7 @@ import type { Run, RunSummary } from '../../../server/contract/runs';
 import { formFaults } from '../../api/form-faults';
 import { curveDataOfRevision, curveDataOfRun } from '../../runs/curve-of-run';
 import { DoubtList } from '../../runs/doubt-list';
+import { letterOfRun } from '../../runs/run-title';
 import { BenchDrawing } from './bench-drawing';
 import { BenchGround } from './bench-ground';
 import { useRequestRun } from './bench-mutations';
@@ -75,6 +76,7 @@ export function BenchWorkspace({ sounding, revision, runs, run }: BenchWorkspace
           {can.run ? (
             <FitControls
               model={isCells ? null : model.earth}
+              isByHand={model.hand !== null}
               held={isCells ? NONE : model.held}
               onRelease={model.releaseAll}
               onFit={fit}
@@ -97,9 +99,11 @@ export function BenchWorkspace({ sounding, revision, runs, run }: BenchWorkspace
             <section aria-labelledby="ladder-title">
               <h2 id="ladder-title" className="mb-1 font-semibold">
                 How many beds
+                <span className="ml-3 text-sm font-normal text-muted">run {letterOfRun(run)}</span>
               </h2>
               <LayerLadder
                 counts={run.result.layerCounts}
+                readings={run.readings.length}
                 onTakeUp={model.lookAt}
                 onAdopt={can.run ? (earth) => commands.current?.fitCount(run.settings, earth) : undefined}
               />
@@ -126,7 +130,7 @@ export function BenchWorkspace({ sounding, revision, runs, run }: BenchWorkspace
             <h2 id="doubt-title" className="mb-2 font-semibold">
               What the data cannot tell
             </h2>
-            <DoubtList result={result} excluded={run.excluded} />
+            <DoubtList result={result} run={run} />
           </section>
         ) : null}
         {runs.length === 0 ? (

@@ -1,9 +1,11 @@
 import { darZarrouk } from '../../../inversion';
 import type { LayeredEarthModel } from '../../../server/contract/fit';
 import { isRejected } from '../../runs/rejected-fit';
-import { RejectedLine } from '../../runs/rejected-mark';
+import { MISFIT_LABEL, MISFIT_TITLE } from '../../runs/misfit-words';
+import { MisfitLine } from '../../runs/rejected-mark';
 import { FigureStrip, type FigureItem } from '../../ui/figure-strip';
 import { formatMisfit, formatPercent, formatSignificant, withUnit } from '../../ui/format';
+import { Sentence } from '../../ui/sentence';
 
 export interface FiguresProps {
   earth: LayeredEarthModel;
@@ -22,21 +24,24 @@ export function FiguresOfModel({ earth, misfit, fit, isCells }: FiguresProps) {
   const closeness: FigureItem[] = [
     {
       value: isRejected(fit) ? <span className="text-rust">{chi2}</span> : chi2,
-      label: 'χ² per reading',
+      label: <span title={MISFIT_TITLE}>{MISFIT_LABEL}</span>,
     },
     { value: misfit ? formatPercent(misfit.rmsPercent) : '–', label: 'rms misfit' },
   ];
   const along: FigureItem[] = [
-    { value: withUnit(formatSignificant(sums.totalConductanceS), 'S'), label: `S = Σh/ρ above bed ${last}` },
+    {
+      value: withUnit(formatSignificant(sums.totalConductanceS), 'S'),
+      label: <Sentence text={`S\u00a0=\u00a0Σh/ρ above bed\u00a0${last}`} />,
+    },
     {
       value: withUnit(formatSignificant(sums.totalResistanceOhmM2), 'Ω·m²'),
-      label: `T = Σhρ above bed ${last}`,
+      label: <Sentence text={`T\u00a0=\u00a0Σhρ above bed\u00a0${last}`} />,
     },
   ];
   return (
     <div>
       <FigureStrip items={closeness} />
-      <RejectedLine fit={fit} />
+      <MisfitLine fit={fit} />
       {last > 1 && !isCells ? (
         <div className="-mt-px">
           <FigureStrip items={along} />

@@ -30,6 +30,8 @@ export interface FitCommands {
 export interface FitControlsProps {
   /** The model drawn now; a fit may start from it and hold values of it. */
   model: LayeredEarthModel | null;
+  /** The model was made or changed by hand, so a fit starts from it unless told otherwise. */
+  isByHand: boolean;
   held: readonly string[];
   onRelease: () => void;
   onFit: (settings: FitSettingsInput) => void;
@@ -57,7 +59,7 @@ const GROUND_OPTIONS = [
 
 /** Everything a fit is asked for with, and the one button that asks. */
 export function FitControls(props: FitControlsProps) {
-  const { model, held, onFit, onReady, isAsking, onRelease } = props;
+  const { model, held, isByHand, onFit, onReady, isAsking, onRelease } = props;
   const [ownFaults, setOwnFaults] = useState<readonly FormFault[]>([]);
   const form = useForm<FitForm>({
     resolver: formResolver(fitFormSchema),
@@ -67,13 +69,13 @@ export function FitControls(props: FitControlsProps) {
   const layers = useController({ control: form.control, name: 'layers' }).field;
   const kind = useController({ control: form.control, name: 'kind' }).field;
   const isBeds = kind.value === 'layered';
-  const shown = shownChoices({ layers: layers.value, start: start.value }, model, held);
+  const shown = shownChoices({ layers: layers.value, start: start.value }, model, held, isByHand);
   const request = (settings: FitSettingsInput) => {
     const faults = faultsOfSettings(settings);
     setOwnFaults(faults.map((message) => ({ message })));
     if (faults.length === 0) onFit(settings);
   };
-  const ask = form.handleSubmit((values) => request(settingsOf(values, model, held)));
+  const ask = form.handleSubmit((values) => request(settingsOf(values, model, held, isByHand)));
   useEffect(() =>
     onReady({
       fit: () => void ask(),
@@ -122,6 +124,12 @@ export function FitControls(props: FitControlsProps) {
         <p className="text-sm text-muted">
           {held.length > 0 ? 'Held values belong to this model' : 'The fit starts from this model'}, so it has{' '}
           {formatCount(Number(shown.layers), 'bed')}.
+        </p>
+      ) : null}
+      {isBeds && isByHand && shown.start === 'curve' ? (
+        <p className="text-sm text-muted">
+          The fit starts from the curve
+          {held.length > 0 ? '; of this model only held values count' : '; this model has no part in it'}.
         </p>
       ) : null}
       <FitBoundsFields form={form} />

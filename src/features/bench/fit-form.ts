@@ -27,7 +27,8 @@ export const fitFormSchema = z
     kind: z.enum(GROUND_CHOICES),
     outlierTolerant: z.boolean(),
     layers: z.enum(LAYER_CHOICES),
-    start: z.enum(['curve', 'model']),
+    /** 'fitting' until a person chooses: the model where it is by hand, else the curve. */
+    start: z.enum(['fitting', 'curve', 'model']),
     resistivityLow: bound(1e9),
     resistivityHigh: bound(1e9),
     thicknessLow: bound(1e6),
@@ -48,7 +49,7 @@ export const DEFAULT_FIT_FORM: FitForm = {
   kind: 'layered',
   outlierTolerant: false,
   layers: 'auto',
-  start: 'curve',
+  start: 'fitting',
   resistivityLow: DEFAULT_BOUNDS.resistivity[0],
   resistivityHigh: DEFAULT_BOUNDS.resistivity[1],
   thicknessLow: DEFAULT_BOUNDS.thickness[0],
@@ -66,7 +67,7 @@ export function valuesOfModel(earth: LayeredEarthModel): ModelValue[] {
 
 /** What the controls stand for beside the model that is shown: the same for the eye and for the request. */
 export interface ShownChoices {
-  start: FitForm['start'];
+  start: Exclude<FitForm['start'], 'fitting'>;
   layers: FitForm['layers'];
   /** Values are held or the fit starts from the model, so its count of beds is the one asked for. */
   isCountOfModel: boolean;
@@ -76,11 +77,14 @@ export function shownChoices(
   form: Pick<FitForm, 'layers' | 'start'>,
   model: LayeredEarthModel | null,
   held: readonly string[],
+  isByHand = false,
 ): ShownChoices {
   const layers = LAYER_CHOICES.find((choice) => choice === String(model?.resistivity.length));
   if (!layers) return { start: 'curve', layers: form.layers, isCountOfModel: false };
-  const isCountOfModel = held.length > 0 || form.start === 'model';
-  return { start: form.start, layers: isCountOfModel ? layers : form.layers, isCountOfModel };
+  const usual = isByHand ? 'model' : 'curve';
+  const start = form.start === 'fitting' ? usual : form.start;
+  const isCountOfModel = held.length > 0 || start === 'model';
+  return { start, layers: isCountOfModel ? layers : form.layers, isCountOfModel };
 }
 
 /**
@@ -91,10 +95,11 @@ export function settingsOf(
   form: FitForm,
   model: LayeredEarthModel | null,
   held: readonly string[],
+  isByHand = false,
 ): FitSettingsInput {
   const { seed, outlierTolerant } = form;
   if (form.kind !== 'layered') return { kind: form.kind, seed, bounds: boundsOf(form), outlierTolerant };
-  const { start, layers, isCountOfModel } = shownChoices(form, model, held);
+  const { start, layers, isCountOfModel } = shownChoices(form, model, held, isByHand);
   return {
     kind: 'layered',
     outlierTolerant,

@@ -8,8 +8,9 @@ export interface ModelValue {
 }
 
 export const MAX_BEDS = 8;
-const RESISTIVITY_LIMITS = [1e-3, 1e7] as const;
 const THICKNESS_LIMITS = [1e-3, 1e5] as const;
+/** What a value by hand may be, Ω·m and m. */
+export const HAND_LIMITS = { resistivity: [1e-3, 1e7], thickness: THICKNESS_LIMITS } as const;
 
 const within = (value: number, [low, high]: readonly [number, number]) =>
   Math.min(high, Math.max(low, value));
@@ -20,8 +21,7 @@ export function withValue(
   value: number,
 ): LayeredEarthModel {
   if (earth[on][index] === undefined || !(value > 0)) return earth;
-  const limits = on === 'resistivity' ? RESISTIVITY_LIMITS : THICKNESS_LIMITS;
-  return { ...earth, [on]: earth[on].with(index, within(value, limits)) };
+  return { ...earth, [on]: earth[on].with(index, within(value, HAND_LIMITS[on])) };
 }
 
 /** Moves the base of bed `index` to a depth; the boundary below stays where it is unless it would be passed. */

@@ -1,27 +1,42 @@
 import type { FitResult, LayeredEarthModel } from '../../../server/contract/fit';
+import { MISFIT_LABEL, MISFIT_TITLE } from '../../runs/misfit-words';
 import { bedCount } from '../../runs/run-title';
 import { Button } from '../../ui/button';
 import { formatFixed, formatMisfit } from '../../ui/format';
+import { Sentence } from '../../ui/sentence';
 import { Cell, HeaderCell, Table, TableBody, TableHead, TableRow } from '../../ui/table';
+import { noiseLimit, type NoiseLimit } from './noise-limit';
 
 export interface LayerLadderProps {
   counts: NonNullable<FitResult['layerCounts']>;
+  /** How many readings were fitted. */
+  readings: number;
   /** Takes one count's model up, under the name given, to look at and to fit from. */
   onTakeUp: (earth: LayeredEarthModel, name: string) => void;
   /** Asks for a run of this count; absent where the reader may not run. */
   onAdopt?: ((earth: LayeredEarthModel) => void) | undefined;
 }
 
+const LIMIT_TITLE = 'χ²/N at the 95 % point of χ²: below it a misfit is within noise';
+const DEGREES_TITLE = 'Degrees of freedom: readings less free values';
 const NOISE_WORDS = { true: 'yes', false: 'no', null: 'not testable' } as const;
 
 /** Every count that was tried, with what decided between them. */
-export function LayerLadder({ counts, onTakeUp, onAdopt }: LayerLadderProps) {
+export function LayerLadder({ counts, readings, onTakeUp, onAdopt }: LayerLadderProps) {
   return (
     <div className="max-w-4xl">
       <Table caption="Counts of beds that were tried">
         <TableHead>
           <HeaderCell numeric>Beds</HeaderCell>
-          <HeaderCell numeric>χ²/N</HeaderCell>
+          <HeaderCell numeric>
+            <span title={MISFIT_TITLE}>{MISFIT_LABEL}</span>
+          </HeaderCell>
+          <HeaderCell numeric>
+            <span title={LIMIT_TITLE}>Limit</span>
+          </HeaderCell>
+          <HeaderCell numeric className="hidden sm:table-cell">
+            <span title={DEGREES_TITLE}>N − p</span>
+          </HeaderCell>
           <HeaderCell numeric className="hidden sm:table-cell">
             BIC
           </HeaderCell>
@@ -35,6 +50,7 @@ export function LayerLadder({ counts, onTakeUp, onAdopt }: LayerLadderProps) {
             <TableRow key={count.layers} selected={count.chosen}>
               <Cell numeric>{count.layers}</Cell>
               <Cell numeric>{formatMisfit(count.chi2PerReading)}</Cell>
+              <LimitCells limit={noiseLimit(count, readings)} />
               <Cell numeric className="hidden sm:table-cell">
                 {formatFixed(count.bic, 1)}
               </Cell>
@@ -66,8 +82,24 @@ export function LayerLadder({ counts, onTakeUp, onAdopt }: LayerLadderProps) {
         </TableBody>
       </Table>
       <p className="mt-2 text-sm text-muted">
-        Chosen is the fewest beds whose χ² lies below its 95 % point; where none does, the least BIC.
+        Within noise means <Sentence text="χ²/N" /> below its limit: the 95&nbsp;% point of χ² with N − p
+        degrees of freedom (readings less free values), over N. Chosen is the fewest beds within noise; where
+        none is, the least BIC.
       </p>
     </div>
+  );
+}
+
+/** What the misfit of a count is judged by; empty where it cannot be tested. */
+function LimitCells({ limit }: { limit: NoiseLimit | null }) {
+  return (
+    <>
+      <Cell numeric className="text-muted">
+        {limit ? formatMisfit(limit.chi2PerReading) : ''}
+      </Cell>
+      <Cell numeric className="hidden text-muted sm:table-cell">
+        {limit?.degrees}
+      </Cell>
+    </>
   );
 }

@@ -5,6 +5,7 @@ import { runStyle } from '../../charts/run-style';
 import { useChartPalette } from '../../charts/chart-palette';
 import { cacheWords } from '../../runs/cache-words';
 import { InterpretationStateMark } from '../../runs/interpretation-state-mark';
+import { MISFIT_TITLE } from '../../runs/misfit-words';
 import { MiniColumn } from '../../runs/mini-column';
 import { RejectedMark } from '../../runs/rejected-mark';
 import { letterOfRun, titleOfRun } from '../../runs/run-title';
@@ -63,7 +64,7 @@ export function LedgerRow(props: LedgerRowProps) {
             className="block min-h-6 max-w-full rounded text-left hover:text-copper touch:min-h-11"
           >
             <span className="sr-only">Open run {letter}: </span>
-            {titleOfRun(run)}
+            <span className="wrap-anywhere">{titleOfRun(run)}</span>
           </button>
         ) : (
           <p>{titleOfRun(run)}</p>
@@ -78,7 +79,7 @@ export function LedgerRow(props: LedgerRowProps) {
       <div className="figure pt-0.5 text-right">
         {run.outcome ? (
           <>
-            <span className="block" title="χ² per reading">
+            <span className="block" title={MISFIT_TITLE}>
               {formatMisfit(run.outcome.chi2PerReading)}
             </span>
             <span className="block text-sm text-muted" title="rms misfit">

@@ -9,6 +9,7 @@ import { settingsWords } from '../../runs/run-settings-words';
 import { letterOfRun } from '../../runs/run-title';
 import { Button, ButtonLink } from '../../ui/button';
 import { formatDuration, formatMoment } from '../../ui/format';
+import { Sentence } from '../../ui/sentence';
 import { showToast } from '../../ui/show-toast';
 import { useRecomputeRun } from './bench-mutations';
 import { RecomputationVerdict } from './recomputation-verdict';
@@ -50,7 +51,9 @@ export function RunFacts({ run, runs, can }: RunFactsProps) {
         {facts.map((fact) => (
           <div key={fact.label} className="contents">
             <dt className="text-muted">{fact.label}</dt>
-            <dd>{fact.value}</dd>
+            <dd>
+              <Sentence text={fact.value} />
+            </dd>
           </div>
         ))}
       </dl>

@@ -30,6 +30,6 @@ export function bedNumbers(result: FitResult, layerIndex: number): BedNumbers {
     baseRange:
       base === undefined
         ? null
-        : formatRange(result.intervals.depth[layerIndex] ?? [null, null], formatLength),
+        : formatRange(result.intervals.depth[layerIndex] ?? [null, null]),
   };
 }

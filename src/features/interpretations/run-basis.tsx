@@ -3,7 +3,8 @@ import type { Run } from '../../../server/contract/runs';
 import { addressOf } from '../../app/addresses';
 import { DoubtList } from '../../runs/doubt-list';
 import { isRejected } from '../../runs/rejected-fit';
-import { RejectedLine } from '../../runs/rejected-mark';
+import { MISFIT_LABEL, MISFIT_TITLE } from '../../runs/misfit-words';
+import { MisfitLine } from '../../runs/rejected-mark';
 import { letterOfRun, titleOfRun } from '../../runs/run-title';
 import { FigureStrip } from '../../ui/figure-strip';
 import { formatMisfit, formatPercent } from '../../ui/format';
@@ -28,14 +29,14 @@ export function RunBasis({ run }: { run: Run }) {
                     {formatMisfit(result.chi2PerReading)}
                   </span>
                 ),
-                label: 'χ² per reading',
+                label: <span title={MISFIT_TITLE}>{MISFIT_LABEL}</span>,
               },
               { value: formatPercent(result.rmsPercent), label: 'rms misfit' },
             ]}
           />
-          <RejectedLine fit={result} />
+          <MisfitLine fit={result} />
           <h3 className="font-semibold">What the data cannot tell</h3>
-          <DoubtList result={result} excluded={run.excluded} />
+          <DoubtList result={result} run={run} />
         </>
       ) : null}
       <p className="text-sm text-muted">

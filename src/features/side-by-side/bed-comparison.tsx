@@ -21,7 +21,8 @@ export function BedComparison({ runs }: { runs: readonly Run[] }) {
       <h2 id="beds-title" className="mb-1 font-semibold">
         Beds{' '}
         <span className="ml-2 text-sm font-normal text-muted">
-          value, and its 95 % range below{runs.some((run) => isRejected(run.result)) ? RANGES_ASSUME : ''}
+          value, and its 95&nbsp;% range below
+          {runs.some((run) => isRejected(run.result)) ? RANGES_ASSUME : ''}
         </span>
       </h2>
       <Table caption="Beds of each run" className="table-fixed" style={tableWidth(runs.length)}>
@@ -66,7 +67,7 @@ function BedOfRun({ run, bed }: { run: Run; bed: number }) {
             base <span className="figure">{withUnit(formatLength(base), 'm')}</span>
           </p>
           <p className="figure text-sm text-muted">
-            {formatRange(result.intervals.depth[bed] ?? [null, null], formatLength)}
+            {formatRange(result.intervals.depth[bed] ?? [null, null])}
           </p>
         </>
       )}

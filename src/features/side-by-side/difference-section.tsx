@@ -42,7 +42,7 @@ export function DifferenceSection({ base, other, pair }: DifferenceSectionProps)
             <HeaderCell numeric>
               {second}/{first}
             </HeaderCell>
-            <HeaderCell unit="95 %">Ranges</HeaderCell>
+            <HeaderCell unit={'95\u00a0%'}>Ranges</HeaderCell>
           </TableHead>
           <TableBody>
             {pair.beds.map((difference) => (

@@ -28,9 +28,11 @@ const column: GroundColumn = {
   ],
 };
 
+const hundred = depthScale('linear', { minDepth: 1, maxDepth: 100 }, 300);
+
 test('boundaries say their interval, and what is not bounded', () => {
   const [first, second] = groundBoundaries(column);
-  expect(first).toMatchObject({ depth: 2.6, rangeText: '2.2–3.1\u00a0m', unresolved: false });
+  expect(first).toMatchObject({ depth: 2.6, rangeText: '2.20–3.10\u00a0m', unresolved: false });
   expect(second).toMatchObject({ low: null, high: null, rangeText: 'not bounded', unresolved: true });
 });
 
@@ -44,30 +46,47 @@ test('a model without intervals has sharp boundaries', () => {
   expect(first).toMatchObject({ low: 2.6, high: 2.6, rangeText: '', unresolved: false });
 });
 
+test('a value that the run held is drawn without a range, and its row has no ends', () => {
+  const intervals = {
+    resistivity: [[134, 145] as const, [17, 17] as const, [100, 150] as const],
+    depth: [[2.6, 2.6] as const, [5, 8] as const],
+  };
+  const run = { ...column, intervals };
+  expect(groundBoundaries(run).map(({ rangeText }) => rangeText)).toEqual(['', '5.00–8.00\u00a0m']);
+  const labels = groundLabels(run, hundred, 200);
+  expect(labels[1]).toMatchObject({ strong: ['2.60\u00a0m'], note: 'h held' });
+  expect(labels[2]).toMatchObject({ strong: ['17.0'], note: 'ρ held' });
+  expect(bedSentence(groundBeds(run)[1]!)).not.toContain('95');
+  const { rows } = groundTable([run]);
+  expect(rows[0]!.slice(6, 8)).toEqual([null, null]);
+  expect(rows[1]!.slice(2, 4)).toEqual([null, null]);
+});
+
 test('beds are said in words', () => {
   const sentences = groundBeds(column).map(bedSentence);
   expect(sentences[0]).toBe(
-    'Bed 1, 139 ohm metres, 0 to 2.6 m, 95 % 134 to 145 ohm metres, dry cover, thickness held',
+    'Bed 1, 139 ohm metres, 0 to 2.60 m, 95\u00a0% 134 to 145 ohm metres, dry cover, thickness held',
   );
-  expect(sentences[1]).toContain('Bed 2, 17.0 ohm metres, 2.6 to 6.2 m');
+  expect(sentences[1]).toContain('Bed 2, 17.0 ohm metres, 2.60 to 6.20 m');
   expect(sentences[1]).toMatch(/, resistivity held$/);
-  expect(sentences[2]).toContain('below 6.2 m');
+  expect(sentences[2]).toContain('below 6.20 m');
 });
-
-const hundred = depthScale('linear', { minDepth: 1, maxDepth: 100 }, 300);
 
 test('labels beside the bar run down with the ground; a thin bed carries its number', () => {
   const labels = groundLabels(column, hundred, 200);
   expect(labels.map((label) => label.key)).toEqual(['bed 0', 'base 0', 'bed 1', 'base 1', 'bed 2']);
   expect(labels[0]).toMatchObject({ strong: ['139 · 134–145'], note: 'dry cover' });
-  expect(labels[2]).toMatchObject({ strong: ['17.0 · 3.9–36'], note: 'ρ held' });
-  expect(labels[1]).toMatchObject({ strong: ['2.2–3.1\u00a0m'], note: 'h held' });
+  expect(labels[2]).toMatchObject({ strong: ['17.0 · 3.90–36.0'], note: 'ρ held' });
+  expect(labels[1]).toMatchObject({ strong: ['2.20–3.10\u00a0m'], note: 'h held' });
   expect(labels[3]).toMatchObject({ strong: ['not bounded'], note: 'unresolved' });
 });
 
 test('number and interval part where one line is too long, and where the readings reject the model', () => {
-  expect(groundLabels(column, hundred, 80)[2]!.strong).toEqual(['17.0', '3.9–36']);
-  expect(groundLabels({ ...column, isRejected: true }, hundred, 200)[2]!.strong).toEqual(['17.0', '3.9–36']);
+  expect(groundLabels(column, hundred, 80)[2]!.strong).toEqual(['17.0', '3.90–36.0']);
+  expect(groundLabels({ ...column, isRejected: true }, hundred, 200)[2]!.strong).toEqual([
+    '17.0',
+    '3.90–36.0',
+  ]);
   expect(labelRoom(column, hundred)).toBe('not bounded'.length * 7.2);
 });
 

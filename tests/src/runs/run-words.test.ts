@@ -24,7 +24,7 @@ it('tells the model that a fit started from, by depth', () => {
       .find(({ label }) => label === 'Start')
       ?.value.replaceAll('\u00a0', ' ');
   expect(start([120, 45.16, 3000], [2.1, 13.3])).toBe(
-    'a model beside the curve: 120 Ω·m to 2.1 m, 45.2 Ω·m to 15.4 m, 3000 Ω·m below',
+    'a model beside the curve: 120 Ω·m to 2.10 m, 45.2 Ω·m to 15.4 m, 3000 Ω·m below',
   );
   expect(start([80], [])).toBe('a model beside the curve: 80.0 Ω·m throughout');
 });
@@ -62,7 +62,7 @@ it('says of each kind of fit what it was asked for', () => {
     outlierTolerant: true,
   });
   expect(tied).toContain(
-    'Known beforehand: base of bed 2 at 12.4 ± 0.30 m; resistivity of bed 1 near 80.0 Ω·m, times or divided by 1.22',
+    'Known beforehand: base of bed 2 at 12.4 ± 0.300 m; resistivity of bed 1 near 80.0 Ω·m ×÷ 1.22',
   );
   expect(tied).toContain('Branches: shifted, each within about 10 %');
   expect(tied).toContain('Outliers: count for less');

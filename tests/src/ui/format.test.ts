@@ -48,35 +48,35 @@ describe('resistivity', () => {
 });
 
 test.each([
-  [3.14159, '3.1'],
-  [9.94, '9.9'],
+  [3.14159, '3.14'],
+  [9.94, '9.94'],
   [9.96, '9.96'],
   [41.83, '41.8'],
-  [0.0456, '0.046'],
+  [0.0456, '0.0456'],
 ])('length %d → %s', (value, text) => expect(formatLength(value)).toBe(text));
 
 describe('ranges', () => {
   test.each([
     [134.2, 144.8, '134–145'],
-    [3.9, 36.2, '3.9–36'],
+    [3.9, 36.2, '3.90–36.2'],
     [109, 151, '109–151'],
-    [11, 13.2, '11–13'],
-    [2.21, 3.14, '2.2–3.1'],
-    [138.23, 138.91, '138.2–138.9'],
+    [11, 13.2, '11.0–13.2'],
+    [2.21, 3.14, '2.21–3.14'],
+    [138.23, 138.91, '138–139'],
+    [0.1, 46.4, '0.100–46.4'],
+    [3.1, 99_800, `3.10–99${THIN}800`],
     [12_340, 15_680, `12${THIN}300–15${THIN}700`],
   ])('%d to %d → %s', (low, high, text) => expect(formatRange([low, high])).toBe(text));
 
   test('open ends are said in words', () => {
-    expect(formatRange([null, 52.04])).toBe('at most 52');
-    expect(formatRange([3.21, null])).toBe('at least 3.2');
+    expect(formatRange([null, 52.04])).toBe('at most 52.0');
+    expect(formatRange([3.21, null])).toBe('at least 3.21');
     expect(formatRange([null, null])).toBe('not bounded');
   });
 
-  test('ends that read the same are one number', () => expect(formatRange([12, 12])).toBe('12'));
+  test('ends that read the same are one number', () => expect(formatRange([12.01, 12.02])).toBe('12.0'));
 
-  test('a formatter of its own is used for both ends', () => {
-    expect(formatRange([1.234, 5.678], (value) => formatFixed(value, 1))).toBe('1.2–5.7');
-  });
+  test('a range of no width is that of a held value', () => expect(formatRange([25.5, 25.5])).toBe('held'));
 });
 
 test('fixed decimals keep a true minus and no minus zero', () => {
