@@ -1,8 +1,10 @@
 import { NOISE_TAIL } from '../fit/layer-count';
 import { hasCells } from '../fit/smooth/has-cells';
-import { threeDigits } from '../three-digits';
+import { isHeldRange } from '../held-range';
+import { amount, threeDigits } from '../three-digits';
 import { TOLERANCES } from '../tolerances';
 import type { FitResult, Interval } from '../types';
+import { heldSentence } from './held-values';
 
 export type BedQuantity = 'resistivity' | 'thickness' | 'depth' | 'conductance' | 'resistance';
 
@@ -15,6 +17,8 @@ export interface BedDifference {
   second: number;
   /** second / first */
   ratio: number;
+  /** whether either result holds the value; its interval then says nothing of the readings */
+  isHeld: boolean;
   /** whether the 95 % intervals share a value; null where none is computed (S, T) */
   intervalsOverlap: boolean | null;
 }
@@ -95,15 +99,19 @@ function bedDifferences(a: FitResult, b: FitResult): BedDifference[] {
     const first = values(a);
     const second = values(b);
     const shared = Math.min(first.length, second.length);
-    return Array.from({ length: shared }, (_, bed) => ({
-      bed,
-      quantity,
-      unit,
-      first: first[bed]!,
-      second: second[bed]!,
-      ratio: second[bed]! / first[bed]!,
-      intervalsOverlap: intervals ? overlap(intervals(a)[bed]!, intervals(b)[bed]!) : null,
-    }));
+    return Array.from({ length: shared }, (_, bed) => {
+      const ranges = intervals ? [intervals(a)[bed]!, intervals(b)[bed]!] : [];
+      return {
+        bed,
+        quantity,
+        unit,
+        first: first[bed]!,
+        second: second[bed]!,
+        ratio: second[bed]! / first[bed]!,
+        isHeld: ranges.some(isHeldRange),
+        intervalsOverlap: ranges[0] && ranges[1] ? overlap(ranges[0], ranges[1]) : null,
+      };
+    });
   }).sort((x, y) => x.bed - y.bed);
 }
 
@@ -116,8 +124,8 @@ const WORDS: Record<BedQuantity, string> = {
 };
 
 function phrase(difference: BedDifference): string {
-  const [a, b] = [difference.first, difference.second].map(threeDigits);
-  return `${WORDS[difference.quantity]} of bed ${difference.bed + 1} (${a} against ${b} ${difference.unit})`;
+  const { quantity, bed, first, second, unit, isHeld } = difference;
+  return `${WORDS[quantity]} of bed ${bed + 1} (${threeDigits(first)} against ${amount(second, unit)}${isHeld ? ', held' : ''})`;
 }
 
 function ratio(first: number, second: number): number | null {
@@ -172,12 +180,12 @@ function alike(a: FitResult, b: FitResult): boolean {
 function differencesSentence(a: FitResult, b: FitResult, beds: readonly BedDifference[]): string {
   const differences = told(a, b, beds);
   if (differences.length === 0)
-    return `No bed differs beyond the 95 % intervals${alike(a, b) ? ': the data do not tell these models apart' : ''}.`;
-  return `${differences.length === 1 ? 'One value differs' : `${differences.length} values differ`} beyond the 95 % intervals: ${differences.map(phrase).join('; ')}.`;
+    return `No bed differs beyond the 95\u00a0% intervals${alike(a, b) ? ': the data do not tell these models apart' : ''}.`;
+  return `${differences.length === 1 ? 'One value differs' : `${differences.length} values differ`} beyond the 95\u00a0% intervals: ${differences.map(phrase).join('; ')}.`;
 }
 
 function misfitSentence(a: FitResult, b: FitResult, beds: readonly BedDifference[], names: Names): string {
-  const misfits = `(χ²/N ${threeDigits(a.chi2PerReading)} and ${threeDigits(b.chi2PerReading)})`;
+  const misfits = `(χ²/N\u00a0${threeDigits(a.chi2PerReading)} and ${threeDigits(b.chi2PerReading)})`;
   if (alike(a, b))
     return told(a, b, beds).length === 0
       ? `They fit alike ${misfits}.`
@@ -203,7 +211,7 @@ function totalsSentence(a: FitResult, b: FitResult): string | null {
     const change = ratio(x, y);
     return change === null
       ? null
-      : `${threeDigits(x)} against ${threeDigits(y)} ${unit} (× ${change.toFixed(2)})`;
+      : `${threeDigits(x)} against ${amount(y, unit)} (×\u00a0${threeDigits(change)})`;
   };
   const s = pair(a.darZarrouk.totalConductanceS, b.darZarrouk.totalConductanceS, 'S');
   const t = pair(a.darZarrouk.totalResistanceOhmM2, b.darZarrouk.totalResistanceOhmM2, 'Ω·m²');
@@ -221,11 +229,17 @@ function cellsSentence(a: FitResult, b: FitResult, names: Names): string {
 
 function describePair(a: FitResult, b: FitResult, beds: readonly BedDifference[], names: Names): string {
   if (!comparable(a, b))
-    return [cellsSentence(a, b, names), misfitSentence(a, b, beds, names), narrowSentence(a, b, names)]
+    return [
+      cellsSentence(a, b, names),
+      heldSentence([a, b], names),
+      misfitSentence(a, b, beds, names),
+      narrowSentence(a, b, names),
+    ]
       .filter((sentence) => sentence !== null)
       .join(' ');
   return [
     countsSentence(a, b),
+    heldSentence([a, b], names),
     differencesSentence(a, b, beds),
     misfitSentence(a, b, beds, names),
     narrowSentence(a, b, names),

@@ -1,11 +1,5 @@
-import {
-  formatLength,
-  formatRange,
-  formatResistivity,
-  isHeldRange,
-  NOT_BOUNDED,
-  withUnit,
-} from '../ui/format';
+import { isHeldRange } from '../../inversion/held-range';
+import { formatLength, formatRange, formatResistivity, NOT_BOUNDED, withUnit } from '../ui/format';
 import {
   boundaryDepths,
   type BoreholeLog,

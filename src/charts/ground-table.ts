@@ -1,4 +1,5 @@
-import { formatLength, formatResistivity, isHeldRange } from '../ui/format';
+import { isHeldRange } from '../../inversion/held-range';
+import { formatLength, formatResistivity } from '../ui/format';
 import type { ChartColumn, ChartTable } from './chart-table';
 import type { Bounds, GroundColumn } from './chart-data';
 import { groundBeds, groundBoundaries, heldNames } from './ground-profile';

@@ -1,4 +1,5 @@
 import { differenceInCalendarDays, format } from 'date-fns';
+import { isHeldRange } from '../../inversion/held-range';
 import { groupDigits, significant, threeDigits, withMinus } from '../../inversion/three-digits';
 
 const DASH = '\u2013';
@@ -43,9 +44,6 @@ export function formatPercent(value: number, decimals = 1): string {
 }
 
 export type Bounds = readonly [number | null, number | null];
-
-/** Whether a range is that of a held value: the value alone, to the last bit. */
-export const isHeldRange = ([low, high]: Bounds): boolean => low !== null && low === high;
 
 /** "1.20–3.40", "at least 1.20", "at most 3.40", "not bounded" or "held"; ends that read alike are one number. */
 export function formatRange(bounds: Bounds): string {

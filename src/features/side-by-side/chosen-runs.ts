@@ -12,9 +12,14 @@ export interface ChosenRuns {
   baseId: string | null;
 }
 
-/** What the address asks for, as far as it can be shown: known ids, each once, no more than fit. */
-export function chosenRuns(search: URLSearchParams, known: ReadonlySet<string>): ChosenRuns {
-  const asked = (search.get('runs') ?? '').split(',').filter((id) => known.has(id));
+/**
+ * What the address asks for, as far as it can be shown: known ids, each once, no more than fit. An address that asks for none
+ * gets the first two known, the newest; one that asks for an empty list gets that.
+ */
+export function chosenRuns(search: URLSearchParams, known: readonly string[]): ChosenRuns {
+  const named = search.get('runs');
+  const asked =
+    named === null ? known.slice(0, FEWEST_RUNS) : named.split(',').filter((id) => known.includes(id));
   const runIds = [...new Set(asked)].slice(0, MOST_RUNS);
   const base = search.get('base');
   return { runIds, baseId: base !== null && runIds.includes(base) ? base : null };
@@ -41,7 +46,7 @@ export function baseOf({ runIds, baseId }: ChosenRuns, runs: readonly RunSummary
 /** The address of a choice. */
 export function searchOf({ runIds, baseId }: ChosenRuns): Record<string, string> {
   return {
-    ...(runIds.length > 0 ? { runs: runIds.join(',') } : {}),
+    runs: runIds.join(','),
     ...(baseId !== null && runIds.includes(baseId) ? { base: baseId } : {}),
   };
 }

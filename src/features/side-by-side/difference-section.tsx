@@ -1,7 +1,8 @@
 import type { BedDifference, FitPairComparison } from '../../../inversion';
 import type { Run } from '../../../server/contract/runs';
 import { letterOfRun } from '../../runs/run-title';
-import { formatFixed, formatSignificant } from '../../ui/format';
+import { formatSignificant, HELD } from '../../ui/format';
+import { Sentence } from '../../ui/sentence';
 import { Cell, HeaderCell, Table, TableBody, TableHead, TableRow } from '../../ui/table';
 
 export interface DifferenceSectionProps {
@@ -27,7 +28,9 @@ export function DifferenceSection({ base, other, pair }: DifferenceSectionProps)
   return (
     <section aria-label={`Runs ${title}`} className="break-inside-avoid">
       <h2 className="font-semibold">{title}</h2>
-      <p className="mt-1 max-w-3xl">{pair.text}</p>
+      <p className="mt-1 max-w-3xl">
+        <Sentence text={pair.text} />
+      </p>
       <details className="mt-2">
         <summary className="min-h-6 w-fit rounded text-muted hover:text-ink touch:min-h-11">
           Differences in numbers
@@ -52,15 +55,22 @@ export function DifferenceSection({ base, other, pair }: DifferenceSectionProps)
                 <Cell numeric>{formatSignificant(difference.first)}</Cell>
                 <Cell numeric>{formatSignificant(difference.second)}</Cell>
                 <Cell className="figure text-muted">{difference.unit}</Cell>
-                <Cell numeric>{formatFixed(difference.ratio, 2)}</Cell>
-                <Cell className={difference.intervalsOverlap === false ? 'font-semibold text-copper' : ''}>
-                  {OVERLAP_WORDS[`${difference.intervalsOverlap}`]}
-                </Cell>
+                <Cell numeric>{formatSignificant(difference.ratio)}</Cell>
+                <RangesCell difference={difference} />
               </TableRow>
             ))}
           </TableBody>
         </Table>
       </details>
     </section>
+  );
+}
+
+function RangesCell({ difference: { isHeld, intervalsOverlap } }: { difference: BedDifference }) {
+  if (isHeld) return <Cell className="text-muted">{HELD}</Cell>;
+  return (
+    <Cell className={intervalsOverlap === false ? 'font-semibold text-copper' : ''}>
+      {OVERLAP_WORDS[`${intervalsOverlap}`]}
+    </Cell>
   );
 }

@@ -1,4 +1,6 @@
 import type { Run } from '../../../server/contract/runs';
+import { MISFIT_LABEL, MISFIT_TITLE } from '../../runs/misfit-words';
+import { Sentence } from '../../ui/sentence';
 import { Cell, Table, TableBody, TableRow } from '../../ui/table';
 import type { FactRow } from './run-facts-table';
 import { RunHeads } from './run-heads';
@@ -21,7 +23,9 @@ export function FactComparison({ title, runs, rows }: FactComparisonProps) {
           {rows.map((row) => (
             <TableRow key={row.label}>
               <Cell className="align-top text-muted">
-                {row.label}
+                <span title={row.label === MISFIT_LABEL ? MISFIT_TITLE : undefined}>
+                  <Sentence text={row.label} />
+                </span>
                 {row.differs ? <span className="block text-xs text-copper">differs</span> : null}
               </Cell>
               {row.values.map((value, i) => (
@@ -29,7 +33,7 @@ export function FactComparison({ title, runs, rows }: FactComparisonProps) {
                   key={runs[i]?.id ?? i}
                   className={row.differs ? 'align-top font-semibold' : 'align-top'}
                 >
-                  {value}
+                  <Sentence text={value} />
                 </Cell>
               ))}
             </TableRow>

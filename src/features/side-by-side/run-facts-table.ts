@@ -1,4 +1,5 @@
 import type { Run } from '../../../server/contract/runs';
+import { MISFIT_LABEL } from '../../runs/misfit-words';
 import { settingsWords } from '../../runs/run-settings-words';
 import { formatMisfit, formatMoment, formatPercent, formatSignificant, withUnit } from '../../ui/format';
 
@@ -22,7 +23,7 @@ const row = (label: string, values: string[]): FactRow => ({
 export function outcomeRows(runs: readonly FinishedRun[]): FactRow[] {
   return [
     row(
-      'χ² per reading',
+      MISFIT_LABEL,
       runs.map((run) => formatMisfit(run.result.chi2PerReading)),
     ),
     row(

@@ -1,6 +1,7 @@
 import { useChartPalette } from '../../charts/chart-palette';
 import { runStyle } from '../../charts/run-style';
 import type { RunSummary } from '../../../server/contract/runs';
+import { MISFIT_LABEL, MISFIT_TITLE } from '../../runs/misfit-words';
 import { RejectedMark } from '../../runs/rejected-mark';
 import { letterOfRun, titleOfRun } from '../../runs/run-title';
 import { Checkbox } from '../../ui/checkbox';
@@ -48,7 +49,8 @@ export function RunPicker({ runs, chosen, onChoose }: RunPickerProps) {
               }
               hint={
                 <>
-                  χ²/N{' '}
+                  <span title={MISFIT_TITLE}>{MISFIT_LABEL}</span>
+                  {'\u00a0'}
                   <span className="figure">
                     {run.outcome ? formatMisfit(run.outcome.chi2PerReading) : '–'}
                   </span>

@@ -25,7 +25,11 @@ function SideBySide({ sounding }: { sounding: Sounding }) {
   const [search, setSearch] = useSearchParams();
   const list = useQuery(runListQuery(sounding.id));
   const finished = (list.data?.items ?? []).filter(isShowable);
-  const chosen = chosenRuns(search, new Set(finished.map((run) => run.id)));
+  const newest = finished.toSorted((a, b) => b.number - a.number);
+  const chosen = chosenRuns(
+    search,
+    newest.map((run) => run.id),
+  );
   const runs = useQueries({ queries: chosen.runIds.map((id) => runQuery(id)) });
   const choose = (next: ChosenRuns) => setSearch(searchOf(next), { replace: true });
   if (!list.data)

@@ -24,20 +24,39 @@ function fitOf(earth: LayeredEarth, layers = earth.resistivity.length, more: Par
 
 const BASE = fitOf({ resistivity: [100, 20], thickness: [5] });
 
+const plain = (text: string): string => text.replaceAll('\u00a0', ' ');
+
 describe('compareFits', () => {
   it('finds the bed that differs beyond the intervals, and only that', () => {
     const { pairs } = compareFits([BASE, fitOf({ resistivity: [100, 30], thickness: [5] })]);
     const supported = pairs[0]!.beds.filter((bed) => bed.intervalsOverlap === false);
     expect(supported.map((bed) => [bed.bed, bed.quantity])).toEqual([[1, 'resistivity']]);
     expect(supported[0]!.ratio).toBeCloseTo(1.5, 3);
-    expect(pairs[0]!.text).toContain(
+    expect(plain(pairs[0]!.text)).toContain(
       'One value differs beyond the 95 % intervals: resistivity of bed 2 (20.0 against 30.0 Ω·m). They fit alike',
     );
   });
 
   it('says that the same readings do not choose between models that differ and fit alike', () => {
     const [pair] = compareFits([BASE, fitOf({ resistivity: [100, 30], thickness: [5] })]).pairs;
-    expect(pair!.text).toContain('the same readings do not choose between them.');
+    expect(plain(pair!.text)).toContain('the same readings do not choose between them.');
+  });
+
+  it('says which values a run holds, and reads nothing out of their ranges', () => {
+    const held = fitOf({ resistivity: [100, 20], thickness: [5] }, 2, {
+      fixed: [{ on: 'thickness', index: 0, value: 7 }],
+    });
+    const [pair] = compareFits([BASE, held], ['Run A', 'Run B']).pairs;
+    expect(plain(pair!.text)).toContain(
+      'Run B holds the thickness of bed 1 at 7.00 m, which the readings did not find. Other ranges of that model hold only if that is so.',
+    );
+    expect(plain(pair!.text)).toContain('thickness of bed 1 (5.00 against 7.00 m, held)');
+    const isHeld = pair!.beds.flatMap((bed) => (bed.isHeld ? [`${bed.quantity} ${bed.bed}`] : []));
+    expect(isHeld).toEqual(['thickness 0', 'depth 0']);
+    const both = compareFits([held, held]).pairs[0]!;
+    expect(plain(both.text)).toContain('not find; the second holds the thickness of bed 1 at 7.00 m');
+    expect(both.text).toContain('Other ranges of both');
+    expect(compareFits([BASE, BASE]).pairs[0]!.text).not.toContain('holds');
   });
 
   it('sets no bed against the cells of a smooth ground, and says nothing of its beds', () => {
@@ -57,7 +76,7 @@ describe('compareFits', () => {
       'thickness',
       'depth',
     ]);
-    expect(pair!.text).toContain(
+    expect(plain(pair!.text)).toContain(
       'One value differs beyond the 95 % intervals: thickness of bed 1 (5.00 against 10.0 m).',
     );
   });
@@ -78,7 +97,7 @@ describe('compareFits', () => {
           { ...BASE, chi2PerReading: 0.7, misfitProbability: second },
         ],
         ['Run A', 'Run B'],
-      ).pairs[0]!.text;
+      ).pairs[0]!.text.replaceAll('\u00a0', ' ');
     expect(told(0.4, 0.8)).toContain(
       'Run B fits closer (χ²/N 1.00 and 0.700), but both fit within the errors.',
     );
@@ -92,7 +111,7 @@ describe('compareFits', () => {
 
   it('says that the data do not tell near models apart', () => {
     const { pairs } = compareFits([BASE, fitOf({ resistivity: [101, 20.1], thickness: [5] })]);
-    expect(pairs[0]!.text).toContain('the data do not tell these models apart');
+    expect(plain(pairs[0]!.text)).toContain('the data do not tell these models apart');
   });
 
   it('gives the ratios of S and T and the difference of the misfits', () => {
@@ -100,8 +119,8 @@ describe('compareFits', () => {
     const [pair] = compareFits([BASE, worse]).pairs;
     expect(pair).toMatchObject({ sameLayerCount: false, totalConductanceRatio: null });
     expect(pair!.chi2PerReadingDifference).toBeCloseTo(worse.chi2PerReading - BASE.chi2PerReading, 12);
-    expect(pair!.text).toContain('The models have 2 and 1 beds');
-    expect(pair!.text).toContain('The first fits closer');
+    expect(plain(pair!.text)).toContain('The models have 2 and 1 beds');
+    expect(plain(pair!.text)).toContain('The first fits closer');
     expect(pair!.text).not.toContain('do not tell these models apart');
     expect(compareFits([BASE, worse], ['Run C', 'Run A']).pairs[0]!.text).toContain('Run C fits closer');
     const thicker = compareFits([BASE, fitOf({ resistivity: [100, 20], thickness: [10] })]).pairs[0]!;

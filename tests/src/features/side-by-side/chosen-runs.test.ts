@@ -2,13 +2,17 @@ import { expect, it } from 'vitest';
 import type { RunSummary } from '../../../../server/contract/runs';
 import { baseOf, chosenRuns, searchOf, withRun } from '../../../../src/features/side-by-side/chosen-runs';
 
-const known = new Set(['a', 'b', 'c', 'd', 'e', 'f', 'g']);
+const known = ['a', 'b', 'c', 'd', 'e', 'f', 'g'];
 const read = (text: string) => chosenRuns(new URLSearchParams(text), known);
 
 it('reads known runs from the address, each once, six at most', () => {
   expect(read('runs=b,x,a,b').runIds).toEqual(['b', 'a']);
   expect(read('runs=a,b,c,d,e,f,g').runIds).toHaveLength(6);
-  expect(read('').runIds).toEqual([]);
+});
+
+it('begins with the two newest where the address names none, and leaves an empty choice empty', () => {
+  expect(read('').runIds).toEqual(['a', 'b']);
+  expect(read('runs=').runIds).toEqual([]);
 });
 
 it('takes the base from the address where that names one of the chosen', () => {
