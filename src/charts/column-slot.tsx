@@ -4,6 +4,7 @@ import { BoundaryMarks, type MoveBoundary } from './boundary-marks';
 import type { GroundColumn } from './chart-data';
 import { MONO, SANS, type ChartPalette } from './chart-palette';
 import type { DepthScale } from './depth-scale';
+import { fitText } from './fit-text';
 import { GroundBar } from './ground-bar';
 import { GroundLabels, labelRoom } from './ground-labels';
 import { groundBoundaries } from './ground-profile';
@@ -37,11 +38,12 @@ export function ColumnSlot(props: ColumnSlotProps): ReactNode {
     <g {...svgRole('group', columnSentence(column))}>
       {column.letter === '' ? null : (
         <text x={x} y={-14} fontSize={13}>
+          <title>{column.name}</title>
           <tspan fontFamily={MONO} fontWeight={600} fill={runStyle(column.letter, palette).color}>
             {column.letter}
           </tspan>
           <tspan dx={8} fontFamily={SANS} fill={palette.ink}>
-            {column.name}
+            {fitText(column.name, width - 30)}
           </tspan>
         </text>
       )}

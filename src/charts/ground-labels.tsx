@@ -3,7 +3,7 @@ import { formatLength, formatResistivity, withUnit } from '../ui/format';
 import type { GroundColumn } from './chart-data';
 import { haloOf, MONO, SANS, type ChartPalette } from './chart-palette';
 import type { DepthScale } from './depth-scale';
-import { fitText, textWidth } from './fit-text';
+import { textWidth, wrapText } from './fit-text';
 import { LEAST_NUMBER_HEIGHT } from './ground-bar';
 import { groundBeds, groundBoundaries } from './ground-profile';
 import { placeLabels } from './place-labels';
@@ -28,7 +28,7 @@ export interface GroundLabelsProps {
   /** Left edge of the words; the bar ends at `barEnd`. */
   x: number;
   barEnd: number;
-  /** Room for the words, px; longer notes are cut. */
+  /** Room for the words, px; longer notes run over several lines. */
   width: number;
   palette: ChartPalette;
 }
@@ -36,8 +36,9 @@ export interface GroundLabelsProps {
 /** Intervals of beds and boundaries beside the bar, kept apart, each tied to its place by a thin line. */
 export function GroundLabels({ column, scale, x, barEnd, width, palette }: GroundLabelsProps): ReactNode {
   const labels = groundLabels(column, scale, width);
-  const linesOf = (label: GroundLabel) => label.strong.length + (label.note ? 1 : 0);
-  const heights = labels.map((label) => linesOf(label) * LINE + GAP);
+  const notes = labels.map(({ note }) => (note ? wrapText(note, width) : []));
+  const lines = labels.map(({ strong }, index) => strong.length + (notes[index]?.length ?? 0));
+  const heights = lines.map((count) => count * LINE + GAP);
   const middles = placeLabels(
     labels.map((label, index) => ({ y: label.y, height: heights[index] ?? LINE })),
     -8,
@@ -53,7 +54,7 @@ export function GroundLabels({ column, scale, x, barEnd, width, palette }: Groun
     <g aria-hidden>
       {labels.map((label, index) => {
         const middle = middles[index] ?? label.y;
-        const first = middle - ((linesOf(label) - 1) * LINE) / 2;
+        const first = middle - (((lines[index] ?? 1) - 1) * LINE) / 2;
         return (
           <g key={label.key}>
             {label.isThin || Math.abs(middle - label.y) > 6 ? (
@@ -77,20 +78,20 @@ export function GroundLabels({ column, scale, x, barEnd, width, palette }: Groun
                 {words}
               </text>
             ))}
-            {label.note ? (
+            {notes[index]?.map((words, line) => (
               <text
+                key={line}
                 x={x}
-                y={first + label.strong.length * LINE}
+                y={first + (label.strong.length + line) * LINE}
                 dy="0.35em"
                 fontSize={12}
                 fontFamily={SANS}
                 fill={palette.muted}
                 {...haloOf(palette)}
               >
-                {fitText(label.note, width)}
-                <title>{label.note}</title>
+                {words}
               </text>
-            ) : null}
+            ))}
           </g>
         );
       })}

@@ -32,7 +32,7 @@ export interface SoundingCurveInput extends CurveContent {
 
 /** Empty room that a curve may have on both sides together, decades. */
 const SPARE_DECADES_DOWN = 0.5;
-const SPARE_DECADES_ACROSS = 0.3;
+const SPARE_DECADES_ACROSS = 0.8;
 /** A drawing is not made smaller than this to save room, px. */
 const LEAST_SIDE = 260;
 

@@ -21,7 +21,7 @@ export interface SoundingCurveProps {
   note?: string;
   /** Name of the sounding, for file names. */
   subject?: string;
-  /** Greatest height of the drawing, px; a narrow one is lower. Two thirds of the window unless given. */
+  /** Greatest height of the drawing, px; a narrow one is lower. Three quarters of the window unless given. */
   maxHeight?: number;
   className?: string;
   /** The reading that is walked to or pressed, by its index. */
@@ -106,7 +106,7 @@ export function SoundingCurve(props: SoundingCurveProps) {
   );
 }
 
-const tallest = () => Math.max(420, Math.round(window.innerHeight * 0.66));
+const tallest = () => Math.max(420, Math.round(window.innerHeight * 0.75));
 
 interface CurveReadoutProps {
   reading: CurveReading | undefined;

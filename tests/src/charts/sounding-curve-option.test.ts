@@ -104,7 +104,7 @@ describe('axes', () => {
     const low = curveSize({ readings, lines }, 1600, 480);
     expect(low.height).toBe(480);
     const axes = soundingAxes({ readings, lines }, curveLayout(low.width, low.height, { hasStrip: true }));
-    expect(axes.x.max - axes.x.min).toBeLessThan(Math.log10(300 / 1.5) + 0.31);
+    expect(axes.x.max - axes.x.min).toBeLessThan(Math.log10(300 / 1.5) + 0.81);
   });
 
   test('drawings that share their axes have the same', () => {
