@@ -1,5 +1,6 @@
 import { exp } from '../math/exponential';
 import { log } from '../math/logarithm';
+import { amount } from '../three-digits';
 import type { DerivedQuantity } from './derived-quantity';
 import { requireValue } from './require-value';
 
@@ -110,7 +111,7 @@ export function archieCautions(
   ];
   if (bulkOhmM !== null && waterOhmM !== null && bulkOhmM < a * waterOhmM)
     cautions.push(
-      `The ground (${bulkOhmM.toPrecision(3)} Ω·m) is more conductive than its water alone allows (a·ρ_w = ${(a * waterOhmM).toPrecision(3)} Ω·m): it holds clay or another conductor, or another water.`,
+      `The ground (${amount(bulkOhmM, 'Ω·m')}) is more conductive than its water alone allows (a·ρ_w = ${amount(a * waterOhmM, 'Ω·m')}): it holds clay or another conductor, or another water.`,
     );
   if (outside(a, USUAL_A))
     cautions.push(`a = ${a} lies outside of the usual ${USUAL_A[0]} to ${USUAL_A[1]}.`);

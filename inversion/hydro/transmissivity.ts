@@ -2,6 +2,7 @@ import { InversionError } from '../inversion-error';
 import { exp } from '../math/exponential';
 import { log } from '../math/logarithm';
 import { studentChance, studentPoint } from '../uncertainty/student-t';
+import { threeDigits } from '../three-digits';
 import { requireValue } from './require-value';
 
 /** A pumped well of the survey and the aquifer under the sounding beside it. */
@@ -143,7 +144,7 @@ export function transmissivity(
       ...calibration.cautions,
       ...(beyond
         ? [
-            `The aquifer value ${aquifer.toPrecision(3)} lies outside of what the wells calibrate (${calibrated.map((value) => value.toPrecision(3)).join(' to ')}).`,
+            `The aquifer value ${threeDigits(aquifer)} lies outside of what the wells calibrate (${calibrated.map(threeDigits).join(' to ')}).`,
           ]
         : []),
     ],

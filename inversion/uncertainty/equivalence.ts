@@ -1,6 +1,6 @@
 import { TOLERANCES } from '../tolerances';
 import { hasCells } from '../fit/smooth/has-cells';
-import { amount, threeDigits } from '../three-digits';
+import { amount, threeDigits, timesOrDivided } from '../three-digits';
 import type { FitResult, Interval } from '../types';
 
 /** One thing the data cannot tell, or can tell only in combination. */
@@ -18,15 +18,6 @@ export interface DoubtItem {
 
 /** A quantity with a 68 % factor from here on is not known by the readings (Auken & Christiansen 2004; from memory). */
 const UNKNOWN_FACTOR = 2;
-/** Up to here a factor reads as a percentage either way. */
-const NARROW_FACTOR = 1.2;
-
-function range(factor: number): string {
-  return factor <= NARROW_FACTOR
-    ? `\u00a0±\u00a0${(100 * (factor - 1)).toPrecision(2)}\u00a0%`
-    : `, times or divided by ${factor.toPrecision(3)}`;
-}
-
 /** Where neither value of a bed is looser than this, nothing is left to say of their product or ratio. */
 const SETTLED_FACTOR = 1.2;
 
@@ -70,7 +61,7 @@ function equivalenceOf(result: FitResult, bed: number): DoubtItem | null {
     bed,
     kind: conductive ? 'conductance' : 'resistance',
     text: known
-      ? `Bed ${bed + 1} is better known by ${symbol}\u00a0=\u00a0${amount(value, unit)}${range(factor)} (68\u00a0%) than by its thickness or its resistivity: a thicker bed goes with a ${conductive ? 'higher' : 'lower'} resistivity. ${tiedRanges(result, bed)}`
+      ? `Bed ${bed + 1} is better known by ${symbol}\u00a0=\u00a0${amount(value, unit)} ${timesOrDivided(factor)} (68\u00a0%) than by its thickness or its resistivity: a thicker bed goes with a ${conductive ? 'higher' : 'lower'} resistivity. ${tiedRanges(result, bed)}`
       : `Of bed ${bed + 1} the readings tell neither the thickness nor the resistivity, and ${symbol} not within a factor of 2: ${amount(value, unit)} is one of many values that fit. ${tiedRanges(result, bed)}`,
     value,
     unit,
@@ -89,7 +80,7 @@ function suppressionOf(result: FitResult, bed: number): DoubtItem | null {
   const fewer = result.oneFewer?.withinNoise === true ? result.oneFewer : null;
   if (!loose && !fewer) return null;
   const reason = fewer
-    ? `${fewer.layers} ${fewer.layers === 1 ? 'bed' : 'beds'} already explain the readings within their errors (χ²/N ${fewer.chi2PerReading.toPrecision(3)})`
+    ? `${fewer.layers} ${fewer.layers === 1 ? 'bed' : 'beds'} already explain the readings within their errors (χ²/N\u00a0${threeDigits(fewer.chi2PerReading)})`
     : 'the readings do not limit it';
   return {
     bed,

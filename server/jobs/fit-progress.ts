@@ -1,3 +1,4 @@
+import { threeDigits } from '../../inversion/three-digits';
 import type { FitProgress } from '../../inversion/types';
 import type { FitSettings } from '../contract/fit';
 
@@ -20,7 +21,7 @@ export function progressReport(
 ): ProgressReport {
   const { start, starts, iteration } = progress;
   const misfit = Number.isFinite(progress.chi2PerReading)
-    ? `, χ² per reading ${progress.chi2PerReading.toPrecision(3)}`
+    ? `, χ²/N\u00a0${threeDigits(progress.chi2PerReading)}`
     : '';
   if (kind !== 'layered')
     return {

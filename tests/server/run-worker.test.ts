@@ -76,7 +76,7 @@ describe('workers on one database', { timeout: 200_000 }, () => {
     const asked = await ask(soundingId, LONG);
     expect(asked.state).toBe('queued');
     const running = await until(asked.id, isRunning);
-    expect(running.progressText).toMatch(/^\d beds?, start \d+ of \d+, χ² per reading /);
+    expect(running.progressText).toMatch(/^\d beds?, start \d+ of \d+, χ²\/N\u00a0/);
     const finished = await until(asked.id, hasEnded);
     expect(finished).toMatchObject({ state: 'finished', fromCache: false, progress: 1, errorMessage: null });
     expect(finished.result?.layerCounts).not.toBeNull();

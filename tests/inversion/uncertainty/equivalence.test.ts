@@ -66,16 +66,16 @@ describe('describeDoubt', () => {
     expect(kinds(-0.94)).not.toContain('resistance');
   });
 
-  it('calls S known only where its own factor is below 2, and gives a wide one as a factor', () => {
+  it('calls S known only where its own factor is below 2, and gives that factor', () => {
     const fit = fitOf({ resistivity: [100, 5, 500], thickness: [10, 1.5] });
     const words = (factor: number | null) =>
       describeDoubt({ ...fit, darZarrouk: { ...fit.darZarrouk, conductanceFactor: [1.1, factor] } })
         .find((item) => item.kind === 'conductance')!
         .text.replaceAll('\u00a0', ' ');
     expect(words(1.041)).toContain(
-      'is better known by S = h/ρ = 0.300 S ± 4.1 % (68 %) than by its thickness',
+      'is better known by S = h/ρ = 0.300 S ×÷ 1.04 (68 %) than by its thickness',
     );
-    expect(words(1.7)).toContain('is better known by S = h/ρ = 0.300 S, times or divided by 1.70 (68 %)');
+    expect(words(1.7)).toContain('is better known by S = h/ρ = 0.300 S ×÷ 1.70 (68 %)');
     for (const factor of [2, null])
       expect(words(factor)).toContain(
         'Of bed 2 the readings tell neither the thickness nor the resistivity, and S = h/ρ not within a factor of 2: ' +
