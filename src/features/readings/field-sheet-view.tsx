@@ -6,6 +6,7 @@ import { showToast } from '../../ui/show-toast';
 import { CheckList } from './check-list';
 import { CrewCaution } from './crew-caution';
 import type { DraftKeeper } from './draft-keeper';
+import { errorWords } from './error-words';
 import { FaultList } from './fault-list';
 import { LeftOutLines } from './left-out-lines';
 import { isBlock, readPasted } from './paste-text';
@@ -81,7 +82,7 @@ export function FieldSheetView({ sounding, fieldSheet, keeper }: FieldSheetViewP
       <SheetActions sounding={sounding} fieldSheet={fieldSheet} sheet={sheet} keeper={keeper} />
       <CrewCaution />
       <SheetNotices fieldSheet={fieldSheet} sheet={sheet} readOnly={readOnly} />
-      <div className="grid items-start gap-x-6 gap-y-6 xl:grid-cols-[minmax(0,1fr)_24rem] 2xl:grid-cols-[minmax(0,1fr)_minmax(24rem,36%)] 2xl:gap-x-8">
+      <div className="grid items-start gap-x-6 gap-y-6 xl:grid-cols-[minmax(0,1fr)_20rem] 2xl:grid-cols-[minmax(0,1fr)_minmax(24rem,36%)] 2xl:gap-x-8">
         {/* The keys of undo belong to the sheet as a whole, not to the one cell that has the cursor. */}
         <div className="flex min-w-0 flex-col gap-3" onKeyDownCapture={onKeyDown}>
           {readOnly ? null : (
@@ -100,6 +101,12 @@ export function FieldSheetView({ sounding, fieldSheet, keeper }: FieldSheetViewP
             onPaste={paste}
             onFocusRow={setCurrentRow}
           />
+          <p className="text-sm text-muted">
+            {errorWords(
+              readings.map(({ reading }) => reading),
+              sounding.errorFloor,
+            )}
+          </p>
           <FaultList
             faults={faults}
             onJump={({ row, column }) =>

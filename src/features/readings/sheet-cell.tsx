@@ -47,7 +47,7 @@ export function SheetCell(props: SheetCellProps) {
         onPaste={(event) => props.onPaste(row, column, event)}
         onFocus={() => props.onFocusRow(row)}
         className={classNames(
-          'block h-8 w-full min-w-0 bg-transparent px-2 text-ellipsis outline-none touch:h-11',
+          'block h-8 w-full min-w-0 bg-transparent px-1.5 text-ellipsis outline-none touch:h-11',
           'focus:bg-sheet focus:inset-ring-2 focus:inset-ring-water',
           fault && 'text-rust inset-ring inset-ring-rust',
           alignLeft ? '' : 'figure text-right',

@@ -63,7 +63,7 @@ export function SheetGrid({ ref, ...props }: SheetGridProps) {
   return (
     <div
       ref={frame}
-      className="max-h-[70vh] min-h-64 scroll-pt-12 scroll-pr-18 scroll-pl-11 overflow-auto border border-rule bg-sheet"
+      className="max-h-[70vh] min-h-64 scroll-pt-12 scroll-pr-16 scroll-pl-11 overflow-auto border border-rule bg-sheet"
     >
       <table aria-label="Readings" aria-rowcount={rows.length + 1} className="w-full border-collapse">
         <GridHead columns={columns} spreadType={spreadType} units={units} />
@@ -111,9 +111,9 @@ const Spacer = ({ height }: { height: number }) =>
 /** What the sheet computes stands after what is written, on another ground; where there is no room ρa stays at the edge. */
 const DerivedHeads = () => (
   <>
-    <HeadCell name="K" unit="m" className="min-w-17 bg-sunken text-right" />
-    <HeadCell name="ρa" unit="Ω·m" className="sticky right-0 z-10 min-w-17 bg-sunken text-right" />
-    <HeadCell name="total" unit="error" className="min-w-15 bg-sunken text-right" />
+    <HeadCell name="K" unit="m" className="min-w-15 bg-sunken text-right" />
+    <HeadCell name="ρa" unit="Ω·m" className="sticky right-0 z-10 min-w-15 bg-sunken text-right" />
+    <HeadCell name="total" unit="error" className="min-w-14 bg-sunken text-right" />
   </>
 );
 
@@ -137,7 +137,9 @@ function GridHead({ columns, spreadType, units }: GridHeadProps) {
               name={gridColumnName(column, spreadType)}
               unit={gridColumnUnit(column, units)}
               className={
-                isTextColumn(column) ? 'min-w-28 text-left 2xl:min-w-36' : 'min-w-20 text-right 2xl:min-w-22'
+                isTextColumn(column)
+                  ? 'min-w-19 text-left sm:min-w-23 3xl:min-w-36'
+                  : 'min-w-16 text-right 3xl:min-w-22'
               }
             />
           </Fragment>
@@ -151,10 +153,7 @@ function HeadCell({ name, unit, className }: { name: string; unit: string; class
   return (
     <th
       scope="col"
-      className={classNames(
-        'border-l border-rule px-2 py-1 text-sm leading-tight whitespace-nowrap',
-        className,
-      )}
+      className={classNames('border-l border-rule px-1.5 py-1 text-sm leading-tight', className)}
     >
       {name}
       <span className="block font-normal text-muted">{unit === '' ? '\u00a0' : unit}</span>

@@ -114,7 +114,7 @@ function ExcludedCell(props: SheetRowViewProps & { fault: SheetFault | undefined
 
 function DerivedCells({ line }: { line: SheetLine }) {
   const derived = line.parsed?.derived;
-  const cell = 'figure border-l border-rule bg-sunken px-2 text-right whitespace-nowrap';
+  const cell = 'figure border-l border-rule bg-sunken px-1.5 text-right whitespace-nowrap';
   return (
     <>
       <td className={cell}>

@@ -83,15 +83,16 @@ function boxesOf(mark: MarkOnPage, at: LabelPlace): Box[] {
 
 /**
  * A place for each name that covers no mark and no other name; null where there is none. The marks nearest to another, as
- * a sounding at a borehole, choose first: they have the fewest places.
+ * a sounding at a borehole, choose first: they have the fewest places. Names far from their marks are placed on request.
  */
-export function placeLabels(marks: readonly MarkOnPage[]): (LabelPlace | null)[] {
+export function placeLabels(marks: readonly MarkOnPage[], mayBeFar = true): (LabelPlace | null)[] {
+  const allowed = PLACES.filter(({ isFar }) => mayBeFar || !isFar);
   const taken = marks.map(markBox);
   const places = marks.map((): LabelPlace | null => null);
   const room = marks.map((mark) => roomAround(mark, marks));
   for (const index of [...marks.keys()].toSorted((a, b) => room[a]! - room[b]!)) {
     const mark = marks[index]!;
-    const free = PLACES.find((candidate) =>
+    const free = allowed.find((candidate) =>
       boxesOf(mark, candidate).every((box) => !taken.some((other) => overlaps(box, other))),
     );
     if (free === undefined) continue;

@@ -19,6 +19,17 @@ export interface PlanBox {
 const LEAST_SPAN_M = 10;
 const SCALE_BAR_SHARE = 0.3;
 
+const HEIGHT_PX = { least: 300, most: 620 };
+const USUAL_SHAPE = 0.62;
+
+/** Tall enough that the points fill the width, within what a screen holds: a narrow plan needs every pixel of it. */
+export function planHeight(points: readonly PlanPoint[], { width, margin }: Omit<PlanBox, 'height'>): number {
+  const span = (values: readonly number[]) => Math.max(LEAST_SPAN_M, most(values) - least(values));
+  const shape = span(points.map(({ yM }) => yM)) / span(points.map(({ xM }) => xM));
+  const wanted = Math.max(width * USUAL_SHAPE, shape * (width - 2 * margin) + 2 * margin);
+  return Math.round(Math.min(HEIGHT_PX.most, Math.max(HEIGHT_PX.least, wanted)));
+}
+
 /** Fits the points into the box with one scale for both axes, centred. */
 export function planLayout(points: readonly PlanPoint[], box: PlanBox): PlanLayout {
   const xs = points.map((point) => point.xM);

@@ -2,7 +2,7 @@ import { useMemo, useRef, useState, type KeyboardEvent } from 'react';
 import { useBoxSize } from '../../charts/use-box-size';
 import { withUnit } from '../../ui/format';
 import { placeLabels } from './plan-labels';
-import { alongLine, planLayout } from './plan-layout';
+import { alongLine, planHeight, planLayout } from './plan-layout';
 import { PlanMark } from './plan-mark';
 import type { PlanItem } from './plan-items';
 
@@ -13,6 +13,8 @@ interface SurveyPlanProps {
 }
 
 const MARGIN = 48;
+/** On a narrower plan, lines that lead to names crowd it more than the names tell; a touch shows them. */
+const ROOM_FOR_FAR_NAMES_PX = 560;
 
 /** Positions on one scale for both axes. One tab stop; the arrow keys go from mark to mark. */
 export function SurveyPlan({ items, upward }: SurveyPlanProps) {
@@ -20,7 +22,7 @@ export function SurveyPlan({ items, upward }: SurveyPlanProps) {
   const { width } = size;
   const [current, setCurrent] = useState(0);
   const drawing = useRef<SVGSVGElement>(null);
-  const height = Math.round(Math.min(620, Math.max(300, width * 0.62)));
+  const height = planHeight(items, { width, margin: MARGIN });
   const layout = useMemo(
     () => (width === 0 ? null : planLayout(items, { width, height, margin: MARGIN })),
     [items, width, height],
@@ -35,7 +37,10 @@ export function SurveyPlan({ items, upward }: SurveyPlanProps) {
   };
   if (layout === null) return <nav ref={frame} aria-label="Plan" style={{ height }} />;
   const placed = items.map((item) => ({ item, ...layout.toPage(item) }));
-  const places = placeLabels(placed.map(({ item, x, y }) => ({ name: item.name, x, y })));
+  const places = placeLabels(
+    placed.map(({ item, x, y }) => ({ name: item.name, x, y })),
+    width >= ROOM_FOR_FAR_NAMES_PX,
+  );
   return (
     <nav ref={frame} aria-label={`Plan of ${items.length} positions, ${upward} upwards`}>
       <svg ref={drawing} width={width} height={height} className="block border border-rule bg-sheet">

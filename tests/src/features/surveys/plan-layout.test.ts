@@ -1,6 +1,6 @@
 import { describe, expect, it } from 'vitest';
 import { placeLabels } from '../../../../src/features/surveys/plan-labels';
-import { alongLine, planLayout, roundDown } from '../../../../src/features/surveys/plan-layout';
+import { alongLine, planHeight, planLayout, roundDown } from '../../../../src/features/surveys/plan-layout';
 import { progressSteps } from '../../../../src/features/surveys/progress-steps';
 import { waitingQuestions } from '../../../../src/features/surveys/waiting-questions';
 
@@ -22,6 +22,17 @@ describe('the plan', () => {
     const { toPage, scaleBar } = planLayout([{ xM: 5, yM: 5 }], box);
     expect(toPage({ xM: 5, yM: 5 })).toEqual({ x: 200, y: 150 });
     expect(scaleBar.lengthM).toBe(2);
+  });
+
+  it('is as tall as its points need to fill the width, within limits', () => {
+    const corner = (xM: number, yM: number) => [
+      { xM: 0, yM: 0 },
+      { xM, yM },
+    ];
+    expect(planHeight(corner(100, 150), { width: 358, margin: 48 })).toBe(1.5 * 262 + 96);
+    expect(planHeight(corner(1000, 1), { width: 358, margin: 48 })).toBe(300);
+    expect(planHeight(corner(1000, 1), { width: 800, margin: 48 })).toBe(496);
+    expect(planHeight(corner(1, 1000), { width: 800, margin: 48 })).toBe(620);
   });
 
   it('has a scale bar of a round length that is drawn to scale', () => {
@@ -85,6 +96,12 @@ describe('the plan', () => {
     const places = placeLabels([...line, { x: 52, y: 98, name: 'BH-1' }]);
     expect(places.some((found) => found === null)).toBe(true);
     expect([places[4], places[9]].map((found) => found?.isFar)).toEqual([false, false]);
+  });
+
+  it('places no far name where none is wanted', () => {
+    const line = [0, 1, 2, 3, 4].map((i) => ({ x: 100 + 15 * i, y: 100, name: `S-0${i}` }));
+    const far = (mayBeFar: boolean) => placeLabels(line, mayBeFar).filter((found) => found?.isFar).length;
+    expect([far(true) > 0, far(false)]).toEqual([true, 0]);
   });
 
   it('leads to no far name through a nearer one', () => {
