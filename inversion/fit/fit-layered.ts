@@ -66,7 +66,8 @@ export function fitLayered(
       userStart: settings.start?.resistivity.length === layers ? settings.start : undefined,
       quick,
       fewer: scouts[layers - 2]?.logEarth,
-      grown: beyondNoise(fits) ? fits.at(-1)!.best.parameters.subarray(0, 2 * layers - 3) : undefined,
+      below: fits.at(-1)?.best.parameters,
+      beyondNoise: beyondNoise(fits),
       onProgress: options.onProgress,
     });
     const fitted = ({ parameters, chi2 }: FittedModel): FittedModel => ({

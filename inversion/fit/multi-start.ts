@@ -5,7 +5,14 @@ import { Z95 } from '../uncertainty/parameter-doubt';
 import type { LayeredProblem } from './layered-problem';
 import { minimise, POLISH_DAMPING, type LeastSquaresOutcome } from './levenberg-marquardt';
 import { createDescent, type DescentOptions } from './search-descent';
-import { evenStart, logEarth, randomStart, splitStarts, type SoundingCurve } from './starting-models';
+import {
+  evenStart,
+  logEarth,
+  randomStart,
+  sameWithOneMore,
+  splitStarts,
+  type SoundingCurve,
+} from './starting-models';
 
 /** How hard a search looks. */
 export interface SearchEffort {
@@ -54,8 +61,10 @@ export interface MultiStartOptions {
   readonly quick?: LayeredProblem | undefined;
   /** ln parameters of a model with one layer fewer, whose layers are split in turn */
   readonly fewer?: Float64Array | undefined;
-  /** set where the readings do not ask for so many layers: ln parameters of the best model with one layer fewer, which then lead the search */
-  readonly grown?: Float64Array | undefined;
+  /** all parameters of the best model with one layer fewer: the search ends no worse than that */
+  readonly below?: Float64Array | undefined;
+  /** true where the readings do not ask for so many layers: what `below` splits into then leads, and little else is tried */
+  readonly beyondNoise?: boolean | undefined;
   readonly onProgress?: ((progress: FitProgress) => void) | undefined;
 }
 
@@ -149,21 +158,26 @@ function search(
   return { best, ends, iterations };
 }
 
-/** The ends of a search judged by the exact problem, and the best of them carried to convergence there. */
+/** The ends of a search, and a model it must not end above, judged by the exact problem; the best is carried to convergence there. */
 function polish(
   layered: LayeredProblem,
   quick: LayeredProblem,
   { ends, iterations }: Found,
+  least: Float64Array | undefined,
   starts: number,
   onProgress: MultiStartOptions['onProgress'],
 ): MultiStartOutcome {
   const { problem } = layered;
   const residual = new Float64Array(problem.residuals);
-  const judged = ends
-    .map(({ start, abandoned, outcome: { parameters, damping } }) => {
-      return { start, abandoned, parameters, damping, chi2: problem.evaluate(parameters, residual) };
-    })
-    .sort((a, b) => a.chi2 - b.chi2);
+  const judge = (start: number, parameters: Float64Array, damping: number, abandoned = false) => {
+    return { start, parameters, damping, abandoned, chi2: problem.evaluate(parameters, residual) };
+  };
+  const judged = [
+    ...ends.map(({ start, abandoned, outcome }) =>
+      judge(start, outcome.parameters, outcome.damping, abandoned),
+    ),
+    ...(least ? [judge(0, least, POLISH_DAMPING, true)] : []),
+  ].sort((a, b) => a.chi2 - b.chi2);
   const [best, ...others] = judged;
   const tell = teller(layered, starts, onProgress)(best!.start);
   tell(0, best!.chi2);
@@ -172,7 +186,9 @@ function polish(
     promise: QUICK_PROMISE,
     onIteration: tell,
   });
-  const outcome = minimise(problem, near.parameters, {
+  // where the quick operator strays, its descent is not followed
+  const follow = problem.evaluate(near.parameters, residual) <= best!.chi2;
+  const outcome = minimise(problem, follow ? near.parameters : best!.parameters, {
     initialDamping: POLISH_DAMPING,
     onIteration: tell,
   });
@@ -197,15 +213,18 @@ export function multiStart(
   options: MultiStartOptions = {},
 ): MultiStartOutcome {
   const quick = options.quick ?? layered;
+  const below = options.below?.subarray(0, 2 * layered.layers - 3);
   const queue = [
     ...(options.userStart ? [logEarth(options.userStart)] : []),
     evenStart(curve, layered.layers),
-    ...[options.fewer, options.grown].flatMap((model) => (model ? splitStarts(model, curve) : [])),
+    ...(options.fewer ? splitStarts(options.fewer, curve) : []),
+    ...(below && options.beyondNoise ? splitStarts(below, curve) : []),
   ].map(layered.startFrom);
-  const effort = options.grown ? LIGHT : FULL;
+  const effort = options.beyondNoise ? LIGHT : FULL;
   queue.push(...screenedStarts(quick, curve, random, effort));
   const found = search(quick, queue, effort, options.onProgress);
-  return polish(layered, quick, found, queue.length, options.onProgress);
+  const same = below && [...sameWithOneMore(below, curve), ...options.below!.subarray(below.length)];
+  return polish(layered, quick, found, same && layered.restrict(same), queue.length, options.onProgress);
 }
 
 /** A quick fit that serves to start the next layer count. */

@@ -103,17 +103,29 @@ const SPLIT_CONTRASTS = [0.5, -0.5] as const;
  */
 export function splitStarts(parameters: Float64Array, curve: SoundingCurve): Float64Array[] {
   const layers = (parameters.length + 1) / 2;
+  return Array.from({ length: layers }, (_, i) => i).flatMap((i) =>
+    SPLIT_CONTRASTS.map((contrast) => splitLayer(parameters, curve, i, contrast)),
+  );
+}
+
+/** The same ground with one layer more: its half-space split in two alike. */
+export const sameWithOneMore = (parameters: Float64Array, curve: SoundingCurve): Float64Array =>
+  splitLayer(parameters, curve, (parameters.length - 1) / 2, 0);
+
+function splitLayer(
+  parameters: Float64Array,
+  curve: SoundingCurve,
+  i: number,
+  contrast: number,
+): Float64Array {
+  const layers = (parameters.length + 1) / 2;
   const rho = Array.from(parameters.subarray(0, layers));
   const thickness = Array.from(parameters.subarray(layers));
   const depth = thickness.reduce((sum, h) => sum + exp(h), 0);
   const below = depth > 0 ? log(depth) : (depthRange(curve).low + depthRange(curve).high) / 2;
-  return rho.flatMap((value, i) =>
-    SPLIT_CONTRASTS.map((contrast) => {
-      const halves = i < layers - 1 ? [thickness[i]! - Math.LN2, thickness[i]! - Math.LN2] : [below];
-      return Float64Array.from([
-        ...rho.toSpliced(i, 1, value + contrast, value - contrast),
-        ...thickness.toSpliced(i, 1, ...halves),
-      ]);
-    }),
-  );
+  const halves = i < layers - 1 ? [thickness[i]! - Math.LN2, thickness[i]! - Math.LN2] : [below];
+  return Float64Array.from([
+    ...rho.toSpliced(i, 1, rho[i]! + contrast, rho[i]! - contrast),
+    ...thickness.toSpliced(i, 1, ...halves),
+  ]);
 }

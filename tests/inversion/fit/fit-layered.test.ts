@@ -283,6 +283,18 @@ describe('fitLayered with layers "auto"', () => {
     });
   });
 
+  it('fits no count worse than the one below, however little is tried for it', () => {
+    const rises = ['211-6', '211-8'].flatMap((id) => {
+      const readings = readingsOf(inversionCases().find((one) => one.id === id)!);
+      const counts = fitLayered(readings, layered('auto')).layerCounts!;
+      // the chosen one is moderated
+      return counts.filter(
+        (count, i) => i > 0 && !counts[i - 1]!.chosen && count.chi2PerReading > counts[i - 1]!.chi2PerReading,
+      );
+    });
+    expect(rises).toEqual([]);
+  });
+
   it('gives the chosen count the same bits as a fit that asks for it', () => {
     const readings = sounding(H_TYPE, WENNER, 0.03);
     const auto = fitLayered(readings, layered('auto'));
