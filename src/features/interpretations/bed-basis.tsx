@@ -1,5 +1,6 @@
 import type { FitResult } from '../../../server/contract/fit';
 import { BedSwatch } from '../../runs/bed-swatch';
+import { HELD } from '../../ui/format';
 import { bedNumbers } from './bed-numbers';
 
 /** What stands fixed about a bed: its colour, value, depths and their ranges. */
@@ -11,15 +12,21 @@ export function BedBasis({ result, layerIndex }: { result: FitResult; layerIndex
         <BedSwatch resistivity={bed.resistivityOhmM} /> Bed {layerIndex + 1}
       </p>
       <p className="figure whitespace-nowrap">{bed.resistivity}</p>
-      <p className="text-sm text-muted">
-        95 % <span className="figure whitespace-nowrap">{bed.resistivityRange}</span>
-      </p>
+      <Range range={bed.resistivityRange} />
       <p className="figure mt-1 whitespace-nowrap">{bed.place}</p>
-      {bed.baseRange === null ? null : (
-        <p className="text-sm text-muted">
-          base, 95 % <span className="figure whitespace-nowrap">{bed.baseRange}</span>
-        </p>
-      )}
+      {bed.baseRange === null ? null : <Range of="base" range={bed.baseRange} />}
     </div>
+  );
+}
+
+/** A held value has no range. */
+function Range({ of, range }: { of?: string; range: string }) {
+  const what = range === HELD ? '' : '95\u00a0% ';
+  return (
+    <p className="text-sm text-muted">
+      {of === undefined ? '' : `${of}, `}
+      {what}
+      <span className="figure whitespace-nowrap">{range}</span>
+    </p>
   );
 }

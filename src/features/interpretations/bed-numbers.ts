@@ -27,9 +27,6 @@ export function bedNumbers(result: FitResult, layerIndex: number): BedNumbers {
       base === undefined
         ? `below ${metres(formatLength(top))}`
         : `${formatLength(top)} to ${metres(formatLength(base))}`,
-    baseRange:
-      base === undefined
-        ? null
-        : formatRange(result.intervals.depth[layerIndex] ?? [null, null]),
+    baseRange: base === undefined ? null : formatRange(result.intervals.depth[layerIndex] ?? [null, null]),
   };
 }

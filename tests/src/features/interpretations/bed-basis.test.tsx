@@ -1,0 +1,27 @@
+import { renderToStaticMarkup } from 'react-dom/server';
+import { expect, it } from 'vitest';
+import type { FitResult } from '../../../../server/contract/fit';
+import { BedBasis } from '../../../../src/features/interpretations/bed-basis';
+
+const result = {
+  earth: { resistivity: [100, 20], thickness: [5] },
+  intervals: {
+    resistivity: [
+      [100, 100],
+      [18, 22],
+    ],
+    thickness: [[4, 6]],
+    depth: [[4, 6]],
+  },
+} as unknown as FitResult;
+
+const textOf = (layerIndex: number): string =>
+  renderToStaticMarkup(<BedBasis result={result} layerIndex={layerIndex} />)
+    .replace(/<\/p>/g, '|')
+    .replace(/<[^>]+>/g, '')
+    .replace(/\u00a0/g, ' ');
+
+it('says of a held value that it is held, and of any other its 95 % range', () => {
+  expect(textOf(0)).toBe(' Bed 1|100 Ω·m|held|0 to 5.00 m|base, 95 % 4.00–6.00|');
+  expect(textOf(1)).toBe(' Bed 2|20.0 Ω·m|95 % 18.0–22.0|below 5.00 m|');
+});
