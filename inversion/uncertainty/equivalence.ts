@@ -7,16 +7,16 @@ import type { FitResult, Interval } from '../types';
 export interface DoubtItem {
   /** bed counted from 0 at the surface; null = the whole model */
   bed: number | null;
-  kind: 'conductance' | 'resistance' | 'suppression' | 'resistivity' | 'thickness';
+  kind: 'held' | 'conductance' | 'resistance' | 'suppression' | 'resistivity' | 'thickness';
   text: string;
-  /** the quantity that is known, or the value that is not */
+  /** the quantity that is known, or the value that is not; of several held values the first */
   value: number | null;
   unit: 'S' | 'Ω·m²' | 'Ω·m' | 'm';
-  /** 68 % factor of the value; null = not determined */
+  /** factor of the value, as in the result; null = not determined */
   factor: number | null;
 }
 
-/** A quantity with a 68 % factor from here on is not known by the readings (Auken & Christiansen 2004; from memory). */
+/** A quantity with a factor from here on is not known by the readings (Auken & Christiansen 2004; from memory). */
 const UNKNOWN_FACTOR = 2;
 /** Where neither value of a bed is looser than this, nothing is left to say of their product or ratio. */
 const SETTLED_FACTOR = 1.2;
@@ -92,13 +92,33 @@ function suppressionOf(result: FitResult, bed: number): DoubtItem | null {
   };
 }
 
+const UNITS = { resistivity: 'Ω·m', thickness: 'm' } as const;
+
+/** What was held in the fit: a range of no width. */
+function heldItem({ earth, intervals }: FitResult): DoubtItem[] {
+  const held = (['resistivity', 'thickness'] as const).flatMap((kind) =>
+    earth[kind].flatMap((value, bed) => {
+      const [low, high] = intervals[kind][bed]!;
+      return low === value && high === value ? [{ kind, bed, value, unit: UNITS[kind] }] : [];
+    }),
+  );
+  const [first] = held;
+  if (!first) return [];
+  const named = held.map(({ kind, bed, value, unit }, i) => {
+    return `${i === 0 ? 'The' : 'the'} ${kind} of bed ${bed + 1}${i === 0 ? ' is held' : ''} at ${amount(value, unit)}`;
+  });
+  const last = named.length > 1 ? ` and ${named.pop()}` : '';
+  const text = `${named.join(', ')}${last}; the ranges of the others hold only if that is so.`;
+  return [{ bed: first.bed, kind: 'held', text, value: first.value, unit: first.unit, factor: 1 }];
+}
+
 function undetermined(result: FitResult, bed: number): DoubtItem[] {
   return (['resistivity', 'thickness'] as const).flatMap((kind) => {
     const value = result.earth[kind][bed];
     if (value === undefined) return [];
     const factor = result.factors[kind][bed]!;
     if (looseness(factor) < UNKNOWN_FACTOR) return [];
-    const unit = kind === 'resistivity' ? 'Ω·m' : 'm';
+    const unit = UNITS[kind];
     const words = rangeWords(result.intervals[kind][bed]!, unit);
     const text = words
       ? `The ${kind} of bed ${bed + 1} is not held within a factor of 2: ${words} fit (95\u00a0%).`
@@ -108,13 +128,13 @@ function undetermined(result: FitResult, bed: number): DoubtItem[] {
 }
 
 /**
- * What the data cannot tell, bed by bed, in plain sentences: equivalence where |correlation of ln h and ln ρ| passes 0.95
+ * What the data cannot tell, in plain sentences: first what was held and so was not asked of them; then bed by bed equivalence where |correlation of ln h and ln ρ| passes 0.95
  * (S = h/ρ when it is positive, T = hρ when negative) and the bed's own values are not settled, suppression where a middle bed
- * can go, values with a 68 % factor of 2 or more. Of cells nothing: they are no beds, and their warnings say so.
+ * can go, values with a factor of 2 or more. Of cells nothing: they are no beds, and their warnings say so.
  */
 export function describeDoubt(result: FitResult): DoubtItem[] {
   if (hasCells(result)) return [];
-  return result.earth.resistivity.flatMap((_, bed) => {
+  const beds = result.earth.resistivity.flatMap((_, bed) => {
     const equivalence = equivalenceOf(result, bed);
     const suppression = suppressionOf(result, bed);
     return [
@@ -122,4 +142,5 @@ export function describeDoubt(result: FitResult): DoubtItem[] {
       ...(suppression ? [suppression] : []),
     ];
   });
+  return [...heldItem(result), ...beds];
 }

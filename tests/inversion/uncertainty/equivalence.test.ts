@@ -4,6 +4,7 @@ import {
   describeDoubt,
   fitLayered,
   type FitResult,
+  type FitSettings,
   type Interval,
   type LayeredEarth,
 } from '../../../inversion';
@@ -14,14 +15,18 @@ const SPREADS = Array.from(
   (_, i) => ({ type: 'schlumberger', halfAB: 1.5 ** i, halfMN: 0.2 }) as const,
 );
 
-function fitOf(earth: LayeredEarth, layers: number | 'auto' = earth.resistivity.length): FitResult {
+function fitOf(
+  earth: LayeredEarth,
+  layers: number | 'auto' = earth.resistivity.length,
+  more: Partial<FitSettings> = {},
+): FitResult {
   const predicted = createForwardOperator(SPREADS).predict(earth);
   const readings = SPREADS.map((spread, i) => ({
     spread,
     apparentResistivity: predicted[i]!,
     relativeError: 0.03,
   }));
-  return fitLayered(readings, layered(layers, typeof layers === 'number' ? { start: earth } : {}));
+  return fitLayered(readings, layered(layers, typeof layers === 'number' ? { start: earth, ...more } : more));
 }
 
 const allSettled = (layers: number): FitResult['factors'] => {
@@ -33,6 +38,27 @@ const allSettled = (layers: number): FitResult['factors'] => {
 const plain = (text: string): string => text.replaceAll('\u00a0', ' ');
 
 describe('describeDoubt', () => {
+  it('names first what was held, and calls it nothing else', () => {
+    const earth = { resistivity: [100, 5, 500], thickness: [10, 1.5] };
+    const doubts = (fixed: FitSettings['fixed']) => describeDoubt(fitOf(earth, 3, { fixed }));
+    const [thickness, ...others] = doubts([{ on: 'thickness', index: 1, value: 1.5 }]);
+    expect(thickness).toMatchObject({ kind: 'held', bed: 1, value: 1.5, unit: 'm', factor: 1 });
+    expect(plain(thickness!.text)).toBe(
+      'The thickness of bed 2 is held at 1.50 m; the ranges of the others hold only if that is so.',
+    );
+    expect(others.map(({ text }) => text).join(' ')).not.toContain('thickness of bed 2');
+    const all = doubts([
+      { on: 'resistivity', index: 0, value: 100 },
+      { on: 'thickness', index: 0, value: 10 },
+      { on: 'thickness', index: 1, value: 1.5 },
+    ]);
+    expect(plain(all[0]!.text)).toBe(
+      'The resistivity of bed 1 is held at 100 Ω·m, the thickness of bed 1 at 10.0 m and the thickness of bed 2 at 1.50 m; ' +
+        'the ranges of the others hold only if that is so.',
+    );
+    expect(doubts([]).some(({ kind }) => kind === 'held')).toBe(false);
+  });
+
   it('says that a thin conductive bed is known by its conductance', () => {
     const fit = fitOf({ resistivity: [100, 5, 500], thickness: [10, 1.5] });
     const item = describeDoubt(fit).find((doubt) => doubt.kind === 'conductance')!;
