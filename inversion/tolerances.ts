@@ -20,12 +20,14 @@ export const TOLERANCES = {
   iterations: 120,
   /** A further start must lower χ² by this share to count as an improvement. */
   startImprovement: 0.05,
-  /** A 68 % factor above this says "not determined" (null). */
+  /** A factor of one standard deviation above this says "not determined" (null). */
   factorLimit: 100,
   /** |correlation of ln h and ln ρ| above this is an equivalence. */
   equivalence: 0.95,
   /** Misfit probability below this is warned of. */
   misfitProbability: 0.01,
+  /** A misfit that errors as stated would undercut with a chance below this is warned of as too small. */
+  smallMisfitProbability: 0.005,
   /** A value within this (in ln) of a bound sits on it. */
   atBound: 1e-6,
 } as const;

@@ -62,6 +62,17 @@ function improbableMisfit({ chi2, readings, freeParameters, probability }: FitWa
   ];
 }
 
+/** A misfit too good for the stated errors; a ground of cells may come down to any target. */
+function smallMisfit({ chi2, readings, settings, probability }: FitWarningInput): string[] {
+  if (settings.kind !== 'layered' || probability === null) return [];
+  const chance = 1 - probability;
+  if (chance >= TOLERANCES.smallMisfitProbability) return [];
+  const words = chance < 1e-4 ? 'less than 0.01 %' : `${(100 * chance).toPrecision(2)} %`;
+  return [
+    `χ²/N ${threeDigits(chi2 / readings.length)} is smaller than such errors would give (chance ${words}): the stated errors are probably too large, and the ranges too wide.`,
+  ];
+}
+
 function valuesAtBounds({ earth, settings, held }: FitWarningInput): string[] {
   const layers = earth.resistivity.length;
   return (['resistivity', 'thickness'] as const).flatMap((key) =>
@@ -106,7 +117,7 @@ export function fitWarnings(input: FitWarningInput): string[] {
     readings.flatMap((reading, i) => (test(reading, i) ? [i + 1] : []));
   const gradient = numbered((reading) => 'halfMN' in reading.spread && reading.spread.halfMN === null);
   const negative = numbered((_, i) => predicted[i]! <= 0);
-  const warnings = improbableMisfit(input);
+  const warnings = [...improbableMisfit(input), ...smallMisfit(input)];
   if (gradient.length > 0)
     warnings.push(
       `MN was not recorded for ${list(gradient)}: the ideal gradient (MN → 0) was used, which is off by 1 % at MN/AB = 1/10 and 4 % at 1/5.`,
