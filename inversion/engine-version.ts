@@ -1,2 +1,2 @@
 /** Semantic version of the engine; it changes whenever a result may change. */
-export const ENGINE_VERSION = '2.0.0';
+export const ENGINE_VERSION = '2.1.0';

@@ -141,7 +141,7 @@ export interface LayerCountFit {
 export interface DarZarroukSummary {
   conductanceS: number[];
   resistanceOhmM2: number[];
-  /** 68 % factors of the two above; null = not determined */
+  /** factors of the two above, as `factors` of a result; null = not determined */
   conductanceFactor: (number | null)[];
   resistanceFactor: (number | null)[];
   totalConductanceS: number;
@@ -158,9 +158,9 @@ export interface FitResult {
   predicted: number[];
   residuals: number[];
   geometricFactor: (number | null)[];
-  /** 95 %; null = unbounded */
+  /** 95 %; null = the bounds of the fit end it, not the readings */
   intervals: { resistivity: Interval[]; thickness: Interval[]; depth: Interval[] };
-  /** 68 % factors; null = not determined */
+  /** of one standard deviation: the larger of the 68 % reach and the 95 % reach to the power 1/1.96; null = not determined */
   factors: { resistivity: (number | null)[]; thickness: (number | null)[]; depth: (number | null)[] };
   correlation: (number | null)[][];
   misfitProbability: number | null;

@@ -1,7 +1,9 @@
 import type { LayeredProblem } from '../fit/layered-problem';
 import { exp } from '../math/exponential';
+import { log } from '../math/logarithm';
 import { TOLERANCES } from '../tolerances';
 import type { Interval, LayeredEarth } from '../types';
+import { agreedEnds, around, type EarthEnds } from './agreed-ends';
 import type { LogCovariance } from './covariance';
 import { profileEnds, type Asked, type Ends } from './profile-ends';
 import { depthOf, productOf, resistivityOf, thicknessOf, type Quantity } from './quantities';
@@ -27,7 +29,7 @@ export interface ParameterDoubt {
     depth: (number | null)[];
   };
   readonly correlation: (number | null)[][];
-  /** 68 % factors of S = h/ρ and T = hρ of the bounded layers */
+  /** factors of S = h/ρ and T = hρ of the bounded layers */
   readonly conductanceFactor: (number | null)[];
   readonly resistanceFactor: (number | null)[];
 }
@@ -45,14 +47,22 @@ export function basesOf(thickness: readonly number[]): number[] {
   return thickness.map((h) => (depth += h));
 }
 
-function interval({ low, high }: Ends): Interval {
-  return [low === null ? null : exp(low), high === null ? null : exp(high)];
+/** The interval of a value, which lies inside of it whatever the rounding. */
+function interval(stated: number, { low, high }: Ends): Interval {
+  return [
+    low === null ? null : Math.min(stated, exp(low)),
+    high === null ? null : Math.max(stated, exp(high)),
+  ];
 }
 
-function factor(best: number, { low, high }: Ends): number | null {
-  if (low === null || high === null) return null;
-  const reach = exp(Math.max(best - low, high - best));
-  return reach > TOLERANCES.factorLimit ? null : reach;
+function furthestOf(centre: number, { low, high }: Ends): number {
+  return low === null || high === null ? Infinity : Math.max(centre - low, high - centre);
+}
+
+/** The larger of the 68 % reach and of the 95 % reach per 1.96, as a factor. */
+function factor(centre: number, inner: Ends, outer: Ends): number | null {
+  const reach = Math.max(furthestOf(centre, inner), furthestOf(centre, outer) / Z95);
+  return reach > log(TOLERANCES.factorLimit) ? null : exp(reach);
 }
 
 function correlations({ deviation, covariance }: LogCovariance, count: number): (number | null)[][] {
@@ -69,13 +79,16 @@ function correlations({ deviation, covariance }: LogCovariance, count: number): 
 }
 
 /**
- * 95 % intervals and 68 % factors of ρ, h, the depth of each boundary, S and T, and the correlations of the ln parameters.
+ * 95 % intervals and factors of one standard deviation of ρ, h, the depth of each boundary, S and T, and the correlations of
+ * the ln parameters.
  *
  * `models` holds the best one first, then others that the readings allow. An interval is the profile-likelihood region of
- * one quantity, χ² ≤ least + 1.96² with all else refitted (+ 1 for the factors), from every model that fits so well:
- * without the others it would deny the truth where two grounds fit alike. A factor above `TOLERANCES.factorLimit` is null;
- * an end that the bounds cut off is null (unbounded); a held value gives [v, v] and factor 1. Correlations are the
- * linear ones of the best, over the 2N − 1 ln values; null for a held or unresolved one.
+ * one quantity, χ² ≤ least + 1.96² with all else refitted, from every model that fits so well: without the others it would
+ * deny the truth where two grounds fit alike. A factor is the larger of what χ² ≤ least + 1 allows and the 95 % reach to the
+ * power 1/1.96: a second valley between the two would else leave a value "well determined" beside a wide interval. One above
+ * `TOLERANCES.factorLimit`, or of an interval with an open end, is null; an end that the bounds of the fit hold is null
+ * (unbounded); a held value gives [v, v] and factor 1. Depths are no looser than the thicknesses above them allow, S and T than
+ * ρ and h. Correlations are the linear ones of the best, over the 2N − 1 ln values; null for a held or unresolved one.
  */
 export function parameterDoubt(
   models: readonly [AllowedModel, ...AllowedModel[]],
@@ -85,40 +98,61 @@ export function parameterDoubt(
   const [best, ...others] = models;
   const { resistivity, thickness } = best.earth;
   const layers = resistivity.length;
-  const quantities: Asked[] = [
-    ...resistivity.map((_, i) => ({ of: resistivityOf(i), limits: 2 as const })),
-    ...thickness.map((_, i) => ({ of: thicknessOf(layers, i), limits: 2 as const })),
-    // the base of the first layer is its thickness
-    ...thickness.slice(1).map((_, i) => ({ of: depthOf(layers, i + 1), limits: 2 as const })),
-    ...thickness.map((_, i) => ({ of: productOf(layers, i, -1), limits: 1 as const })),
-    ...thickness.map((_, i) => ({ of: productOf(layers, i, 1), limits: 1 as const })),
-  ];
-  // what is held keeps its bits
-  const stated = [...resistivity, ...thickness, ...basesOf(thickness).slice(1)];
-  const free = quantities.filter(({ of }) => !isHeld(of, best, layered.held));
+  const bounded = thickness.length;
+  const asked: Record<keyof EarthEnds, Asked[]> = {
+    resistivity: resistivity.map((_, i) => ({ of: resistivityOf(i), short: false })),
+    thickness: thickness.map((_, i) => ({ of: thicknessOf(layers, i), short: false })),
+    depth: thickness.map((_, i) => ({ of: depthOf(layers, i), short: false })),
+    conductance: thickness.map((_, i) => ({ of: productOf(layers, i, -1), short: true })),
+    resistance: thickness.map((_, i) => ({ of: productOf(layers, i, 1), short: true })),
+  };
+  // the base of the first layer is its thickness
+  if (bounded > 0) asked.depth[0] = asked.thickness[0]!;
+  const moved = [...new Set(Object.values(asked).flat())].filter(({ of }) => !isHeld(of, best, layered.held));
   const point = ({ parameters, excess }: AllowedModel) => ({
     parameters: layered.restrict(parameters),
     chi2: leastChi2 + excess,
   });
-  const ends = profileEnds(layered, point(best), others.map(point), free, [1, Z95 * Z95]);
-  const doubts = quantities.map((quantity, i): { interval: Interval; factor: number | null } => {
-    const centre = quantity.of.value(best.parameters);
-    const [inner, outer] = ends[free.indexOf(quantity)] ?? [];
-    return inner
-      ? { interval: interval(outer ?? inner), factor: factor(centre, inner) }
-      : { interval: [stated[i] ?? null, stated[i] ?? null], factor: 1 };
-  });
-  const bounded = thickness.length;
-  const rho = doubts.splice(0, resistivity.length);
-  const h = doubts.splice(0, bounded);
-  const depth = [...h.slice(0, 1), ...doubts.splice(0, Math.max(0, bounded - 1))];
-  const factors = (some: typeof doubts) => some.map((doubt) => doubt.factor);
-  const intervals = (some: typeof doubts) => some.map((doubt) => doubt.interval);
+  const ends = profileEnds(layered, point(best), others.map(point), moved, [1, Z95 * Z95]);
+  const centreOf = ({ of }: Asked): number => of.value(best.parameters);
+  const endsAt = (limit: 0 | 1): EarthEnds => {
+    const of = (key: keyof EarthEnds) =>
+      asked[key].map((one): Ends => {
+        const centre = centreOf(one);
+        return ends[moved.indexOf(one)]?.[limit] ?? { low: centre, high: centre };
+      });
+    return {
+      resistivity: of('resistivity'),
+      thickness: of('thickness'),
+      depth: of('depth'),
+      conductance: of('conductance'),
+      resistance: of('resistance'),
+    };
+  };
+  const inner = agreedEnds(endsAt(0));
+  const outer = agreedEnds(around(inner, endsAt(1)));
+  const intervals = (key: keyof EarthEnds, stated: readonly number[]): Interval[] =>
+    asked[key].map((one, i) =>
+      // what is held keeps its bits
+      moved.includes(one) ? interval(stated[i]!, outer[key][i]!) : [stated[i]!, stated[i]!],
+    );
+  const factors = (key: keyof EarthEnds) =>
+    asked[key].map((one, i) =>
+      moved.includes(one) ? factor(centreOf(one), inner[key][i]!, outer[key][i]!) : 1,
+    );
   return {
-    intervals: { resistivity: intervals(rho), thickness: intervals(h), depth: intervals(depth) },
-    factors: { resistivity: factors(rho), thickness: factors(h), depth: factors(depth) },
-    conductanceFactor: factors(doubts.slice(0, bounded)),
-    resistanceFactor: factors(doubts.slice(bounded)),
-    correlation: correlations(best.covariance, 2 * resistivity.length - 1),
+    intervals: {
+      resistivity: intervals('resistivity', resistivity),
+      thickness: intervals('thickness', thickness),
+      depth: intervals('depth', basesOf(thickness)),
+    },
+    factors: {
+      resistivity: factors('resistivity'),
+      thickness: factors('thickness'),
+      depth: factors('depth'),
+    },
+    conductanceFactor: factors('conductance'),
+    resistanceFactor: factors('resistance'),
+    correlation: correlations(best.covariance, 2 * layers - 1),
   };
 }

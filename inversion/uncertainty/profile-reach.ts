@@ -8,8 +8,8 @@ export interface ProfileEnd {
   /** s · ln quantity there, s = ±1 the side */
   readonly reach: number;
   readonly chi2: number;
-  /** true when the bounds end it before the misfit does */
-  readonly open: boolean;
+  /** true when the search ended before the misfit did: at bounds, or with its steps used up */
+  readonly unfinished: boolean;
   /** true when the first step from the foot of the valley led there */
   readonly straight: boolean;
   /** with which a search further on may begin */
@@ -18,8 +18,8 @@ export interface ProfileEnd {
 
 /** s · ln quantity and its gradient on the free parameters, which is written over by the next call. */
 export interface DirectedQuantity {
-  readonly value: (parameters: Float64Array) => number;
-  readonly gradient: (parameters: Float64Array) => Float64Array;
+  readonly value: (parameters: ArrayLike<number>) => number;
+  readonly gradient: (parameters: ArrayLike<number>) => Float64Array;
 }
 
 /** What a search knows beforehand. */
@@ -145,12 +145,12 @@ export function createProfiler(problem: LeastSquaresProblem): Profiler {
       }
       const stopped = next === null || !next.whole;
       const under = !found && best.chi2 < limit - (stopped ? CLOSE : NEAR) * rise;
-      const open = under && !(short && next !== null);
-      if (under && !open)
+      const unfinished = under && !(short && next !== null);
+      if (under && !unfinished)
         reach += Math.max(0, step(best, quantity.gradient(best.at), limit, DAMPING)?.gain ?? 0);
       // on a parabola √(rise of χ²) grows as the reach does
       if (straight) reach = origin + Math.sqrt(rise / (best.chi2 - foot.chi2)) * (reach - origin);
-      return { parameters: best.at, chi2: best.chi2, reach, open, straight, damping };
+      return { parameters: best.at, chi2: best.chi2, reach, unfinished, straight, damping };
     },
   };
 }

@@ -3,12 +3,14 @@ import { log } from '../math/logarithm';
 
 /** The logarithm of one positive quantity of an earth of N layers as a function of its 2N − 1 ln parameters. */
 export interface Quantity {
+  readonly kind: 'value' | 'depth' | 'product';
   readonly value: (parameters: ArrayLike<number>) => number;
   /** Writes the gradient into `slope`; entries beyond 2N − 1 become 0. */
   readonly gradient: (parameters: ArrayLike<number>, slope: Float64Array) => void;
 }
 
 const coordinate = (j: number): Quantity => ({
+  kind: 'value',
   value: (parameters) => parameters[j]!,
   gradient: (_, slope) => void (slope.fill(0)[j] = 1),
 });
@@ -25,6 +27,7 @@ export function depthOf(layers: number, base: number): Quantity {
     return depth;
   };
   return {
+    kind: 'depth',
     value: (parameters) => log(depthAt(parameters)),
     gradient: (parameters, slope) => {
       const depth = depthAt(parameters);
@@ -36,6 +39,7 @@ export function depthOf(layers: number, base: number): Quantity {
 
 /** hρ (`sign` 1) or h/ρ (`sign` −1) of bounded layer i. */
 export const productOf = (layers: number, i: number, sign: 1 | -1): Quantity => ({
+  kind: 'product',
   value: (parameters) => parameters[layers + i]! + sign * parameters[i]!,
   gradient: (_, slope) => {
     slope.fill(0);

@@ -154,7 +154,12 @@ export const fitStatusSchema = z.enum([
 ]);
 
 const intervalSchema = z.tuple([z.number().nullable(), z.number().nullable()]);
-const factorSchema = z.number().nullable().describe('68 % factor: value × and ÷ this; null = not determined');
+const factorSchema = z
+  .number()
+  .nullable()
+  .describe(
+    'value × and ÷ this at one standard deviation: the larger of the 68 % reach and the 95 % reach to the power 1/1.96; null = not determined',
+  );
 
 export const fitResultSchema = z
   .strictObject({
@@ -171,14 +176,14 @@ export const fitResultSchema = z
         thickness: z.array(intervalSchema),
         depth: z.array(intervalSchema).describe('depth of the base of layer i, m'),
       })
-      .describe('95 %; null = unbounded'),
+      .describe('95 %; null = the bounds of the fit end it, not the readings'),
     factors: z
       .strictObject({
         resistivity: z.array(factorSchema),
         thickness: z.array(factorSchema),
         depth: z.array(factorSchema),
       })
-      .describe('68 % factors; null = not determined'),
+      .describe('factors of one standard deviation; null = not determined'),
     correlation: z
       .array(z.array(z.number().nullable()))
       .describe('correlation of lnρ₁…lnρ_N, lnh₁…lnh_{N−1}; null where a parameter was held or unresolved'),
@@ -190,8 +195,8 @@ export const fitResultSchema = z
       .strictObject({
         conductanceS: z.array(z.number()).describe('h/ρ of each bounded layer, S'),
         resistanceOhmM2: z.array(z.number()).describe('hρ of each bounded layer, Ω·m²'),
-        conductanceFactor: z.array(factorSchema).describe('68 % factor of each h/ρ; null = not determined'),
-        resistanceFactor: z.array(factorSchema).describe('68 % factor of each hρ; null = not determined'),
+        conductanceFactor: z.array(factorSchema).describe('factor of each h/ρ; null = not determined'),
+        resistanceFactor: z.array(factorSchema).describe('factor of each hρ; null = not determined'),
         totalConductanceS: z.number(),
         totalResistanceOhmM2: z.number(),
         anisotropy: z.number().nullable().describe('√(ρ_T/ρ_L) of the bounded layers; null for a half-space'),

@@ -1,13 +1,7 @@
 import { expect, it } from 'vitest';
-import {
-  createForwardOperator,
-  createRandomStream,
-  fitLayered,
-  type LayeredEarth,
-  type RandomStream,
-  type Reading,
-} from '../../../inversion';
+import { createForwardOperator, createRandomStream, fitLayered, type Reading } from '../../../inversion';
 import { layered } from '../support/fit-settings';
+import { trialSounding } from '../support/trial-soundings';
 
 it('covers the truth in about 95 % of noisy soundings of a well-resolved ground', { timeout: 60_000 }, () => {
   const truth = { resistivity: [100, 20], thickness: [4] };
@@ -36,19 +30,6 @@ it('covers the truth in about 95 % of noisy soundings of a well-resolved ground'
   });
 });
 
-/** 2–5 layers, the first near the shortest spacing, each deeper one 1.6 to 3.6 times as thick; 3 to 1600 Ω·m. */
-function randomGround(random: RandomStream): LayeredEarth {
-  const layers = 2 + random.below(4);
-  let thickness = 0.8;
-  return {
-    resistivity: Array.from({ length: layers }, () => 10 ** (0.5 + 2.7 * random.uniform())),
-    thickness: Array.from({ length: layers - 1 }, (_, i) => {
-      if (i > 0) thickness *= 1.6 + 2 * random.uniform();
-      return thickness * (0.7 + 0.7 * random.uniform());
-    }),
-  };
-}
-
 it(
   'covers the truth in 92 to 98 % of the values that it calls known, where other grounds fit alike too',
   { timeout: 120_000 },
@@ -57,19 +38,7 @@ it(
     let known = 0;
     let covered = 0;
     for (let t = 0; t < 150; t++) {
-      const truth = randomGround(random);
-      const error = [0.01, 0.03, 0.05][t % 3]!;
-      const count = [15, 19, 25, 31][t % 4]!;
-      const spreads = Array.from({ length: count }, (_, i) => {
-        const halfAB = 300 ** (i / (count - 1));
-        return { type: 'schlumberger', halfAB, halfMN: Math.min(halfAB / 3, halfAB < 25 ? 0.5 : 5) } as const;
-      });
-      const clean = createForwardOperator(spreads).predict(truth);
-      const readings = spreads.map((spread, i): Reading => ({
-        spread,
-        apparentResistivity: clean[i]! * Math.exp(error * random.normal()),
-        relativeError: error,
-      }));
+      const { truth, readings } = trialSounding(random, t);
       const { intervals, factors } = fitLayered(readings, layered(truth.resistivity.length));
       for (const on of ['resistivity', 'thickness'] as const)
         truth[on].forEach((value, i) => {

@@ -133,11 +133,23 @@ describe('parameterDoubt', () => {
     const { intervals, factors } = doubt([5, 2.4, 1e6]);
     // ρ₁ reaches its bounds, 0.1 and 10⁵, before 5 standard deviations in ln
     expect(intervals.resistivity[0]).toEqual([null, null]);
-    near(factors.resistivity[1], 1, 2.4);
+    // of ρ₂ one standard deviation stays above its bound, 1.96 of them do not
+    expect(factors.resistivity[1]).toBeNull();
     expect(intervals.resistivity[1]![0]).toBeNull();
     expect(intervals.resistivity[1]![1]).toBeGreaterThan(1000);
     expect(intervals.thickness[0]).toEqual([null, null]);
     expect(factors.depth).toEqual([null]);
+  });
+
+  it('opens an end beside a bound, where the misfit passes its limit only there', () => {
+    const low = (value: number, deviation: number) =>
+      doubtOf([{ centre: logs(100, value, 4), rows: diagonal([0.1, deviation, 0.3]), excess: 0 }]).intervals
+        .resistivity[1]![0];
+    // ln(10/0.1) = 4.605: an end 4.50 below is within 15 % of the bound of 0.1 Ω·m, one 4.35 below is not
+    expect(low(10, 4.5 / 1.959964)).toBeNull();
+    near(low(10, 4.35 / 1.959964), 10, -4.35);
+    // a value known to 4 %, whose bound is another 5 % away
+    near(low(0.11, 0.02), 0.11, -0.0392);
   });
 
   it('gives [v, v], factor 1 and no correlation for a held value', () => {
@@ -167,8 +179,9 @@ describe('parameterDoubt', () => {
     // √(1.96² − 0.84) = √3.0015
     near(high, 30, Math.sqrt(3.001459) * 0.1);
     near(found(0.84).factors.resistivity[1], 3, 0.4 * 0.1);
-    // past the 68 % point the other model no longer counts in the factors, past the 95 % point in nothing
-    near(found(1.5).factors.resistivity[1], 1, 0.2);
+    // past the 68 % point the other model counts by its 95 % reach per 1.96, past the 95 % point in nothing
+    near(found(1.5).factors.resistivity[1], 1, (Math.log(3) + Math.sqrt(2.341459) * 0.1) / 1.959964);
+    near(found(4).factors.resistivity[1], 1, 0.2);
     near(found(4).intervals.resistivity[1]![1], 10, 1.959964 * 0.2);
   });
 });

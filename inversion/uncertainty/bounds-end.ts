@@ -1,0 +1,41 @@
+import type { LeastSquaresProblem } from '../fit/levenberg-marquardt';
+import type { DirectedQuantity, ProfileEnd } from './profile-reach';
+import type { Quantity } from './quantities';
+
+/** An end this near to a bound, in ln, is not told from the bound … */
+const BESIDE = 0.15;
+/** … nor is one whose way on to the bound is no more than this share of the way to it. */
+const SHARE = 0.5;
+/** A parameter this near to its bound, in ln, sits on it. */
+const ON = 1e-9;
+
+/**
+ * True where the bounds of the fit hold one side of a quantity, and the readings do not: a value at or next to its own bound, a
+ * depth one of whose thicknesses is at its upper bound or all of them at the lower one, a product under the limit of χ² with
+ * either of its two values on a bound. Next to a bound means within 15 % of it and no further than half as far as the end
+ * is from the best: the misfit then crosses its limit only there, or would be little above it at the bound itself.
+ */
+export function boundsEnd(
+  { low, high }: LeastSquaresProblem,
+  kind: Quantity['kind'],
+  quantity: DirectedQuantity,
+  end: ProfileEnd,
+  /** s · ln quantity of the best model */
+  origin: number,
+): boolean {
+  const { parameters, reach, unfinished } = end;
+  const slope = quantity.gradient(parameters);
+  const beyond = reach - quantity.value(parameters);
+  const beside = kind === 'product' ? ON : beyond + Math.max(ON, Math.min(BESIDE, SHARE * (reach - origin)));
+  let parts = 0;
+  let upper = 0;
+  let lower = 0;
+  slope.forEach((s, j) => {
+    if (s === 0) return;
+    parts++;
+    if (s > 0 && high[j]! - parameters[j]! <= beside) upper++;
+    if (s < 0 && parameters[j]! - low[j]! <= beside) lower++;
+  });
+  if (kind === 'product') return unfinished && upper + lower > 0;
+  return upper > 0 || lower === parts;
+}
