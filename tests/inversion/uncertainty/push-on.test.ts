@@ -8,8 +8,8 @@ const bent: LeastSquaresProblem = {
   residuals: 2,
   low: Float64Array.of(-10, -10),
   high: Float64Array.of(10, 10),
-  evaluate: ([x, y], residual) => {
-    residual.set([x! / 2, 20 * (y! - Math.sin(x!))]);
+  evaluate: (at, residual) => {
+    residual.set([at[0]! / 2, 20 * (at[1]! - Math.sin(at[0]!))]);
     return residual[0]! ** 2 + residual[1]! ** 2;
   },
   linearise: (at, residual, jacobian) => {
@@ -18,7 +18,7 @@ const bent: LeastSquaresProblem = {
   },
 };
 const towards = (side: 1 | -1) => ({
-  value: ([x]: ArrayLike<number>) => side * x!,
+  value: (at: ArrayLike<number>) => side * at[0]!,
   gradient: () => Float64Array.of(side, 0),
 });
 const foot: ProfileEnd = {
