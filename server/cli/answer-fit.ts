@@ -1,6 +1,6 @@
 import { createOperatorCache, fitEarth } from '../../inversion';
 import { fitRequestSchema } from '../contract/command-line';
-import type { FitResult } from '../contract/fit';
+import type { FitResult } from '../contract/fit-result';
 import { parseLine } from './parse-line';
 
 /** Answers `fit` lines; soundings with the same spreads share one operator. */

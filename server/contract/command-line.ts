@@ -1,11 +1,6 @@
 import { z } from 'zod';
-import {
-  fitReadingSchema,
-  fitResultSchema,
-  fitSettingsSchema,
-  fitStatusSchema,
-  layeredEarthSchema,
-} from './fit';
+import { fitResultSchema, fitStatusSchema } from './fit-result';
+import { fitReadingSchema, fitSettingsSchema, layeredEarthSchema } from './fit-settings';
 import { fitLineAnswerSchema, fitLineRequestSchema, fitLineSettingsSchema } from './fit-line';
 import {
   ensembleStatusSchema,

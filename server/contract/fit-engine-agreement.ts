@@ -4,7 +4,8 @@ import type {
   Reading,
   Spread,
 } from '../../inversion';
-import type { FitReading, FitResult, FitSettings } from './fit';
+import type { FitResult } from './fit-result';
+import type { FitReading, FitSettings } from './fit-settings';
 import type { spreadSchema } from './spread';
 import type { z } from 'zod';
 

@@ -1,5 +1,6 @@
 import { z } from 'zod';
-import { fitReadingSchema, fitResultSchema, fitSettingsSchema, fitStatusSchema } from './fit';
+import { fitResultSchema, fitStatusSchema } from './fit-result';
+import { fitReadingSchema, fitSettingsSchema } from './fit-settings';
 import { lineId } from './line-id';
 
 const placeM = z.number().min(-1e9).max(1e9).describe('place along the line, m');

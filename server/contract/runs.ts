@@ -1,6 +1,7 @@
 import { z } from 'zod';
 import { idSchema, listOf, personSchema, timestampSchema, versionSchema } from './common';
-import { fitReadingSchema, fitResultSchema, fitSettingsSchema } from './fit';
+import { fitResultSchema } from './fit-result';
+import { fitReadingSchema, fitSettingsSchema } from './fit-settings';
 import { standingStateSchema } from './interpretations';
 import { spreadSchema, spreadTypeSchema } from './spread';
 

@@ -1,6 +1,6 @@
 import { z } from 'zod';
 import type { EnsembleResult, SampleSettings as EngineSettings } from '../../inversion';
-import { fitBoundsSchema, fitReadingSchema, gaussianPriorSchema, layeredEarthSchema } from './fit';
+import { fitBoundsSchema, fitReadingSchema, gaussianPriorSchema, layeredEarthSchema } from './fit-settings';
 import { lineId } from './line-id';
 
 /** Ranges that are uniform in ln: ρ of every layer, and thicknesses (stated count) or depths of boundaries (unknown count). */

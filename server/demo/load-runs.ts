@@ -1,5 +1,6 @@
 import { fitEarth } from '../../inversion/index';
-import { fitResultSchema, fitSettingsSchema, type FitSettingsInput } from '../contract/fit';
+import { fitResultSchema } from '../contract/fit-result';
+import { fitSettingsSchema, type FitSettingsInput } from '../contract/fit-settings';
 import type { Work } from '../http/context';
 import { storeResult, takeRun } from '../jobs/run-lease';
 import { changeRunNote, requestRun } from '../runs/runs-service';

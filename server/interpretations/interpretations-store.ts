@@ -1,6 +1,6 @@
 import type { Knex } from 'knex';
 import type { Actor } from '../access/actor';
-import type { FitResult } from '../contract/fit';
+import type { FitResult } from '../contract/fit-result';
 import type {
   BedConfidence,
   BedRole,

@@ -1,7 +1,7 @@
 import type { Knex } from 'knex';
 import type { z } from 'zod';
 import { compareResults } from '../../inversion/index';
-import type { FitResult } from '../contract/fit';
+import type { FitResult } from '../contract/fit-result';
 import type { runComparisonSchema } from '../contract/runs';
 
 type RunComparison = z.infer<typeof runComparisonSchema>;

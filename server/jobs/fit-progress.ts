@@ -1,6 +1,6 @@
 import { threeDigits } from '../../inversion/three-digits';
 import type { FitProgress } from '../../inversion/types';
-import type { FitSettings } from '../contract/fit';
+import type { FitSettings } from '../contract/fit-settings';
 
 export interface ProgressReport {
   /** share of the work that is done, from 0 to below 1 */

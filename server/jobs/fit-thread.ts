@@ -1,7 +1,7 @@
 import { performance } from 'node:perf_hooks';
 import type { MessagePort } from 'node:worker_threads';
 import { createOperatorCache, fitEarth, InversionError } from '../../inversion/index';
-import type { FitResult } from '../contract/fit';
+import type { FitResult } from '../contract/fit-result';
 import type { RunInput } from '../contract/runs';
 import { progressReport } from './fit-progress';
 

@@ -2,7 +2,7 @@ import { createHash } from 'node:crypto';
 import canonicalize from 'canonicalize';
 import type { Knex } from 'knex';
 import { ENGINE_VERSION } from '../../inversion/index';
-import type { FitResult } from '../contract/fit';
+import type { FitResult } from '../contract/fit-result';
 import type { RunInput } from '../contract/runs';
 import { compareWithFirst } from './compare-with-first';
 import type { JobQueue } from './job-queue';

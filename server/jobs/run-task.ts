@@ -2,7 +2,7 @@ import { setTimeout as delay } from 'node:timers/promises';
 import type { Logger } from 'pino';
 import { z } from 'zod';
 import { ENGINE_VERSION } from '../../inversion/index';
-import { fitResultSchema } from '../contract/fit';
+import { fitResultSchema } from '../contract/fit-result';
 import { errorOfPostgres } from '../errors';
 import type { FitPool } from './fit-pool';
 import type { ProgressReport } from './fit-progress';

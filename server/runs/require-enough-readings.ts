@@ -1,4 +1,4 @@
-import type { FitSettings } from '../contract/fit';
+import type { FitSettings } from '../contract/fit-settings';
 import { AppError } from '../errors';
 
 /** A fit needs at least one kept reading, and as many as the values it searches. */

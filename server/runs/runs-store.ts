@@ -1,7 +1,8 @@
 import type { Knex } from 'knex';
 import type { z } from 'zod';
 import type { Actor } from '../access/actor';
-import type { FitResult, FitSettings } from '../contract/fit';
+import type { FitResult } from '../contract/fit-result';
+import type { FitSettings } from '../contract/fit-settings';
 import type { Reading } from '../contract/readings';
 import type { StandingState } from '../contract/interpretations';
 import type { RunInput, RunSummary, runComparisonSchema } from '../contract/runs';

@@ -1,4 +1,4 @@
-import type { LayeredEarthModel } from '../../server/contract/fit';
+import type { LayeredEarthModel } from '../../server/contract/fit-settings';
 
 /** [low, high] of 95 %; null = not bounded on that side. */
 export type Bounds = readonly [number | null, number | null];

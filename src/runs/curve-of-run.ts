@@ -1,5 +1,5 @@
 import { hasCells } from '../../inversion';
-import type { FitReading, LayeredEarthModel } from '../../server/contract/fit';
+import type { FitReading, LayeredEarthModel } from '../../server/contract/fit-settings';
 import type { Revision } from '../../server/contract/readings';
 import type { Run } from '../../server/contract/runs';
 import type { CurveLine, CurvePoint, CurveReading, GroundColumn, HeldValue } from '../charts/chart-data';

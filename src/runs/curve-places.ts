@@ -1,5 +1,5 @@
 import { plottingSpacing } from '../../inversion';
-import type { FitReading } from '../../server/contract/fit';
+import type { FitReading } from '../../server/contract/fit-settings';
 
 type Spread = FitReading['spread'];
 

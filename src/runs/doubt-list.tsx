@@ -1,5 +1,6 @@
 import { describeDoubt, hasCells } from '../../inversion';
-import type { FitResult, FitSettings } from '../../server/contract/fit';
+import type { FitResult } from '../../server/contract/fit-result';
+import type { FitSettings } from '../../server/contract/fit-settings';
 import type { Run } from '../../server/contract/runs';
 import { spacingLabel } from '../soundings/spread-words';
 import { Sentence } from '../ui/sentence';

@@ -1,5 +1,5 @@
 import { rampColor } from '../charts/resistivity-ramp';
-import type { LayeredEarthModel } from '../../server/contract/fit';
+import type { LayeredEarthModel } from '../../server/contract/fit-settings';
 
 const WIDTH = 18;
 const HEIGHT = 44;

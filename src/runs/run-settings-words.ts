@@ -1,4 +1,4 @@
-import { DEFAULT_BOUNDS, type FitSettings, type LayeredEarthModel } from '../../server/contract/fit';
+import { DEFAULT_BOUNDS, type FitSettings, type LayeredEarthModel } from '../../server/contract/fit-settings';
 import { timesOrDivided } from '../../inversion/three-digits';
 import {
   formatCount,

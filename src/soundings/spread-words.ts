@@ -1,4 +1,4 @@
-import type { FitReading } from '../../server/contract/fit';
+import type { FitReading } from '../../server/contract/fit-settings';
 import type { SpreadType } from '../../server/contract/spread';
 import { formatGiven, withUnit } from '../ui/format';
 

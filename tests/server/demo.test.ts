@@ -1,5 +1,5 @@
 import { describe, expect, it } from 'vitest';
-import type { FitResult } from '../../server/contract/fit';
+import type { FitResult } from '../../server/contract/fit-result';
 import { soundingPageSchema } from '../../server/contract/soundings';
 import { INTERPRETATIONS } from '../../server/demo/interpretations';
 import { loadDemo } from '../../server/demo/load-demo';

@@ -1,6 +1,6 @@
 import { setTimeout as delay } from 'node:timers/promises';
 import { describe, expect, it } from 'vitest';
-import type { FitSettingsInput } from '../../server/contract/fit';
+import type { FitSettingsInput } from '../../server/contract/fit-settings';
 import { runSchema, type Run } from '../../server/contract/runs';
 import { HEAVY, heavyReadings } from '../setup/heavy-readings';
 import { workerProcesses, type WorkerProcess } from '../setup/run-worker';

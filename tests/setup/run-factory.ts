@@ -1,6 +1,6 @@
 import type { Knex } from 'knex';
 import { ENGINE_VERSION, fitEarth } from '../../inversion/index';
-import { fitSettingsSchema, type FitSettingsInput } from '../../server/contract/fit';
+import { fitSettingsSchema, type FitSettingsInput } from '../../server/contract/fit-settings';
 import type { Reading } from '../../server/contract/readings';
 import type { RunInput } from '../../server/contract/runs';
 import { resultHash } from '../../server/jobs/run-lease';

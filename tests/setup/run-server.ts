@@ -2,7 +2,7 @@ import { join } from 'node:path';
 import { setTimeout as delay } from 'node:timers/promises';
 import { pino } from 'pino';
 import { afterAll, expect } from 'vitest';
-import type { FitSettingsInput } from '../../server/contract/fit';
+import type { FitSettingsInput } from '../../server/contract/fit-settings';
 import { runSchema, type Run } from '../../server/contract/runs';
 import { startRunWorker } from '../../server/jobs/run-worker';
 import { threeLayerReadings } from './factories';

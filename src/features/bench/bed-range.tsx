@@ -1,4 +1,4 @@
-import type { FitResult } from '../../../server/contract/fit';
+import type { FitResult } from '../../../server/contract/fit-result';
 import { determinationOf, DETERMINATION_WORDS } from '../../../inversion';
 import { timesOrDivided } from '../../../inversion/three-digits';
 import { isRejected } from '../../runs/rejected-fit';

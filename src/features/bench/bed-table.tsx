@@ -1,5 +1,6 @@
 import { Minus, Plus } from 'lucide-react';
-import type { FitResult, LayeredEarthModel } from '../../../server/contract/fit';
+import type { FitResult } from '../../../server/contract/fit-result';
+import type { LayeredEarthModel } from '../../../server/contract/fit-settings';
 import { DETERMINATION_SOURCE } from '../../../inversion';
 import { BedSwatch } from '../../runs/bed-swatch';
 import { isRejected, REJECTED_RANGES_NOTE } from '../../runs/rejected-fit';

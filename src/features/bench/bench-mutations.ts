@@ -3,7 +3,7 @@ import type { z } from 'zod';
 import { sendJson } from '../../api/http';
 import { putRun, runKeys, runListQuery } from '../../api/run-queries';
 import { soundingKeys } from '../../api/sounding-queries';
-import type { FitSettingsInput } from '../../../server/contract/fit';
+import type { FitSettingsInput } from '../../../server/contract/fit-settings';
 import { runSchema, type Run, type updateRunNoteSchema } from '../../../server/contract/runs';
 
 export type RunNoteChange = z.input<typeof updateRunNoteSchema>;

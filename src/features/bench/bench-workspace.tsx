@@ -1,7 +1,7 @@
 import { useCallback, useMemo, useRef, useState } from 'react';
 import { useSearchParams } from 'react-router-dom';
 import { hasCells } from '../../../inversion';
-import type { FitSettingsInput } from '../../../server/contract/fit';
+import type { FitSettingsInput } from '../../../server/contract/fit-settings';
 import type { Sounding } from '../../../server/contract/soundings';
 import type { Revision } from '../../../server/contract/readings';
 import type { Run, RunSummary } from '../../../server/contract/runs';

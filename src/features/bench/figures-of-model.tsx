@@ -1,5 +1,5 @@
 import { darZarrouk } from '../../../inversion';
-import type { LayeredEarthModel } from '../../../server/contract/fit';
+import type { LayeredEarthModel } from '../../../server/contract/fit-settings';
 import { isRejected } from '../../runs/rejected-fit';
 import { MISFIT_LABEL, MISFIT_TITLE } from '../../runs/misfit-words';
 import { MisfitLine } from '../../runs/rejected-mark';

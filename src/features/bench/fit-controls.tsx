@@ -1,7 +1,7 @@
 import { Play } from 'lucide-react';
 import { useEffect, useState } from 'react';
 import { useController, useForm } from 'react-hook-form';
-import type { FitSettings, FitSettingsInput, LayeredEarthModel } from '../../../server/contract/fit';
+import type { FitSettings, FitSettingsInput, LayeredEarthModel } from '../../../server/contract/fit-settings';
 import { Button } from '../../ui/button';
 import { Field } from '../../ui/field';
 import { FormErrors, type FormFault } from '../../ui/form-errors';

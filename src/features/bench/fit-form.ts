@@ -5,7 +5,7 @@ import {
   type FitSettings,
   type FitSettingsInput,
   type LayeredEarthModel,
-} from '../../../server/contract/fit';
+} from '../../../server/contract/fit-settings';
 import { formatGiven } from '../../ui/format';
 import type { ModelValue } from './hand-model';
 import { heldKey } from './hand-model-store';

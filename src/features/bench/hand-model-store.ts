@@ -1,5 +1,5 @@
 import { create } from 'zustand';
-import type { LayeredEarthModel } from '../../../server/contract/fit';
+import type { LayeredEarthModel } from '../../../server/contract/fit-settings';
 import { sameEarth, type ModelValue } from './hand-model';
 
 /** One sounding's model by hand. Null stands for what the shown run has: its model, its held values. */

@@ -1,4 +1,4 @@
-import type { LayeredEarthModel } from '../../../server/contract/fit';
+import type { LayeredEarthModel } from '../../../server/contract/fit-settings';
 import { boundaryDepths } from '../../charts/chart-data';
 
 /** A value of the model; `index` counts beds from 0 at the surface. */

@@ -1,4 +1,5 @@
-import type { FitResult, LayeredEarthModel } from '../../../server/contract/fit';
+import type { FitResult } from '../../../server/contract/fit-result';
+import type { LayeredEarthModel } from '../../../server/contract/fit-settings';
 import { MISFIT_LABEL, MISFIT_TITLE } from '../../runs/misfit-words';
 import { bedCount } from '../../runs/run-title';
 import { Button } from '../../ui/button';

@@ -1,4 +1,5 @@
-import type { FitResult, LayeredEarthModel } from '../../../server/contract/fit';
+import type { FitResult } from '../../../server/contract/fit-result';
+import type { LayeredEarthModel } from '../../../server/contract/fit-settings';
 import type { Run } from '../../../server/contract/runs';
 import { boundaryDepths } from '../../charts/chart-data';
 import type { ChartTable } from '../../charts/chart-table';

@@ -1,5 +1,5 @@
 import { chiSquaredPoint } from '../../../inversion';
-import type { FitResult } from '../../../server/contract/fit';
+import type { FitResult } from '../../../server/contract/fit-result';
 
 type Count = Pick<NonNullable<FitResult['layerCounts']>[number], 'bic' | 'chi2PerReading'>;
 

@@ -1,5 +1,5 @@
 import { useEffect, useRef, useState } from 'react';
-import type { FitReading, LayeredEarthModel } from '../../../server/contract/fit';
+import type { FitReading, LayeredEarthModel } from '../../../server/contract/fit-settings';
 import { predictCurve } from '../../workers/engine';
 
 type Spreads = readonly FitReading['spread'][];

@@ -1,5 +1,5 @@
 import { useCallback } from 'react';
-import type { LayeredEarthModel } from '../../../server/contract/fit';
+import type { LayeredEarthModel } from '../../../server/contract/fit-settings';
 import type { Run } from '../../../server/contract/runs';
 import type { ModelValue } from './hand-model';
 import { heldKey, historyOf, useHandModelStore } from './hand-model-store';

@@ -1,4 +1,4 @@
-import type { FitResult } from '../../../server/contract/fit';
+import type { FitResult } from '../../../server/contract/fit-result';
 import { BedSwatch } from '../../runs/bed-swatch';
 import { HELD } from '../../ui/format';
 import { bedNumbers } from './bed-numbers';

@@ -1,4 +1,4 @@
-import type { FitResult } from '../../../server/contract/fit';
+import type { FitResult } from '../../../server/contract/fit-result';
 import { boundaryDepths } from '../../charts/chart-data';
 import { formatLength, formatRange, formatResistivity, withUnit } from '../../ui/format';
 

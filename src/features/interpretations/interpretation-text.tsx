@@ -1,4 +1,4 @@
-import type { FitResult } from '../../../server/contract/fit';
+import type { FitResult } from '../../../server/contract/fit-result';
 import type { Run } from '../../../server/contract/runs';
 import { formatLength, withUnit } from '../../ui/format';
 import { BedBasis } from './bed-basis';

@@ -1,5 +1,6 @@
 import { expect, it } from 'vitest';
-import { fitSettingsSchema, type FitResult } from '../../../server/contract/fit';
+import type { FitResult } from '../../../server/contract/fit-result';
+import { fitSettingsSchema } from '../../../server/contract/fit-settings';
 import { fitEarth } from '../../../inversion';
 import { doubtsOf, isLimitedByReadings } from '../../../src/runs/doubt-list';
 

@@ -1,5 +1,5 @@
 import { expect, it } from 'vitest';
-import { fitSettingsSchema } from '../../../../server/contract/fit';
+import { fitSettingsSchema } from '../../../../server/contract/fit-settings';
 import {
   DEFAULT_FIT_FORM,
   faultsOfSettings,

@@ -1,6 +1,6 @@
 import { renderToStaticMarkup } from 'react-dom/server';
 import { expect, it } from 'vitest';
-import type { FitResult } from '../../../../server/contract/fit';
+import type { FitResult } from '../../../../server/contract/fit-result';
 import { BedBasis } from '../../../../src/features/interpretations/bed-basis';
 
 const result = {
