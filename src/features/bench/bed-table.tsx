@@ -71,7 +71,7 @@ function noteOf({ result, heldInRun, onEdit, onHold }: BedTableProps): string {
       : 'This model has no ranges of its own.';
   const ranges = isRejected(result)
     ? REJECTED_RANGES_NOTE
-    : `Under each value its 95\u00a0% range, then how well it is known, and its 68\u00a0% factor ×÷. ${DETERMINATION_SOURCE}.`;
+    : `Under each value its 95\u00a0% range, then how well it is known, with its factor ×÷. ${DETERMINATION_SOURCE}.`;
   return [
     ranges,
     heldInRun.length > 0 ? HELD_NOTE : '',
@@ -148,7 +148,7 @@ function ValueCells(props: BedTableProps & { value: ModelValue }) {
   const isHeld = held.includes(heldKey(value));
   return (
     <Cell className="align-top whitespace-nowrap">
-      <span className="flex min-h-8 items-center gap-1">
+      <span className="flex min-h-8 items-start gap-1">
         {onHold ? (
           <Checkbox
             labelHidden

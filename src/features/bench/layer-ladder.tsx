@@ -60,7 +60,7 @@ export function LayerLadder({ counts, readings, onTakeUp, onAdopt }: LayerLadder
                 {count.chosen ? (
                   <span className="text-sm font-semibold">chosen</span>
                 ) : (
-                  <>
+                  <span className="inline-flex flex-col items-end sm:flex-row">
                     <Button
                       kind="quiet"
                       size="small"
@@ -75,7 +75,7 @@ export function LayerLadder({ counts, readings, onTakeUp, onAdopt }: LayerLadder
                         <span className="sr-only"> {bedCount(count.layers)}</span>
                       </Button>
                     ) : null}
-                  </>
+                  </span>
                 )}
               </Cell>
             </TableRow>

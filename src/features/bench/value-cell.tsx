@@ -65,7 +65,7 @@ export function ValueCell({ label, value, unit, limits, onCommit }: ValueCellPro
         <span
           id={faultId}
           role="alert"
-          className="block max-w-40 px-1.5 py-1 text-xs leading-tight whitespace-normal text-rust"
+          className="block max-w-32 px-1.5 py-1 text-xs leading-tight whitespace-normal text-rust"
         >
           {fault} Escape brings back {shown(value)}.
         </span>
