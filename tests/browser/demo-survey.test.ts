@@ -63,9 +63,23 @@ it('a Field sheet shows every column at 1280 px, and names the floor of its erro
     const frame = page.getByRole('table', { name: 'Readings' }).locator('..');
     const over = () => frame.evaluate((element) => element.scrollWidth - element.clientWidth);
     await expect.poll(over, { message: `at ${width} px` }).toBeLessThanOrEqual(0);
+    expect(await cutNumbers(frame)).toEqual([]);
   }
   expectNoFaults(faults);
 });
+
+/** Numbers of a sheet that are wider than their cells. */
+const cutNumbers = (frame: Locator): Promise<string[]> =>
+  frame.evaluate((element) => {
+    const pen = document.createElement('canvas').getContext('2d')!;
+    return [...element.querySelectorAll<HTMLInputElement>('input.figure')].flatMap((input) => {
+      const { font, paddingLeft, paddingRight } = getComputedStyle(input);
+      pen.font = font;
+      const text = input.value === '' ? input.placeholder : input.value;
+      const room = input.clientWidth - parseFloat(paddingLeft) - parseFloat(paddingRight);
+      return pen.measureText(text).width > room + 0.5 ? [text] : [];
+    });
+  });
 
 it('an interpretation shows what was drilled beside it, other models and what its run was given', async () => {
   const path = `/soundings/${await sounding('S-07')}/interpretations/${await idOf('interpretation', { title: 'Proposed site of the second well' })}`;

@@ -23,3 +23,12 @@ export const gridColumnUnit = (column: GridColumn, units: SheetUnits): string =>
   column === 'excluded' ? '' : columnUnit(column, units);
 
 export const isTextColumn = (column: GridColumn): boolean => column === 'remark' || column === 'excluded';
+
+/** Side and least width of a column, so that a sheet with all of them fits beside its curve at 1280 px. */
+export function gridColumnLook(column: GridColumn): string {
+  if (isTextColumn(column)) return 'min-w-19 text-left sm:min-w-23 3xl:min-w-36';
+  // R is small where the spread is long: 0.006237
+  if (column === 'resistance') return 'min-w-20 text-right 3xl:min-w-22';
+  const isRead = column === 'voltage' || column === 'current' || column === 'apparentResistivity';
+  return `${isRead ? 'min-w-16' : 'min-w-14'} text-right 3xl:min-w-22`;
+}

@@ -11,7 +11,7 @@ import type { SpreadType } from '../../../server/contract/spread';
 import { classNames } from '../../ui/class-names';
 import { useMediaQuery } from '../../ui/use-media-query';
 import { cellMove } from './cell-keys';
-import { gridColumnName, gridColumnUnit, gridColumns, isTextColumn } from './sheet-columns-view';
+import { gridColumnLook, gridColumnName, gridColumnUnit, gridColumns } from './sheet-columns-view';
 import type { SheetContent } from './sheet-history';
 import type { ReadSheet } from './sheet-reader';
 import { SheetRowView } from './sheet-row-view';
@@ -136,11 +136,7 @@ function GridHead({ columns, spreadType, units }: GridHeadProps) {
             <HeadCell
               name={gridColumnName(column, spreadType)}
               unit={gridColumnUnit(column, units)}
-              className={
-                isTextColumn(column)
-                  ? 'min-w-19 text-left sm:min-w-23 3xl:min-w-36'
-                  : 'min-w-16 text-right 3xl:min-w-22'
-              }
+              className={gridColumnLook(column)}
             />
           </Fragment>
         ))}
