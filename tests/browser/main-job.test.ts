@@ -116,7 +116,7 @@ async function compareRuns(page: Page): Promise<void> {
   const difference = page.getByRole('region', { name: 'Runs A and B' });
   const words = await difference.innerText();
   expect(words).toContain('Both models have 2 beds');
-  expect(words).toMatch(/thickness of bed 1 \(2\.\d+ against 3\.20 m\)/);
+  expect(words).toMatch(/thickness of bed 1 \(2\.\d+ against 3\.20\sm, held\)/);
   expect(words).toContain('Run A fits closer');
 }
 
