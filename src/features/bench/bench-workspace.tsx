@@ -98,8 +98,8 @@ export function BenchWorkspace({ sounding, revision, runs, run }: BenchWorkspace
           {run?.result?.layerCounts ? (
             <section aria-labelledby="ladder-title">
               <h2 id="ladder-title" className="mb-1 font-semibold">
-                How many beds
-                <span className="ml-3 text-sm font-normal text-muted">run {letterOfRun(run)}</span>
+                How many beds{' '}
+                <span className="ml-2 text-sm font-normal text-muted">run {letterOfRun(run)}</span>
               </h2>
               <LayerLadder
                 counts={run.result.layerCounts}
