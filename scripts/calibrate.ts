@@ -31,11 +31,11 @@ function judge(right: boolean, words: string): void {
 
 /** Ranks of the truth, and answers to target questions with what was true. */
 function calibrate(layers: number | 'unknown', trials: number): AnsweredTarget[] {
-  const random = createRandomStream(20_261_201);
   const ranks: number[][] = [];
   const answers: AnsweredTarget[] = [];
   let short = 0;
   for (let trial = 0; trial < trials; trial++) {
+    const random = createRandomStream(20_261_201 + trial);
     const one = calibrationTrial(layers, 1000 + trial);
     if (!(one.drawn.rHat < 1.01)) short++;
     ranksOfTruth(one, random).forEach((rank, quantity) => (ranks[quantity] ??= []).push(rank));
@@ -47,10 +47,18 @@ function calibrate(layers: number | 'unknown', trials: number): AnsweredTarget[]
     worst > LIMIT,
     `${layers} layers: ranks of ${chances.length} quantities over ${trials} trials are even, worst p ${worst.toFixed(3)} after Bonferroni (${short} with R-hat from 1.01 up)`,
   );
+  console.log(`       each: ${chances.map((chance) => chance.toFixed(3)).join(' ')}`);
   return answers;
 }
 
 function reportReliability(answers: readonly AnsweredTarget[]): void {
+  for (let tenth = 0; tenth < 10; tenth++) {
+    const [low, high] = [tenth / 10, (tenth + 1) / 10];
+    const { count, mean, cameTrue, standardError } = reliability(answers, low, high);
+    console.log(
+      `       ${low} to ${high}: ${count} answers, mean ${mean.toFixed(3)}, came true ${cameTrue.toFixed(3)} ± ${standardError.toFixed(3)}`,
+    );
+  }
   for (const [low, high] of BINS) {
     const { count, mean, cameTrue } = reliability(answers, low, high);
     judge(

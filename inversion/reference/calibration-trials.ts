@@ -18,12 +18,14 @@ import type { Model } from '../uncertainty/ensemble/metropolis';
 const PRIOR: EnsemblePrior = { resistivity: [5, 1000], thickness: [0.7, 30] };
 const RELATIVE_ERROR = 0.05;
 const SPREADS: Spread[] = Array.from({ length: 12 }, (_, i) => ({ type: 'wenner', spacing: pow(1.5, i) }));
-const DRAWS = 1000;
+/** More where the count is unknown: those chains are more correlated. */
+const DRAWS = { stated: 1000, unknown: 8000 };
 /** Samples that the truth is ranked among. */
 const RANKED = 99;
 
 /** One true ground drawn from the prior, its noisy readings, and the samples that they lead to. */
 export interface CalibrationTrial {
+  readonly seed: number;
   readonly model: Model;
   readonly truth: Population;
   readonly drawn: PosteriorDraws;
@@ -31,7 +33,8 @@ export interface CalibrationTrial {
 
 export function calibrationTrial(layers: SampleSettings['layers'], seed: number): CalibrationTrial {
   const random = createRandomStream(seed);
-  const settings = { layers, prior: PRIOR, draws: DRAWS, seed };
+  const draws = layers === 'unknown' ? DRAWS.unknown : DRAWS.stated;
+  const settings = { layers, prior: PRIOR, draws, seed };
   const operator = createForwardOperator(SPREADS);
   const { space } = modelUnder(PRIOR, settings, operator, []);
   const ground = createGround(space.most);
@@ -49,24 +52,26 @@ export function calibrationTrial(layers: SampleSettings['layers'], seed: number)
   ground.logLikelihood = model.logLikelihood(ground);
   const truth = createPopulation(1, space.most);
   putGround(truth, 0, ground);
-  return { model, truth, drawn: drawPosterior(model, { ...settings, report: () => undefined }) };
+  return { seed, model, truth, drawn: drawPosterior(model, { ...settings, report: () => undefined }) };
 }
 
 /**
- * Rank of the truth among 99 samples, 0 … 99, in each monitored quantity; ties are broken by chance. Even over many trials if the
+ * Rank of the truth among 99 samples, 0 … 99, in each monitored quantity; among ties each place is as likely. Even over many trials if the
  * sampler is right. Source: Talts et al. 2018, Validating Bayesian inference algorithms with simulation-based calibration (from memory).
  */
 export function ranksOfTruth({ model, truth, drawn }: CalibrationTrial, random: RandomStream): number[] {
   const trueValues = monitoredChains(model.space, [truth]).map(([chain]) => chain![0]!);
   return monitoredChains(model.space, drawn.chains).map((chains, quantity) => {
     const all = chains.flatMap((chain) => [...chain]);
-    let rank = 0;
+    const truthValue = trueValues[quantity]!;
+    let below = 0;
+    let ties = 0;
     for (let i = 0; i < RANKED; i++) {
       const sample = all[Math.floor(((i + 0.5) * all.length) / RANKED)]!;
-      const truthValue = trueValues[quantity]!;
-      if (sample < truthValue || (sample === truthValue && random.uniform() < 0.5)) rank++;
+      if (sample < truthValue) below++;
+      else if (sample === truthValue) ties++;
     }
-    return rank;
+    return below + random.below(ties + 1);
   });
 }
 
@@ -92,13 +97,15 @@ function randomTarget(random: RandomStream): TargetBed {
 }
 
 export interface AnsweredTarget {
+  /** seed of the trial that it was asked in */
+  readonly trial: number;
   readonly probability: number;
   readonly true: boolean;
 }
 
 /** Random target questions to the samples of a trial, and whether the true ground holds the bed. */
 export function answeredTargets(
-  { model, truth, drawn }: CalibrationTrial,
+  { seed, model, truth, drawn }: CalibrationTrial,
   count: number,
   random: RandomStream,
 ): AnsweredTarget[] {
@@ -109,22 +116,31 @@ export function answeredTargets(
     const held = earths.map((chain) => holdsBed(chain, target));
     const total = held.reduce((sum, chain) => sum + chain.reduce((a, b) => a + b, 0), 0);
     return {
+      trial: seed,
       probability: total / held.reduce((sum, chain) => sum + chain.length, 0),
       true: holdsBed(trueEarth, target)[0] === 1,
     };
   });
 }
 
+export interface Reliability {
+  readonly count: number;
+  /** of the stated probabilities */
+  readonly mean: number;
+  readonly cameTrue: number;
+  /** of `cameTrue` − `mean`; answers of one trial are about one ground, so that trials are what is counted */
+  readonly standardError: number;
+}
+
 /** Of the answers within [low, high]: how many, their mean, and the share that came true. */
-export function reliability(
-  answers: readonly AnsweredTarget[],
-  low: number,
-  high: number,
-): { count: number; mean: number; cameTrue: number } {
+export function reliability(answers: readonly AnsweredTarget[], low: number, high: number): Reliability {
   const within = answers.filter(({ probability }) => probability >= low && probability <= high);
-  return {
-    count: within.length,
-    mean: within.reduce((sum, { probability }) => sum + probability, 0) / within.length,
-    cameTrue: within.filter((answer) => answer.true).length / within.length,
-  };
+  const count = within.length;
+  const mean = within.reduce((sum, { probability }) => sum + probability, 0) / count;
+  const cameTrue = within.filter((answer) => answer.true).length / count;
+  const off = new Map<number, number>();
+  for (const { trial, probability, true: held } of within)
+    off.set(trial, (off.get(trial) ?? 0) + (held ? 1 : 0) - probability - (cameTrue - mean));
+  const squares = [...off.values()].reduce((sum, value) => sum + value * value, 0);
+  return { count, mean, cameTrue, standardError: Math.sqrt(squares) / count };
 }
