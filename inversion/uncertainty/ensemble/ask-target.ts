@@ -6,7 +6,7 @@ import { narrowPrior, widePrior } from './prior-range';
 import { modelUnder } from './sampled-model';
 import { chanceBefore, countBed, plainPrior, weighPriors } from './target-question';
 
-/** Samples for the answers under the narrow and the wide prior: their error is below 0.02. */
+/** Samples for the answers under the narrow and the wide prior; of a stated count their error is below 0.02. */
 const SIDE_DRAWS = 6000;
 
 /**

@@ -9,6 +9,8 @@ import type { LogLikelihood } from './likelihood';
 export interface Model {
   readonly space: GroundSpace;
   readonly logLikelihood: LogLikelihood;
+  /** The likelihood proper, where `logLikelihood` is a quick one near to it that rules at β < 1 and sorts out trials at β = 1. */
+  readonly logExact?: LogLikelihood;
 }
 
 /** A way to a trial ground. */
@@ -21,12 +23,28 @@ export interface Move {
 }
 
 /**
+ * Whether a trial that the quick likelihood has let pass also passes with the exact one: chance min(1, (L′/Lq′)/(L/Lq)), L exact and
+ * Lq quick. Both stages together leave the exact posterior as it is, however far off the quick one may be.
+ * Source: Christen & Fox 2005, J. Comput. Graph. Statist. 14, 795–810 (from memory).
+ */
+export function passesExactly(
+  logExact: LogLikelihood,
+  current: Ground,
+  trial: Ground,
+  random: RandomStream,
+): boolean {
+  trial.logExact = logExact(trial);
+  const gain = trial.logExact - trial.logLikelihood - (current.logExact - current.logLikelihood);
+  return gain >= 0 || log(random.uniform()) < gain;
+}
+
+/**
  * One Metropolis–Hastings–Green step at inverse temperature `beta`: accepted with chance
  * min(1, (L′/L)^β · prior′/prior · q(from|to)/q(to|from)); `current` then becomes the trial. Returns whether it did.
  * Source: Green 1995, Biometrika 82, 711–732 (from memory).
  */
 export function metropolisStep(
-  { space, logLikelihood }: Model,
+  { space, logLikelihood, logExact }: Model,
   move: Move,
   beta: number,
   current: Ground,
@@ -42,6 +60,7 @@ export function metropolisStep(
   const gain =
     beta * (trial.logLikelihood - current.logLikelihood) + trial.logPrior - current.logPrior + ratio;
   if (!(gain >= 0 || log(random.uniform()) < gain)) return false;
+  if (logExact && beta === 1 && !passesExactly(logExact, current, trial, random)) return false;
   copyGround(trial, current);
   return true;
 }

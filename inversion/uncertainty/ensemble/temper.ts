@@ -3,7 +3,7 @@ import type { RandomStream } from '../../random';
 import { createGround } from './ground';
 import { FEW_LAYERS } from './ground-space';
 import { metropolisStep, pickMove, type Model, type Move } from './metropolis';
-import { temperingMoves } from './moves';
+import { priorMove, temperingMoves } from './moves';
 import {
   chosenMembers,
   otherPopulations,
@@ -29,12 +29,14 @@ const LEAST_GROWTH = 4;
 const LEAST_BETA = 1e-12;
 
 /** The inverse temperature whose population is given back too: wider than the posterior, but about where it is. */
-const HALF_WAY = 0.4;
+export const HALF_WAY = 0.4;
 
-export interface TemperedPopulations {
-  readonly posterior: readonly Population[];
-  /** the same at an inverse temperature of 0.4 */
-  readonly tempered: readonly Population[];
+/** One inverse temperature of the ladder; entry c of each list belongs to population c. */
+export interface Rung {
+  readonly beta: number;
+  readonly populations: readonly Population[];
+  /** what the members of c were proposed at the end, made of the other populations */
+  readonly moves: readonly (readonly Move[])[];
 }
 
 /** Exact draws of the prior with their likelihoods. */
@@ -111,38 +113,43 @@ function sweep(
 /**
  * Sweeps at one temperature, in rounds; each round first fits what it proposes to the populations as they stand. What a population
  * is proposed comes from the others alone: a proposal fitted to the members that it moves would hold them where they are.
+ * Returns the moves of the last round.
  */
 function settle(
   model: Model,
   populations: readonly Population[],
   beta: number,
   streams: readonly RandomStream[],
-): void {
+): Move[][] {
   const rounds = beta === 1 ? LAST_ROUNDS : ROUNDS;
-  for (let round = 0; round < rounds; round++) {
+  for (let round = 1; ; round++) {
     const moves = streams.map((random, c) =>
-      temperingMoves(model.space, otherPopulations(populations, c), random),
+      temperingMoves(model.space, otherPopulations(populations, c), beta, random),
     );
     populations.forEach((population, c) => {
       for (let turn = 0; turn < SWEEPS; turn++) sweep(model, population, moves[c]!, beta, streams[c]!);
     });
+    if (round === rounds) return moves;
   }
 }
 
 /**
  * Populations, one a stream, that are led from the prior to the posterior: draws of the prior, screened by forward runs, are resampled
  * by L^Δβ and moved at each of a ladder of inverse temperatures β from 0 to 1 that sets itself. They start from no fit.
+ * Returns the rungs from the prior at β = 0 to β = 1; one is at `HALF_WAY`.
  * Source: Del Moral, Doucet & Jasra 2006, J. R. Statist. Soc. B 68, 411–436 (from memory).
  */
-export function temperedPopulations(
-  model: Model,
+export function temperedLadder(
+  { space, logLikelihood }: Model,
   size: number,
   streams: readonly RandomStream[],
   onStep: (beta: number) => void,
-): TemperedPopulations {
+): Rung[] {
+  // no exact stage: these populations only start the walks and shape what is proposed there
+  const model: Model = { space, logLikelihood };
   let populations = streams.map((random) => priorPopulation(model, SCREENED * size, random));
   const keptShare = model.space.most <= FEW_LAYERS ? KEPT_SHARE.few : KEPT_SHARE.many;
-  let halfWay: Population[] = [];
+  const rungs: Rung[] = [{ beta: 0, populations, moves: streams.map(() => [priorMove(space)]) }];
   let beta = 0;
   let taken = 0;
   while (beta < 1) {
@@ -159,9 +166,8 @@ export function temperedPopulations(
       weigh(population.logLikelihood, step, weights[c]!);
       return chosenMembers(population, resample(weights[c]!, size, streams[c]!));
     });
-    settle(model, populations, beta, streams);
-    if (beta === HALF_WAY) halfWay = populations;
+    rungs.push({ beta, populations, moves: settle(model, populations, beta, streams) });
     onStep(beta);
   }
-  return { posterior: populations, tempered: halfWay };
+  return rungs;
 }

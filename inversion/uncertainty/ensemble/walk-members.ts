@@ -29,7 +29,7 @@ export function walkMembers(
   random: RandomStream,
   onMember: (share: number) => void,
 ): Walk {
-  const { space } = model;
+  const { space, logExact } = model;
   const [current, trial] = [createGround(space.most), createGround(space.most)];
   const counts = moves.map(({ name }): MoveCount => ({ move: name, tried: 0, accepted: 0 }));
   const each = Math.ceil(draws / population.size);
@@ -37,6 +37,7 @@ export function walkMembers(
   for (let member = 0; member < population.size; member++) {
     getGround(population, member, current);
     current.logPrior = space.logPrior(current);
+    if (logExact) current.logExact = logExact(current);
     for (let turn = 1; turn <= each * thinning; turn++) {
       const m = pickMove(moves, random.uniform());
       counts[m]!.tried++;
