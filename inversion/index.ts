@@ -22,6 +22,7 @@ export { electrodeDistances, type ElectrodeDistances } from './spread/electrode-
 export { geometricFactor } from './spread/geometric-factor';
 export { IDEAL_SCHLUMBERGER_DEPTH, plottingSpacing } from './spread/plotting-spacing';
 export { createForwardOperator, type ForwardOperator } from './operator/forward-operator';
+export { compiledKernel } from './operator/compiled/compiled-kernel';
 export { createOperatorCache, type OperatorCache } from './operator/operator-cache';
 export { fitEarth } from './fit/fit-earth';
 export { hasCells } from './fit/smooth/has-cells';

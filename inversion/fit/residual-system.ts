@@ -70,6 +70,7 @@ export function createResidualSystem(
   const { branches, shiftOf, shifts } = branchLayout(readings, options.branchShiftSigma !== undefined);
   const perShiftSigma = 1 / (options.branchShiftSigma ?? 1);
   const priors = createPriorRows(options.priors ?? [], m + shifts);
+  const penaltyRows = shifts + priors.rows;
   const predicted = new Float64Array(m);
   let values = new Float64Array(0);
 
@@ -95,7 +96,7 @@ export function createResidualSystem(
   return {
     readings: m,
     shifts,
-    rows: m + shifts + priors.rows,
+    rows: m + penaltyRows,
     branches,
     evaluate: (parameters, layers, residual) => {
       const count = exponentiate(parameters, layers);
@@ -112,23 +113,30 @@ export function createResidualSystem(
     linearise: (parameters, layers, residual, jacobian) => {
       const count = exponentiate(parameters, layers);
       const width = count + shifts;
-      operator.predictWithJacobianInto(values, layers, predicted, jacobian, width);
+      const rows = operator.slopeRows(values, layers);
       let sum = 0;
       for (let i = 0; i < m; i++) {
-        const ratio = predicted[i]! / observed[i]!;
-        const plain = (logRatio(ratio) + shiftAt(parameters, count, i)) * perSigma[i]!;
-        const told = tolerant ? tolerantResidual(plain) : null;
-        const r = told ? told.value : plain;
-        const perLog = (told ? told.slope : 1) * perSigma[i]!;
+        const from = i * (count + 1);
+        const to = i * width;
+        const ratio = rows[from + count]! / observed[i]!;
+        let r = (logRatio(ratio) + shiftAt(parameters, count, i)) * perSigma[i]!;
+        let perLog = perSigma[i]!;
+        if (tolerant) {
+          const told = tolerantResidual(r);
+          r = told.value;
+          perLog *= told.slope;
+        }
         residual[i] = r;
         sum += r * r;
         const scale = (logRatioSlope(ratio) * perLog) / observed[i]!;
-        for (let j = 0; j < count; j++) jacobian[i * width + j]! *= scale;
-        for (let s = 0; s < shifts; s++) jacobian[i * width + count + s] = s === shiftOf[i] ? perLog : 0;
+        for (let j = 0; j < count; j++) jacobian[to + j] = rows[from + j]! * scale;
+        for (let s = 0; s < shifts; s++) jacobian[to + count + s] = s === shiftOf[i] ? perLog : 0;
       }
-      jacobian.fill(0, m * width, (m + shifts + priors.rows) * width);
-      for (let s = 0; s < shifts; s++) jacobian[(m + s) * width + count + s] = perShiftSigma;
-      priors.linearise(values, layers, jacobian, width);
+      if (penaltyRows > 0) {
+        jacobian.fill(0, m * width, (m + penaltyRows) * width);
+        for (let s = 0; s < shifts; s++) jacobian[(m + s) * width + count + s] = perShiftSigma;
+        priors.linearise(values, layers, jacobian, width);
+      }
       return sum + penalties(parameters, layers, residual);
     },
     describe: (parameters, layers) => {

@@ -1,4 +1,5 @@
-import type { ImageResponse } from '../spread/image-response';
+import { imageResponse, type ImageResponse } from '../spread/image-response';
+import type { Spread } from '../types';
 import { solveQr, thinQr, type ThinQr } from './householder';
 import type { LatticeGrade } from './lattice-grade';
 import { exp } from '../math/exponential';
@@ -64,10 +65,26 @@ function designFor(grade: LatticeGrade, { farthest, neutral }: ImageResponse, an
  * for every c is right for every layered earth, and ρa = w·T₁. The problem is solved in units of the nearest distance
  * snapped to the lattice, so its matrix is the same for every sounding.
  */
-export function designWeights(response: ImageResponse, grade: LatticeGrade): LatticeWeights {
+function designWeights(response: ImageResponse, grade: LatticeGrade): LatticeWeights {
   const offset = Math.floor(grade.perOctave * log2(response.nearest));
   const anchor = pow2(offset / grade.perOctave);
   const { first, depths, qr } = designFor(grade, response, anchor);
   const target = depths.map((c) => response.at(c * anchor));
   return { first: first - offset, values: solveQr(qr, target) };
+}
+
+/** Weights already designed, by spread: crews measure at the same spacings again and again. A pure memo of a few megabytes. */
+const designed = new Map<string, LatticeWeights>();
+const MOST_DESIGNED = 2000;
+
+/** `designWeights` of a spread, from the memo where it has it; the oldest entry leaves first. Not to be changed by the receiver. */
+export function weightsOf(spread: Spread, grade: LatticeGrade): LatticeWeights {
+  const key = `${grade.name}:${JSON.stringify(spread)}`;
+  let weights = designed.get(key);
+  if (!weights) {
+    weights = designWeights(imageResponse(spread), grade);
+    designed.set(key, weights);
+    if (designed.size > MOST_DESIGNED) designed.delete(designed.keys().next().value!);
+  }
+  return weights;
 }

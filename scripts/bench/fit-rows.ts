@@ -1,4 +1,4 @@
-import { createOperatorCache, fitLayered } from '../../inversion';
+import { compiledKernel, createOperatorCache, fitLayered } from '../../inversion';
 import { MOST_LAYERS } from '../../inversion/fit/check-fit-input';
 import { referenceJobs, type FitJob } from './cases';
 import { interleaved, secondsOf, skipped, type Row } from './table';
@@ -16,7 +16,7 @@ const scipySeconds = (jobs: readonly FitJob[]): number => {
 
 /** Least misfits, one a curve, with the operators of a survey kept from curve to curve as the command line does. */
 function fitAll(jobs: readonly FitJob[], layers?: 'auto'): number[] {
-  const operators = createOperatorCache();
+  const operators = createOperatorCache({ kernel: compiledKernel() });
   return jobs.map(({ readings, settings }) => {
     const asked = layers ? { ...settings, layers } : settings;
     return fitLayered(readings, asked, { operators }).chi2PerReading;

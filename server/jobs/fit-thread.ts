@@ -1,6 +1,6 @@
 import { performance } from 'node:perf_hooks';
 import type { MessagePort } from 'node:worker_threads';
-import { createOperatorCache, fitEarth, InversionError } from '../../inversion/index';
+import { compiledKernel, createOperatorCache, fitEarth, InversionError } from '../../inversion/index';
 import type { FitResult } from '../contract/fit-result';
 import type { RunInput } from '../contract/runs';
 import { progressReport } from './fit-progress';
@@ -16,7 +16,7 @@ export type FitAnswer =
 
 const REPORT_EVERY_MS = 250;
 /** Soundings of a survey share their spacings. */
-const operators = createOperatorCache();
+const operators = createOperatorCache({ kernel: compiledKernel() });
 
 /** The body of a computing thread: one fit, with its progress told at most four times a second. */
 export default function computeFit({ input, progress }: FitOrder): FitAnswer {

@@ -231,9 +231,9 @@ function forwardRuns(count: number): number {
       runs += 1;
       operator.predictInto(...given);
     },
-    predictWithJacobianInto: (...given) => {
+    slopeRows: (...given) => {
       runs += 1;
-      operator.predictWithJacobianInto(...given);
+      return operator.slopeRows(...given);
     },
   });
   const ground = (x: number): LayeredEarth => ({

@@ -172,7 +172,7 @@ describe('createOperatorCache', () => {
   const wenner = (spacing: number): Spread[] => [{ type: 'wenner', spacing }];
 
   it('keeps the most recently asked-for operators, with the same bits as new ones', () => {
-    const cache = createOperatorCache(2);
+    const cache = createOperatorCache({ limit: 2 });
     const first = cache.operatorFor(wenner(1));
     cache.operatorFor(wenner(2));
     expect(cache.operatorFor(wenner(1))).toBe(first);
@@ -183,7 +183,7 @@ describe('createOperatorCache', () => {
   });
 
   it('lets the least recently asked-for one go', () => {
-    const cache = createOperatorCache(1);
+    const cache = createOperatorCache({ limit: 1 });
     const first = cache.operatorFor(wenner(1));
     cache.operatorFor(wenner(2));
     expect(cache.operatorFor(wenner(1))).not.toBe(first);
