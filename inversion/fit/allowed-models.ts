@@ -1,7 +1,7 @@
 import { exp } from '../math/exponential';
 import type { EarthModel, FixedParameter } from '../types';
 import { logCovariance } from '../uncertainty/covariance';
-import { Z95, type AllowedModel } from '../uncertainty/parameter-doubt';
+import { Z95, type AllowedModel, type BestModel } from '../uncertainty/parameter-doubt';
 import type { ResidualSystem } from './residual-system';
 
 /** Parameters of a model, ln values then shifts, and Σ residual² with its penalties. */
@@ -30,7 +30,7 @@ function same(a: FittedModel, b: FittedModel): boolean {
 
 /**
  * The best model and, by rising χ², the others that a 95 % interval of one parameter must reach: χ² < least + 1.96².
- * Each is linearised where it stands; one that repeats another is left out.
+ * One that repeats another is left out.
  */
 export function allowedModels(
   best: FittedModel,
@@ -39,29 +39,24 @@ export function allowedModels(
   layers: number,
   held: readonly boolean[],
   fixed: readonly FixedParameter[],
-): [AllowedModel, ...AllowedModel[]] {
+): [BestModel, ...AllowedModel[]] {
   const residual = new Float64Array(system.rows);
   const jacobian = new Float64Array(system.rows * held.length);
-  const describe = ({ parameters, chi2 }: FittedModel): AllowedModel => {
-    system.linearise(parameters, layers, residual, jacobian);
-    return {
-      parameters,
-      earth: earthOf(parameters, layers, fixed),
-      covariance: logCovariance(jacobian, system.rows, held),
-      excess: Math.max(0, chi2 - best.chi2),
-    };
-  };
+  system.linearise(best.parameters, layers, residual, jacobian);
+  const describe = ({ parameters, chi2 }: FittedModel): AllowedModel => ({
+    parameters,
+    earth: earthOf(parameters, layers, fixed),
+    excess: Math.max(0, chi2 - best.chi2),
+  });
   const kept: FittedModel[] = [best];
   for (const other of others.toSorted((a, b) => a.chi2 - b.chi2))
     if (other.chi2 - best.chi2 < Z95 * Z95 && !kept.some((one) => same(one, other))) kept.push(other);
-  return [describe(best), ...kept.slice(1).map(describe)];
+  const covariance = logCovariance(jacobian, system.rows, held);
+  return [{ ...describe(best), covariance }, ...kept.slice(1).map(describe)];
 }
 
 /** The first of the others that the best model's own 95 % intervals deny: a ground that fits alike and is another. */
-export function standsApart([best, ...others]: readonly [
-  AllowedModel,
-  ...AllowedModel[],
-]): AllowedModel | null {
+export function standsApart([best, ...others]: readonly [BestModel, ...AllowedModel[]]): AllowedModel | null {
   return (
     others.find((other) =>
       other.parameters.some(

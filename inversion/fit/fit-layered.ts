@@ -51,9 +51,10 @@ export function fitLayered(
       : settings.layers;
   const quickSystem = createResidualSystem(operator.quick(), readings, settings);
   // what is known beforehand speaks of the stated count alone
+  const bare = settings.priors.length > 0 ? { ...settings, priors: [] } : null;
   const scouts = scoutModels(
-    createResidualSystem(operator, readings, { ...settings, priors: [] }),
-    createResidualSystem(operator.quick(), readings, { ...settings, priors: [] }),
+    bare ? createResidualSystem(operator, readings, bare) : system,
+    bare ? createResidualSystem(operator.quick(), readings, bare) : quickSystem,
     curve,
     settings,
     most - 1,

@@ -31,12 +31,13 @@ const SHIFT_REACH = 10;
 function alignedWithDepths(
   logEarth: ArrayLike<number>,
   layers: number,
-  priors: readonly GaussianPrior[],
-): Float64Array {
+  /** priors of depths, from the shallowest boundary on */
+  contacts: readonly GaussianPrior[],
+): ArrayLike<number> {
+  if (contacts.length === 0) return logEarth;
   const aligned = Float64Array.from(logEarth);
   let next = 0;
   let above = 0;
-  const contacts = priors.filter(({ on }) => on === 'depth').toSorted((a, b) => a.index - b.index);
   for (const { index, value } of contacts) {
     let thickness = 0;
     for (let k = next; k <= index; k++) thickness += exp(aligned[layers + k]!);
@@ -64,7 +65,8 @@ export function createLayeredProblem(
     held[j] = true;
     full[j] = log(value);
   }
-  const free = held.flatMap((isHeld, j) => (isHeld ? [] : [j]));
+  const free = Int32Array.from(held.flatMap((isHeld, j) => (isHeld ? [] : [j])));
+  const n = free.length;
   const limit = (side: 0 | 1) =>
     Float64Array.from(free, (j) =>
       j >= earthCount
@@ -73,10 +75,19 @@ export function createLayeredProblem(
     );
   const low = limit(0);
   const high = limit(1);
-  const jacobianOfAll = new Float64Array(system.rows * count);
-  const place = (parameters: ArrayLike<number>) => free.forEach((j, k) => (full[j] = parameters[k]!));
-  const restrict = (all: ArrayLike<number>) =>
-    Float64Array.from(free, (j, k) => Math.min(high[k]!, Math.max(low[k]!, all[j] ?? 0)));
+  const contacts = priors.filter(({ on }) => on === 'depth').toSorted((a, b) => a.index - b.index);
+  const jacobianOfAll = new Float64Array(n === count ? 0 : system.rows * count);
+  /** all parameters, which stand in `full` unless all are free */
+  const place = (parameters: ArrayLike<number>): ArrayLike<number> => {
+    if (n === count) return parameters;
+    for (let k = 0; k < n; k++) full[free[k]!] = parameters[k]!;
+    return full;
+  };
+  const restrict = (all: ArrayLike<number>): Float64Array => {
+    const restricted = new Float64Array(n);
+    for (let k = 0; k < n; k++) restricted[k] = Math.min(high[k]!, Math.max(low[k]!, all[free[k]!] ?? 0));
+    return restricted;
+  };
   return {
     layers,
     held,
@@ -84,26 +95,18 @@ export function createLayeredProblem(
       residuals: system.rows,
       low,
       high,
-      evaluate: (parameters, residual) => {
-        place(parameters);
-        return system.evaluate(full, layers, residual);
-      },
+      evaluate: (parameters, residual) => system.evaluate(place(parameters), layers, residual),
       linearise: (parameters, residual, jacobian) => {
-        place(parameters);
-        const n = free.length;
-        if (n === count) return system.linearise(full, layers, residual, jacobian);
-        const chi2 = system.linearise(full, layers, residual, jacobianOfAll);
+        if (n === count) return system.linearise(parameters, layers, residual, jacobian);
+        const chi2 = system.linearise(place(parameters), layers, residual, jacobianOfAll);
         for (let i = 0; i < system.rows; i++) {
           for (let k = 0; k < n; k++) jacobian[i * n + k] = jacobianOfAll[i * count + free[k]!]!;
         }
         return chi2;
       },
     },
-    expand: (parameters) => {
-      place(parameters);
-      return Float64Array.from(full);
-    },
+    expand: (parameters) => Float64Array.from(place(parameters)),
     restrict,
-    startFrom: (logEarth) => restrict(alignedWithDepths(logEarth, layers, priors)),
+    startFrom: (logEarth) => restrict(alignedWithDepths(logEarth, layers, contacts)),
   };
 }

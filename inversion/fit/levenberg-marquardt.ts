@@ -30,7 +30,7 @@ export interface LeastSquaresOutcome {
 export interface LeastSquaresOptions {
   readonly iterations?: number;
   readonly initialDamping?: number;
-  readonly onIteration?: (iteration: number, chi2: number) => void;
+  readonly onIteration?: ((iteration: number, chi2: number) => void) | undefined;
 }
 
 export const FASTER = 4;

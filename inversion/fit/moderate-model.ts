@@ -19,12 +19,17 @@ const STEPS = 25;
 /** A moderate model has converged once its linearised problem promises a fall of no more than this × its objective. */
 const PROMISE = 1e-5;
 
+/** How strongly a model is drawn to the centre. */
+interface Pull {
+  weight: number;
+}
+
 /** The problem with one more row for each parameter: √weight × its departure from the centre. */
-function pulled(problem: LeastSquaresProblem, centre: Float64Array, weight: number): LeastSquaresProblem {
+function pulled(problem: LeastSquaresProblem, centre: Float64Array, pull: Pull): LeastSquaresProblem {
   const n = centre.length;
   const rows = problem.residuals;
-  const root = Math.sqrt(weight);
   const depart = (parameters: ArrayLike<number>, residual: Float64Array): number => {
+    const root = Math.sqrt(pull.weight);
     let sum = 0;
     for (let j = 0; j < n; j++) {
       const r = root * (parameters[j]! - centre[j]!);
@@ -36,12 +41,11 @@ function pulled(problem: LeastSquaresProblem, centre: Float64Array, weight: numb
   return {
     ...problem,
     residuals: rows + n,
-    evaluate: (parameters, residual) =>
-      problem.evaluate(parameters, residual.subarray(0, rows)) + depart(parameters, residual),
+    evaluate: (parameters, residual) => problem.evaluate(parameters, residual) + depart(parameters, residual),
     linearise: (parameters, residual, jacobian) => {
-      const chi2 = problem.linearise(parameters, residual.subarray(0, rows), jacobian);
+      const chi2 = problem.linearise(parameters, residual, jacobian);
       jacobian.fill(0, rows * n);
-      for (let j = 0; j < n; j++) jacobian[(rows + j) * n + j] = root;
+      for (let j = 0; j < n; j++) jacobian[(rows + j) * n + j] = Math.sqrt(pull.weight);
       return chi2 + depart(parameters, residual);
     },
   };
@@ -72,13 +76,17 @@ export function moderateModel(
   const { deviation } = logCovariance(jacobian, problem.residuals, free);
   if (deviation.every((value) => value <= LOOSE)) return least;
   const towards = layered.restrict(centre);
+  const pull: Pull = { weight: 0 };
+  const descend = createDescent(pulled(quick.problem, towards, pull));
+  const exact = pulled(problem, towards, pull);
   for (const weight of WEIGHTS) {
-    const near = createDescent(pulled(quick.problem, towards, weight))(least.parameters, {
+    pull.weight = weight;
+    const near = descend(least.parameters, {
       iterations: STEPS,
       promise: PROMISE,
     });
     if (problem.evaluate(near.parameters, residual) > (1 + MODERATION) * least.chi2) continue;
-    const { parameters } = minimise(pulled(problem, towards, weight), near.parameters, {
+    const { parameters } = minimise(exact, near.parameters, {
       iterations: STEPS,
       initialDamping: POLISH_DAMPING,
     });

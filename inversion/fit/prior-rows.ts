@@ -32,7 +32,8 @@ export function createPriorRows(priors: readonly GaussianPrior[], first: number)
     rows: priors.length,
     evaluate: (parameters, values, layers, residual) => {
       let sum = 0;
-      priors.forEach((prior, p) => {
+      for (let p = 0; p < priors.length; p++) {
+        const prior = priors[p]!;
         const off =
           prior.on === 'depth'
             ? baseDepth(values, layers, prior.index) - prior.value
@@ -40,7 +41,7 @@ export function createPriorRows(priors: readonly GaussianPrior[], first: number)
         const r = off / prior.sigma;
         residual[first + p] = r;
         sum += r * r;
-      });
+      }
       return sum;
     },
     linearise: (values, layers, jacobian, width) => {

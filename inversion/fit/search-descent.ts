@@ -79,8 +79,10 @@ export function createDescent(problem: LeastSquaresProblem): Descent {
   };
   /** Writes a damped step, clipped to the bounds, into `trial`; returns the fall of χ² that it promises. */
   const stepInto = (damping: number): number => {
-    trial.set(current);
-    delta.fill(0);
+    for (let j = 0; j < n; j++) {
+      trial[j] = current[j]!;
+      delta[j] = 0;
+    }
     if (!solve(damping)) return 0;
     for (let a = 0; a < count; a++) {
       const j = free[a]!;
@@ -95,23 +97,23 @@ export function createDescent(problem: LeastSquaresProblem): Descent {
     }
     return fall;
   };
+  const outcome = (
+    status: FitStatus,
+    chi2: number,
+    iterations: number,
+    damping: number,
+  ): LeastSquaresOutcome => ({ status, parameters: current.slice(), chi2, iterations, damping });
 
   return (start, { iterations: limit = TOLERANCES.iterations, ...options }) => {
     for (let j = 0; j < n; j++) current[j] = Math.min(high[j]!, Math.max(low[j]!, start[j]!));
     let chi2 = linearise();
     let damping = options.initialDamping ?? INITIAL_DAMPING;
     let iterations = 0;
-    const done = (status: FitStatus): LeastSquaresOutcome => ({
-      status,
-      parameters: current.slice(),
-      chi2,
-      iterations,
-      damping,
-    });
     for (;;) {
       const fall = wholeFall();
-      if (fall <= options.promise * chi2) return done('converged-decrease');
-      if (options.abandon?.(current, chi2 - fall)) return done('iteration-limit');
+      if (fall <= options.promise * chi2) return outcome('converged-decrease', chi2, iterations, damping);
+      if (options.abandon?.(current, chi2 - fall))
+        return outcome('iteration-limit', chi2, iterations, damping);
       for (;;) {
         const promised = stepInto(damping);
         const reached = problem.evaluate(trial, residual);
@@ -122,12 +124,12 @@ export function createDescent(problem: LeastSquaresProblem): Descent {
           break;
         }
         damping *= SLOWER;
-        if (damping > TOLERANCES.damping) return done('no-descent');
-        if (iterations >= limit) return done('iteration-limit');
+        if (damping > TOLERANCES.damping) return outcome('no-descent', chi2, iterations, damping);
+        if (iterations >= limit) return outcome('iteration-limit', chi2, iterations, damping);
       }
       [current, trial] = [trial, current];
       options.onIteration?.(iterations, chi2);
-      if (iterations >= limit) return done('iteration-limit');
+      if (iterations >= limit) return outcome('iteration-limit', chi2, iterations, damping);
       linearise();
     }
   };

@@ -11,7 +11,7 @@ export interface SoundingCurve {
 }
 
 /** Depth that a spacing speaks of, as a share of the spacing on the AB/2 axis. */
-const DEPTH_SHARE = 0.4;
+const LOG_DEPTH_SHARE = log(0.4);
 
 export function soundingCurve(readings: readonly Reading[]): SoundingCurve {
   const points = readings
@@ -40,23 +40,20 @@ export function curveAt({ logSpacing, logResistivity }: SoundingCurve, x: number
   return logResistivity[i - 1]! + share * (logResistivity[i]! - logResistivity[i - 1]!);
 }
 
-function modelFromDepths(
-  curve: SoundingCurve,
-  logDepths: readonly number[],
-  shift: (layer: number) => number,
-): Float64Array {
+/** ln parameters with the given ln depths of the boundaries, ascending, and resistivities read off the curve. */
+function modelFromDepths(curve: SoundingCurve, logDepths: Float64Array): Float64Array {
   const layers = logDepths.length + 1;
   const parameters = new Float64Array(2 * layers - 1);
+  let above = 0;
   for (let i = 0; i < layers; i++) {
     const top = i === 0 ? (logDepths[0] ?? curve.logSpacing[0]!) - 1.4 : logDepths[i - 1]!;
     const bottom = i === layers - 1 ? top + 1.4 : logDepths[i]!;
-    const spacing = (top + bottom) / 2 - log(DEPTH_SHARE);
-    parameters[i] = curveAt(curve, spacing) + shift(i);
-  }
-  for (let i = 0; i < layers - 1; i++) {
-    const depth = exp(logDepths[i]!);
-    const above = i === 0 ? 0 : exp(logDepths[i - 1]!);
+    const spacing = (top + bottom) / 2 - LOG_DEPTH_SHARE;
+    parameters[i] = curveAt(curve, spacing);
+    if (i === layers - 1) break;
+    const depth = exp(bottom);
     parameters[layers + i] = log(Math.max(depth - above, 0.05 * depth));
+    above = depth;
   }
   return parameters;
 }
@@ -64,8 +61,9 @@ function modelFromDepths(
 /** ln parameters of a model with boundaries evenly spread in ln depth and resistivities read off the curve. */
 export function evenStart(curve: SoundingCurve, layers: number): Float64Array {
   const { low, high } = depthRange(curve);
-  const logDepths = Array.from({ length: layers - 1 }, (_, i) => low + ((high - low) * (i + 1)) / layers);
-  return modelFromDepths(curve, logDepths, () => 0);
+  const logDepths = new Float64Array(layers - 1);
+  for (let i = 0; i < layers - 1; i++) logDepths[i] = low + ((high - low) * (i + 1)) / layers;
+  return modelFromDepths(curve, logDepths);
 }
 
 /** The same, with the mean of the curve for every resistivity: a model that says least. */
@@ -81,17 +79,25 @@ export function logEarth({ resistivity, thickness }: LayeredEarth): Float64Array
 }
 
 function depthRange({ logSpacing }: SoundingCurve): { low: number; high: number } {
-  const share = log(DEPTH_SHARE);
-  return { low: logSpacing[0]! + share - 0.4, high: logSpacing[logSpacing.length - 1]! + share + 0.4 };
+  return {
+    low: logSpacing[0]! + LOG_DEPTH_SHARE - 0.4,
+    high: logSpacing[logSpacing.length - 1]! + LOG_DEPTH_SHARE + 0.4,
+  };
 }
 
 /** The same with boundaries uniform in ln depth and resistivities scattered about the curve. */
 export function randomStart(curve: SoundingCurve, layers: number, random: RandomStream): Float64Array {
   const { low, high } = depthRange(curve);
-  const logDepths = Array.from({ length: layers - 1 }, () => low + (high - low) * random.uniform()).sort(
-    (a, b) => a - b,
-  );
-  return modelFromDepths(curve, logDepths, () => 0.6 * random.normal());
+  const logDepths = new Float64Array(layers - 1);
+  for (let i = 0; i < layers - 1; i++) {
+    const depth = low + (high - low) * random.uniform();
+    let place = i;
+    for (; place > 0 && logDepths[place - 1]! > depth; place--) logDepths[place] = logDepths[place - 1]!;
+    logDepths[place] = depth;
+  }
+  const parameters = modelFromDepths(curve, logDepths);
+  for (let i = 0; i < layers; i++) parameters[i]! += 0.6 * random.normal();
+  return parameters;
 }
 
 /** Factors by which the two halves of a split layer are told apart, in ln ρ. */

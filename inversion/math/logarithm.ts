@@ -7,12 +7,10 @@ const HIGH_OF_ONE = 0x3ff00000;
 const HIGH_OF_ROOT_HALF = 0x3fe6a09e;
 const SMALLEST_NORMAL = 2.2250738585072014e-308;
 
-/** k of x = 2^k m with √½ ≤ m < √2, for a normal x > 0; m is left in `view`. */
-function splitExponent(x: number): number {
+/** k of x = 2^k m with √½ ≤ m < √2, for a normal x > 0; m is then x·2^−k, exactly. */
+function exponentOf(x: number): number {
   view.setFloat64(0, x, true);
-  const word = view.getInt32(4, true) + (HIGH_OF_ONE - HIGH_OF_ROOT_HALF);
-  view.setInt32(4, (word & 0xfffff) + HIGH_OF_ROOT_HALF, true);
-  return (word >> 20) - 1023;
+  return ((view.getInt32(4, true) + (HIGH_OF_ONE - HIGH_OF_ROOT_HALF)) >> 20) - 1023;
 }
 
 /** ln(1 + f) + k ln2 + c·, √½ − 1 ≤ f < √2 − 1: s = f/(2 + f), ln(1 + f) = 2 artanh s by its Remez polynomial. */
@@ -37,14 +35,14 @@ export function log(x: number): number {
   if (!(x > 0)) return x === 0 ? -Infinity : NaN;
   if (x === Infinity) return Infinity;
   if (x < SMALLEST_NORMAL) return log(x * powerOfTwo(54)) - 54 * Math.LN2;
-  const k = splitExponent(x);
-  return combine(view.getFloat64(0, true) - 1, k, 0);
+  const k = exponentOf(x);
+  return combine(x * powerOfTwo(-k) - 1, k, 0);
 }
 
 /** log₂ x for a normal x > 0, exact at powers of two, else within 2 ulp. */
 export function log2(x: number): number {
-  const k = splitExponent(x);
-  return k + combine(view.getFloat64(0, true) - 1, 0, 0) * Math.LOG2E;
+  const k = exponentOf(x);
+  return k + combine(x * powerOfTwo(-k) - 1, 0, 0) * Math.LOG2E;
 }
 
 /**
@@ -57,9 +55,8 @@ export function log1p(x: number): number {
   if (Math.abs(x) < 1.2e-16) return x;
   if (x > -0.2928 && x < 0.4142) return combine(x, 0, 0);
   const u = 1 + x;
-  const k = splitExponent(u);
-  const mantissa = view.getFloat64(0, true);
+  const k = exponentOf(u);
   // what 1 + x lost
   const c = k >= 54 ? 0 : (k >= 2 ? 1 - (u - x) : x - (u - 1)) / u;
-  return combine(mantissa - 1, k, c);
+  return combine(u * powerOfTwo(-k) - 1, k, c);
 }

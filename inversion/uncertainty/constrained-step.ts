@@ -4,11 +4,19 @@ import { normalEquations } from '../matrix/normal-equations';
 
 /** The misfit about one point: χ², JᵀJ (lower triangle, row-major n × n) and Jᵀr. */
 export interface Linearised {
-  readonly at: Float64Array;
-  readonly chi2: number;
+  at: Float64Array;
+  chi2: number;
   readonly normal: Float64Array;
   readonly slope: Float64Array;
 }
+
+/** Room for the misfit about a point of n parameters. */
+export const emptyPoint = (n: number): Linearised => ({
+  at: new Float64Array(n),
+  chi2: Infinity,
+  normal: new Float64Array(n * n),
+  slope: new Float64Array(n),
+});
 
 /** Where a step leads, and what it promises. */
 export interface LimitStep {
@@ -21,7 +29,8 @@ export interface LimitStep {
 
 /** Linearises one problem and steps from there to a limit of χ², in working arrays of its own. */
 export interface LimitStepper {
-  readonly linearise: (at: Float64Array) => Linearised;
+  /** the misfit about a point, written over a point that is no longer needed where one is given */
+  readonly linearise: (at: Float64Array, over?: Linearised) => Linearised;
   /**
    * max gᵀδ subject to ‖r + Jδ‖² ≤ limit: δ = −A⁻¹Jᵀr + α A⁻¹g, A = JᵀJ + damping, α from the limit. A parameter that sits on
    * a bound and would leave it is held and the rest solved again; the step ends at the first bound in its way, so that going
@@ -112,12 +121,11 @@ export function createLimitStepper({ low, high, residuals, linearise }: LeastSqu
   };
 
   return {
-    linearise: (at) => {
-      const chi2 = linearise(at, residual, jacobian);
-      const normal = new Float64Array(n * n);
-      const slope = new Float64Array(n);
-      normalEquations(jacobian, residual, normal, slope);
-      return { at, chi2, normal, slope };
+    linearise: (at, over = emptyPoint(n)) => {
+      over.at = at;
+      over.chi2 = linearise(at, residual, jacobian);
+      normalEquations(jacobian, residual, over.normal, over.slope);
+      return over;
     },
     step: (from, g, limit, damping) => {
       const { at } = from;

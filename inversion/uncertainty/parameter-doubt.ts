@@ -11,14 +11,18 @@ import { depthOf, productOf, resistivityOf, thicknessOf, type Quantity } from '.
 /** Standard normal point that leaves 2.5 % above it; its square is the 95 % point of χ² with one degree of freedom. */
 export const Z95 = 1.959963984540054;
 
-/** A model that the readings allow, with the doubt about it from its own Jacobian. */
+/** A model that the readings allow. */
 export interface AllowedModel {
   /** all parameters, ln values then shifts */
   readonly parameters: Float64Array;
   readonly earth: LayeredEarth;
-  readonly covariance: LogCovariance;
   /** its χ² minus the least one found, ≥ 0 */
   readonly excess: number;
+}
+
+/** The best of them, with the linear doubt about it from its own Jacobian. */
+export interface BestModel extends AllowedModel {
+  readonly covariance: LogCovariance;
 }
 
 export interface ParameterDoubt {
@@ -91,7 +95,7 @@ function correlations({ deviation, covariance }: LogCovariance, count: number): 
  * ρ and h. Correlations are the linear ones of the best, over the 2N − 1 ln values; null for a held or unresolved one.
  */
 export function parameterDoubt(
-  models: readonly [AllowedModel, ...AllowedModel[]],
+  models: readonly [BestModel, ...AllowedModel[]],
   layered: LayeredProblem,
   leastChi2: number,
 ): ParameterDoubt {

@@ -1,5 +1,5 @@
 import type { LeastSquaresProblem } from '../fit/levenberg-marquardt';
-import { createLimitStepper, type LimitStep, type Linearised } from './constrained-step';
+import { createLimitStepper, emptyPoint, type LimitStep, type Linearised } from './constrained-step';
 
 /** How far a quantity goes on one side while the misfit stays within a limit. */
 export interface ProfileEnd {
@@ -89,15 +89,22 @@ const stiffening = (over: number): number =>
  */
 export function createProfiler(problem: LeastSquaresProblem): Profiler {
   const { linearise, step } = createLimitStepper(problem);
+  /** room for where a search stands, for its furthest point and for the next */
+  const kept = Array.from({ length: 3 }, () => emptyPoint(problem.low.length));
+  const lineariseBeside = (at: Float64Array, here: Linearised, best: Linearised): Linearised =>
+    linearise(
+      at,
+      kept.find((point) => point !== here && point !== best),
+    );
   return {
-    foot: linearise,
+    foot: (parameters) => linearise(parameters),
     promise: (foot, quantity, limit) =>
       quantity.value(foot.at) + TRUST * (step(foot, quantity.gradient(foot.at), limit, 0)?.gain ?? 0),
     end: (foot, quantity, limit, { from, damping = DAMPING, short = false } = {}) => {
       const rise = limit - foot.chi2;
       const origin = quantity.value(foot.at);
       const most = short ? SHORT_STEPS : STEPS;
-      let here = from ? linearise(from) : foot;
+      let here = from ? linearise(from, kept[0]) : foot;
       let best = here;
       let reach = quantity.value(here.at);
       let outside = 0;
@@ -115,7 +122,7 @@ export function createProfiler(problem: LeastSquaresProblem): Profiler {
           found = true;
           break;
         }
-        const there = linearise(next.parameters);
+        const there = lineariseBeside(next.parameters, here, best);
         const over = (there.chi2 - limit) / rise;
         if (!(over <= 1) || (over > CLOSE && ++outside > RETURNS)) {
           damping *= stiffening(over);

@@ -31,10 +31,9 @@ function drawn(
   return {
     ...problem,
     residuals: rows + 1,
-    evaluate: (parameters, residual) =>
-      problem.evaluate(parameters, residual.subarray(0, rows)) + pull(parameters, residual),
+    evaluate: (parameters, residual) => problem.evaluate(parameters, residual) + pull(parameters, residual),
     linearise: (parameters, residual, jacobian) => {
-      const chi2 = problem.linearise(parameters, residual.subarray(0, rows), jacobian);
+      const chi2 = problem.linearise(parameters, residual, jacobian);
       const slope = quantity.gradient(parameters);
       for (let j = 0; j < n; j++) jacobian[rows * n + j] = slope[j]! / ERROR;
       return chi2 + pull(parameters, residual);
