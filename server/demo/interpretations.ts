@@ -44,8 +44,8 @@ export const INTERPRETATIONS: readonly DemoInterpretation[] = [
       'BH-2, 13 m away, met silt, clay, gravel and marl, with contacts at 2.0, 6.5 and 30.6 m. The run, which was not told of ' +
       'the hole, puts them at 1.91, 6.00 and 32.2 m; each of the hole lies within its 95 % range.\n\n' +
       'The product of thickness and resistivity of the gravel is well held, 2610 Ω·m². Its thickness alone is not: 26.2 m in ' +
-      'the run, 24.1 m in the hole, and the readings would bear much less. Of the clay they tell the conductance, 0.220 S; its ' +
-      'name and its thickness come from the hole. The water level is that of BH-2 in May.',
+      'the run, 24.1 m in the hole, and the readings would bear anything from 14.1 to 32.6 m. Of the clay they tell the ' +
+      'conductance, 0.220 S; its name and its thickness come from the hole. The water level is that of BH-2 in May.',
     beds: [
       {
         ground: 'sandy silt, dry',
@@ -70,12 +70,14 @@ export const INTERPRETATIONS: readonly DemoInterpretation[] = [
     layers: 4,
     title: 'Proposed site of the second well',
     narrative:
-      'The curve asks for a thick bed of 137 Ω·m, from 7.06 to 38.4 m, between a conductive bed and a conductive base of ' +
+      'The curve asks for a thick bed of 137 Ω·m, from 7.05 to 38.4 m, between a conductive bed and a conductive base of ' +
       '12.0 Ω·m. By likeness with BH-2, 285 m to the east, the thick bed is read as water-bearing gravel. Three beds do not ' +
       'explain the readings.\n\n' +
       'What the sounding does not tell: whether the conductive base is marl, as in BH-2, or holds brackish water, as in BH-4. ' +
       'The clay is known by its conductance, 0.166 S, not by its thickness. One reading is left out with its reason.\n\n' +
-      'A test hole to the base of the gravel, with conductivity of the water measured as it is drilled, would decide both.',
+      'A test hole through the thick bed and a few metres into the conductive ground below it would show whether the thick ' +
+      'bed is water-bearing gravel. Its samples, and the conductivity of the water measured as it is drilled, would tell marl ' +
+      'from gravel with brackish water.',
     beds: [
       {
         ground: 'dry gravelly soil',
@@ -83,7 +85,7 @@ export const INTERPRETATIONS: readonly DemoInterpretation[] = [
         confidence: 'well-supported',
         otherCandidates: 'dry sand',
       },
-      { ground: 'clay, thin', role: 'aquitard', confidence: 'possible', otherCandidates: 'silt, thicker' },
+      { ground: 'clay', role: 'aquitard', confidence: 'possible', otherCandidates: 'silt' },
       {
         ground: 'gravel and sand',
         role: 'aquifer',

@@ -286,7 +286,7 @@ export const BOREHOLES = [
     elevationM: 384.8,
     depthM: 30,
     drilledOn: '2019-10-22',
-    note: 'Water turned brackish at 18 m; hole plugged below 17 m.',
+    note: 'Water turned brackish at 18.1 m; hole plugged below 17 m.',
     intervals: [
       { topM: 0, baseM: 1.8, description: 'sandy soil' },
       { topM: 1.8, baseM: 18.1, description: 'sand and gravel, fresh water' },

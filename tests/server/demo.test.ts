@@ -71,6 +71,7 @@ describe('the demo', () => {
         ...earth.resistivity,
         ...earth.thickness,
         ...depthsOf(earth.thickness),
+        ...intervals.thickness.flat().filter((end) => end !== null),
         ...darZarrouk.conductanceS,
         ...darZarrouk.resistanceOhmM2,
         ...holes.map(({ xM, yM }) => Math.hypot(xM - place.xM, yM - place.yM)),
