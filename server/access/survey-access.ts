@@ -1,5 +1,5 @@
 import type { Knex } from 'knex';
-import type { Role, SurveyCan } from '../contract/roles';
+import { ROLE_NAMES, type Role, type SurveyCan } from '../contract/roles';
 import { AppError, notFound } from '../errors';
 import type { Actor } from './actor';
 import { surveyCan, type SurveyAction } from './policy';
@@ -70,5 +70,8 @@ const ACTION_WORDS: Record<SurveyAction, string> = {
 
 export function requireCan(access: Pick<SurveyAccess, 'role' | 'can'>, action: SurveyAction): void {
   if (!access.can[action])
-    throw new AppError('forbidden', `As ${access.role} of this survey you may not ${ACTION_WORDS[action]}.`);
+    throw new AppError(
+      'forbidden',
+      `As ${ROLE_NAMES[access.role]} of this survey you may not ${ACTION_WORDS[action]}.`,
+    );
 }

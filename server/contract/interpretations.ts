@@ -112,6 +112,6 @@ export const createReviewEventSchema = z
   })
   .refine((event) => !['changes-asked', 'commented'].includes(event.kind) || event.comment !== '', {
     path: ['comment'],
-    message: 'must say what is asked or meant',
+    message: 'write what is asked or meant',
   })
   .meta({ id: 'CreateReviewEvent' });

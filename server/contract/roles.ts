@@ -3,6 +3,15 @@ import { z } from 'zod';
 export const roleSchema = z.enum(['lead', 'geophysicist', 'hydrogeologist', 'analyst', 'guest']);
 export type Role = z.infer<typeof roleSchema>;
 
+/** Each role within a sentence, the same on screen, in mail and in answers. */
+export const ROLE_NAMES: Record<Role, string> = {
+  lead: 'lead',
+  geophysicist: 'geophysicist',
+  hydrogeologist: 'hydrogeologist',
+  analyst: 'archive analyst',
+  guest: 'guest',
+};
+
 /** What the server says the signed-in person may do in a survey; the client shows exactly these actions. */
 export const surveyCanSchema = z
   .strictObject({

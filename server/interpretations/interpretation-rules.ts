@@ -2,6 +2,7 @@ import type { Actor } from '../access/actor';
 import { surveyCan } from '../access/policy';
 import { AppError } from '../errors';
 import type { Interpretation, InterpretationState, ReviewEvent } from '../contract/interpretations';
+import { ROLE_NAMES } from '../contract/roles';
 import type { WholeInterpretation } from './interpretations-store';
 
 export type Move = Exclude<ReviewEvent['kind'], 'superseded' | 'commented' | 'edited'>;
@@ -37,7 +38,7 @@ export function decideRefusal(actor: Actor, { row, contributorIds }: WholeInterp
 /** Its author edits it; others do where they could submit it as well. Null = the actor may. */
 export function editRefusal(actor: Actor, { row }: WholeInterpretation): string | null {
   if (row.author_id === actor.userId || surveyCan(row.role).submit) return null;
-  return `As ${row.role} of this survey you may edit only interpretations of your own; this one is ${row.author_name}’s.`;
+  return `As ${ROLE_NAMES[row.role]} of this survey you may edit only interpretations of your own; this one is ${row.author_name}’s.`;
 }
 
 /** Only what has left no history is ever deleted. Null = the actor may. */

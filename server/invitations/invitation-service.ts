@@ -3,6 +3,7 @@ import { countAttempt } from '../access/attempts';
 import { recordAudit } from '../access/audit';
 import { createToken } from '../access/secret-token';
 import { getSurveyAccess, requireCan } from '../access/survey-access';
+import { ROLE_NAMES } from '../contract/roles';
 import type { createInvitationSchema } from '../contract/surveys';
 import { AppError } from '../errors';
 import type { Context } from '../http/context';
@@ -69,7 +70,7 @@ const sendInvitation = (
     subject: `${actor.name} invites you to the survey ${row.survey_name}`,
     text: [
       'Hello,',
-      `${actor.name} invites you to the survey “${row.survey_name}” in Layerwell as ${row.role}. Open this address within 14 days to accept:`,
+      `${actor.name} invites you to the survey “${row.survey_name}” in Layerwell as ${ROLE_NAMES[row.role]}. Open this address within 14 days to accept:`,
       `${config.publicUrl}/invitations/${token}`,
       'If you do not expect this, do nothing.',
     ].join('\n\n'),

@@ -1,3 +1,5 @@
+import { ROLE_NAMES, roleSchema } from '../../../server/contract/roles';
+
 const UUID = /^[0-9a-f]{8}-[0-9a-f-]{27}$/;
 
 /** "role guest; fields name, note; run 55b9ee2e": what has no name is told by the first part of its id, "from" before "to". */
@@ -5,8 +7,13 @@ export const detailsInWords = (details: Readonly<Record<string, unknown>>): stri
   Object.entries(details)
     .filter(([, value]) => value !== null)
     .toSorted(([a], [b]) => Number(a === 'to') - Number(b === 'to'))
-    .map(([key, value]) => `${keyInWords(key)} ${valueInWords(value)}`)
+    .map(([key, value]) => `${keyInWords(key)} ${roleInWords(value) ?? valueInWords(value)}`)
     .join('; ');
+
+function roleInWords(value: unknown): string | null {
+  const role = roleSchema.safeParse(value);
+  return role.success ? ROLE_NAMES[role.data] : null;
+}
 
 const keyInWords = (key: string): string =>
   key.replace(/Id$/, '').replace(/[A-Z]/g, (letter) => ` ${letter.toLowerCase()}`);

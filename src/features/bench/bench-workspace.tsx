@@ -86,7 +86,9 @@ export function BenchWorkspace({ sounding, revision, runs, run }: BenchWorkspace
                 commands.current = ready;
               }}
             />
-          ) : null}
+          ) : (
+            <p className="text-muted">You may look and try; nothing you change here is kept.</p>
+          )}
           <BenchGround
             part="table"
             sounding={sounding}

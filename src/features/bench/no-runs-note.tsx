@@ -1,4 +1,5 @@
 import type { SurveyCan } from '../../../server/contract/roles';
+import { WHO_ASKS_FOR_RUNS } from '../../ui/role-words';
 
 /** The Ledger before its first run. */
 export function NoRunsNote({ can }: { can: SurveyCan }) {
@@ -10,7 +11,7 @@ export function NoRunsNote({ can }: { can: SurveyCan }) {
       <p className="mt-1 text-muted">
         {can.run
           ? 'No run yet. “Fit beds” asks for the first; every run stays here, with its readings and settings as they were.'
-          : 'No run yet. A geophysicist or the lead of the survey can ask for one.'}
+          : `No run yet; ${WHO_ASKS_FOR_RUNS} of the survey asks for the first.`}
       </p>
     </section>
   );

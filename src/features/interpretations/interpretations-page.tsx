@@ -7,6 +7,7 @@ import { PageWait, SoundingPage } from '../../soundings/sounding-page';
 import { isShowable } from '../../runs/run-standing';
 import { Button, ButtonLink } from '../../ui/button';
 import { PageHeader } from '../../ui/page-header';
+import { WHO_ASKS_FOR_RUNS, WHO_BEGINS_INTERPRETATIONS } from '../../ui/role-words';
 import { EmptyState } from '../../ui/view-states';
 import { InterpretationTable } from './interpretation-table';
 import { interpretationListQuery } from './interpretation-queries';
@@ -57,7 +58,7 @@ function Interpretations({ sounding }: { sounding: Sounding }) {
         <>
           <PageHeader
             title="Interpretations"
-            note={`What the beds of ${sounding.name} may be, and how far it has been reviewed.`}
+            note={`What the beds of ${sounding.name} may be, and how far this has been reviewed.`}
             actions={begin}
           />
           <InterpretationTable soundingId={sounding.id} interpretations={list.data.items} />
@@ -77,8 +78,11 @@ function Interpretations({ sounding }: { sounding: Sounding }) {
 
 function wordsWithout(sounding: Sounding, finishedRuns: number): string {
   if (finishedRuns === 0)
-    return 'An interpretation says what the beds of one run may be. There is no finished run of this sounding yet; runs are made on the Bench.';
+    return (
+      'An interpretation says what the beds of one run may be. There is no finished run of this sounding yet; ' +
+      `${WHO_ASKS_FOR_RUNS} asks for one on the Bench.`
+    );
   return sounding.can.interpret
     ? 'An interpretation says what the beds of one run may be, with its doubts, and goes to a hydrogeologist for review.'
-    : 'An interpretation says what the beds of one run may be. A lead, geophysicist or archive analyst of the survey can begin one.';
+    : `An interpretation says what the beds of one run may be; ${WHO_BEGINS_INTERPRETATIONS} of the survey begins one.`;
 }

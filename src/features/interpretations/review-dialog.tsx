@@ -1,3 +1,4 @@
+import { useQuery } from '@tanstack/react-query';
 import { useState } from 'react';
 import { useForm } from 'react-hook-form';
 import { createReviewEventSchema, type Interpretation } from '../../../server/contract/interpretations';
@@ -11,6 +12,8 @@ import { formResolver } from '../../ui/form-resolver';
 import { Notice } from '../../ui/notice';
 import { Textarea } from '../../ui/textarea';
 import { useReviewEvent, type ReviewEventInput } from './interpretation-mutations';
+import { interpretationListQuery } from './interpretation-queries';
+import { supersededWords } from './superseded-words';
 import { unwrittenParts } from './unwritten-parts';
 
 export type ReviewMove = 'submitted' | 'withdrawn' | 'changes-asked' | 'accepted';
@@ -44,8 +47,7 @@ const WORDS: Record<ReviewMove, MoveWords> = {
   },
   accepted: {
     title: 'Accept',
-    description:
-      'It stands as the interpretation of this sounding and cannot be edited any more. An interpretation accepted before is superseded.',
+    description: 'It stands as the interpretation of this sounding and cannot be edited any more.',
     comment: 'A word for the record (may stay empty)',
     verb: 'Accept',
   },
@@ -60,6 +62,11 @@ export interface ReviewDialogProps {
 /** One step of the review, with its consequence told before it is taken. */
 export function ReviewDialog({ interpretation, move, onClose }: ReviewDialogProps) {
   const words = WORDS[move];
+  const all = useQuery({
+    ...interpretationListQuery(interpretation.soundingId),
+    enabled: move === 'accepted',
+  });
+  const superseded = move === 'accepted' ? supersededWords(all.data?.items ?? []) : '';
   const review = useReviewEvent(interpretation.id);
   const form = useForm<ReviewEventInput>({
     resolver: formResolver(createReviewEventSchema),
@@ -77,7 +84,7 @@ export function ReviewDialog({ interpretation, move, onClose }: ReviewDialogProp
       open
       onOpenChange={(open) => !open && onClose()}
       title={words.title}
-      description={words.description}
+      description={`${words.description}${superseded}`}
       actions={
         <>
           <Button onClick={onClose}>Cancel</Button>
@@ -118,7 +125,7 @@ function UnwrittenNotice({ parts, isMeant, onMeant, isAsked }: UnwrittenNoticePr
   return (
     <Notice tone="caution" title={parts.join(' ')}>
       <Checkbox
-        label="Submit it with this left empty"
+        label="Submit it as it stands"
         checked={isMeant}
         aria-invalid={isMissing || undefined}
         onChange={(event) => onMeant(event.target.checked)}

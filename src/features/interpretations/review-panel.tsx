@@ -48,14 +48,14 @@ export function ReviewPanel({ interpretation, isDirty }: ReviewPanelProps) {
       </div>
       {can.edit && !can.submit ? (
         <p className="text-sm text-muted print:hidden">
-          A geophysicist or the lead of the survey submits it for review.
+          A lead or a geophysicist of the survey submits it for review.
         </p>
       ) : null}
       {can.submit && isDirty ? (
         <p className="text-sm text-muted">Save your changes before you submit.</p>
       ) : null}
       <p className="text-sm text-muted">
-        A resistivity model is not a proof of water, of its quantity or of its quality. A drilling, supply,
+        A resistivity model is not proof of water, of its quantity or of its quality. A drilling, supply,
         earthing or contamination decision needs a licensed practitioner, local regulations and a test on the
         ground.
       </p>

@@ -1,6 +1,6 @@
 import { useState } from 'react';
 import type { z } from 'zod';
-import { roleSchema, type Role } from '../../../server/contract/roles';
+import { ROLE_NAMES, roleSchema, type Role } from '../../../server/contract/roles';
 import type { memberSchema, Survey } from '../../../server/contract/surveys';
 import { messageOf } from '../../api/api-error';
 import { useMe } from '../../api/use-me';
@@ -67,7 +67,7 @@ export function MemberTable({ survey, members }: MemberTableProps) {
                         {
                           onSuccess: () =>
                             showToast({
-                              title: `${member.user.name} is now ${ROLE_LABELS[role].toLowerCase()}`,
+                              title: `${member.user.name} is now ${ROLE_NAMES[role]}`,
                               kind: 'good',
                             }),
                         },

@@ -61,7 +61,8 @@ function RoleKey() {
         ))}
       </dl>
       <p className="mt-3 text-sm text-muted">
-        Nobody accepts an interpretation whose runs or versions are their own.
+        A hydrogeologist accepts interpretations; nobody accepts one they wrote or submitted, or whose run
+        they asked for.
       </p>
     </aside>
   );

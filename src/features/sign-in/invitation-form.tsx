@@ -15,7 +15,8 @@ import { formatDay } from '../../ui/format';
 import { FormErrors } from '../../ui/form-errors';
 import { formResolver } from '../../ui/form-resolver';
 import { Input } from '../../ui/input';
-import { ROLE_LABELS, ROLE_NOTES } from '../../ui/role-words';
+import { ROLE_NAMES } from '../../../server/contract/roles';
+import { ROLE_NOTES } from '../../ui/role-words';
 import { useAcceptInvitation } from './sign-in-mutations';
 
 const newAccountSchema = z.strictObject({ name: nameSchema, password: passwordSchema });
@@ -44,8 +45,7 @@ export function InvitationForm({ token, offer }: InvitationFormProps) {
     <form noValidate className="flex flex-col gap-4" onSubmit={(event) => void send(event)}>
       <div className="flex flex-col gap-2">
         <p>
-          {offer.invitedBy} invites you to <b>{offer.surveyName}</b> as{' '}
-          <b>{ROLE_LABELS[offer.role].toLowerCase()}</b>.
+          {offer.invitedBy} invites you to <b>{offer.surveyName}</b> as <b>{ROLE_NAMES[offer.role]}</b>.
         </p>
         <p className="text-muted">What this role does: {ROLE_NOTES[offer.role]}.</p>
         <p className="text-muted">

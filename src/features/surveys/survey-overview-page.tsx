@@ -1,11 +1,11 @@
 import { useState } from 'react';
+import { ROLE_NAMES } from '../../../server/contract/roles';
 import type { Survey } from '../../../server/contract/surveys';
 import { addressOf } from '../../app/addresses';
 import { SurveyFrame } from '../../app/survey-frame';
 import { Button, ButtonLink } from '../../ui/button';
 import { formatDay, formatRelativeError } from '../../ui/format';
 import { PageHeader } from '../../ui/page-header';
-import { ROLE_LABELS } from '../../ui/role-words';
 import { SurveyMap } from './survey-map';
 import { SurveyProgress } from './survey-progress';
 import { SurveySettingsDialog } from './survey-settings-dialog';
@@ -20,7 +20,7 @@ function Overview({ survey }: { survey: Survey }) {
     <>
       <PageHeader
         title={survey.name}
-        note={`Your role: ${ROLE_LABELS[survey.role].toLowerCase()} · begun ${formatDay(survey.createdAt)}`}
+        note={`Your role: ${ROLE_NAMES[survey.role]} · begun ${formatDay(survey.createdAt)}`}
         actions={
           <>
             {survey.can.editSurvey ? <Button onClick={() => setEditing(true)}>Settings</Button> : null}

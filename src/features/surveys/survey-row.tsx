@@ -1,8 +1,8 @@
 import { Link } from 'react-router-dom';
+import { ROLE_NAMES } from '../../../server/contract/roles';
 import type { Survey } from '../../../server/contract/surveys';
 import { addressOf } from '../../app/addresses';
 import { Badge } from '../../ui/badge';
-import { ROLE_LABELS } from '../../ui/role-words';
 import { SurveyProgress } from './survey-progress';
 
 export function SurveyRow({ survey }: { survey: Survey }) {
@@ -16,7 +16,7 @@ export function SurveyRow({ survey }: { survey: Survey }) {
           </Link>
         </h2>
         <p className="mt-0.5 flex flex-wrap items-center gap-x-3 gap-y-1 text-muted">
-          <span>Your role: {ROLE_LABELS[survey.role].toLowerCase()}</span>
+          <span>Your role: {ROLE_NAMES[survey.role]}</span>
           <Link to={addressOf('surveySoundings', { surveyId: survey.id })}>Soundings</Link>
           {inReview > 0 ? <Badge tone="copper">{inReview} in review</Badge> : null}
         </p>
