@@ -7,7 +7,7 @@ export const FIT_STATUS_MESSAGES: Record<FitStatus, string> = {
   'converged-decrease': 'Three steps in a row lowered the misfit by less than one part in a million.',
   'iteration-limit': 'The step limit was reached; the model is the best found, and may still improve.',
   'no-descent': 'No smaller misfit was found in any direction from the best model.',
-  'target-reached': 'The smoothest ground whose misfit is at the target.',
+  'target-reached': 'The simplest ground of this kind that was found with its misfit at the target.',
   'target-out-of-reach':
     'No ground of this kind comes down to the target misfit; this is the closest one found.',
 };

@@ -9,12 +9,18 @@ const NONE: Bounds = [null, null];
 /** The ends that were found; a held value has none. */
 const told = (bounds: Bounds = NONE): Bounds => (isHeldRange(bounds) ? NONE : bounds);
 
+/** What a row of the table is. */
+function unitOf(columns: readonly GroundColumn[]): string {
+  if (columns.every((column) => column.isCells)) return 'Cell';
+  return columns.some((column) => column.isCells) ? 'Bed or cell' : 'Bed';
+}
+
 /** Beds of one or several grounds with their 95 % intervals, for the table and the CSV. */
 export function groundTable(columns: readonly GroundColumn[]): ChartTable {
   const several = columns.length > 1;
   const head: ChartColumn[] = [
     ...(several ? [{ label: 'Run' }] : []),
-    { label: 'Bed' },
+    { label: unitOf(columns) },
     { label: 'Resistivity', unit: 'Ω·m', format: formatResistivity },
     { label: '95\u00a0%, low', unit: 'Ω·m', format: formatResistivity },
     { label: '95\u00a0%, high', unit: 'Ω·m', format: formatResistivity },

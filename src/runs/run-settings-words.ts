@@ -10,7 +10,7 @@ import {
   formatSignificant,
   withUnit,
 } from '../ui/format';
-import { bedCount } from './run-title';
+import { bedCount, GROUND_NAMES } from './run-title';
 
 const UNIT = { resistivity: 'Ω·m', thickness: 'm' } as const;
 
@@ -52,13 +52,13 @@ function groundWords({ kind, layers, start, targetMisfit }: FitSettings): { labe
     return [
       {
         label: 'Ground',
-        value: `${kind === 'smooth' ? 'smooth' : 'with few steps'}, ${layers === 'auto' ? 'the usual grid of cells' : formatCount(layers, 'cell')}`,
+        value: `${GROUND_NAMES[kind]}, ${layers === 'auto' ? 'the usual grid of cells' : formatCount(layers, 'cell')}`,
       },
-      { label: 'Aim', value: `χ²/N\u00a0${formatMisfit(targetMisfit ?? 1)}` },
+      { label: 'Target', value: `χ²/N\u00a0${formatMisfit(targetMisfit ?? 1)}` },
     ];
   return [
     { label: 'Beds', value: layers === 'auto' ? 'count to be found, 1 to 8' : bedCount(layers) },
-    { label: 'Start', value: start ? `a model beside the curve: ${earthWords(start)}` : 'the curve' },
+    { label: 'Start', value: start ? `a given model: ${earthWords(start)}` : 'the curve' },
   ];
 }
 

@@ -8,11 +8,15 @@ export function bedCount(count: number): string {
   return formatCount(count, 'bed');
 }
 
-/** The beds a run ended with, or was asked for: "4 beds", "4 beds, count found"; of many cells their kind: "smooth ground". */
+/** The kinds of ground that have cells, each by its one name. */
+export const GROUND_NAMES = { smooth: 'smooth', stepped: 'few steps' } as const;
+
+/** The beds a run ended with, or was asked for: "4 beds", "4 beds, count found"; of many cells: "few steps, 24 cells". */
 export function describeBeds(run: Pick<RunSummary, 'settings' | 'outcome'>): string {
-  if (run.settings.kind !== 'layered') return `${run.settings.kind} ground`;
-  const asked = run.settings.layers;
+  const { kind, layers: asked } = run.settings;
   const found = run.outcome?.earth.resistivity.length;
+  if (kind !== 'layered')
+    return found === undefined ? GROUND_NAMES[kind] : `${GROUND_NAMES[kind]}, ${formatCount(found, 'cell')}`;
   if (asked === 'auto') return found === undefined ? 'finding the count' : `${bedCount(found)}, count found`;
   return bedCount(found ?? asked);
 }

@@ -78,13 +78,13 @@ function Column({ sounding, run, model, selectedBed, onSelectBed }: Omit<BenchGr
 }
 
 /** A ground of cells is read from its drawing and the table behind it; there are no beds to take hold of. */
-function CellsNote({ kind, model, mayFit }: { kind: string; model: ModelHandle; mayFit: boolean }) {
+function CellsNote({ model, mayFit }: { model: ModelHandle; mayFit: boolean }) {
   return (
     <section className="max-w-prose">
       <h2 className="font-semibold">Cells</h2>
       <p className="mt-1 text-muted">
-        A {kind} ground has cells of a fixed grid, which are no beds. The table of the drawing has every cell
-        with its range.
+        This ground has cells of a fixed grid, which are no beds. The table of the drawing has every cell with
+        its range.
       </p>
       {mayFit && model.begin ? (
         <Button size="small" className="mt-3" onClick={model.begin}>
@@ -100,7 +100,7 @@ function Numbers({ sounding, run, model, selectedBed, onSelectBed }: Omit<BenchG
   if (!earth) return null;
   const shownRun = model.hand ? null : run;
   if (shownRun?.result && hasCells(shownRun.result))
-    return <CellsNote kind={shownRun.settings.kind} model={model} mayFit={sounding.can.run} />;
+    return <CellsNote model={model} mayFit={sounding.can.run} />;
   return (
     <section className="flex max-w-4xl flex-col gap-1">
       <HandBar model={model} runLetter={run ? letterOfRun(run) : null}>

@@ -5,6 +5,7 @@ import type { SurveyCan } from '../../../server/contract/roles';
 import type { RunSummary } from '../../../server/contract/runs';
 import { messageOf } from '../../api/api-error';
 import { addressOf } from '../../app/addresses';
+import { hasBeds } from '../../runs/run-standing';
 import { letterOfRun } from '../../runs/run-title';
 import { IconButton } from '../../ui/icon-button';
 import { Menu, MenuItem } from '../../ui/menu';
@@ -20,7 +21,8 @@ export function LedgerMenu({ run, can }: { run: RunSummary; can: SurveyCan }) {
   const recompute = useRecomputeRun(run.soundingId);
   const isFinished = run.state === 'finished';
   const letter = letterOfRun(run);
-  if (!can.annotateRuns && !((can.recompute || can.interpret) && isFinished)) return <span />;
+  const mayInterpret = can.interpret && isFinished && hasBeds(run);
+  if (!can.annotateRuns && !(can.recompute && isFinished) && !mayInterpret) return <span />;
   const tell = (title: string) => (error: Error) =>
     showToast({ kind: 'bad', title, description: messageOf(error) });
   const pin = () =>
@@ -33,7 +35,7 @@ export function LedgerMenu({ run, can }: { run: RunSummary; can: SurveyCan }) {
   return (
     <>
       <Menu trigger={<IconButton label={`Run ${letter}: more`} icon={<Ellipsis aria-hidden size={16} />} />}>
-        {can.interpret && isFinished ? <MenuItem onSelect={interpret}>Interpret this run</MenuItem> : null}
+        {mayInterpret ? <MenuItem onSelect={interpret}>Interpret this run</MenuItem> : null}
         {can.annotateRuns ? (
           <>
             <MenuItem onSelect={() => setIsWriting(true)}>Label and note</MenuItem>

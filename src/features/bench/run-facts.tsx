@@ -3,12 +3,12 @@ import type { Run, RunSummary } from '../../../server/contract/runs';
 import { fitStatusMessage } from '../../../inversion';
 import { messageOf } from '../../api/api-error';
 import { addressOf } from '../../app/addresses';
-import { cacheWords } from '../../runs/cache-words';
+import { answerFact } from '../../runs/cache-words';
 import { hasBeds } from '../../runs/run-standing';
 import { settingsWords } from '../../runs/run-settings-words';
 import { letterOfRun } from '../../runs/run-title';
 import { Button, ButtonLink } from '../../ui/button';
-import { formatDuration, formatMoment } from '../../ui/format';
+import { formatMoment } from '../../ui/format';
 import { Sentence } from '../../ui/sentence';
 import { showToast } from '../../ui/show-toast';
 import { useRecomputeRun } from './bench-mutations';
@@ -29,16 +29,7 @@ export function RunFacts({ run, runs, can }: RunFactsProps) {
     ...settingsWords(run.settings),
     { label: 'Readings', value: `revision ${run.revisionNumber}, ${run.readings.length} used` },
     { label: 'Asked by', value: `${run.requestedBy.name}, ${formatMoment(run.requestedAt)}` },
-    {
-      label: 'Computed',
-      value: [
-        run.durationMs === null ? null : `in ${formatDuration(run.durationMs)}`,
-        run.fromCache ? cacheWords(run, runs) : null,
-        `engine ${run.engineVersion}`,
-      ]
-        .filter((part) => part !== null)
-        .join(', '),
-    },
+    answerFact(run, runs),
   ];
   return (
     <section aria-labelledby="run-facts-title">
@@ -58,6 +49,11 @@ export function RunFacts({ run, runs, can }: RunFactsProps) {
         ))}
       </dl>
       {outcome ? <p className="mt-1.5 text-sm text-muted">{fitStatusMessage(outcome.status)}</p> : null}
+      {can.interpret && outcome && !hasBeds(run) ? (
+        <p className="mt-1.5 text-sm text-muted">
+          Cells are no beds, and an interpretation names beds. Fit beds to interpret.
+        </p>
+      ) : null}
       <div className="mt-3 flex flex-wrap gap-2">
         {can.interpret && hasBeds(run) ? (
           <ButtonLink

@@ -31,38 +31,50 @@ export function DifferenceSection({ base, other, pair }: DifferenceSectionProps)
       <p className="mt-1 max-w-3xl">
         <Sentence text={pair.text} />
       </p>
-      <details className="mt-2">
-        <summary className="min-h-6 w-fit rounded text-muted hover:text-ink touch:min-h-11">
-          Differences in numbers
-        </summary>
-        <Table caption={`Runs ${title} in numbers`} className="mt-1 max-w-3xl">
-          <TableHead>
-            <HeaderCell>Bed</HeaderCell>
-            <HeaderCell>Quantity</HeaderCell>
-            <HeaderCell numeric>{first}</HeaderCell>
-            <HeaderCell numeric>{second}</HeaderCell>
-            <HeaderCell>Unit</HeaderCell>
-            <HeaderCell numeric>
-              {second}/{first}
-            </HeaderCell>
-            <HeaderCell unit={'95\u00a0%'}>Ranges</HeaderCell>
-          </TableHead>
-          <TableBody>
-            {pair.beds.map((difference) => (
-              <TableRow key={`${difference.bed} ${difference.quantity}`}>
-                <Cell className="figure">{difference.bed + 1}</Cell>
-                <Cell>{QUANTITY_WORDS[difference.quantity]}</Cell>
-                <Cell numeric>{formatSignificant(difference.first)}</Cell>
-                <Cell numeric>{formatSignificant(difference.second)}</Cell>
-                <Cell className="figure text-muted">{difference.unit}</Cell>
-                <Cell numeric>{formatSignificant(difference.ratio)}</Cell>
-                <RangesCell difference={difference} />
-              </TableRow>
-            ))}
-          </TableBody>
-        </Table>
-      </details>
+      {pair.beds.length === 0 ? null : <NumbersTable first={first} second={second} beds={pair.beds} />}
     </section>
+  );
+}
+
+interface NumbersTableProps {
+  first: string;
+  second: string;
+  beds: readonly BedDifference[];
+}
+
+function NumbersTable({ first, second, beds }: NumbersTableProps) {
+  return (
+    <details className="mt-2">
+      <summary className="min-h-6 w-fit rounded text-muted hover:text-ink touch:min-h-11">
+        Differences in numbers
+      </summary>
+      <Table caption={`Runs ${first} and ${second} in numbers`} className="mt-1 max-w-3xl">
+        <TableHead>
+          <HeaderCell>Bed</HeaderCell>
+          <HeaderCell>Quantity</HeaderCell>
+          <HeaderCell numeric>{first}</HeaderCell>
+          <HeaderCell numeric>{second}</HeaderCell>
+          <HeaderCell>Unit</HeaderCell>
+          <HeaderCell numeric>
+            {second}/{first}
+          </HeaderCell>
+          <HeaderCell unit={'95\u00a0%'}>Ranges</HeaderCell>
+        </TableHead>
+        <TableBody>
+          {beds.map((difference) => (
+            <TableRow key={`${difference.bed} ${difference.quantity}`}>
+              <Cell className="figure">{difference.bed + 1}</Cell>
+              <Cell>{QUANTITY_WORDS[difference.quantity]}</Cell>
+              <Cell numeric>{formatSignificant(difference.first)}</Cell>
+              <Cell numeric>{formatSignificant(difference.second)}</Cell>
+              <Cell className="figure text-muted">{difference.unit}</Cell>
+              <Cell numeric>{formatSignificant(difference.ratio)}</Cell>
+              <RangesCell difference={difference} />
+            </TableRow>
+          ))}
+        </TableBody>
+      </Table>
+    </details>
   );
 }
 

@@ -1,7 +1,16 @@
 import type { Run } from '../../../server/contract/runs';
+import { boundaryDepths } from '../../charts/chart-data';
 import { MISFIT_LABEL } from '../../runs/misfit-words';
 import { settingsWords } from '../../runs/run-settings-words';
-import { formatMisfit, formatMoment, formatPercent, formatSignificant, withUnit } from '../../ui/format';
+import { hasBeds } from '../../runs/run-standing';
+import {
+  formatLength,
+  formatMisfit,
+  formatMoment,
+  formatPercent,
+  formatSignificant,
+  withUnit,
+} from '../../ui/format';
 
 export interface FactRow {
   label: string;
@@ -13,10 +22,15 @@ export interface FactRow {
 type FinishedRun = Run & { result: NonNullable<Run['result']> };
 export const isFinished = (run: Run): run is FinishedRun => run.result !== null;
 
+const DOES_NOT_APPLY = 'does not apply';
+const NO_SUM = '–, cells';
+const NOT_HAD = [DOES_NOT_APPLY, NO_SUM];
+
 const row = (label: string, values: string[]): FactRow => ({
   label,
   values,
-  differs: new Set(values).size > 1,
+  // What a kind of ground cannot have differs from nothing; the kind itself does.
+  differs: new Set(values.filter((value) => !NOT_HAD.includes(value))).size > 1,
 });
 
 /** How each run fits and what it sums to. */
@@ -32,23 +46,52 @@ export function outcomeRows(runs: readonly FinishedRun[]): FactRow[] {
     ),
     row(
       'S = Σh/ρ',
-      runs.map(({ result }) => sumOf(result, result.darZarrouk.totalConductanceS, 'S')),
+      runs.map((run) => sumOf(run, run.result.darZarrouk.totalConductanceS, 'S')),
     ),
     row(
       'T = Σhρ',
-      runs.map(({ result }) => sumOf(result, result.darZarrouk.totalResistanceOhmM2, 'Ω·m²')),
+      runs.map((run) => sumOf(run, run.result.darZarrouk.totalResistanceOhmM2, 'Ω·m²')),
     ),
   ];
 }
 
-/** Of the beds above the lowest; one bed alone reaches to any depth and sums to nothing. */
-const sumOf = ({ earth }: FinishedRun['result'], sum: number, unit: string): string =>
-  earth.thickness.length === 0 ? 'none' : withUnit(formatSignificant(sum), unit);
+/**
+ * Of the beds above the lowest, with the depth they reach to; one bed alone reaches to any depth and sums to nothing. The
+ * grid of cells ends where it will, so their sum is set against none.
+ */
+function sumOf(run: FinishedRun, sum: number, unit: string): string {
+  if (!hasBeds(run)) return NO_SUM;
+  const depth = boundaryDepths(run.result.earth).at(-1);
+  return depth === undefined
+    ? 'none'
+    : `${withUnit(formatSignificant(sum), unit)} down to ${withUnit(formatLength(depth), 'm')}`;
+}
+
+/** Facts that only a ground of beds, or only one of cells, is asked for. */
+const OF_BEDS = ['Beds', 'Start', 'Held', 'Known beforehand', 'Thickness within'];
+const OF_CELLS = ['Target'];
+
+/** What stands where a fit was asked for nothing of its own. */
+const USUAL: Record<string, string> = {
+  Held: 'none',
+  'Known beforehand': 'nothing',
+  Branches: 'not shifted',
+  Outliers: 'count in full',
+};
+
+function settingOf(run: FinishedRun, label: string): string {
+  const isOfBeds = hasBeds(run);
+  if ((isOfBeds ? OF_CELLS : OF_BEDS).includes(label)) return DOES_NOT_APPLY;
+  const fact = settingsWords(run.settings).find((one) => one.label === label);
+  if (fact) return fact.value;
+  return label === 'Ground' && isOfBeds ? 'beds' : (USUAL[label] ?? 'as usual');
+}
 
 /** What each run was asked for, fact by fact in one order. */
 export function settingRows(runs: readonly FinishedRun[]): FactRow[] {
-  const words = runs.map((run) => settingsWords(run.settings));
-  const labels = [...new Set(words.flatMap((facts) => facts.map((fact) => fact.label)))];
+  const labels = [
+    ...new Set(runs.flatMap((run) => settingsWords(run.settings).map((fact) => fact.label))),
+  ].toSorted((a, b) => Number(b === 'Ground') - Number(a === 'Ground'));
   return [
     row(
       'Readings',
@@ -57,10 +100,7 @@ export function settingRows(runs: readonly FinishedRun[]): FactRow[] {
     ...labels.map((label) =>
       row(
         label,
-        words.map(
-          (facts) =>
-            facts.find((fact) => fact.label === label)?.value ?? (label === 'Held' ? 'none' : 'as usual'),
-        ),
+        runs.map((run) => settingOf(run, label)),
       ),
     ),
     row(

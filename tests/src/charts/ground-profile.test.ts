@@ -106,3 +106,12 @@ test('the table gives every bed with its interval', () => {
   expect(rows[2]).toEqual([3, 119, null, null, 6.2, null, null, null, '']);
   expect(groundTable([column, { ...column, id: 'b', letter: 'B' }]).rows[3]![0]).toBe('B');
 });
+
+test('the table calls cells cells', () => {
+  const cells = { ...column, isCells: true };
+  const nameOf = (columns: GroundColumn[]) =>
+    groundTable(columns).columns.find(({ label }) => /bed|cell/i.test(label))?.label;
+  expect(nameOf([column])).toBe('Bed');
+  expect(nameOf([cells, cells])).toBe('Cell');
+  expect(nameOf([column, cells])).toBe('Bed or cell');
+});

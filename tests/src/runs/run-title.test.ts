@@ -34,3 +34,13 @@ it('says what a run is', () => {
   expect(titleOfRun(run('auto', 0, 1))).toBe('1 bed, count found');
   expect(titleOfRun(run(4, 1, 4, 'held at borehole'))).toBe('held at borehole');
 });
+
+it('calls a ground of cells by the name it is asked for with', () => {
+  const cells = (kind: 'smooth' | 'stepped', found?: number) => {
+    const beds = run('auto', 0, found);
+    return titleOfRun({ ...beds, settings: { ...beds.settings, kind } });
+  };
+  expect(cells('stepped', 24)).toBe('few steps, 24 cells');
+  expect(cells('smooth', 24)).toBe('smooth, 24 cells');
+  expect(cells('stepped')).toBe('few steps');
+});
