@@ -13,5 +13,7 @@ export function misfitWords(fit: { misfitProbability: number | null } | null): s
   const chance = fit?.misfitProbability ?? null;
   if (chance === null) return null;
   if (isRejected(fit)) return REJECTED_WORDS;
-  return chance > 1 - TOO_CLOSE_CHANCE ? 'closer than the errors ask for' : 'explains the readings';
+  return chance > 1 - TOO_CLOSE_CHANCE
+    ? 'comes closer to the readings than their errors ask for'
+    : 'explains the readings';
 }

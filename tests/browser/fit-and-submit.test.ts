@@ -53,7 +53,7 @@ it('the start that is shown is the start that is asked for, before and after a f
   await page.getByRole('heading', { name: 'Run B', exact: true }).waitFor({ timeout: 60_000 });
   expect(await start.inputValue()).toBe('model');
   expect(await beds.isDisabled()).toBe(true);
-  await page.getByRole('region', { name: 'Run B' }).getByText('a model beside the curve').waitFor();
+  await page.getByRole('region', { name: 'Run B' }).getByText('a given model').waitFor();
   await start.selectOption('From the curve');
   expect(await beds.isDisabled()).toBe(false);
   expect(await beds.inputValue()).toBe('auto');
@@ -91,7 +91,7 @@ it('an interpretation with nothing written is submitted only when that is confir
   const id = new URL(page.url()).pathname.split('/').at(-1);
   const stateOf = async () => (await app.knex('interpretation').where({ id }).first('state')).state;
   expect(await stateOf()).toBe('draft');
-  await dialog.getByLabel('Submit it with this left empty').check();
+  await dialog.getByLabel('Submit it as it stands').check();
   await dialog.getByRole('button', { name: 'Submit', exact: true }).click();
   await page.getByText('Waits for a hydrogeologist').waitFor();
   expect(await stateOf()).toBe('in-review');
@@ -111,6 +111,7 @@ it('a smooth ground is fitted from the Bench, and its cells are no beds to edit,
   await page.getByRole('heading', { name: 'Cells', exact: true }).waitFor();
   expect(await shownEarth(page)).toEqual({ resistivity: [], thickness: [] });
   expect(await page.getByRole('link', { name: 'Interpret this run' }).count()).toBe(0);
+  await page.getByText('Fit beds to interpret.').waitFor();
   const { id } = await app.knex('sounding').where({ name: 'S-03' }).first<{ id: string }>('id');
   const runs = await app.knex('run').where({ sounding_id: id }).orderBy('number').pluck<string[]>('id');
   await page.goto(`${app.baseUrl}/soundings/${id}/side-by-side?runs=${runs.slice(-2).join(',')}`);

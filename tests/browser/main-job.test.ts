@@ -127,7 +127,7 @@ async function askAgain(page: Page): Promise<void> {
   const before = await computations();
   await fitAndWait(page, 'C');
   expect(await computations()).toBe(before);
-  await page.getByRole('region', { name: 'Run C' }).getByText('from run A').waitFor();
+  await page.getByRole('region', { name: 'Run C' }).getByText('by run A').waitFor();
   await page.getByRole('region', { name: 'Run C' }).getByRole('button', { name: 'Compute again' }).click();
   await ledgerRow(page, 'D').getByText('identical').waitFor({ timeout: 60_000 });
 }

@@ -3,7 +3,7 @@ import type { FitResult } from '../../../server/contract/fit-result';
 import type { LayeredEarthModel } from '../../../server/contract/fit-settings';
 import { DETERMINATION_SOURCE } from '../../../inversion';
 import { BedSwatch } from '../../runs/bed-swatch';
-import { isRejected, REJECTED_RANGES_NOTE } from '../../runs/rejected-fit';
+import { isRejected } from '../../runs/rejected-fit';
 import { boundaryDepths } from '../../charts/chart-data';
 import { Checkbox } from '../../ui/checkbox';
 import { classNames } from '../../ui/class-names';
@@ -69,8 +69,9 @@ function noteOf({ result, heldInRun, onEdit, onHold }: BedTableProps): string {
     return onEdit
       ? 'This model has no ranges; fit it to see what the readings tell of it.'
       : 'This model has no ranges of its own.';
+  // What ranges are worth where the readings reject the model is said once, beside its misfit.
   const ranges = isRejected(result)
-    ? REJECTED_RANGES_NOTE
+    ? 'Under each value its 95\u00a0% range.'
     : `Under each value its 95\u00a0% range, then how well it is known, with its factor ×÷. ${DETERMINATION_SOURCE}.`;
   return [
     ranges,

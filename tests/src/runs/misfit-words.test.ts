@@ -5,7 +5,7 @@ it.each([
   [0.001, 'does not explain the readings'],
   [0.4, 'explains the readings'],
   [0.99, 'explains the readings'],
-  [0.999, 'closer than the errors ask for'],
+  [0.999, 'comes closer to the readings than their errors ask for'],
   [null, null],
 ])('a misfit of chance %d says %s', (misfitProbability, words) =>
   expect(misfitWords({ misfitProbability })).toBe(words),
