@@ -1,3 +1,4 @@
+import { sideBySideAddress } from '../runs/ticked-runs';
 import type { SectionLink } from '../ui/section-nav';
 import { addressOf } from './addresses';
 
@@ -10,11 +11,12 @@ export function surveySections(surveyId: string): SectionLink[] {
   ];
 }
 
-export function soundingSections(soundingId: string): SectionLink[] {
+/** `ticked`: runs chosen for Side by side. */
+export function soundingSections(soundingId: string, ticked: readonly string[]): SectionLink[] {
   return [
     { to: addressOf('readings', { soundingId }), label: 'Field sheet' },
     { to: addressOf('bench', { soundingId }), label: 'Bench' },
-    { to: addressOf('sideBySide', { soundingId }), label: 'Side by side' },
+    { to: sideBySideAddress(soundingId, ticked), label: 'Side by side' },
     { to: addressOf('interpretations', { soundingId }), label: 'Interpretation' },
   ];
 }

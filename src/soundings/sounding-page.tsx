@@ -7,6 +7,7 @@ import { addressOf } from '../app/addresses';
 import { NotFoundPage } from '../app/not-found-page';
 import { PageFrame, type PageFrameProps } from '../app/page-frame';
 import { soundingSections } from '../app/section-links';
+import { tickedRuns, useTickedRuns } from '../runs/ticked-runs';
 import type { Sounding } from '../../server/contract/soundings';
 import type { Crumb } from '../ui/breadcrumb';
 import { ErrorState, LoadingState, NoPermissionState } from '../ui/view-states';
@@ -35,10 +36,12 @@ function crumbsOf(sounding: Sounding): Crumb[] {
 export function SoundingPage({ section, status, keys, children, ...frame }: SoundingPageProps) {
   const { soundingId = '' } = useParams();
   const sounding = useQuery(soundingQuery(soundingId));
+  const ticked = useTickedRuns((store) => tickedRuns(store, soundingId));
+  const nav = soundingSections(soundingId, ticked);
   if (hasCode(sounding.error, 'not-found') || hasCode(sounding.error, 'bad-request')) return <NotFoundPage />;
   if (!sounding.data)
     return (
-      <PageFrame title={section} nav={soundingSections(soundingId)} navLabel="Sections of the sounding">
+      <PageFrame title={section} nav={nav} navLabel="Sections of the sounding">
         <PageWait
           error={sounding.error}
           label="Loading the sounding"
@@ -51,7 +54,7 @@ export function SoundingPage({ section, status, keys, children, ...frame }: Soun
       {...frame}
       title={`${sounding.data.name}, ${section}`}
       crumbs={crumbsOf(sounding.data)}
-      nav={soundingSections(soundingId)}
+      nav={nav}
       navLabel="Sections of the sounding"
       status={status?.(sounding.data)}
       keys={keys?.(sounding.data)}

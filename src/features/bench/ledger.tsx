@@ -1,14 +1,10 @@
-import { useState } from 'react';
 import { useNavigate } from 'react-router-dom';
-import { addressOf } from '../../app/addresses';
 import type { SurveyCan } from '../../../server/contract/roles';
 import type { RunSummary } from '../../../server/contract/runs';
+import { FEWEST_RUNS, MOST_RUNS, sideBySideAddress, tickedRuns, useTickedRuns } from '../../runs/ticked-runs';
 import { Button } from '../../ui/button';
 import { ledgerOrder } from './choose-run';
 import { LedgerRow } from './ledger-row';
-
-/** As many as Side by side can show. */
-const MOST_COMPARED = 6;
 
 export interface LedgerProps {
   soundingId: string;
@@ -21,9 +17,10 @@ export interface LedgerProps {
 /** Every run of the sounding; nothing in it is ever written over. */
 export function Ledger({ soundingId, runs, shownRunId, can, onOpen }: LedgerProps) {
   const navigate = useNavigate();
-  const [chosen, setChosen] = useState<readonly string[]>([]);
-  const compare = () =>
-    void navigate(`${addressOf('sideBySide', { soundingId })}?runs=${encodeURIComponent(chosen.join(','))}`);
+  const chosen = useTickedRuns((store) => tickedRuns(store, soundingId));
+  const tick = useTickedRuns((store) => store.tick);
+  const setChosen = (runIds: readonly string[]) => tick(soundingId, runIds);
+  const compare = () => void navigate(sideBySideAddress(soundingId, chosen));
   const choose = (runId: string, isChosen: boolean) =>
     setChosen(isChosen ? [...chosen, runId] : chosen.filter((id) => id !== runId));
   return (
@@ -37,8 +34,8 @@ export function Ledger({ soundingId, runs, shownRunId, can, onOpen }: LedgerProp
             <Button kind="quiet" size="small" onClick={() => setChosen([])}>
               Clear
             </Button>
-            <Button size="small" onClick={compare} disabled={chosen.length < 2}>
-              {chosen.length < 2 ? 'Choose another run' : `Side by side: ${chosen.length} runs`}
+            <Button size="small" onClick={compare} disabled={chosen.length < FEWEST_RUNS}>
+              {chosen.length < FEWEST_RUNS ? 'Choose another run' : `Side by side: ${chosen.length} runs`}
             </Button>
           </span>
         ) : null}
@@ -51,7 +48,7 @@ export function Ledger({ soundingId, runs, shownRunId, can, onOpen }: LedgerProp
             runs={runs}
             isShown={run.id === shownRunId}
             isChosen={chosen.includes(run.id)}
-            mayChoose={chosen.length < MOST_COMPARED || chosen.includes(run.id)}
+            mayChoose={chosen.length < MOST_RUNS || chosen.includes(run.id)}
             can={can}
             onOpen={() => onOpen(run)}
             onChoose={(isChosen) => choose(run.id, isChosen)}

@@ -1,9 +1,7 @@
 import type { RunSummary } from '../../../server/contract/runs';
 import { isRejected } from '../../runs/rejected-fit';
 import { weightOfInterpretation } from '../../runs/run-standing';
-
-export const FEWEST_RUNS = 2;
-export const MOST_RUNS = 6;
+import { FEWEST_RUNS, MOST_RUNS } from '../../runs/ticked-runs';
 
 export interface ChosenRuns {
   /** In the order they were chosen. */

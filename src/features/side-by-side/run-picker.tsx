@@ -4,9 +4,10 @@ import type { RunSummary } from '../../../server/contract/runs';
 import { MISFIT_LABEL, MISFIT_TITLE } from '../../runs/misfit-words';
 import { RejectedMark } from '../../runs/rejected-mark';
 import { letterOfRun, titleOfRun } from '../../runs/run-title';
+import { MOST_RUNS } from '../../runs/ticked-runs';
 import { Checkbox } from '../../ui/checkbox';
 import { formatMisfit, formatMoment } from '../../ui/format';
-import { MOST_RUNS, withRun, type ChosenRuns } from './chosen-runs';
+import { withRun, type ChosenRuns } from './chosen-runs';
 
 export interface RunPickerProps {
   /** Finished runs, newest first. */

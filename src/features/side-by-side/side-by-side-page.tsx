@@ -5,10 +5,11 @@ import { runListQuery, runQuery } from '../../api/run-queries';
 import { addressOf } from '../../app/addresses';
 import { PageWait, SoundingPage } from '../../soundings/sounding-page';
 import { isShowable } from '../../runs/run-standing';
+import { FEWEST_RUNS, useTickedRuns } from '../../runs/ticked-runs';
 import { ButtonLink } from '../../ui/button';
 import { PageHeader } from '../../ui/page-header';
 import { EmptyState } from '../../ui/view-states';
-import { baseOf, chosenRuns, FEWEST_RUNS, searchOf, type ChosenRuns } from './chosen-runs';
+import { baseOf, chosenRuns, searchOf, type ChosenRuns } from './chosen-runs';
 import { Comparison } from './comparison';
 import { isFinished } from './run-facts-table';
 import { RunPicker } from './run-picker';
@@ -31,7 +32,11 @@ function SideBySide({ sounding }: { sounding: Sounding }) {
     newest.map((run) => run.id),
   );
   const runs = useQueries({ queries: chosen.runIds.map((id) => runQuery(id)) });
-  const choose = (next: ChosenRuns) => setSearch(searchOf(next), { replace: true });
+  const tick = useTickedRuns((store) => store.tick);
+  const choose = (next: ChosenRuns) => {
+    tick(sounding.id, next.runIds);
+    setSearch(searchOf(next), { replace: true });
+  };
   if (!list.data)
     return <PageWait error={list.error} label="Loading the runs" onRetry={() => void list.refetch()} />;
   if (finished.length < FEWEST_RUNS) return <TooFewRuns sounding={sounding} count={finished.length} />;
