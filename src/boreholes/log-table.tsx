@@ -1,5 +1,5 @@
 import type { Borehole } from '../../server/contract/surveys';
-import { formatGiven } from '../ui/format';
+import { formatGivenLength } from '../ui/format';
 
 /** The contacts in numbers, with the driller's words whole. */
 export function LogTable({ borehole }: { borehole: Borehole }) {
@@ -16,7 +16,7 @@ export function LogTable({ borehole }: { borehole: Borehole }) {
         {borehole.intervals.map(({ topM, baseM, description }) => (
           <tr key={topM} className="border-t border-rule align-baseline">
             <th scope="row" className="figure w-28 py-1 pr-3 font-normal whitespace-nowrap text-muted">
-              {formatGiven(topM)}–{formatGiven(baseM)}&nbsp;m
+              {formatGivenLength(topM)}–{formatGivenLength(baseM)}&nbsp;m
             </th>
             <td className="py-1">{description}</td>
           </tr>

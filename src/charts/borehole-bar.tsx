@@ -1,4 +1,6 @@
 import type { ReactNode } from 'react';
+import { waterLevelWords } from '../ui/water-level-words';
+import { formatGivenLength } from '../ui/format';
 import type { BoreholeLog } from './chart-data';
 import { haloOf, SANS, type ChartPalette } from './chart-palette';
 import type { DepthScale } from './depth-scale';
@@ -66,8 +68,12 @@ export function WaterMark({ x, y, palette }: { x: number; y: number; palette: Ch
 }
 
 function boreholeSentence(log: BoreholeLog): string {
-  const beds = log.beds.map((bed) => `${bed.top} to ${bed.base} m ${bed.label}`).join(', ');
+  const beds = log.beds
+    .map((bed) => `${formatGivenLength(bed.top)} to ${formatGivenLength(bed.base)} m ${bed.label}`)
+    .join(', ');
   const water =
-    log.waterLevel === undefined || log.waterLevel === null ? '' : `; water at ${log.waterLevel} m`;
+    log.waterLevel === undefined || log.waterLevel === null
+      ? ''
+      : `; water ${waterLevelWords(log.waterLevel)}`;
   return `Borehole ${log.name}: ${beds}${water}`;
 }

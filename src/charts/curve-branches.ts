@@ -1,5 +1,5 @@
 import type { CustomSeriesOption } from 'echarts';
-import { formatGiven, withUnit } from '../ui/format';
+import { formatGivenLength, withUnit } from '../ui/format';
 import type { CurveReading } from './chart-data';
 import { MONO, SANS, type ChartPalette } from './chart-palette';
 import { textWidth } from './fit-text';
@@ -11,11 +11,8 @@ export interface CurveBranch {
   readings: readonly CurveReading[];
 }
 
-/** As written on the sheet: 0.5, 10. */
-const lengthText = (length: number): string => formatGiven(Number(length.toPrecision(3)));
-
-/** "MN/2 0.5 m" */
-export const branchName = (halfMN: number): string => withUnit(`MN/2 ${lengthText(halfMN)}`, 'm');
+/** As written on the sheet: "MN/2 0.5 m". */
+export const branchName = (halfMN: number): string => withUnit(`MN/2 ${formatGivenLength(halfMN)}`, 'm');
 
 /** The branches of a curve by growing MN; none where all readings are of one. */
 export function curveBranches(readings: readonly CurveReading[]): CurveBranch[] {
@@ -97,7 +94,7 @@ function branchNumbers(branches: readonly CurveBranch[], api: Api): ({ text: str
       reading ? pointOf(reading, api)[0] : [],
     );
     const x = ends.reduce((sum, one) => sum + one / ends.length, 0);
-    const text = lengthText(halfMN);
+    const text = formatGivenLength(halfMN);
     const half = textWidth(text, 'mono') / 2;
     if (x - half < end + NUMBER_GAP) return null;
     end = x + half;

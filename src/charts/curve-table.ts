@@ -1,6 +1,15 @@
-import { formatFixed, formatLength, formatRelativeError, formatResistivity } from '../ui/format';
+import {
+  formatFixed,
+  formatGivenLength,
+  formatLength,
+  formatRelativeError,
+  formatResistivity,
+} from '../ui/format';
 import type { CurveLine, CurveReading } from './chart-data';
 import type { ChartColumn, ChartTable } from './chart-table';
+
+/** Spacings that the crew wrote down; any other axis is computed from them. */
+const GIVEN_SPACINGS = ['AB/2', 'AO'];
 
 /** Readings with what each line predicts there, for the table and the CSV of the curve. */
 export function curveTable(
@@ -15,8 +24,8 @@ export function curveTable(
   const nameOf = (line: CurveLine) => (line.letter === '' ? line.name : `run ${line.letter}`);
   const hasMN = readings.some((reading) => reading.halfMN !== undefined);
   const columns: ChartColumn[] = [
-    { label, unit, format: formatLength },
-    ...(hasMN ? [{ label: 'MN/2', unit: 'm', format: formatLength }] : []),
+    { label, unit, format: GIVEN_SPACINGS.includes(label) ? formatGivenLength : formatLength },
+    ...(hasMN ? [{ label: 'MN/2', unit: 'm', format: formatGivenLength }] : []),
     { label: 'Measured', unit: 'Ω·m', format: formatResistivity },
     { label: 'Standard error', unit: 'relative', format: formatRelativeError },
     { label: 'Used' },

@@ -1,10 +1,8 @@
 import type { FitReading } from '../../server/contract/fit-settings';
 import type { SpreadType } from '../../server/contract/spread';
-import { formatGiven, withUnit } from '../ui/format';
+import { formatGivenLength, withUnit } from '../ui/format';
 
-/** As the crew wrote it; a conversion of units may leave further digits. */
-const given = (value: number): string => formatGiven(Number(value.toPrecision(6)));
-const metres = (length: number): string => withUnit(given(length), 'm');
+const metres = (length: number): string => withUnit(formatGivenLength(length), 'm');
 
 /** Within a sentence. */
 export const SPREAD_NAMES: Record<SpreadType, string> = {
@@ -28,7 +26,7 @@ export function spacingLabel(spread: FitReading['spread']): string {
     case 'pole-pole':
       return `AM ${metres(spread.spacing)}`;
     case 'dipole-dipole':
-      return `a ${metres(spread.dipole)}, n ${given(spread.n)}`;
+      return `a ${metres(spread.dipole)}, n ${formatGivenLength(spread.n)}`;
     case 'electrodes':
       return `AM ${spread.am === null ? 'at infinity' : metres(spread.am)}`;
   }

@@ -18,6 +18,11 @@ export function formatGiven(value: number): string {
   return Number.isFinite(value) ? withMinus(value, groupDigits(String(Math.abs(value)))) : DASH;
 }
 
+/** A length that a person gave, in m without unit, as it was written; a conversion of units may leave further digits. */
+export function formatGivenLength(metres: number): string {
+  return formatGiven(Number(metres.toPrecision(6)));
+}
+
 /** A fixed number of decimals, for columns that line up on the point. */
 export function formatFixed(value: number, decimals: number): string {
   if (!Number.isFinite(value)) return DASH;

@@ -1,7 +1,7 @@
 import type { Borehole } from '../../../server/contract/surveys';
 import { LogTable } from '../../boreholes/log-table';
 import { Button } from '../../ui/button';
-import { formatDay, formatLength, withUnit } from '../../ui/format';
+import { formatDay, formatGivenLength, withUnit } from '../../ui/format';
 import { BoreholeLogDrawing } from './borehole-log-drawing';
 
 interface BoreholeCardProps {
@@ -13,7 +13,7 @@ interface BoreholeCardProps {
 /** To the centimetre, without zeros that say nothing. */
 const coordinate = (value: number): string => String(Number(value.toFixed(2)));
 
-const metres = (value: number): string => withUnit(formatLength(value), 'm');
+const metres = (value: number): string => withUnit(formatGivenLength(value), 'm');
 
 export function BoreholeCard({ borehole, maxDepthM, onEdit }: BoreholeCardProps) {
   const { name, note, intervals } = borehole;

@@ -4,7 +4,7 @@ import {
   type Interpretation,
   type InterpretationBed,
 } from '../../../server/contract/interpretations';
-import { formatSignificant, withUnit } from '../../ui/format';
+import { formatGivenLength, withUnit } from '../../ui/format';
 import type { VersionField } from '../../ui/merge-versions';
 import { BED_ROLE_WORDS, CONFIDENCE_WORDS } from './interpretation-words';
 
@@ -28,7 +28,7 @@ const BED_FIELDS: { key: BedField; label: string; show: (bed: InterpretationBed)
 ];
 
 const metres = (depth: number | null): string =>
-  depth === null || Number.isNaN(depth) ? '' : withUnit(formatSignificant(depth), 'm');
+  depth === null || Number.isNaN(depth) ? '' : withUnit(formatGivenLength(depth), 'm');
 
 const bedAt = (form: InterpretationForm, layerIndex: number): InterpretationBed | undefined =>
   form.beds.find((bed) => bed.layerIndex === layerIndex);

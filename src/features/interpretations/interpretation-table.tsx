@@ -2,7 +2,7 @@ import { Link } from 'react-router-dom';
 import type { Interpretation } from '../../../server/contract/interpretations';
 import { addressOf } from '../../app/addresses';
 import { letterOfRun } from '../../runs/run-title';
-import { formatLength, formatMoment, withUnit } from '../../ui/format';
+import { formatGivenLength, formatMoment, withUnit } from '../../ui/format';
 import { Cell, HeaderCell, Table, TableBody, TableHead, TableRow } from '../../ui/table';
 import { InterpretationStateMark } from '../../runs/interpretation-state-mark';
 
@@ -43,7 +43,7 @@ export function InterpretationTable({ soundingId, interpretations }: Interpretat
               {interpretation.waterLevelDepthM === null ? (
                 <span className="font-sans text-muted">not given</span>
               ) : (
-                withUnit(formatLength(interpretation.waterLevelDepthM), 'm')
+                withUnit(formatGivenLength(interpretation.waterLevelDepthM), 'm')
               )}
             </Cell>
             <Cell className="whitespace-nowrap">{interpretation.author.name}</Cell>

@@ -1,6 +1,6 @@
 import type { FitResult } from '../../../server/contract/fit-result';
 import type { Run } from '../../../server/contract/runs';
-import { formatLength, withUnit } from '../../ui/format';
+import { waterLevelWords } from '../../ui/water-level-words';
 import { BedBasis } from './bed-basis';
 import type { InterpretationForm } from './interpretation-form';
 import { BED_ROLE_WORDS, CONFIDENCE_WORDS } from './interpretation-words';
@@ -20,7 +20,7 @@ export function InterpretationText({ content, run }: InterpretationTextProps) {
       <section>
         <h2 className="font-semibold">Water level</h2>
         <p className={hasWater ? 'figure' : 'text-muted'}>
-          {hasWater ? withUnit(formatLength(waterLevelDepthM), 'm below ground') : 'Not given'}
+          {hasWater ? waterLevelWords(waterLevelDepthM) : 'Not given'}
         </p>
       </section>
       <section>

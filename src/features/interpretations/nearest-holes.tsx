@@ -3,10 +3,12 @@ import { Link } from 'react-router-dom';
 import type { Sounding } from '../../../server/contract/soundings';
 import { boreholeListQuery } from '../../api/survey-queries';
 import { addressOf } from '../../app/addresses';
+import { groundHeightWords } from '../../boreholes/ground-height-words';
 import { latestWaterLevel } from '../../boreholes/latest-water-level';
 import { LogTable } from '../../boreholes/log-table';
 import { nearestBoreholes, type NearBorehole } from '../../boreholes/nearest-boreholes';
 import { formatDay, formatGiven, withUnit } from '../../ui/format';
+import { waterLevelWords } from '../../ui/water-level-words';
 
 const MOST_SHOWN = 2;
 
@@ -22,13 +24,14 @@ export function NearestHoles({ sounding }: { sounding: Sounding }) {
       </h2>
       {near.length === 0 ? <p className="text-muted">None with a position beside this sounding’s.</p> : null}
       {near.map((one) => (
-        <NearHole key={one.borehole.id} {...one} />
+        <NearHole key={one.borehole.id} {...one} hereM={sounding.elevationM} />
       ))}
     </section>
   );
 }
 
-function NearHole({ borehole, distanceM }: NearBorehole) {
+function NearHole({ borehole, distanceM, hereM }: NearBorehole & { hereM: number | null }) {
+  const height = groundHeightWords(borehole.elevationM, hereM);
   const level = latestWaterLevel(borehole);
   const to = `${addressOf('surveyBoreholes', { surveyId: borehole.surveyId })}#${borehole.id}`;
   return (
@@ -42,8 +45,9 @@ function NearHole({ borehole, distanceM }: NearBorehole) {
       <LogTable borehole={borehole} />
       <p className="border-t border-rule py-1">
         {level === null
-          ? 'No water level.'
-          : `Water ${withUnit(formatGiven(Math.abs(level.depthM)), 'm')} ${level.depthM < 0 ? 'above' : 'below'} ground on ${formatDay(level.measuredOn)}`}
+          ? 'No water level'
+          : `Water ${waterLevelWords(level.depthM)} on ${formatDay(level.measuredOn)}`}
+        {height === null ? null : <span className="text-muted">; {height}</span>}
       </p>
     </div>
   );

@@ -225,6 +225,8 @@ test('the table has every reading and each run in order of letters', () => {
     'Residual, run B',
   ]);
   expect(rows[1]!.slice(0, 4)).toEqual([6.8, 78, 0.03, 'left out: wet cable']);
+  expect(columns[0]?.format?.(6.8)).toBe('6.8');
+  expect(curveTable(readings, lines, 'AB/2 of equal depth, m').columns[0]?.format?.(6.8)).toBe('6.80');
   expect(rows[3]!.slice(4, 6)).toEqual([13, 7]);
 });
 

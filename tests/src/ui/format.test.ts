@@ -5,6 +5,7 @@ import {
   formatDuration,
   formatFixed,
   formatGiven,
+  formatGivenLength,
   formatLength,
   formatMoment,
   formatPercent,
@@ -25,6 +26,13 @@ test.each([
   [-0.25, '\u22120.25'],
   [Number.NaN, '–'],
 ])('%d is told as it was given', (value, text) => expect(formatGiven(value)).toBe(text));
+
+test.each([
+  [1.9, '1.9'],
+  [34, '34'],
+  [8.5 * 0.3048, '2.5908'],
+  [0.1 + 0.2, '0.3'],
+])('a length of %d is told as it was written', (value, text) => expect(formatGivenLength(value)).toBe(text));
 
 describe('resistivity', () => {
   test.each([

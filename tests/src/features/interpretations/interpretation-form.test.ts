@@ -31,7 +31,7 @@ it('shows every field in which two versions differ, each bed’s apart, in words
   expect(clashes.map(({ label, mine: own, theirs: other, choice }) => [label, own, other, choice])).toEqual([
     ['Bed 1, ground', 'sand', 'gravel', 'mine'],
     ['Bed 2, role', 'Not known', 'Aquifer', 'theirs'],
-    ['Water level', '', '8.50\u00a0m', 'theirs'],
+    ['Water level', '', '8.5\u00a0m', 'theirs'],
     ['Narrative', 'My words', '', 'mine'],
   ]);
 });
