@@ -53,10 +53,10 @@ function calibrate(layers: number | 'unknown', trials: number): AnsweredTarget[]
 
 function reportReliability(answers: readonly AnsweredTarget[]): void {
   for (let tenth = 0; tenth < 10; tenth++) {
-    const [low, high] = [tenth / 10, (tenth + 1) / 10];
-    const { count, mean, cameTrue, standardError } = reliability(answers, low, high);
+    const above = tenth === 9 ? Infinity : (tenth + 1) / 10;
+    const { count, mean, cameTrue, standardError } = reliability(answers, tenth / 10, above);
     console.log(
-      `       ${low} to ${high}: ${count} answers, mean ${mean.toFixed(3)}, came true ${cameTrue.toFixed(3)} ± ${standardError.toFixed(3)}`,
+      `       from ${tenth / 10} up: ${count} answers, mean ${mean.toFixed(3)}, came true ${cameTrue.toFixed(3)} ± ${standardError.toFixed(3)}`,
     );
   }
   for (const [low, high] of BINS) {

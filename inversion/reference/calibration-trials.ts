@@ -132,9 +132,9 @@ export interface Reliability {
   readonly standardError: number;
 }
 
-/** Of the answers within [low, high]: how many, their mean, and the share that came true. */
+/** Of the answers from `low` up to below `high`: how many, their mean, and the share that came true. */
 export function reliability(answers: readonly AnsweredTarget[], low: number, high: number): Reliability {
-  const within = answers.filter(({ probability }) => probability >= low && probability <= high);
+  const within = answers.filter(({ probability }) => probability >= low && probability < high);
   const count = within.length;
   const mean = within.reduce((sum, { probability }) => sum + probability, 0) / count;
   const cameTrue = within.filter((answer) => answer.true).length / count;
