@@ -12,10 +12,13 @@ import { letterOfRun } from '../../runs/run-title';
 import { BenchDrawing } from './bench-drawing';
 import { BenchGround } from './bench-ground';
 import { useRequestRun } from './bench-mutations';
+import { ChecksNote } from './checks-note';
 import { DrawingRegion } from './drawing-region';
 import { FiguresOfModel } from './figures-of-model';
 import { FitControls, type FitCommands } from './fit-controls';
+import { HandDoubt } from './hand-doubt';
 import { modelFromCurve } from './hand-model';
+import { verdictOf } from './hand-verdict';
 import { LayerLadder } from './layer-ladder';
 import { Ledger } from './ledger';
 import { NoRunsNote } from './no-runs-note';
@@ -87,7 +90,7 @@ export function BenchWorkspace({ sounding, revision, runs, run }: BenchWorkspace
               }}
             />
           ) : (
-            <p className="text-muted">You may look and try; nothing you change here is kept.</p>
+            <p className="text-muted">You may look and try; no model you change here is kept.</p>
           )}
           <BenchGround
             part="table"
@@ -125,7 +128,20 @@ export function BenchWorkspace({ sounding, revision, runs, run }: BenchWorkspace
       </DrawingRegion>
       <div className="flex min-w-0 flex-col gap-6 border-t border-rule px-4 py-5 sm:px-7 lg:order-3 lg:col-span-2 xl:col-span-1 xl:border-t-0 xl:border-l">
         {model.earth ? (
-          <FiguresOfModel earth={model.earth} misfit={curve.misfit} fit={result} isCells={isCells} />
+          <FiguresOfModel
+            earth={model.earth}
+            misfit={curve.misfit}
+            fit={result}
+            verdict={verdictOf(model, run, curve.misfit, data.kept.length)}
+            isCells={isCells}
+          />
+        ) : null}
+        {model.hand ? (
+          <HandDoubt
+            earth={model.hand}
+            ladderSettings={model.isFromLadder && run ? run.settings : null}
+            mayFit={can.run}
+          />
         ) : null}
         {result && run ? (
           <section aria-labelledby="doubt-title">
@@ -135,6 +151,7 @@ export function BenchWorkspace({ sounding, revision, runs, run }: BenchWorkspace
             <DoubtList result={result} run={run} />
           </section>
         ) : null}
+        <ChecksNote revision={revision} run={run} />
         {runs.length === 0 ? (
           <NoRunsNote can={can} />
         ) : (

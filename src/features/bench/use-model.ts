@@ -11,6 +11,8 @@ export interface ModelHandle {
   hand: LayeredEarthModel | null;
   /** What the model by hand is, as "5 beds, from the ladder". */
   handName: string;
+  /** The model was computed, and is looked at as it stands in a ladder. */
+  isFromLadder: boolean;
   held: readonly string[];
   canUndo: boolean;
   canRedo: boolean;
@@ -42,6 +44,7 @@ export function useModel(
     earth,
     hand,
     handName: history.now.name ?? 'by hand',
+    isFromLadder: history.now.name !== undefined,
     held,
     canUndo: history.past.length > 0,
     canRedo: history.future.length > 0,
