@@ -45,15 +45,14 @@ export function createDescent(problem: LeastSquaresProblem): Descent {
   let trial = new Float64Array(n);
   let count = 0;
 
-  const linearise = (): number => {
-    const chi2 = problem.linearise(current, residual, jacobian);
+  /** Takes over what was last linearised, at `current`. */
+  const gather = (): void => {
     normalEquations(jacobian, residual, normal, slope);
     count = 0;
     for (let j = 0; j < n; j++) {
       const leaves = (current[j]! <= low[j]! && slope[j]! > 0) || (current[j]! >= high[j]! && slope[j]! < 0);
       if (!leaves) free[count++] = j;
     }
-    return chi2;
   };
   /** (A + damping·S²)⁻¹Jᵀr over the free parameters into `packed`, S their scales; false where rounding forbids it. */
   const solve = (damping: number): boolean => {
@@ -106,7 +105,8 @@ export function createDescent(problem: LeastSquaresProblem): Descent {
 
   return (start, { iterations: limit = TOLERANCES.iterations, ...options }) => {
     for (let j = 0; j < n; j++) current[j] = Math.min(high[j]!, Math.max(low[j]!, start[j]!));
-    let chi2 = linearise();
+    let chi2 = problem.linearise(current, residual, jacobian);
+    gather();
     let damping = options.initialDamping ?? INITIAL_DAMPING;
     let iterations = 0;
     for (;;) {
@@ -116,8 +116,12 @@ export function createDescent(problem: LeastSquaresProblem): Descent {
         return outcome('iteration-limit', chi2, iterations, damping);
       for (;;) {
         const promised = stepInto(damping);
-        const reached = problem.evaluate(trial, residual);
         iterations++;
+        // most steps are kept: what goes on from there is computed with the misfit, which has the same bits either way
+        const reached =
+          iterations < limit
+            ? problem.linearise(trial, residual, jacobian)
+            : problem.evaluate(trial, residual);
         if (reached < chi2) {
           if (chi2 - reached > WELL_KEPT * promised) damping = Math.max(LOWEST_DAMPING, damping / FASTER);
           chi2 = reached;
@@ -130,7 +134,7 @@ export function createDescent(problem: LeastSquaresProblem): Descent {
       [current, trial] = [trial, current];
       options.onIteration?.(iterations, chi2);
       if (iterations >= limit) return outcome('iteration-limit', chi2, iterations, damping);
-      linearise();
+      gather();
     }
   };
 }
