@@ -27,7 +27,14 @@ export function normalEquations(
       const k1 = Math.min(k + 1, j1);
       const k2 = Math.min(k + 2, j1);
       const k3 = Math.min(k + 3, j1);
-      let [a0, a1, a2, a3, b0, b1, b2, b3] = [0, 0, 0, 0, 0, 0, 0, 0];
+      let a0 = 0;
+      let a1 = 0;
+      let a2 = 0;
+      let a3 = 0;
+      let b0 = 0;
+      let b1 = 0;
+      let b2 = 0;
+      let b3 = 0;
       for (let at = 0; at < end; at += n) {
         const a = jacobian[at + j]!;
         const b = jacobian[at + j1]!;
@@ -44,7 +51,8 @@ export function normalEquations(
         b2 += b * x2;
         b3 += b * x3;
       }
-      const [atJ, atJ1] = [j * n, j1 * n];
+      const atJ = j * n;
+      const atJ1 = j1 * n;
       normal[atJ + k] = a0;
       normal[atJ + k1] = a1;
       normal[atJ + k2] = a2;

@@ -44,8 +44,13 @@ export function createForwardOperator(
   const readings = rows.length;
   const nodes = readings === 0 ? 0 : end - first;
   const lambda = Float64Array.from({ length: nodes }, (_, j) => pow2((first + j) / grade.perOctave));
+  const { weights, from, to } = packRows(rows, first, nodes);
   const { predictInto, slopeRows } = kernel({
-    ...packRows(rows, first, nodes),
+    rows: readings,
+    nodes,
+    weights,
+    from,
+    to,
     lambda,
     perOctave: grade.perOctave,
   });

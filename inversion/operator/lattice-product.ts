@@ -61,7 +61,14 @@ export function latticeProduct(
     for (let c = 0; c < count; c += 2) {
       const x0 = c * nodes;
       const y0 = x0 + nodes;
-      let [a0, a1, a2, a3, b0, b1, b2, b3] = [0, 0, 0, 0, 0, 0, 0, 0];
+      let a0 = 0;
+      let a1 = 0;
+      let a2 = 0;
+      let a3 = 0;
+      let b0 = 0;
+      let b1 = 0;
+      let b2 = 0;
+      let b3 = 0;
       let w = start;
       for (let g = low; g < high; g++) {
         const x = columns[x0 + g]!;
@@ -102,7 +109,10 @@ export function latticeColumn(
   let w = 0;
   for (let b = 0; b < from.length; b++) {
     const high = to[b]!;
-    let [s0, s1, s2, s3] = [0, 0, 0, 0];
+    let s0 = 0;
+    let s1 = 0;
+    let s2 = 0;
+    let s3 = 0;
     for (let g = from[b]!; g < high; g++) {
       const x = column[g]!;
       s0 += weights[w]! * x;

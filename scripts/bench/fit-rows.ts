@@ -14,9 +14,12 @@ const scipySeconds = (jobs: readonly FitJob[]): number => {
   return answer!.secondsPerFit * jobs.length;
 };
 
+/** One a process, as its hosts have it. */
+const kernel = compiledKernel();
+
 /** Least misfits, one a curve, with the operators of a survey kept from curve to curve as the command line does. */
 function fitAll(jobs: readonly FitJob[], layers?: 'auto'): number[] {
-  const operators = createOperatorCache({ kernel: compiledKernel() });
+  const operators = createOperatorCache({ kernel });
   return jobs.map(({ readings, settings }) => {
     const asked = layers ? { ...settings, layers } : settings;
     return fitLayered(readings, asked, { operators }).chi2PerReading;

@@ -69,13 +69,22 @@ export function compiledKernel(pages = PAGES): KernelMaker {
       );
     const transformAndDerivatives = (p: Placed, parameters: ArrayLike<number>, layers: number): void => {
       const length = DOUBLE * p.stride;
-      const [values, decay, lambdaAt] = [DOUBLE * p.values, DOUBLE * p.decay, DOUBLE * p.lambda];
+      const values = DOUBLE * p.values;
       const chain = passAt(p, 0);
       const transform = columnAt(p, 2 * layers - 1);
       for (let i = layers - 2; i >= 0; i--) {
         put(p, parameters[i]!, parameters[layers + i]!);
-        const [pass, byRho, byThickness] = [passAt(p, i), columnAt(p, i), columnAt(p, layers + i)];
-        run.layerDerivatives(values, decay, transform, length, octave, lambdaAt, pass, byRho, byThickness);
+        run.layerDerivatives(
+          values,
+          DOUBLE * p.decay,
+          transform,
+          length,
+          octave,
+          DOUBLE * p.lambda,
+          passAt(p, i),
+          columnAt(p, i),
+          columnAt(p, layers + i),
+        );
       }
       for (let i = 1; i < layers - 1; i++)
         run.chainLayer(chain, passAt(p, i), columnAt(p, i), columnAt(p, layers + i), length);
@@ -90,8 +99,13 @@ export function compiledKernel(pages = PAGES): KernelMaker {
         fillColumn(p, 0, parameters[layers - 1]!);
         for (let i = layers - 2; i >= 0; i--) {
           put(p, parameters[i]!, parameters[layers + i]!);
-          const [values, decay, transform] = [DOUBLE * p.values, DOUBLE * p.decay, DOUBLE * p.columns];
-          run.layerTransform(values, decay, transform, DOUBLE * p.stride, octave);
+          run.layerTransform(
+            DOUBLE * p.values,
+            DOUBLE * p.decay,
+            DOUBLE * p.columns,
+            DOUBLE * p.stride,
+            octave,
+          );
         }
         multiply(p, 1);
         for (let i = 0; i < lattice.rows; i++) predicted[i] = p.out[i]!;

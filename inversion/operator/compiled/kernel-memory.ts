@@ -44,7 +44,7 @@ export function createKernelMemory(buffer: ArrayBuffer): KernelMemory {
   const arrange = ({ nodes, weights, from }: Lattice, layers: number): Placed => {
     const stride = nodes + (nodes % 2);
     const outLength = SIDE * from.length * 2 * layers;
-    const parts = {
+    return {
       emptied,
       layers,
       stride,
@@ -57,8 +57,8 @@ export function createKernelMemory(buffer: ArrayBuffer): KernelMemory {
       pass: room(layers * stride),
       columns: room(2 * layers * stride),
       outAt: room(outLength),
+      out: doubles.subarray(end - outLength, end),
     };
-    return { ...parts, out: doubles.subarray(parts.outAt, parts.outAt + outLength) };
   };
   return {
     doubles,
