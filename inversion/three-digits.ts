@@ -19,6 +19,11 @@ export function withMinus(value: number, text: string): string {
   return value < 0 ? `${MINUS}${text}` : text;
 }
 
+/** A number as a person gave it, every digit of it: 0.1, 7000, 12 400, −10 000 000. */
+export function asGiven(value: number): string {
+  return Number.isFinite(value) ? withMinus(value, groupDigits(String(Math.abs(value)))) : DASH;
+}
+
 /** `digits` significant figures in plain decimals: 0.0123, 12.4, 1240, 12 400; a dash for what is no number. */
 export function significant(value: number, digits: number): string {
   if (!Number.isFinite(value)) return DASH;

@@ -1,4 +1,5 @@
 import type { z } from 'zod';
+import { asGiven } from '../../inversion/three-digits';
 
 /** What zod tells of one issue, before or after it has its message. */
 type Told = z.core.$ZodRawIssue | z.core.$ZodIssue;
@@ -22,14 +23,15 @@ const FORMAT_WORDS: Record<string, string> = {
   uuid: 'an id as the server gives it',
 };
 
-const counted = (count: unknown, one: string, many: string): string =>
-  `${String(count)} ${Number(count) === 1 ? one : many}`;
+const counted = (count: string, one: string, many: string): string =>
+  `${count} ${count === '1' ? one : many}`;
 
 /** A length, a number of entries, or the value itself, with its unit. */
 function amount({ origin }: Limit, value: unknown): string {
-  if (origin === 'string') return counted(value, 'character', 'characters');
-  if (origin === 'array') return counted(value, 'entry', 'entries');
-  return String(value);
+  const number = typeof value === 'number' ? asGiven(value) : String(value);
+  if (origin === 'string') return counted(number, 'character', 'characters');
+  if (origin === 'array') return counted(number, 'entry', 'entries');
+  return number;
 }
 
 /** What would be allowed in the place of what an issue is about; follows “must be” or “must have”. */
@@ -117,7 +119,7 @@ export function foundWords(issue: Told): string | undefined {
   const { input } = issue;
   if (input === undefined || issue.code === 'custom' || issue.code === 'unrecognized_keys') return undefined;
   if (issue.code === 'too_small' || issue.code === 'too_big')
-    return amount(issue, typeof input === 'string' || Array.isArray(input) ? input.length : input);
+    return typeof input === 'string' || Array.isArray(input) ? amount(issue, input.length) : shown(input);
   if (issue.code === 'invalid_type' && issue.expected === 'string' && input !== null)
     return KIND_WORDS[typeof input];
   return shown(issue.code === 'invalid_union' ? discriminating(issue) : input);

@@ -1,3 +1,4 @@
+import { asGiven } from '../../inversion/three-digits';
 import type { CellFault } from './cell-fault';
 import { SPACING_COLUMNS, type SheetColumn, type SheetRow, type SheetUnits } from './readings';
 import { columnScale, columnUnit, NUMBER_COLUMNS, type NumberColumnName } from './sheet-columns';
@@ -19,7 +20,8 @@ export function allowedNumber(column: NumberColumnName, units: SheetUnits): stri
   const { low, high, openLow } = NUMBER_COLUMNS[column];
   const scale = columnScale(column, units);
   const unit = columnUnit(column, units);
-  const say = (bound: number) => `${Number((bound / scale).toPrecision(6))}${unit && ` ${unit}`}`;
+  const say = (bound: number) =>
+    `${asGiven(Number((bound / scale).toPrecision(6)))}${unit && `\u00a0${unit}`}`;
   const range = openLow ? `above ${say(low)} and up to ${say(high)}` : `from ${say(low)} to ${say(high)}`;
   return `a number ${range}, such as 12.5 or 12,5`;
 }

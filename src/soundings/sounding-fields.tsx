@@ -90,7 +90,7 @@ function Position({ form }: { form: UseFormReturn<SoundingFormValues> }) {
         hint="Degrees from north, 0 to below 360"
         unit="°"
         min={0}
-        max={359.999}
+        below={360}
       />
       <span aria-hidden className="hidden sm:block" />
     </>

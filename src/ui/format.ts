@@ -1,6 +1,6 @@
 import { differenceInCalendarDays, format } from 'date-fns';
 import { isHeldRange } from '../../inversion/held-range';
-import { groupDigits, significant, threeDigits, withMinus } from '../../inversion/three-digits';
+import { asGiven, groupDigits, significant, threeDigits, withMinus } from '../../inversion/three-digits';
 
 const DASH = '\u2013';
 
@@ -14,9 +14,7 @@ export function formatSignificant(value: number, digits = 3): string {
 }
 
 /** A number as a person gave it, groups apart: 0.1, 7000, 12 400. */
-export function formatGiven(value: number): string {
-  return Number.isFinite(value) ? withMinus(value, groupDigits(String(Math.abs(value)))) : DASH;
-}
+export const formatGiven = asGiven;
 
 /** A length that a person gave, in m without unit, as it was written; a conversion of units may leave further digits. */
 export function formatGivenLength(metres: number): string {

@@ -15,8 +15,8 @@ export interface NumberInputProps extends Omit<ComponentPropsWithRef<'input'>, O
 
 /** Keeps what was typed as it was typed; never rounds or rewrites it under the writer's hands. */
 export function NumberInput(props: NumberInputProps) {
-  const { value, onValueChange, unit, min, max, above, integer, className, ...rest } = props;
-  const limits = { min, max, above, integer };
+  const { value, onValueChange, unit, min, max, above, below, integer, className, ...rest } = props;
+  const limits = { min, max, above, below, integer };
   const faultId = useId();
   const [text, setText] = useState(() => (value === null ? '' : String(value)));
   const [known, setKnown] = useState(value);

@@ -13,6 +13,7 @@ import {
   type Reading,
   type SheetRow,
 } from '../../../server/contract/readings';
+import { allowedNumber } from '../../../server/contract/sheet-cells';
 
 const row = (cells: SheetRow['cells'], excluded: string | null = null): SheetRow => ({ cells, excluded });
 
@@ -55,11 +56,16 @@ describe('parseSheetRow', () => {
         column: 'halfAB',
         found: '1,5,2',
         message: 'has more than one decimal sign',
-        allowed: 'a number above 0 m and up to 1000000 m, such as 12.5 or 12,5',
+        allowed: 'a number above 0\u00a0m and up to 1\u202f000\u202f000\u00a0m, such as 12.5 or 12,5',
       },
       expect.objectContaining({ column: 'voltage', found: 'x', message: 'is not a number' }),
     ]);
   });
+
+  it('writes what is allowed as every number is written', () =>
+    expect(allowedNumber('voltage', SI)).toBe(
+      'a number from \u221210\u202f000\u202f000\u00a0mV to 10\u202f000\u202f000\u00a0mV, such as 12.5 or 12,5',
+    ));
 
   it.each([
     ['schlumberger', { halfMN: '0.5', resistance: '1' }, 'halfAB', /missing/],

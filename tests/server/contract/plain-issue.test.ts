@@ -37,6 +37,7 @@ describe('what is not allowed, in plain words', () => {
     [z.number().min(0), -1, ['is too small', '-1', 'at least 0']],
     [z.number().gt(0), 0, ['is too small', '0', 'above 0']],
     [z.number().max(9), 10, ['is too large', '10', 'at most 9']],
+    [z.number().max(1e6), 1e7, ['is too large', '10000000', 'at most 1\u202f000\u202f000']],
     [z.number().lt(360), 360, ['is too large', '360', 'below 360']],
     [z.enum(['a', 'b']), 'c', ['is none of what can be chosen', 'c', 'a, b']],
     [z.enum(['a', 'b']), undefined, ['is missing', undefined, 'a, b']],

@@ -58,7 +58,7 @@ describe('POST /soundings/:soundingId/revisions', () => {
           path: ['rows', 3, 'a'],
           message: 'Row 3, a: has more than one decimal sign',
           found: '1,5,2',
-          allowed: expect.stringMatching(/above 0 m/),
+          allowed: expect.stringMatching(/above 0\sm/),
         },
         { path: ['rows', 4, 'R'], message: expect.stringMatching(/K·V\/I gives -/) },
       ],

@@ -28,7 +28,7 @@ describe('parseNumber', () => {
   test.each(['abc', '12m', '1e', '--3', 'Infinity', '1e999'])('%s is no number', (text) => {
     const { value, fault } = parseNumber(text);
     expect(value).toBeNull();
-    expect(fault).toContain(`“${text}”`);
+    expect(fault).toBe(`Found “${text}”: write a number, such as 12.5 or 12,5`);
   });
 });
 
@@ -37,10 +37,14 @@ describe('limitFault', () => {
     [0, { above: 0 }, 'must be above 0\u00a0m'],
     [-1, { min: 0 }, 'must be at least 0\u00a0m'],
     [11, { max: 10 }, 'must be at most 10\u00a0m'],
+    [360, { below: 360 }, 'must be below 360\u00a0m'],
+    [2e8, { max: 1e8 }, 'must be at most 100\u202f000\u202f000\u00a0m'],
+    [-9e4, { min: -12_400 }, 'must be at least \u221212\u202f400\u00a0m'],
     [1.5, { integer: true }, 'whole number'],
   ])('%d against %o', (value, limits, words) => expect(limitFault(value, limits, 'm')).toContain(words));
 
   test('a value on an inclusive limit is right', () => {
     expect(limitFault(0, { min: 0, max: 0 })).toBeNull();
+    expect(limitFault(359.999, { below: 360 })).toBeNull();
   });
 });
