@@ -16,7 +16,7 @@ export const surveyProgressSchema = z.strictObject({
   soundings: z.number().int(),
   measured: z.number().int().describe('soundings with saved readings'),
   fitted: z.number().int().describe('soundings with a finished run'),
-  interpreted: z.number().int().describe('soundings with an interpretation'),
+  interpreted: z.number().int().describe('soundings with an interpretation, in whatever state'),
   inReview: z.number().int().describe('interpretations waiting for a decision'),
   accepted: z.number().int().describe('soundings with an accepted interpretation'),
 });

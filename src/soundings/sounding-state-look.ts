@@ -1,4 +1,5 @@
-import type { SoundingState } from '../../server/contract/soundings';
+import type { SoundingRow, SoundingState } from '../../server/contract/soundings';
+import { isRejected } from '../runs/rejected-fit';
 import type { Tone } from '../ui/badge';
 import type { MarkShape } from '../ui/mark-glyph';
 
@@ -20,3 +21,14 @@ export const SOUNDING_STATE_LOOK: Record<SoundingState, SoundingStateLook> = {
 };
 
 export const SOUNDING_STATES = Object.keys(SOUNDING_STATE_LOOK) as SoundingState[];
+
+/** Of a sounding that is fitted by a run which the readings reject: nothing can follow from that. */
+const REJECTED_FIT_LOOK: SoundingStateLook = {
+  label: 'Fit does not explain the readings',
+  shape: 'bar',
+  tone: 'rust',
+};
+
+/** The mark of one sounding, by the run that stands for it too. */
+export const lookOf = ({ state, latestRun }: Pick<SoundingRow, 'state' | 'latestRun'>): SoundingStateLook =>
+  state === 'fitted' && isRejected(latestRun) ? REJECTED_FIT_LOOK : SOUNDING_STATE_LOOK[state];

@@ -1,6 +1,5 @@
 import type { KeyboardEvent } from 'react';
 import { Link } from 'react-router-dom';
-import { SOUNDING_STATE_LOOK } from '../../soundings/sounding-state-look';
 import { MarkGlyph } from '../../ui/mark-glyph';
 import { TONE_TEXT } from '../../ui/state-mark';
 import { classNames } from '../../ui/class-names';
@@ -22,7 +21,7 @@ export function PlanMark({ item, x, y, isTabStop, onFocus, onKeyDown, label }: P
   const what =
     item.kind === 'borehole'
       ? `Borehole ${item.name}`
-      : `Sounding ${item.name}, ${SOUNDING_STATE_LOOK[item.state].label.toLowerCase()}`;
+      : `Sounding ${item.name}, ${item.look.label.toLowerCase()}`;
   return (
     <Link
       to={item.to}
@@ -44,9 +43,9 @@ export function PlanMark({ item, x, y, isTabStop, onFocus, onKeyDown, label }: P
           // wider than a sounding’s mark, so that one at the same place shows within it
           <path d="M-2.5 -2.5h17v17h-17z" className="fill-none stroke-ink" strokeWidth="1.5" />
         ) : (
-          <g className={TONE_TEXT[SOUNDING_STATE_LOOK[item.state].tone]}>
+          <g className={TONE_TEXT[item.look.tone]}>
             <circle cx="6" cy="6" r="5" className="fill-sheet" />
-            <MarkGlyph shape={SOUNDING_STATE_LOOK[item.state].shape} />
+            <MarkGlyph shape={item.look.shape} />
           </g>
         )}
       </g>

@@ -4,7 +4,7 @@ const STEPS = [
   ['soundings', 'soundings'],
   ['measured', 'with readings'],
   ['fitted', 'with a fit'],
-  ['interpreted', 'interpreted'],
+  ['interpreted', 'interpretation begun'],
   ['accepted', 'accepted'],
 ] as const;
 

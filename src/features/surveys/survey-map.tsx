@@ -5,12 +5,11 @@ import type { Survey } from '../../../server/contract/surveys';
 import { boreholeListQuery } from '../../api/survey-queries';
 import { addressOf } from '../../app/addresses';
 import { QueryView } from '../../app/query-view';
-import { SOUNDING_STATES } from '../../soundings/sounding-state-look';
-import { SoundingStateMark } from '../../soundings/sounding-state-mark';
 import { formatCount } from '../../ui/format';
+import { StateMark } from '../../ui/state-mark';
 import { EmptyState } from '../../ui/view-states';
 import { allSoundingsQuery } from './all-soundings-query';
-import { planItems, type PlanItem } from './plan-items';
+import { planCounts, planItems, type PlanItem } from './plan-items';
 import { SurveyPlan } from './survey-plan';
 
 /** Where the soundings and boreholes stand, coloured by how far they have come. */
@@ -63,22 +62,18 @@ function NoPositions({ survey, hasSoundings }: { survey: Survey; hasSoundings: b
 }
 
 function PlanLegend({ items, surveyId }: { items: readonly PlanItem[]; surveyId: string }) {
-  const counts = SOUNDING_STATES.map((state) => ({
-    state,
-    count: items.filter((item) => item.kind === 'sounding' && item.state === state).length,
-  })).filter(({ count }) => count > 0);
   const holes = items.filter((item) => item.kind === 'borehole').length;
   const list = addressOf('surveySoundings', { surveyId });
   return (
     <ul className="mt-2 flex flex-wrap items-center gap-x-5 gap-y-1 text-sm">
       <li className="text-muted">Each counted once, by how far it is now:</li>
-      {counts.map(({ state, count }) => (
-        <li key={state}>
+      {planCounts(items).map(({ state, look, count }) => (
+        <li key={look.label}>
           <Link
             to={`${list}?state=${state}`}
             className="inline-flex min-h-6 items-center gap-1.5 no-underline"
           >
-            <SoundingStateMark state={state} /> <span className="figure text-muted">{count}</span>
+            <StateMark {...look} /> <span className="figure text-muted">{count}</span>
           </Link>
         </li>
       ))}

@@ -1,11 +1,14 @@
+import { useQuery } from '@tanstack/react-query';
 import { useState } from 'react';
 import { ROLE_NAMES } from '../../../server/contract/roles';
 import type { Survey } from '../../../server/contract/surveys';
 import { addressOf } from '../../app/addresses';
 import { SurveyFrame } from '../../app/survey-frame';
+import { isRejected, REJECTED_WORDS } from '../../runs/rejected-fit';
 import { Button, ButtonLink } from '../../ui/button';
 import { formatDay, formatRelativeError } from '../../ui/format';
 import { PageHeader } from '../../ui/page-header';
+import { allSoundingsQuery } from './all-soundings-query';
 import { SurveyMap } from './survey-map';
 import { SurveyProgress } from './survey-progress';
 import { SurveySettingsDialog } from './survey-settings-dialog';
@@ -35,7 +38,7 @@ function Overview({ survey }: { survey: Survey }) {
         <aside className="flex flex-col gap-6 border-t border-rule pt-4">
           <div>
             <SurveyProgress progress={survey.progress} />
-            <p className="mt-1 text-sm text-muted">Each step counts the soundings that went further, too.</p>
+            <ProgressNote surveyId={survey.id} />
           </div>
           {survey.description === '' ? null : (
             <p className="max-w-prose whitespace-pre-wrap">{survey.description}</p>
@@ -45,6 +48,19 @@ function Overview({ survey }: { survey: Survey }) {
       </div>
       {editing ? <SurveySettingsDialog survey={survey} onClose={() => setEditing(false)} /> : null}
     </>
+  );
+}
+
+function ProgressNote({ surveyId }: { surveyId: string }) {
+  const { data } = useQuery(allSoundingsQuery(surveyId));
+  const rejected = data?.items.filter(({ latestRun }) => isRejected(latestRun)).length ?? 0;
+  return (
+    <p className="mt-1 text-sm text-muted">
+      Each step counts the soundings that went further, too.
+      {rejected > 0
+        ? ` Of those with a fit, ${rejected} ${rejected === 1 ? 'has' : 'have'} one that ${REJECTED_WORDS}.`
+        : ''}
+    </p>
   );
 }
 

@@ -23,7 +23,7 @@ export function SurveyProgress({ progress }: { progress: Survey['progress'] }) {
           />
         ))}
       </div>
-      <dl className="mt-2 grid gap-x-2 @md:grid-cols-5">
+      <dl className="mt-2 grid gap-x-2 @md:grid-cols-[repeat(5,auto)]">
         {steps.map((step) => (
           <div
             key={step.key}
