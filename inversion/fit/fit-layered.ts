@@ -10,7 +10,13 @@ import { createLayeredProblem, type LayeredProblem } from './layered-problem';
 import { moderateModel } from './moderate-model';
 import { multiStart, scoutFit, type MultiStartOutcome } from './multi-start';
 import { createResidualSystem, type ReadingFit, type ResidualSystem } from './residual-system';
-import { logEarth, moderateStart, soundingCurve, type SoundingCurve } from './starting-models';
+import {
+  logEarth,
+  moderateStart,
+  sameWithOneMore,
+  soundingCurve,
+  type SoundingCurve,
+} from './starting-models';
 
 export interface FitOptions {
   /** called after each kept step */
@@ -94,6 +100,7 @@ export function fitLayered(
     settings,
     system,
     ...chosen,
+    split: splitModels(chosen, system, curve, scouts[chosen.layered.layers - 2]?.logEarth),
     status: chosen.outcome.status,
     damping: chosen.outcome.damping,
     layerCounts: settings.layers === 'auto' ? rows.map((row, i) => ({ ...row, chosen: i === index })) : null,
@@ -130,6 +137,21 @@ function moderated(
     others: [best, ...others],
     readingFit: system.describe(parameters, layers),
   };
+}
+
+/** The ground with one layer fewer, each of its layers split in two alike: grounds of this count too, where it fits as well. */
+function splitModels(
+  { layered }: CountFit,
+  system: ResidualSystem,
+  curve: SoundingCurve,
+  fewer: Float64Array | undefined,
+): FittedModel[] {
+  if (!fewer) return [];
+  const residual = new Float64Array(system.rows);
+  return sameWithOneMore(fewer, curve).map((model) => {
+    const parameters = layered.expand(layered.startFrom(model));
+    return { parameters, chi2: system.evaluate(parameters, layered.layers, residual) };
+  });
 }
 
 /** A quick fit that starts the next count, and how well it does: as it is short, the best of its count can only be better. */

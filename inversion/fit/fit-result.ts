@@ -21,6 +21,8 @@ export interface FitResultParts {
   readonly best: FittedModel;
   /** where other starts of the same search ended */
   readonly others: readonly FittedModel[];
+  /** grounds with one layer fewer, written with this count */
+  readonly split: readonly FittedModel[];
   readonly readingFit: ReadingFit;
   readonly status: FitStatus;
   readonly layerCounts: LayerCountFit[] | null;
@@ -84,7 +86,8 @@ export function buildFitResult(parts: FitResultParts): FitResult {
   const models = allowedModels(best, parts.others, system, layers, held, settings.fixed);
   const [{ earth, covariance }] = models;
   const followed = problemForDoubt(parts);
-  const doubt = parameterDoubt(models, followed.problem, followed.chi2);
+  const [, ...split] = allowedModels(best, parts.split, system, layers, held, settings.fixed);
+  const doubt = parameterDoubt(models, split, followed.problem, followed.chi2);
   const free = held.filter((isHeld) => !isHeld).length;
   const probability = misfitProbability(chi2, free, m);
   return {

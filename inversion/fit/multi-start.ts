@@ -103,7 +103,7 @@ export function multiStart(
   queue.push(...screenedStarts(quick, curve, random, effort));
   const descend = createDescent(quick.problem);
   const found = searchFrom(queue, quick, descend, effort, options.onProgress);
-  const same = below && [...sameWithOneMore(below, curve), ...options.below!.subarray(below.length)];
+  const same = below && [...sameWithOneMore(below, curve).at(-2)!, ...options.below!.subarray(below.length)];
   return polish(layered, descend, found, same && layered.restrict(same), queue.length, options.onProgress);
 }
 

@@ -100,6 +100,8 @@ export function randomStart(curve: SoundingCurve, layers: number, random: Random
   return parameters;
 }
 
+/** This many times the longest spacing lies below what a reading tells of. */
+const BEYOND_REACH = 10;
 /** Factors by which the two halves of a split layer are told apart, in ln ρ. */
 const SPLIT_CONTRASTS = [0.5, -0.5] as const;
 
@@ -114,9 +116,17 @@ export function splitStarts(parameters: Float64Array, curve: SoundingCurve): Flo
   );
 }
 
-/** The same ground with one layer more: its half-space split in two alike. */
-export const sameWithOneMore = (parameters: Float64Array, curve: SoundingCurve): Float64Array =>
-  splitLayer(parameters, curve, (parameters.length - 1) / 2, 0);
+/**
+ * The same ground with one layer more: each layer in turn split in two alike, the half-space at twice the deepest boundary and,
+ * last, far below what the readings reach.
+ */
+export function sameWithOneMore(parameters: Float64Array, curve: SoundingCurve): Float64Array[] {
+  const layers = (parameters.length + 1) / 2;
+  const split = Array.from({ length: layers }, (_, i) => splitLayer(parameters, curve, i, 0));
+  const beyond = split.at(-1)!.slice();
+  beyond[2 * layers] = curve.logSpacing.at(-1)! + log(BEYOND_REACH);
+  return [...split, beyond];
+}
 
 function splitLayer(
   parameters: Float64Array,

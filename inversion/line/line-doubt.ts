@@ -117,12 +117,14 @@ export function placeDoubt(
   const numbers = Array.from({ length: count }, (_, j) => j);
   return {
     intervals: {
-      resistivity: perLayer((i) => intervalOf(resistivityOf(i), earth.resistivity[i]!, bounds.resistivity)),
+      resistivity: perLayer((i) =>
+        intervalOf(resistivityOf(layers, i), earth.resistivity[i]!, bounds.resistivity),
+      ),
       thickness: perBounded((i) => intervalOf(thicknessOf(layers, i), earth.thickness[i]!, bounds.thickness)),
       depth: perBounded((i) => intervalOf(depthOf(layers, i), depths[i]!, [(i + 1) * hLow, (i + 1) * hHigh])),
     },
     factors: {
-      resistivity: perLayer((i) => factorOf(resistivityOf(i))),
+      resistivity: perLayer((i) => factorOf(resistivityOf(layers, i))),
       thickness: perBounded((i) => factorOf(thicknessOf(layers, i))),
       depth: perBounded((i) => factorOf(depthOf(layers, i))),
     },

@@ -1,3 +1,4 @@
+import { DETERMINATION_WORDS, determinationOf } from './determination';
 import { TOLERANCES } from '../tolerances';
 import { hasCells } from '../fit/smooth/has-cells';
 import { amount, threeDigits, timesOrDivided } from '../three-digits';
@@ -62,7 +63,7 @@ function equivalenceOf(result: FitResult, bed: number): DoubtItem | null {
     kind: conductive ? 'conductance' : 'resistance',
     text: known
       ? `Bed ${bed + 1} is better known by ${symbol}\u00a0=\u00a0${amount(value, unit)} ${timesOrDivided(factor)} (68\u00a0%) than by its thickness or its resistivity: a thicker bed goes with a ${conductive ? 'higher' : 'lower'} resistivity. ${tiedRanges(result, bed)}`
-      : `Of bed ${bed + 1} the readings tell neither the thickness nor the resistivity, and ${symbol} not within a factor of 2: ${amount(value, unit)} is one of many values that fit. ${tiedRanges(result, bed)}`,
+      : `Neither the thickness nor the resistivity of bed ${bed + 1} is determined, nor ${symbol}: ${amount(value, unit)} is one of many values that fit. ${tiedRanges(result, bed)}`,
     value,
     unit,
     factor,
@@ -117,20 +118,22 @@ function undetermined(result: FitResult, bed: number): DoubtItem[] {
     const value = result.earth[kind][bed];
     if (value === undefined) return [];
     const factor = result.factors[kind][bed]!;
-    if (looseness(factor) < UNKNOWN_FACTOR) return [];
+    const determination = determinationOf(factor, false);
+    if (determination === 'well' || determination === 'determined') return [];
     const unit = UNITS[kind];
     const words = rangeWords(result.intervals[kind][bed]!, unit);
     const text = words
-      ? `The ${kind} of bed ${bed + 1} is not held within a factor of 2: ${words} fit (95\u00a0%).`
+      ? `The ${kind} of bed ${bed + 1} is ${DETERMINATION_WORDS[determination]}: ${words} fit (95\u00a0%).`
       : `The readings do not limit the ${kind} of bed ${bed + 1}: ${amount(value, unit)} is one of many values that fit.`;
     return [{ bed, kind, text, value, unit, factor } satisfies DoubtItem];
   });
 }
 
 /**
- * What the data cannot tell, in plain sentences: first what was held and so was not asked of them; then bed by bed equivalence where |correlation of ln h and ln ρ| passes 0.95
- * (S = h/ρ when it is positive, T = hρ when negative) and the bed's own values are not settled, suppression where a middle bed
- * can go, values with a factor of 2 or more. Of cells nothing: they are no beds, and their warnings say so.
+ * What the data cannot tell, in plain sentences: first what was held and so was not asked of them; then bed by bed equivalence
+ * where |correlation of ln h and ln ρ| passes 0.95 (S = h/ρ when it is positive, T = hρ when negative) and the bed's own values
+ * are not settled, suppression where a middle bed can go, values that are poorly or not determined. Of cells nothing: they
+ * are no beds, and their warnings say so.
  */
 export function describeDoubt(result: FitResult): DoubtItem[] {
   if (hasCells(result)) return [];

@@ -96,6 +96,8 @@ function correlations({ deviation, covariance }: LogCovariance, count: number): 
  */
 export function parameterDoubt(
   models: readonly [BestModel, ...AllowedModel[]],
+  /** grounds with one layer fewer that are allowed too, one of their layers split in two alike */
+  split: readonly AllowedModel[],
   layered: LayeredProblem,
   leastChi2: number,
 ): ParameterDoubt {
@@ -104,7 +106,7 @@ export function parameterDoubt(
   const layers = resistivity.length;
   const bounded = thickness.length;
   const asked: Record<keyof EarthEnds, Asked[]> = {
-    resistivity: resistivity.map((_, i) => ({ of: resistivityOf(i), short: false })),
+    resistivity: resistivity.map((_, i) => ({ of: resistivityOf(layers, i), short: false })),
     thickness: thickness.map((_, i) => ({ of: thicknessOf(layers, i), short: false })),
     depth: thickness.map((_, i) => ({ of: depthOf(layers, i), short: false })),
     conductance: thickness.map((_, i) => ({ of: productOf(layers, i, -1), short: true })),
@@ -117,7 +119,8 @@ export function parameterDoubt(
     parameters: layered.restrict(parameters),
     chi2: leastChi2 + excess,
   });
-  const ends = profileEnds(layered, point(best), others.map(point), moved, [1, Z95 * Z95]);
+  const feet = [...others.map(point), ...split.map((model) => ({ ...point(model), isSplit: true }))];
+  const ends = profileEnds(layered, point(best), feet, moved, [1, Z95 * Z95]);
   const centreOf = ({ of }: Asked): number => of.value(best.parameters);
   const endsAt = (limit: 0 | 1): EarthEnds => {
     const of = (key: keyof EarthEnds) =>

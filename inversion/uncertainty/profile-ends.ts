@@ -22,6 +22,8 @@ export interface Asked {
 export interface AllowedPoint {
   readonly parameters: Float64Array;
   readonly chi2: number;
+  /** true for a ground with a layer less, one of whose layers is split in two alike: from there much is free that is not elsewhere */
+  readonly isSplit?: boolean;
 }
 
 /** One search: a quantity, a side, a limit, and the furthest end so far. */
@@ -79,10 +81,12 @@ export function profileEnds(
       },
     };
     const origin = directed.value(best.parameters);
+    const partner = free.indexOf(of.partner ?? -1);
     const near: Quest = {
       how: short ? 'shortly' : 'in full',
       directed,
-      isOpen: (end) => boundsEnd(problem, of.kind, directed, end, origin),
+      isOpen: (end) =>
+        boundsEnd(problem, of.kind, directed, partner, end, { parameters: best.parameters, origin }),
       limit: best.chi2 + limits[0],
       origin,
       nearer: null,
@@ -149,7 +153,8 @@ export function profileEnds(
 
   const bestFoot = profiler.foot(best.parameters);
   searchAllFrom(bestFoot);
-  for (const other of others) if (!covered(other)) searchAllFrom(profiler.foot(other.parameters));
+  for (const other of others)
+    if (other.isSplit || !covered(other)) searchAllFrom(profiler.foot(other.parameters));
   pushUnfinished();
   for (let round = 0; round < ROUNDS; round++) {
     let gained = false;

@@ -43,7 +43,7 @@ export function DoubtList({ result, run }: DoubtListProps) {
   return (
     <div className="border-l-2 border-water pl-3">
       <ul className="flex flex-col gap-2">
-        {isSettled ? <li>Every value is limited by the readings and none is tied to another.</li> : null}
+        {isSettled ? <li>The readings limit every value at both ends, and determine each of them.</li> : null}
         {doubts.map((doubt) => (
           <li key={doubt}>
             <Sentence text={doubt} />

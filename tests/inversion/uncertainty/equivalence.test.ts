@@ -104,7 +104,7 @@ describe('describeDoubt', () => {
     expect(words(1.7)).toContain('is better known by S = h/ρ = 0.300 S ×÷ 1.70 (68 %)');
     for (const factor of [2, null])
       expect(words(factor)).toContain(
-        'Of bed 2 the readings tell neither the thickness nor the resistivity, and S = h/ρ not within a factor of 2: ' +
+        'Neither the thickness nor the resistivity of bed 2 is determined, nor S = h/ρ: ' +
           '0.300 S is one of many values that fit. By themselves (95 %): a thickness of ',
       );
   });
@@ -139,7 +139,13 @@ describe('describeDoubt', () => {
     const resistivity: Interval[] = [fit.intervals.resistivity[0]!, [3, 140]];
     const intervals = { ...fit.intervals, resistivity };
     expect(plain(describeDoubt({ ...fit, factors: wide, intervals })[0]!.text)).toBe(
-      'The resistivity of bed 2 is not held within a factor of 2: 3.00 to 140 Ω·m fit (95 %).',
+      'The resistivity of bed 2 is not determined: 3.00 to 140 Ω·m fit (95 %).',
     );
+    const poor = { ...fit.factors, resistivity: [fit.factors.resistivity[0]!, 1.6] };
+    expect(plain(describeDoubt({ ...fit, factors: poor, intervals })[0]!.text)).toBe(
+      'The resistivity of bed 2 is poorly determined: 3.00 to 140 Ω·m fit (95 %).',
+    );
+    const fair = { ...fit.factors, resistivity: [fit.factors.resistivity[0]!, 1.4] };
+    expect(describeDoubt({ ...fit, factors: fair, intervals })).toEqual([]);
   });
 });

@@ -79,7 +79,7 @@ function doubtOf(valleys: readonly Valley[], held: readonly boolean[] = valleys[
     excess,
   }));
   const [best, ...others] = models;
-  return parameterDoubt([best!, ...others], problem, 0);
+  return parameterDoubt([best!, ...others], [], problem, 0);
 }
 
 /** `found` = centre × exp(reach), the reach within 1 %. */
