@@ -1,4 +1,5 @@
 import type { Knex } from 'knex';
+import { KEEP_A_LEAD } from '../contract/roles';
 import { AppError } from '../errors';
 
 /**
@@ -11,6 +12,5 @@ export async function keepALead(trx: Knex, surveyId: string, leavingUserId: stri
     .where({ survey_id: surveyId, role: 'lead' })
     .select<{ user_id: string }[]>('user_id');
   const leads = members.map((member) => member.user_id);
-  if (leads.length === 1 && leads[0] === leavingUserId)
-    throw new AppError('wrong-state', 'A survey keeps at least one lead. Make someone else a lead first.');
+  if (leads.length === 1 && leads[0] === leavingUserId) throw new AppError('wrong-state', KEEP_A_LEAD);
 }

@@ -12,6 +12,8 @@ export const ROLE_NAMES: Record<Role, string> = {
   guest: 'guest',
 };
 
+export const KEEP_A_LEAD = 'A survey keeps at least one lead. Make someone else a lead first.';
+
 /** What the server says the signed-in person may do in a survey; the client shows exactly these actions. */
 export const surveyCanSchema = z
   .strictObject({

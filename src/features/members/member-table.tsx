@@ -1,6 +1,6 @@
 import { useState } from 'react';
 import type { z } from 'zod';
-import { ROLE_NAMES, roleSchema, type Role } from '../../../server/contract/roles';
+import { KEEP_A_LEAD, ROLE_NAMES, roleSchema, type Role } from '../../../server/contract/roles';
 import type { memberSchema, Survey } from '../../../server/contract/surveys';
 import { messageOf } from '../../api/api-error';
 import { useMe } from '../../api/use-me';
@@ -13,6 +13,7 @@ import { ROLE_LABELS } from '../../ui/role-words';
 import { Select } from '../../ui/select';
 import { showToast } from '../../ui/show-toast';
 import { Cell, HeaderCell, Table, TableBody, TableHead, TableRow } from '../../ui/table';
+import { isLastLead } from './last-lead';
 import { useRemoveMember, useSetRole } from './member-mutations';
 
 type Member = z.output<typeof memberSchema>;
@@ -27,13 +28,20 @@ export function MemberTable({ survey, members }: MemberTableProps) {
   const setRole = useSetRole(survey.id);
   const remove = useRemoveMember(survey.id);
   const [leaving, setLeaving] = useState<Member | null>(null);
-  const fault = setRole.error ?? remove.error;
+  const [isRefused, setIsRefused] = useState(false);
+  const error = setRole.error ?? remove.error;
+  const fault = isRefused ? KEEP_A_LEAD : error && messageOf(error);
+  const askToRemove = (member: Member) => {
+    const isLast = isLastLead(member, members);
+    setIsRefused(isLast);
+    if (!isLast) setLeaving(member);
+  };
   const mayManage = survey.can.manageMembers;
   return (
     <div className="flex flex-col gap-3">
       {fault ? (
         <Notice tone="fault" title="Not changed">
-          {messageOf(fault)}
+          {fault}
         </Notice>
       ) : null}
       <Table caption="Members">
@@ -61,7 +69,8 @@ export function MemberTable({ survey, members }: MemberTableProps) {
                   <RoleSelect
                     member={member}
                     disabled={setRole.isPending}
-                    onChoose={(role) =>
+                    onChoose={(role) => {
+                      setIsRefused(false);
                       setRole.mutate(
                         { userId: member.user.id, role },
                         {
@@ -71,8 +80,8 @@ export function MemberTable({ survey, members }: MemberTableProps) {
                               kind: 'good',
                             }),
                         },
-                      )
-                    }
+                      );
+                    }}
                   />
                 ) : (
                   ROLE_LABELS[member.role]
@@ -87,7 +96,7 @@ export function MemberTable({ survey, members }: MemberTableProps) {
                     size="small"
                     kind="quiet"
                     aria-label={`Remove ${member.user.name}`}
-                    onClick={() => setLeaving(member)}
+                    onClick={() => askToRemove(member)}
                   >
                     Remove
                   </Button>
