@@ -58,13 +58,15 @@ it('a Field sheet shows every column at 1280 px, and names the floor of its erro
   const path = `/soundings/${await sounding('S-07')}/readings`;
   const { page, faults } = await enter(browser, app.baseUrl, 'geophysicist', path);
   await page.getByText(/own error and the survey’s floor of 3\.0\s%, added in quadrature/).waitFor();
+  const frame = page.getByRole('table', { name: 'Readings' }).locator('..');
   for (const width of [1280, 1536, 1920]) {
     await page.setViewportSize({ width, height: 800 });
-    const frame = page.getByRole('table', { name: 'Readings' }).locator('..');
     const over = () => frame.evaluate((element) => element.scrollWidth - element.clientWidth);
     await expect.poll(over, { message: `at ${width} px` }).toBeLessThanOrEqual(0);
     expect(await cutNumbers(frame)).toEqual([]);
   }
+  await page.setViewportSize({ width: 390, height: 844 });
+  await expect.poll(() => cutNumbers(frame), { message: 'on a telephone' }).toEqual([]);
   expectNoFaults(faults);
 });
 

@@ -23,9 +23,13 @@ interface SheetCellProps extends CellHandlers {
   readOnly: boolean;
 }
 
+/** A number of no more than so many characters is never cut off; the sheet scrolls instead. */
+const MOST_DIGITS_SHOWN = 24;
+
 export function SheetCell(props: SheetCellProps) {
   const { row, column, name, text, derived, fault, alignLeft, readOnly } = props;
   const faultId = `fault-${row}-${column}`;
+  const length = Math.min(Math.max(text.length, derived?.length ?? 0), MOST_DIGITS_SHOWN);
   return (
     <td className={classNames('group relative border-l border-rule p-0', fault && 'bg-rust-tint')}>
       <input
@@ -46,6 +50,7 @@ export function SheetCell(props: SheetCellProps) {
         onKeyDown={(event) => props.onKey(row, column, event)}
         onPaste={(event) => props.onPaste(row, column, event)}
         onFocus={() => props.onFocusRow(row)}
+        style={alignLeft ? undefined : { minWidth: `calc(${length}ch + 0.8rem)` }}
         className={classNames(
           'block h-8 w-full min-w-0 bg-transparent px-1.5 text-ellipsis outline-none touch:h-11',
           'focus:bg-sheet focus:inset-ring-2 focus:inset-ring-water',
