@@ -59,7 +59,7 @@ export async function createInterpretation(
   if (!result)
     throw new AppError('wrong-state', `Only a finished run can be interpreted; this one is ${run.state}.`);
   if (hasCells(result))
-    throw new AppError('invalid', 'A smooth or stepped ground has no beds to interpret; fit beds first.', {
+    throw new AppError('invalid', 'Cells are no beds, and an interpretation names beds; fit beds first.', {
       faults: [{ path: ['body', 'runId'], message: 'is a ground of cells, which are no beds' }],
     });
   return db.transaction(async (trx) => {
