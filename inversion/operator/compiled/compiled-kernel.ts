@@ -89,7 +89,7 @@ export function compiledKernel(pages = PAGES): KernelMaker {
       for (let i = 1; i < layers - 1; i++)
         run.chainLayer(chain, passAt(p, i), columnAt(p, i), columnAt(p, layers + i), length);
       doubles[p.values] = parameters[layers - 1]!;
-      if (layers > 1) run.chainEnd(chain, values, columnAt(p, layers - 1), length);
+      run.chainEnd(chain, values, columnAt(p, layers - 1), length);
     };
 
     return {
@@ -114,9 +114,8 @@ export function compiledKernel(pages = PAGES): KernelMaker {
         const p = placeFor(layers);
         if (!p) return plain.slopeRows(parameters, layers);
         fillColumn(p, 2 * layers - 1, parameters[layers - 1]!);
-        // of one layer this is the derivative; of more it is written over
-        fillColumn(p, layers - 1, parameters[layers - 1]!);
-        transformAndDerivatives(p, parameters, layers);
+        if (layers === 1) fillColumn(p, 0, parameters[0]!);
+        else transformAndDerivatives(p, parameters, layers);
         multiply(p, 2 * layers);
         return p.out;
       },
