@@ -41,12 +41,8 @@ export { fitSmooth } from './fit/smooth/fit-smooth';
 export { FIT_STATUS_MESSAGES, fitStatusMessage } from './fit/fit-status';
 export { createRandomStream, type RandomStream } from './random';
 export { compareResults, type ResultComparison, type ResultDifference } from './compare/compare-results';
-export {
-  compareFits,
-  type BedDifference,
-  type FitComparison,
-  type FitPairComparison,
-} from './compare/compare-fits';
+export type { BedDifference } from './compare/bed-differences';
+export { compareFits, type FitComparison, type FitPairComparison } from './compare/compare-fits';
 export { describeDoubt, type DoubtItem } from './uncertainty/equivalence';
 export {
   DETERMINATION_SOURCE,

@@ -42,6 +42,18 @@ describe('compareFits', () => {
     expect(plain(pair!.text)).toContain('the same readings do not choose between them.');
   });
 
+  it('says when the readings speak against a held value', () => {
+    const held = (value: number) =>
+      fitOf({ resistivity: [100, 20], thickness: [5] }, 2, {
+        fixed: [{ on: 'resistivity', index: 1, value }],
+      });
+    const textOf = (value: number) => plain(compareFits([BASE, held(value)]).pairs[0]!.text);
+    expect(textOf(20.1)).not.toContain('speak against');
+    expect(textOf(25)).toMatch(
+      /The readings speak against the value that the second holds: χ² rises by [\d.]+ for it \(chance (less than 0\.01|[\d.]+) %\)\./,
+    );
+  });
+
   it('says which values a run holds, and reads nothing out of their ranges', () => {
     const held = fitOf({ resistivity: [100, 20], thickness: [5] }, 2, {
       fixed: [{ on: 'thickness', index: 0, value: 7 }],
