@@ -42,7 +42,7 @@ describe('beginning an interpretation', () => {
     });
     const cells = await geophysicist.post(path, { runId: smooth.id, title: 'Sand' });
     expect(cells.body).toMatchObject({ status: 422, faults: [{ path: ['body', 'runId'] }] });
-    expect(cells.body.detail).toContain('no beds to interpret');
+    expect(cells.body.detail).toContain('Cells are no beds');
   });
 
   it('lists the newest first', async () => {
