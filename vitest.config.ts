@@ -12,7 +12,7 @@ export default defineConfig({
           name: 'inversion',
           include: ['tests/{inversion,published}/**/*.test.ts', 'tests/*.test.ts'],
           // fits and integrations are honest work, and the machine may be busy
-          testTimeout: 60_000,
+          testTimeout: 120_000,
         },
       },
       { extends: true, test: { name: 'src', include: ['tests/src/**/*.test.{ts,tsx}'] } },
@@ -22,8 +22,8 @@ export default defineConfig({
           name: 'server',
           include: ['tests/server/**/*.test.ts'],
           globalSetup: ['tests/setup/database-cluster.ts'],
-          hookTimeout: 30_000,
-          testTimeout: 20_000,
+          hookTimeout: 60_000,
+          testTimeout: 60_000,
         },
       },
       {
