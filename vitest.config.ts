@@ -15,7 +15,10 @@ export default defineConfig({
           testTimeout: 120_000,
         },
       },
-      { extends: true, test: { name: 'src', include: ['tests/src/**/*.test.{ts,tsx}'] } },
+      {
+        extends: true,
+        test: { name: 'src', include: ['tests/src/**/*.test.{ts,tsx}'], testTimeout: 30_000 },
+      },
       {
         extends: true,
         test: {
