@@ -55,20 +55,18 @@ export function BedTable(props: BedTableProps) {
           ))}
         </TableBody>
       </Table>
-      <p className="mt-1.5 max-w-prose text-sm text-muted">
-        <Sentence text={noteOf(props)} />
-      </p>
+      {props.result ? (
+        <p className="mt-1.5 max-w-prose text-sm text-muted">
+          <Sentence text={noteOf(props.result, props)} />
+        </p>
+      ) : null}
     </div>
   );
 }
 
 const HELD_NOTE = 'A held value has no range, and the ranges of the others hold only if it is right.';
 
-function noteOf({ result, heldInRun, onEdit, onHold }: BedTableProps): string {
-  if (!result)
-    return onEdit
-      ? 'This model has no ranges; fit it to see what the readings tell of it.'
-      : 'This model has no ranges of its own.';
+function noteOf(result: FitResult, { heldInRun, onHold }: BedTableProps): string {
   // What ranges are worth where the readings reject the model is said once, beside its misfit.
   const ranges = isRejected(result)
     ? 'Under each value its 95\u00a0% range.'
