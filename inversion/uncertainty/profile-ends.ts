@@ -105,7 +105,9 @@ export function profileEnds(
     for (const point of found) {
       if (point.chi2 > quest.limit) continue;
       const value = quest.directed.value(point.parameters);
-      if (value > reach) [further, reach] = [point, value];
+      if (value <= reach) continue;
+      further = point;
+      reach = value;
     }
     return further;
   };
