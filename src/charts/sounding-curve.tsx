@@ -1,4 +1,4 @@
-import { useEffect, useMemo, useRef, useState } from 'react';
+import { useLayoutEffect, useMemo, useRef, useState } from 'react';
 import { ChartFrame } from './chart-frame';
 import type { CurveLine, CurveReading } from './chart-data';
 import { useChartPalette } from './chart-palette';
@@ -66,8 +66,8 @@ export function SoundingCurve(props: SoundingCurveProps) {
     [readings, lines, axesOf, chosenLine, focusedReading, spacingName, width, height, palette],
   );
   const chart = useRef<InstanceType<typeof ReactECharts>>(null);
-  // The component lets the first change of size pass, so the drawing is told by itself.
-  useEffect(() => chart.current?.getEchartsInstance()?.resize({ width, height }), [width, height]);
+  // The component lets the first change of size pass, so the drawing is told by itself, before its new box is painted.
+  useLayoutEffect(() => chart.current?.getEchartsInstance()?.resize({ width, height }), [width, height]);
   const table = useMemo(() => curveTable(readings, lines, spacingName), [readings, lines, spacingName]);
   const shown = residualLine(lines, chosenLine);
   return (
