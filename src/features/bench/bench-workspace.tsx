@@ -13,7 +13,6 @@ import { BenchDrawing } from './bench-drawing';
 import { BenchGround } from './bench-ground';
 import { useRequestRun } from './bench-mutations';
 import { ChecksNote } from './checks-note';
-import { ChecksNote } from './checks-note';
 import { DrawingRegion } from './drawing-region';
 import { FiguresOfModel } from './figures-of-model';
 import { FitControls, type FitCommands } from './fit-controls';
@@ -152,7 +151,6 @@ export function BenchWorkspace({ sounding, revision, runs, run }: BenchWorkspace
             <DoubtList result={result} run={run} />
           </section>
         ) : null}
-        <ChecksNote revision={revision} run={run} />
         <ChecksNote revision={revision} run={run} />
         {runs.length === 0 ? (
           <NoRunsNote can={can} />
