@@ -99,7 +99,7 @@ it('an interpretation with nothing written is submitted only when that is confir
 });
 
 it('a smooth ground is fitted from the Bench, and its cells are no beds to edit, compare or interpret', async () => {
-  const { page, faults } = await enter(browser, app.baseUrl, 'geophysicist', await benchOf('S-03'));
+  const { page, faults } = await enter(browser, app.baseUrl, 'geophysicist', await benchOf('S-04'));
   await openRun(page, 'A').waitFor();
   await page
     .getByRole('form', { name: 'Fit' })
@@ -112,7 +112,7 @@ it('a smooth ground is fitted from the Bench, and its cells are no beds to edit,
   expect(await shownEarth(page)).toEqual({ resistivity: [], thickness: [] });
   expect(await page.getByRole('link', { name: 'Interpret this run' }).count()).toBe(0);
   await page.getByText('Fit beds to interpret.').waitFor();
-  const { id } = await app.knex('sounding').where({ name: 'S-03' }).first<{ id: string }>('id');
+  const { id } = await app.knex('sounding').where({ name: 'S-04' }).first<{ id: string }>('id');
   const runs = await app.knex('run').where({ sounding_id: id }).orderBy('number').pluck<string[]>('id');
   await page.goto(`${app.baseUrl}/soundings/${id}/side-by-side?runs=${runs.slice(-2).join(',')}`);
   await page.getByText('they are not compared bed by bed').waitFor();
