@@ -107,7 +107,12 @@ function totalsSentence(a: FitResult, b: FitResult): string | null {
   };
   const s = pair(a.darZarrouk.totalConductanceS, b.darZarrouk.totalConductanceS, 'S');
   const t = pair(a.darZarrouk.totalResistanceOhmM2, b.darZarrouk.totalResistanceOhmM2, 'Ω·m²');
-  return s && t && `Above the deepest boundary: conductance ${s}; transverse resistance ${t}.`;
+  const [first, second] = [a, b].map(({ earth }) => earth.thickness.reduce((depth, h) => depth + h, 0));
+  return (
+    s &&
+    t &&
+    `Above the deepest boundary (${threeDigits(first!)} against ${amount(second!, 'm')}): conductance ${s}; transverse resistance ${t}.`
+  );
 }
 
 /** What each ground is made of, where one has cells. */

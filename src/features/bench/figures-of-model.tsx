@@ -4,7 +4,7 @@ import { isRejected } from '../../runs/rejected-fit';
 import { MISFIT_LABEL, MISFIT_TITLE } from '../../runs/misfit-words';
 import { MisfitLine } from '../../runs/rejected-mark';
 import { FigureStrip, type FigureItem } from '../../ui/figure-strip';
-import { formatMisfit, formatPercent, formatSignificant, withUnit } from '../../ui/format';
+import { formatLength, formatMisfit, formatPercent, formatSignificant, withUnit } from '../../ui/format';
 import { Sentence } from '../../ui/sentence';
 import type { ModelVerdict } from './hand-verdict';
 
@@ -23,6 +23,7 @@ export interface FiguresProps {
 export function FiguresOfModel({ earth, misfit, fit, verdict, isCells }: FiguresProps) {
   const sums = darZarrouk(earth);
   const last = earth.resistivity.length;
+  const down = `down\u00a0to ${formatLength(earth.thickness.reduce((depth, h) => depth + h, 0))}`;
   const chi2 = misfit ? formatMisfit(misfit.chi2PerReading) : '–';
   const closeness: FigureItem[] = [
     {
@@ -34,11 +35,11 @@ export function FiguresOfModel({ earth, misfit, fit, verdict, isCells }: Figures
   const along: FigureItem[] = [
     {
       value: withUnit(formatSignificant(sums.totalConductanceS), 'S'),
-      label: <Sentence text={`S\u00a0=\u00a0Σh/ρ above bed\u00a0${last}`} />,
+      label: <Sentence text={`S\u00a0=\u00a0Σh/ρ ${down}`} />,
     },
     {
       value: withUnit(formatSignificant(sums.totalResistanceOhmM2), 'Ω·m²'),
-      label: <Sentence text={`T\u00a0=\u00a0Σhρ above bed\u00a0${last}`} />,
+      label: <Sentence text={`T\u00a0=\u00a0Σhρ ${down}`} />,
     },
   ];
   return (
