@@ -23,7 +23,8 @@ export interface FiguresProps {
 export function FiguresOfModel({ earth, misfit, fit, verdict, isCells }: FiguresProps) {
   const sums = darZarrouk(earth);
   const last = earth.resistivity.length;
-  const down = `down\u00a0to ${formatLength(earth.thickness.reduce((depth, h) => depth + h, 0))}`;
+  const depth = earth.thickness.reduce((sum, h) => sum + h, 0);
+  const reach = `to ${withUnit(formatLength(depth), 'm')}`;
   const chi2 = misfit ? formatMisfit(misfit.chi2PerReading) : '–';
   const closeness: FigureItem[] = [
     {
@@ -35,11 +36,11 @@ export function FiguresOfModel({ earth, misfit, fit, verdict, isCells }: Figures
   const along: FigureItem[] = [
     {
       value: withUnit(formatSignificant(sums.totalConductanceS), 'S'),
-      label: <Sentence text={`S\u00a0=\u00a0Σh/ρ ${down}`} />,
+      label: <Sentence text={`S\u00a0=\u00a0Σh/ρ ${reach}`} />,
     },
     {
       value: withUnit(formatSignificant(sums.totalResistanceOhmM2), 'Ω·m²'),
-      label: <Sentence text={`T\u00a0=\u00a0Σhρ ${down}`} />,
+      label: <Sentence text={`T\u00a0=\u00a0Σhρ ${reach}`} />,
     },
   ];
   return (
