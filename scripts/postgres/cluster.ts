@@ -97,7 +97,14 @@ export class Cluster {
       // After a kill -9 one call flushes the whole file system instead of one for each of a thousand files.
       recovery_init_sync_method: 'syncfs',
       ...(throwAway
-        ? { fsync: 'off', synchronous_commit: 'off', full_page_writes: 'off', max_connections: '200' }
+        ? {
+            fsync: 'off',
+            synchronous_commit: 'off',
+            full_page_writes: 'off',
+            max_connections: '200',
+            // its worker would stand in the way of dropping a database
+            autovacuum: 'off',
+          }
         : {}),
     };
     const flags = Object.entries(settings).map(

@@ -4,7 +4,7 @@ import { fileURLToPath } from 'node:url';
 import type { TestProject } from 'vitest/node';
 import { buildIfStale } from '../../scripts/lib/build';
 import { prepareDatabase } from '../../scripts/lib/prepare';
-import { runSql, withDatabase } from './run-sql';
+import { dropDatabase, runSql, withDatabase } from './run-sql';
 
 declare module 'vitest' {
   export interface ProvidedContext {
@@ -26,5 +26,5 @@ export default async function setup(project: TestProject) {
     LOAD_DEMO: 'true',
   });
   project.provide('demoTemplateName', demoTemplateName);
-  return () => runSql(clusterUrl, `DROP DATABASE IF EXISTS ${demoTemplateName} WITH (FORCE)`);
+  return () => dropDatabase(clusterUrl, demoTemplateName);
 }

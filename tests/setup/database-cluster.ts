@@ -4,7 +4,7 @@ import { startThrowAwayCluster } from '../../scripts/postgres/throw-away';
 import { createDatabase } from '../../server/db/knex';
 import { migrateQueue, migrateToLatest } from '../../server/db/migrate';
 import { createPool } from '../../server/db/pool';
-import { runSql, withDatabase } from './run-sql';
+import { dropDatabase, runSql, withDatabase } from './run-sql';
 
 declare module 'vitest' {
   export interface ProvidedContext {
@@ -39,7 +39,7 @@ export default async function setup(project: TestProject) {
   project.provide('templateName', templateName);
 
   return async () => {
-    if (cluster === null) await runSql(clusterUrl, `DROP DATABASE IF EXISTS ${templateName} WITH (FORCE)`);
+    if (cluster === null) await dropDatabase(clusterUrl, templateName);
     else await cluster.stop();
   };
 }

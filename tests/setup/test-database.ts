@@ -5,7 +5,7 @@ import { afterAll, inject } from 'vitest';
 import { loadConfig, type Config } from '../../server/config';
 import { createDatabase } from '../../server/db/knex';
 import { createPool } from '../../server/db/pool';
-import { runSql, withDatabase } from './run-sql';
+import { dropDatabase, runSql, withDatabase } from './run-sql';
 
 export interface TestDatabase {
   url: string;
@@ -39,7 +39,7 @@ export async function createTestDatabase(options: DatabaseOptions = {}): Promise
   afterAll(async () => {
     await knex.destroy();
     if (!pool.ended) await pool.end();
-    await runOnCluster(`DROP DATABASE IF EXISTS ${name} WITH (FORCE)`);
+    await dropDatabase(inject('clusterUrl'), name);
   });
   return { url, config, knex, pool };
 }
