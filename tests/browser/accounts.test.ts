@@ -58,6 +58,8 @@ it('a forgotten password is set anew by a link that holds once and ends every se
   const { page } = await browser.open();
   await page.goto(`${app.baseUrl}/sign-in`);
   await page.getByRole('link', { name: 'Forgot the password?' }).click();
+  // the page that is left has such a field too
+  await page.getByRole('heading', { name: 'Forgotten password' }).waitFor();
   await page.getByLabel('E-mail address').fill(email);
   await page.getByRole('button', { name: 'Send the letter' }).click();
   await page.getByText('Look into your mail').waitFor();
