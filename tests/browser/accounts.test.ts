@@ -11,6 +11,9 @@ const members = `/surveys/${surveyId}/members`;
 
 /** Follows the link of the newest letter to this address, as an administrator reads it in the sink. */
 async function linkOfLetter(to: string): Promise<string> {
+  // a letter is sent after the answer to whoever asked for it
+  const arrived = () => app.knex('received_mail').whereRaw('? = any(recipients)', [to]);
+  await expect.poll(arrived, { timeout: 15_000 }).not.toHaveLength(0);
   const { page } = await enter(browser, app.baseUrl, 'admin', '/admin?view=mail');
   const letter = page.getByRole('listitem').filter({ hasText: `to ${to}` });
   await letter.first().locator('summary').click();
