@@ -13,7 +13,7 @@ import {
   type Found,
   type OnProgress,
 } from './start-search';
-import { evenStart, logEarth, sameWithOneMore, splitStarts, type SoundingCurve } from './starting-models';
+import { evenStart, logEarth, splitHalfSpace, splitStarts, type SoundingCurve } from './starting-models';
 
 /** The best of them is carried on until that is no more than this, before the exact problem takes it over. */
 const QUICK_PROMISE = 1e-6;
@@ -103,7 +103,7 @@ export function multiStart(
   queue.push(...screenedStarts(quick, curve, random, effort));
   const descend = createDescent(quick.problem);
   const found = searchFrom(queue, quick, descend, effort, options.onProgress);
-  const same = below && [...sameWithOneMore(below, curve).at(-2)!, ...options.below!.subarray(below.length)];
+  const same = below && [...splitHalfSpace(below, curve), ...options.below!.subarray(below.length)];
   return polish(layered, descend, found, same && layered.restrict(same), queue.length, options.onProgress);
 }
 

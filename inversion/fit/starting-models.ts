@@ -116,6 +116,10 @@ export function splitStarts(parameters: Float64Array, curve: SoundingCurve): Flo
   );
 }
 
+/** The same ground with its half-space split in two alike, at twice the deepest boundary. */
+export const splitHalfSpace = (parameters: Float64Array, curve: SoundingCurve): Float64Array =>
+  splitLayer(parameters, curve, (parameters.length - 1) / 2, 0);
+
 /**
  * The same ground with one layer more: each layer in turn split in two alike, the half-space at twice the deepest boundary and,
  * last, far below what the readings reach.

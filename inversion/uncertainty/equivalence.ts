@@ -1,6 +1,7 @@
 import { DETERMINATION_WORDS, determinationOf } from './determination';
 import { TOLERANCES } from '../tolerances';
 import { hasCells } from '../fit/smooth/has-cells';
+import { isHeldRange } from '../held-range';
 import { amount, threeDigits, timesOrDivided } from '../three-digits';
 import type { FitResult, Interval } from '../types';
 
@@ -99,8 +100,7 @@ const UNITS = { resistivity: 'Ω·m', thickness: 'm' } as const;
 function heldItem({ earth, intervals }: FitResult): DoubtItem[] {
   const held = (['resistivity', 'thickness'] as const).flatMap((kind) =>
     earth[kind].flatMap((value, bed) => {
-      const [low, high] = intervals[kind][bed]!;
-      return low === value && high === value ? [{ kind, bed, value, unit: UNITS[kind] }] : [];
+      return isHeldRange(intervals[kind][bed]!) ? [{ kind, bed, value, unit: UNITS[kind] }] : [];
     }),
   );
   const [first] = held;

@@ -29,7 +29,7 @@ it('a bad value is told in words, a held one has no range, and Side by side open
   await fitAndWait(page, 'B');
   await page.getByRole('table', { name: 'Beds' }).getByText('held', { exact: true }).waitFor();
   await page.getByText('the ranges of the others hold only if it is right').waitFor();
-  expect(await page.getByText('Every value is limited by the readings').count()).toBe(0);
+  expect(await page.getByText('The readings limit every value at both ends').count()).toBe(0);
   await page.getByRole('link', { name: 'Side by side' }).click();
   await page.getByText('2 chosen').waitFor();
   await page.getByText('holds the thickness of bed 1 at 2.55 m').waitFor();

@@ -130,6 +130,14 @@ describe.each([
   );
 });
 
+it('are open where a value ends only with its partner at a bound', () => {
+  const { thickness, resistivity } = fitLayered(demoReadings('S-03'), layered(4)).intervals;
+  // h/ρ alone is known of bed 2: 0.141 S, and 0.02 m of it would be 0.14 Ω·m
+  expect(thickness[1]![0]).toBeNull();
+  expect(resistivity[1]![0]).toBeNull();
+  expect(resistivity[1]![1]).toBeLessThan(60);
+});
+
 it('agree where there are beds to spare too', () => {
   expect(faultsOf(fitLayered(demoReadings('S-12'), layered(4)))).toEqual([]);
 });
