@@ -147,7 +147,7 @@ it('are open for a bed beyond what a bed less explains', () => {
   const spreads = Array.from({ length: 16 }, (_, i) => {
     return { type: 'schlumberger', halfAB: 1.5 * 1.4 ** i, halfMN: 0.3 } as const;
   });
-  const random = createRandomStream(4);
+  const random = createRandomStream(12);
   const readings = Array.from(createForwardOperator(spreads).predict(truth), (value, i): Reading => {
     const apparentResistivity = value * Math.exp(0.03 * random.normal());
     return { spread: spreads[i]!, apparentResistivity, relativeError: 0.03 };
